@@ -12,6 +12,15 @@ const swc = [
   },
 ];
 
+// Angular's own compiler, transpiling only: the sources are type-checked by tsc.
+const angular = [
+  'jest-preset-angular',
+  {
+    tsconfig: '<rootDir>/src/tsconfig.spec.json',
+    stringifyContentPathRegex: '\\.(html|svg)$',
+  },
+];
+
 const node = {
   testEnvironment: 'node',
   transform: { '^.+\\.ts$': swc },
@@ -36,6 +45,23 @@ module.exports = {
         '<rootDir>/test/database/**/*.spec.ts',
         '<rootDir>/test/scripts/**/*.spec.ts',
       ],
+    },
+    {
+      displayName: 'web',
+      preset: 'jest-preset-angular',
+      testMatch: ['<rootDir>/src/**/*.spec.ts'],
+      setupFilesAfterEnv: ['<rootDir>/src/testing/setup.ts'],
+      transform: { '^.+\\.(ts|js|mjs|html|svg)$': angular },
+      // ECharts and its renderer ship modules only.
+      transformIgnorePatterns: [
+        'node_modules/(?!(.*\\.mjs$|@angular/common/locales/.*\\.js$|echarts/|zrender/))',
+      ],
+      moduleNameMapper: {
+        // jsdom has no canvas.
+        '/echarts-parts$': '<rootDir>/src/testing/echarts-parts.ts',
+        '^@shared/(.*)$': '<rootDir>/shared/$1',
+      },
+      modulePathIgnorePatterns: ['<rootDir>/dist/', '<rootDir>/.data/'],
     },
     {
       ...node,
