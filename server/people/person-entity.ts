@@ -1,0 +1,15 @@
+import { Column, CreateDateColumn, Entity, PrimaryGeneratedColumn, Unique } from 'typeorm';
+import type { TemperatureUnit, Theme } from '@shared/contracts/people';
+
+/** Someone who signs in. The address is kept in lower case, so that one address is one person. */
+@Entity('person')
+@Unique('person_email_key', ['email'])
+export class PersonEntity {
+  @PrimaryGeneratedColumn('uuid', { primaryKeyConstraintName: 'person_pkey' }) id!: string;
+  @Column('text') email!: string;
+  @Column('text') name!: string;
+  @Column('text', { name: 'password_hash' }) passwordHash!: string;
+  @Column('text', { name: 'temperature_unit', default: 'celsius' }) temperatureUnit!: TemperatureUnit;
+  @Column('text', { default: 'system' }) theme!: Theme;
+  @CreateDateColumn({ type: 'timestamptz', name: 'created_at' }) createdAt!: Date;
+}

@@ -1,0 +1,16 @@
+import { Column, Entity, JoinColumn, OneToOne, PrimaryColumn, type Relation } from 'typeorm';
+import { SensorEntity } from '../devices/sensor-entity';
+
+/** Where a sensor's stream stands: its newest reading, and what the quality tests remember of it. */
+@Entity('sensor_state')
+export class SensorStateEntity {
+  @PrimaryColumn('uuid', { name: 'sensor_id', primaryKeyConstraintName: 'sensor_state_pkey' })
+  sensorId!: string;
+  @Column('timestamptz', { name: 'latest_at' }) latestAt!: Date;
+  @Column('double precision', { name: 'latest_value' }) latestValue!: number;
+  @Column('smallint', { name: 'latest_flags' }) latestFlags!: number;
+
+  @OneToOne(() => SensorEntity, { onDelete: 'CASCADE' })
+  @JoinColumn({ name: 'sensor_id', foreignKeyConstraintName: 'sensor_state_sensor_fk' })
+  sensor?: Relation<SensorEntity>;
+}

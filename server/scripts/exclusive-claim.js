@@ -1,0 +1,100 @@
+const { linkSync, mkdirSync, readFileSync, rmSync, writeFileSync } = require('node:fs');
+const { dirname } = require('node:path');
+const { setTimeout: sleep } = require('node:timers/promises');
+const { identityOf, isStillRunning } = require('./processes');
+
+/**
+ * The right of one process to something, held in a file until it is released or the process ends.
+ *
+ * @typedef {object} Claim
+ * @property {(note: string) => void} describe - Leaves a note for whoever asks meanwhile.
+ * @property {() => void} release
+ */
+
+/** @typedef {import('./processes').ProcessIdentity & { note?: string }} Holder */
+
+/**
+ * Claims a file for this process, unless a process that still runs holds it.
+ *
+ * @param {string} path
+ * @returns {{ claim: Claim } | { claim: null, holder: Holder }}
+ */
+function claim(path) {
+  mkdirSync(dirname(path), { recursive: true });
+  for (;;) {
+    if (createWhole(path, identityOf(process.pid))) return { claim: claimOf(path) };
+    const holder = readHolder(path);
+    if (holder !== null && isStillRunning(holder)) return { claim: null, holder };
+    rmSync(path, { force: true }); // left by a process that was killed
+  }
+}
+
+/**
+ * Runs one piece of work while no other process runs work under the same path.
+ *
+ * @template T
+ * @param {string} path
+ * @param {() => Promise<T>} work
+ * @param {AbortSignal} [signal] - Ends the wait for the other.
+ * @returns {Promise<T>}
+ */
+async function withClaim(path, work, signal) {
+  for (;;) {
+    const attempt = claim(path);
+    if (attempt.claim === null) {
+      await sleep(50, undefined, { signal });
+      continue;
+    }
+    try {
+      return await work();
+    } finally {
+      attempt.claim.release();
+    }
+  }
+}
+
+/**
+ * @param {string} path
+ * @returns {Claim}
+ */
+function claimOf(path) {
+  return {
+    describe: (note) => writeFileSync(path, JSON.stringify({ ...identityOf(process.pid), note })),
+    release: () => rmSync(path, { force: true }),
+  };
+}
+
+/**
+ * Creates a file that is never seen half written: it is written aside, then linked into place.
+ *
+ * @param {string} path
+ * @param {object} content
+ * @returns {boolean} False when the file was there already.
+ */
+function createWhole(path, content) {
+  const aside = `${path}.${process.pid}`;
+  writeFileSync(aside, JSON.stringify(content));
+  try {
+    linkSync(aside, path);
+    return true;
+  } catch (error) {
+    if (/** @type {NodeJS.ErrnoException} */ (error).code === 'EEXIST') return false;
+    throw error;
+  } finally {
+    rmSync(aside);
+  }
+}
+
+/**
+ * @param {string} path
+ * @returns {Holder | null}
+ */
+function readHolder(path) {
+  try {
+    return JSON.parse(readFileSync(path, 'utf8'));
+  } catch {
+    return null; // released meanwhile, or cut short by a full disk
+  }
+}
+
+module.exports = { claim, withClaim };

@@ -1,0 +1,59 @@
+import { z } from 'zod';
+import { alertKinds, urgencies } from '../alerts/alert-rule';
+import { quantities } from '../climate/quantity';
+import { endpoint, id, instant, roomParams } from './endpoint';
+
+/** An episode as people see it. Values are in the stored unit of the quantity. */
+export const alert = z.object({
+  id,
+  shelfId: id,
+  shelfLabel: z.string(),
+  sensorId: id.nullable(),
+  quantity: z.enum(quantities),
+  kind: z.enum(alertKinds),
+  urgency: z.enum(urgencies),
+  beganAt: instant,
+  openedAt: instant,
+  peakAt: instant,
+  peakValue: z.number().nullable(),
+  peakExcess: z.number().nullable(),
+  peakLimit: z.number().nullable(),
+  clearedAt: instant.nullable(),
+  foundLater: z.boolean(),
+  /** When the mail about it went into the outbox, null if nobody was written to. */
+  toldAt: instant.nullable(),
+  acknowledgedAt: instant.nullable(),
+  acknowledgedByName: z.string().nullable(),
+  acknowledgeNote: z.string(),
+});
+/** An episode as people see it. */
+export type Alert = z.infer<typeof alert>;
+
+/** Open alerts, or the newest of all, newest first. */
+export const listAlerts = endpoint({
+  name: 'listAlerts',
+  method: 'get',
+  path: '/rooms/:roomId/alerts',
+  access: 'viewer',
+  summary: 'Alerts of the room, newest first; a page at a time',
+  params: roomParams,
+  query: z.object({
+    open: z.enum(['true', 'false']).optional(),
+    shelfId: id.optional(),
+    limit: z.coerce.number().int().min(1).max(200).default(50),
+    cursor: z.string().max(200).optional(),
+  }),
+  reply: z.object({ alerts: z.array(alert), nextCursor: z.string().nullable() }),
+});
+
+/** Says "I have seen it". */
+export const acknowledgeAlert = endpoint({
+  name: 'acknowledgeAlert',
+  method: 'post',
+  path: '/rooms/:roomId/alerts/:alertId/acknowledgement',
+  access: 'helper',
+  summary: 'Acknowledge an alert; the first acknowledgement stays',
+  params: roomParams.extend({ alertId: id }),
+  body: z.strictObject({ note: z.string().trim().max(500).default('') }),
+  reply: alert,
+});

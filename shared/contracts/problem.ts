@@ -1,0 +1,15 @@
+import { z } from 'zod';
+
+/** An error answer, RFC 9457 (`application/problem+json`). */
+export const problem = z.object({
+  type: z.string(),
+  title: z.string(),
+  status: z.number().int(),
+  detail: z.string().optional(),
+  /** Stable, for programs. */
+  code: z.string(),
+  /** What is wrong with which field, by JSON path. */
+  errors: z.array(z.object({ path: z.string(), message: z.string() })).optional(),
+});
+/** An error answer, RFC 9457. */
+export type Problem = z.infer<typeof problem>;

@@ -1,0 +1,273 @@
+import { z } from 'zod';
+import { lampKinds } from '../climate/light';
+import { quantities } from '../climate/quantity';
+import { clockTime, day, endpoint, id, line, roomParams } from './endpoint';
+
+/** An IANA time zone that this runtime knows. */
+export const timeZone = z.string().refine(
+  (zone) => {
+    try {
+      new Intl.DateTimeFormat('en', { timeZone: zone });
+      return true;
+    } catch {
+      return false; // RangeError is how Intl says that a zone is unknown.
+    }
+  },
+  { error: 'must be an IANA time zone such as Europe/Dublin' },
+);
+
+/** A room's own settings. */
+export const room = z.object({
+  id,
+  name: z.string(),
+  timeZone: z.string(),
+  latitudeDeg: z.number().nullable(),
+  longitudeDeg: z.number().nullable(),
+});
+/** A room's own settings. */
+export type Room = z.infer<typeof room>;
+
+/** The room's settings. */
+export const getRoom = endpoint({
+  name: 'getRoom',
+  method: 'get',
+  path: '/rooms/:roomId',
+  access: 'viewer',
+  summary: 'Settings of the room',
+  params: roomParams,
+  reply: room,
+});
+
+/** Changes the room's settings. */
+export const changeRoom = endpoint({
+  name: 'changeRoom',
+  method: 'patch',
+  path: '/rooms/:roomId',
+  access: 'keeper',
+  summary: 'Change name, place or time zone; a new zone counts all days anew',
+  params: roomParams,
+  body: z.strictObject({
+    name: line(80).optional(),
+    timeZone: timeZone.optional(),
+    latitudeDeg: z.number().min(-90).max(90).nullable().optional(),
+    longitudeDeg: z.number().min(-180).max(180).nullable().optional(),
+  }),
+  reply: room,
+});
+
+/** A lamp over a shelf. */
+export const lamp = z.object({
+  id,
+  kind: z.enum(lampKinds),
+  watts: z.number(),
+  luxPerUmol: z.number(),
+  fittedOn: day,
+});
+
+/** Daily lamp hours; null on both sides is dark all day, equal times are lit all day. */
+export const lampHours = z.object({ switchesOn: clockTime.nullable(), switchesOff: clockTime.nullable() });
+/** Daily lamp hours. */
+export type LampHours = z.infer<typeof lampHours>;
+
+/** A shelf with what is fitted to it. */
+export const shelf = z.object({
+  id,
+  rackId: id,
+  label: z.string(),
+  position: z.number().int(),
+  widthCm: z.number().nullable(),
+  depthCm: z.number().nullable(),
+  leafOffsetC: z.number(),
+  lamps: z.array(lamp),
+  lampHours,
+  heatMat: z.object({ watts: z.number(), isOn: z.boolean() }).nullable(),
+});
+/** A shelf with what is fitted to it. */
+export type Shelf = z.infer<typeof shelf>;
+
+/** A rack with its shelves from the top. */
+export const rack = z.object({
+  id,
+  name: z.string(),
+  note: z.string(),
+  position: z.number().int(),
+  shelves: z.array(shelf),
+});
+/** A rack with its shelves from the top. */
+export type Rack = z.infer<typeof rack>;
+
+/** Racks and shelves as they stand. */
+export const listRacks = endpoint({
+  name: 'listRacks',
+  method: 'get',
+  path: '/rooms/:roomId/racks',
+  access: 'viewer',
+  summary: 'Racks and shelves with lamps and heat mats',
+  params: roomParams,
+  reply: z.array(rack),
+});
+
+/** Adds a rack after the others. */
+export const addRack = endpoint({
+  name: 'addRack',
+  method: 'post',
+  path: '/rooms/:roomId/racks',
+  access: 'keeper',
+  summary: 'Add a rack',
+  params: roomParams,
+  body: z.strictObject({ name: line(40), note: z.string().trim().max(80).default('') }),
+  reply: rack,
+  status: 201,
+});
+
+/** Adds a shelf below the others of its rack. */
+export const addShelf = endpoint({
+  name: 'addShelf',
+  method: 'post',
+  path: '/rooms/:roomId/racks/:rackId/shelves',
+  access: 'keeper',
+  summary: 'Add a shelf to a rack',
+  params: roomParams.extend({ rackId: id }),
+  body: z.strictObject({
+    label: line(12),
+    widthCm: z.number().positive().max(1000).nullable().default(null),
+    depthCm: z.number().positive().max(1000).nullable().default(null),
+  }),
+  reply: shelf,
+  status: 201,
+});
+
+const shelfParams = roomParams.extend({ shelfId: id });
+
+/** Changes a shelf's own properties. */
+export const changeShelf = endpoint({
+  name: 'changeShelf',
+  method: 'patch',
+  path: '/rooms/:roomId/shelves/:shelfId',
+  access: 'keeper',
+  summary: 'Change label, size or leaf offset of a shelf',
+  params: shelfParams,
+  body: z.strictObject({
+    label: line(12).optional(),
+    widthCm: z.number().positive().max(1000).nullable().optional(),
+    depthCm: z.number().positive().max(1000).nullable().optional(),
+    leafOffsetC: z.number().min(-10).max(10).optional(),
+  }),
+  reply: shelf,
+});
+
+/** Retires a shelf; its history stays readable. */
+export const retireShelf = endpoint({
+  name: 'retireShelf',
+  method: 'delete',
+  path: '/rooms/:roomId/shelves/:shelfId',
+  access: 'keeper',
+  summary: 'Retire a shelf; its history stays',
+  params: shelfParams,
+});
+
+/** Fits a lamp to a shelf. */
+export const fitLamp = endpoint({
+  name: 'fitLamp',
+  method: 'post',
+  path: '/rooms/:roomId/shelves/:shelfId/lamps',
+  access: 'keeper',
+  summary: 'Fit a lamp to a shelf',
+  params: shelfParams,
+  body: z.strictObject({
+    kind: z.enum(lampKinds),
+    watts: z.number().positive().max(5000),
+    luxPerUmol: z.number().min(10).max(200).optional(),
+    fittedOn: day,
+  }),
+  reply: shelf,
+  status: 201,
+});
+
+/** Sets the lamp hours of a shelf from now on. */
+export const setLampHours = endpoint({
+  name: 'setLampHours',
+  method: 'put',
+  path: '/rooms/:roomId/shelves/:shelfId/lamp-hours',
+  access: 'grower',
+  summary: 'Set the daily lamp hours from now on',
+  params: shelfParams,
+  body: lampHours.strict().refine((hours) => (hours.switchesOn === null) === (hours.switchesOff === null), {
+    error: 'give both times, or neither for a dark shelf',
+    path: ['switchesOff'],
+  }),
+  reply: shelf,
+});
+
+/** Says whether the heat mat is on. */
+export const setHeatMat = endpoint({
+  name: 'setHeatMat',
+  method: 'put',
+  path: '/rooms/:roomId/shelves/:shelfId/heat-mat',
+  access: 'grower',
+  summary: 'Fit a heat mat, or note that it was switched on or off',
+  params: shelfParams,
+  body: z.strictObject({ watts: z.number().positive().max(500).optional(), isOn: z.boolean() }),
+  reply: shelf,
+});
+
+/** Limits of one quantity on one side of the lamps; null is no limit. */
+export const limits = z
+  .strictObject({ low: z.number().nullable(), high: z.number().nullable() })
+  .refine((l) => l.low === null || l.high === null || l.low < l.high, {
+    error: 'low must be below high',
+    path: ['high'],
+  });
+/** Limits of one quantity on one side of the lamps; null is no limit. */
+export type Limits = z.infer<typeof limits>;
+
+/** What a shelf wants of one quantity. */
+export const wantedRange = z.object({
+  quantity: z.enum(quantities),
+  lampsOn: limits,
+  lampsOff: limits,
+  holdMinutes: z.number(),
+  clearingMargin: z.number(),
+  reason: z.string(),
+});
+/** What a shelf wants of one quantity. */
+export type WantedRange = z.infer<typeof wantedRange>;
+
+/** The wanted ranges of a shelf. */
+export const listWantedRanges = endpoint({
+  name: 'listWantedRanges',
+  method: 'get',
+  path: '/rooms/:roomId/shelves/:shelfId/wanted-ranges',
+  access: 'viewer',
+  summary: 'Wanted ranges of a shelf',
+  params: shelfParams,
+  reply: z.array(wantedRange),
+});
+
+/** Sets one wanted range; alerts follow it from now on. */
+export const setWantedRange = endpoint({
+  name: 'setWantedRange',
+  method: 'put',
+  path: '/rooms/:roomId/shelves/:shelfId/wanted-ranges/:quantity',
+  access: 'grower',
+  summary: 'Set the wanted range of one quantity on a shelf',
+  params: shelfParams.extend({ quantity: z.enum(quantities) }),
+  body: z.strictObject({
+    lampsOn: limits,
+    lampsOff: limits,
+    holdMinutes: z.number().min(0).max(1440),
+    clearingMargin: z.number().min(0).max(50),
+    reason: z.string().trim().max(200).default(''),
+  }),
+  reply: wantedRange,
+});
+
+/** Takes a wanted range away, and with it its alerts. */
+export const clearWantedRange = endpoint({
+  name: 'clearWantedRange',
+  method: 'delete',
+  path: '/rooms/:roomId/shelves/:shelfId/wanted-ranges/:quantity',
+  access: 'grower',
+  summary: 'Remove the wanted range of one quantity on a shelf',
+  params: shelfParams.extend({ quantity: z.enum(quantities) }),
+});
