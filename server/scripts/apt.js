@@ -18,7 +18,9 @@ const unattended = { ...process.env, DEBIAN_FRONTEND: 'noninteractive' };
  */
 async function installWithApt(packageName, { reason, log, signal, prepare }) {
   if (!existsSync('/usr/bin/apt-get')) {
-    throw new Problem(`${reason} Install it (Debian's package is called "${packageName}"), then run this again.`);
+    throw new Problem(
+      `${reason} Install it (Debian's package is called "${packageName}"), then run this again.`,
+    );
   }
   if (process.getuid?.() !== 0) {
     throw new Problem(`${reason} Run: sudo apt-get install ${packageName}`);

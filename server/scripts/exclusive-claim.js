@@ -1,4 +1,4 @@
-const { linkSync, mkdirSync, readFileSync, rmSync, writeFileSync } = require('node:fs');
+const { linkSync, mkdirSync, readFileSync, renameSync, rmSync, writeFileSync } = require('node:fs');
 const { dirname } = require('node:path');
 const { setTimeout: sleep } = require('node:timers/promises');
 const { identityOf, isStillRunning } = require('./processes');
@@ -23,7 +23,9 @@ function claim(path) {
   mkdirSync(dirname(path), { recursive: true });
   for (;;) {
     if (createWhole(path, identityOf(process.pid))) return { claim: claimOf(path) };
-    const holder = readHolder(path);
+    const content = readIfThere(path);
+    if (content === null) continue; // released meanwhile
+    const holder = parseHolder(content);
     if (holder !== null && isStillRunning(holder)) return { claim: null, holder };
     rmSync(path, { force: true }); // left by a process that was killed
   }
@@ -59,7 +61,10 @@ async function withClaim(path, work, signal) {
  */
 function claimOf(path) {
   return {
-    describe: (note) => writeFileSync(path, JSON.stringify({ ...identityOf(process.pid), note })),
+    describe: (note) => {
+      const aside = writeAside(path, { ...identityOf(process.pid), note });
+      renameSync(aside, path);
+    },
     release: () => rmSync(path, { force: true }),
   };
 }
@@ -68,12 +73,11 @@ function claimOf(path) {
  * Creates a file that is never seen half written: it is written aside, then linked into place.
  *
  * @param {string} path
- * @param {object} content
+ * @param {Holder} holder
  * @returns {boolean} False when the file was there already.
  */
-function createWhole(path, content) {
-  const aside = `${path}.${process.pid}`;
-  writeFileSync(aside, JSON.stringify(content));
+function createWhole(path, holder) {
+  const aside = writeAside(path, holder);
   try {
     linkSync(aside, path);
     return true;
@@ -87,13 +91,36 @@ function createWhole(path, content) {
 
 /**
  * @param {string} path
- * @returns {Holder | null}
+ * @param {Holder} holder
+ * @returns {string} Path of the file beside it.
  */
-function readHolder(path) {
+function writeAside(path, holder) {
+  const aside = `${path}.${process.pid}`;
+  writeFileSync(aside, JSON.stringify(holder));
+  return aside;
+}
+
+/**
+ * @param {string} path
+ * @returns {string | null}
+ */
+function readIfThere(path) {
   try {
-    return JSON.parse(readFileSync(path, 'utf8'));
+    return readFileSync(path, 'utf8');
   } catch {
-    return null; // released meanwhile, or cut short by a full disk
+    return null;
+  }
+}
+
+/**
+ * @param {string} content
+ * @returns {Holder | null} null when a crash of the machine has left it empty.
+ */
+function parseHolder(content) {
+  try {
+    return JSON.parse(content);
+  } catch {
+    return null;
   }
 }
 

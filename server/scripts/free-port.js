@@ -34,15 +34,17 @@ async function freePortFrom(wanted, host) {
 /**
  * The port that a setting names, or else the first free one from its default upwards.
  *
- * @param {string} setting - Name of the environment variable.
+ * @param {NodeJS.ProcessEnv} env - Settings; HOST among them is where it is to be free.
+ * @param {string} setting - Name of the setting.
  * @param {number} usual - Its default.
- * @param {{ host?: string, log: (line: string) => void }} options
+ * @param {(line: string) => void} log
  * @returns {Promise<number>}
  * @throws {Problem} When the named port is taken or is no port.
  */
-async function portFor(setting, usual, { host, log }) {
-  const named = process.env[setting];
-  if (named === undefined || named === '') {
+async function portFor(env, setting, usual, log) {
+  const named = env[setting] ?? '';
+  const host = env['HOST'];
+  if (named === '') {
     const port = await freePortFrom(usual, host);
     if (port !== usual) log(`Port ${usual} is taken, so ${port} is used instead.`);
     return port;
@@ -52,9 +54,11 @@ async function portFor(setting, usual, { host, log }) {
     throw new Problem(`${setting} must be a port from 1 to 65535, but it is "${named}".`);
   }
   if (!(await isFree(port, host))) {
-    throw new Problem(`Port ${port}, which ${setting} names, is taken or not allowed; free it or name another.`);
+    throw new Problem(
+      `Port ${port}, which ${setting} names, is taken or not allowed; free it or name another.`,
+    );
   }
   return port;
 }
 
-module.exports = { freePortFrom, portFor };
+module.exports = { freePortFrom, isFree, portFor };

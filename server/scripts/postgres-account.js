@@ -19,9 +19,12 @@ const { Problem } = require('./problem');
 function accountFor(cluster) {
   const own = { uid: process.getuid?.() ?? -1, gid: process.getgid?.() ?? -1 };
   const existing = statSync(cluster, { throwIfNoEntry: false });
-  if (own.uid === 0) return existing ?? postgresAccount();
+  if (own.uid === 0)
+    return existing === undefined ? postgresAccount() : { uid: existing.uid, gid: existing.gid };
   if (existing !== undefined && existing.uid !== own.uid) {
-    throw new Problem(`The database in ${cluster} belongs to another user; run this as that user or as root.`);
+    throw new Problem(
+      `The database in ${cluster} belongs to another user; run this as that user or as root.`,
+    );
   }
   return own;
 }
@@ -30,7 +33,9 @@ function accountFor(cluster) {
 function postgresAccount() {
   const entry = /^postgres:[^:]*:(\d+):(\d+):/m.exec(readFileSync('/etc/passwd', 'utf8'));
   if (entry === null) {
-    throw new Problem('PostgreSQL refuses to run as root and there is no user "postgres"; run this as another user.');
+    throw new Problem(
+      'PostgreSQL refuses to run as root and there is no user "postgres"; run this as another user.',
+    );
   }
   return { uid: Number(entry[1]), gid: Number(entry[2]) };
 }
@@ -43,7 +48,8 @@ function postgresAccount() {
  * @returns {string}
  */
 function clustersFolder(projectFolder, account) {
-  if (process.getuid?.() !== 0 || canEnter(projectFolder, account())) return join(projectFolder, '.data/postgres');
+  if (process.getuid?.() !== 0 || canEnter(projectFolder, account()))
+    return join(projectFolder, '.data/postgres');
   const mark = createHash('sha256').update(projectFolder).digest('hex').slice(0, 12);
   return `/var/lib/lampmeadow-${mark}`;
 }

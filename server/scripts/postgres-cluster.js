@@ -1,5 +1,13 @@
 const { randomBytes } = require('node:crypto');
-const { chownSync, existsSync, mkdirSync, readFileSync, renameSync, rmSync, writeFileSync } = require('node:fs');
+const {
+  chownSync,
+  existsSync,
+  mkdirSync,
+  readFileSync,
+  renameSync,
+  rmSync,
+  writeFileSync,
+} = require('node:fs');
 const { join } = require('node:path');
 const { withProgress } = require('./progress');
 const { runCommand } = require('./run-command');

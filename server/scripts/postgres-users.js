@@ -1,27 +1,32 @@
+const { randomUUID } = require('node:crypto');
 const { mkdirSync, readFileSync, readdirSync, rmSync, writeFileSync } = require('node:fs');
 const { join } = require('node:path');
 const { identityOf, isStillRunning } = require('./processes');
 
 /**
- * Notes that this process uses what a folder stands for.
+ * Notes that this process uses something, in a folder that lists its users.
  *
  * @param {string} folder
+ * @returns {() => boolean} Withdraws it, and tells whether no user that still runs is left.
  */
-function register(folder) {
+function registerUser(folder) {
+  const own = join(folder, randomUUID());
   mkdirSync(folder, { recursive: true });
-  writeFileSync(join(folder, String(process.pid)), JSON.stringify(identityOf(process.pid)));
+  writeFileSync(own, JSON.stringify(identityOf(process.pid)));
+  return () => {
+    rmSync(own, { force: true });
+    return readdirSync(folder).filter((name) => isInUse(join(folder, name))).length === 0;
+  };
 }
 
 /**
- * Withdraws this process.
- *
- * @param {string} folder
- * @returns {boolean} Whether nobody who still runs is left.
+ * @param {string} path
+ * @returns {boolean} Whether its user still runs; the note of one that was killed is removed.
  */
-function withdraw(folder) {
-  rmSync(join(folder, String(process.pid)), { force: true });
-  const others = readdirSync(folder).map((name) => JSON.parse(readFileSync(join(folder, name), 'utf8')));
-  return !others.some(isStillRunning);
+function isInUse(path) {
+  if (isStillRunning(JSON.parse(readFileSync(path, 'utf8')))) return true;
+  rmSync(path);
+  return false;
 }
 
-module.exports = { register, withdraw };
+module.exports = { registerUser };

@@ -4,7 +4,7 @@ const { withClaim } = require('./exclusive-claim');
 const { accountFor, clustersFolder, postgresAccount } = require('./postgres-account');
 const { ensurePostgresBinaries } = require('./postgres-binaries');
 const { clusterVersion, databaseUrl, makeCluster } = require('./postgres-cluster');
-const { register, withdraw } = require('./postgres-users');
+const { registerUser } = require('./postgres-users');
 const { runningPostmaster, startPostmaster, stopPostmaster } = require('./postmaster');
 const project = require('./project');
 
@@ -67,7 +67,7 @@ async function startPostgres({ name, fsync = true, log = console.log, signal, pr
         settings: { ...commonSettings, ...(fsync ? {} : withoutSafety) },
         logFile: join(home, 'server.log'),
       }));
-    register(join(home, 'users'));
+    const withdraw = registerUser(join(home, 'users'));
     return {
       url: (/** @type {string} */ database) => databaseUrl(home, port, database),
       port,
@@ -75,7 +75,7 @@ async function startPostgres({ name, fsync = true, log = console.log, signal, pr
       binaries,
       stop: () =>
         withClaim(join(home, 'claim'), async () => {
-          if (withdraw(join(home, 'users'))) await stopPostmaster(cluster);
+          if (withdraw()) await stopPostmaster(cluster);
         }),
     };
   });

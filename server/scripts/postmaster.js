@@ -2,7 +2,7 @@ const { spawn } = require('node:child_process');
 const { closeSync, openSync, readFileSync, realpathSync, rmSync } = require('node:fs');
 const { join } = require('node:path');
 const { setTimeout: sleep } = require('node:timers/promises');
-const { freePortFrom } = require('./free-port');
+const { freePortFrom, isFree } = require('./free-port');
 const { Problem } = require('./problem');
 const { isRunning, processesIn, untilEnded } = require('./processes');
 
@@ -44,39 +44,58 @@ async function runningPostmaster(cluster) {
 }
 
 /**
+ * What it takes to start a server.
+ *
+ * @typedef {object} StartOptions
+ * @property {string} cluster
+ * @property {string} binaries - Folder of the PostgreSQL programs.
+ * @property {import('./postgres-account').Account} account
+ * @property {number} usualPort - Taken if free, else the next free one.
+ * @property {Record<string, string>} settings
+ * @property {string} logFile
+ */
+
+/**
  * Starts a server on a cluster on which none runs.
  *
- * @param {object} options
- * @param {string} options.cluster
- * @param {string} options.binaries - Folder of the PostgreSQL programs.
- * @param {import('./postgres-account').Account} options.account
- * @param {number} options.usualPort - Taken if free, else the next free one.
- * @param {Record<string, string>} options.settings
- * @param {string} options.logFile
+ * @param {StartOptions} options
  * @returns {Promise<Postmaster>}
  * @throws {Problem} With the server's own last words, when it does not come up.
  */
-async function startPostmaster({ cluster, binaries, account, usualPort, settings, logFile }) {
+async function startPostmaster(options) {
+  const { cluster, logFile, usualPort } = options;
   await clearRemains(cluster);
   const port = await freePortFrom(usualPort);
+  const child = spawnPostgres(options, port);
+  let hasEnded = false;
+  child.once('error', () => (hasEnded = true));
+  child.once('exit', () => (hasEnded = true));
+  const postmaster = await untilReady(cluster, child.pid ?? -1, () => hasEnded);
+  if (postmaster !== null) return postmaster;
+  if (!(await isFree(port))) return startPostmaster(options); // another program was quicker
+  throw new Problem(`${readFileSync(logFile, 'utf8').slice(-4000).trim()}\n\nPostgreSQL did not start.`);
+}
+
+/**
+ * @param {StartOptions} options
+ * @param {number} port
+ * @returns {import('node:child_process').ChildProcess}
+ */
+function spawnPostgres({ cluster, binaries, account, settings, logFile }, port) {
   const all = { listen_addresses: '127.0.0.1', port, unix_socket_directories: '', ...settings };
-  const options = Object.entries(all).flatMap(([name, value]) => ['-c', `${name}=${value}`]);
+  const args = Object.entries(all).flatMap(([name, value]) => ['-c', `${name}=${value}`]);
   const log = openSync(logFile, 'w');
   // A session of its own: Ctrl-C must not stop the database before what uses it.
-  const child = spawn(join(binaries, 'postgres'), ['-D', cluster, ...options], {
-    ...account,
+  const child = spawn(join(binaries, 'postgres'), ['-D', cluster, ...args], {
+    uid: account.uid,
+    gid: account.gid,
     cwd: '/',
     detached: true,
     stdio: ['ignore', log, log],
   });
   closeSync(log);
-  let hasEnded = false;
-  child.once('error', () => (hasEnded = true));
-  child.once('exit', () => (hasEnded = true));
   child.unref();
-  const postmaster = await untilReady(cluster, child.pid ?? -1, () => hasEnded);
-  if (postmaster !== null) return postmaster;
-  throw new Problem(`${readFileSync(logFile, 'utf8').slice(-4000).trim()}\n\nPostgreSQL did not start.`);
+  return child;
 }
 
 /**

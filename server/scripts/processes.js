@@ -67,6 +67,30 @@ function parentOf(pid) {
 }
 
 /**
+ * @param {number} pid
+ * @returns {string | null} Path of the program that it runs, null when unknown or another user's.
+ */
+function programOf(pid) {
+  try {
+    return readlinkSync(`/proc/${pid}/exe`).replace(/ \(deleted\)$/, ''); // it was upgraded meanwhile
+  } catch {
+    return null;
+  }
+}
+
+/**
+ * @param {number} pid
+ * @returns {string | null} The folder it works in, null when unknown or another user's.
+ */
+function workingFolderOf(pid) {
+  try {
+    return readlinkSync(`/proc/${pid}/cwd`);
+  } catch {
+    return null;
+  }
+}
+
+/**
  * Processes of one program that work in one folder.
  *
  * @param {string} program - File name of the program, such as `postgres`.
@@ -74,20 +98,17 @@ function parentOf(pid) {
  * @returns {number[]} Their process numbers; none where the system has no /proc.
  */
 function processesIn(program, folder) {
-  return allProcesses().filter((pid) => {
-    try {
-      const executable = readlinkSync(`/proc/${pid}/exe`).replace(/ \(deleted\)$/, '');
-      return basename(executable) === program && readlinkSync(`/proc/${pid}/cwd`) === folder && isRunning(pid);
-    } catch {
-      return false; // ended meanwhile, or another user's
-    }
-  });
+  return allProcesses().filter(
+    (pid) => basename(programOf(pid) ?? '') === program && workingFolderOf(pid) === folder && isRunning(pid),
+  );
 }
 
 /** @returns {number[]} */
 function allProcesses() {
   try {
-    return readdirSync('/proc').filter((name) => /^\d+$/.test(name)).map(Number);
+    return readdirSync('/proc')
+      .filter((name) => /^\d+$/.test(name))
+      .map(Number);
   } catch {
     return [];
   }
@@ -109,4 +130,4 @@ async function untilEnded(pid, milliseconds) {
   return true;
 }
 
-module.exports = { identityOf, isRunning, isStillRunning, parentOf, processesIn, untilEnded };
+module.exports = { identityOf, isRunning, isStillRunning, parentOf, processesIn, programOf, untilEnded };

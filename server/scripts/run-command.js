@@ -1,7 +1,8 @@
 const { spawn } = require('node:child_process');
 const { Problem } = require('./problem');
 
-const keptCharacters = 8000;
+const keptCharacters = 1_000_000;
+const shownCharacters = 8000;
 
 /**
  * Runs a program to its end without a terminal. What it says is kept and shown only if it fails.
@@ -34,7 +35,12 @@ function runCommand(command, args, { input, ...options } = {}) {
     });
     child.once('close', (code, signal) => {
       if (code === 0) resolve(output);
-      else reject(new Problem(`${output.trim()}\n\n${[command, ...args].join(' ')} failed (${signal ?? code}).`));
+      else
+        reject(
+          new Problem(
+            `${output.trim().slice(-shownCharacters)}\n\n${[command, ...args].join(' ')} failed (${signal ?? code}).`,
+          ),
+        );
     });
   });
 }

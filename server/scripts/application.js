@@ -1,0 +1,82 @@
+const { join } = require('node:path');
+const { startProgram } = require('./child-program');
+const { portFor } = require('./free-port');
+
+const usualPorts = { web: 4280, mailboxPage: 4380, mailboxSmtp: 4525 };
+
+/**
+ * The running application.
+ *
+ * @typedef {object} Application
+ * @property {string} address - Where people open it.
+ * @property {string[]} notes - Lines for the person at the terminal, such as the demonstration's sign-ins.
+ * @property {Promise<never>} failed - Rejects when one of its programs ends without being stopped.
+ */
+
+/**
+ * Starts the programs that make the application, each when what it needs is there: the mailbox unless SMTP_URL
+ * names a mail server, the server, and the simulator unless LAMPMEADOW_DEMO is off.
+ *
+ * @param {object} options
+ * @param {string} options.folder - The project: programs in `dist`, logs and secrets in `.data`.
+ * @param {NodeJS.ProcessEnv} options.env - Settings; DATABASE_URL among them.
+ * @param {(line: string) => void} options.log
+ * @param {AbortSignal} options.signal
+ * @param {(stop: () => Promise<void>) => void} options.defer - Has a program stopped at the end.
+ * @returns {Promise<Application>}
+ * @throws {Problem} When a port is taken or a program does not come up.
+ */
+async function startApplication({ folder, env, log, signal, defer }) {
+  /** @type {import('./child-program').ChildProgram[]} */
+  const programs = [];
+  const start = async (
+    /** @type {string} */ name,
+    /** @type {string} */ title,
+    /** @type {object} */ more,
+  ) => {
+    const program = await startProgram({
+      title,
+      script: join(folder, 'dist', name, 'main.js'),
+      env: { NODE_ENV: 'production', ...env, ...more },
+      logFile: join(folder, '.data/logs', `${name.replace('/', '-')}.log`),
+      signal,
+    });
+    defer(program.stop);
+    programs.push(program);
+    return program.ready;
+  };
+  const devices = { LAMPMEADOW_DEVICES_FILE: join(folder, '.data/demonstration/devices.json') };
+  const web = await portFor(env, 'PORT', usualPorts.web, log);
+  const mail = isSet(env['SMTP_URL']) ? {} : await startMailbox(start, env, log);
+  const { address, notes } = await start('server', 'The server', { PORT: String(web), ...mail, ...devices });
+  if (env['LAMPMEADOW_DEMO'] !== 'off') {
+    await start('simulator', 'The simulator', { LAMPMEADOW_URL: address, ...devices });
+  }
+  return { address, notes, failed: Promise.race(programs.map((program) => program.failed)) };
+}
+
+/**
+ * @param {(name: string, title: string, more: object) => Promise<any>} start
+ * @param {NodeJS.ProcessEnv} env
+ * @param {(line: string) => void} log
+ * @returns {Promise<NodeJS.ProcessEnv>} What the server needs to know of it.
+ */
+async function startMailbox(start, env, log) {
+  const page = await portFor(env, 'MAILBOX_HTTP_PORT', usualPorts.mailboxPage, log);
+  const smtp = await portFor(env, 'MAILBOX_SMTP_PORT', usualPorts.mailboxSmtp, log);
+  const { smtpPort, address } = await start('simulator/mailbox', 'The mailbox', {
+    MAILBOX_HTTP_PORT: String(page),
+    MAILBOX_SMTP_PORT: String(smtp),
+  });
+  return { SMTP_URL: `smtp://127.0.0.1:${smtpPort}`, MAILBOX_URL: address };
+}
+
+/**
+ * @param {string | undefined} setting
+ * @returns {boolean}
+ */
+function isSet(setting) {
+  return setting !== undefined && setting !== '';
+}
+
+module.exports = { startApplication };
