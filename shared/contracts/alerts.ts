@@ -1,7 +1,27 @@
-import { z } from 'zod';
-import { alertKinds, urgencies } from '../alerts/alert-rule';
+import * as z from 'zod';
+import type { AlertKind, Urgency } from '../alerts/alert-rule';
 import { quantities } from '../climate/quantity';
 import { endpoint, id, instant, roomParams } from './endpoint';
+
+const alertKind = z.enum([
+  'aboveRange',
+  'belowRange',
+  'fastRise',
+  'fastFall',
+  'sensorSilent',
+  'deviceSilent',
+  'sensorFailed',
+  'sensorsDisagree',
+  'lampDark',
+  'lampLit',
+  'lightShort',
+  'matStuckOn',
+  'condensation',
+  'wetHours',
+  'dangerHigh',
+  'dangerLow',
+] as const satisfies readonly AlertKind[]);
+const urgency = z.enum(['lookToday', 'goNow'] as const satisfies readonly Urgency[]);
 
 /** An episode as people see it. Values are in the stored unit of the quantity. */
 export const alert = z.object({
@@ -10,8 +30,8 @@ export const alert = z.object({
   shelfLabel: z.string(),
   sensorId: id.nullable(),
   quantity: z.enum(quantities),
-  kind: z.enum(alertKinds),
-  urgency: z.enum(urgencies),
+  kind: alertKind,
+  urgency: urgency,
   beganAt: instant,
   openedAt: instant,
   peakAt: instant,

@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 import { quantities } from '../climate/quantity';
 import { plantHabits, plantingStages } from '../growing/planting-stage';
 import { alert } from './alerts';

@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 import { careKinds } from '../care/care-kind';
 import { shelfEventKinds } from '../care/shelf-event';
 import { day, endpoint, id, instant, line, roomParams } from './endpoint';

@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 import { alert, type Alert } from './alerts';
 import { shelfNow, type ShelfNow } from './board';
 import { task, type Task } from './care';

@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 import { endpoint, id, line, noContent, roomParams } from './endpoint';
 
 /** The roles of a member in a room, weakest first; each may all that the one before may. */

@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 
 /** An error answer, RFC 9457 (`application/problem+json`). */
 export const problem = z.object({

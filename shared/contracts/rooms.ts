@@ -1,5 +1,5 @@
-import { z } from 'zod';
-import { lampKinds } from '../climate/light';
+import * as z from 'zod';
+import { lampKinds, type LampKind } from '../climate/light';
 import { quantities } from '../climate/quantity';
 import { clockTime, day, endpoint, id, line, roomParams } from './endpoint';
 
@@ -55,10 +55,12 @@ export const changeRoom = endpoint({
   reply: room,
 });
 
+const lampKind = z.enum(Object.keys(lampKinds) as [LampKind, ...LampKind[]]);
+
 /** A lamp over a shelf. */
 export const lamp = z.object({
   id,
-  kind: z.enum(lampKinds),
+  kind: lampKind,
   watts: z.number(),
   luxPerUmol: z.number(),
   fittedOn: day,
@@ -175,7 +177,7 @@ export const fitLamp = endpoint({
   summary: 'Fit a lamp to a shelf',
   params: shelfParams,
   body: z.strictObject({
-    kind: z.enum(lampKinds),
+    kind: lampKind,
     watts: z.number().positive().max(5000),
     luxPerUmol: z.number().min(10).max(200).optional(),
     fittedOn: day,

@@ -1,5 +1,5 @@
 import { endpoint, roomParams } from './endpoint';
-import { z } from 'zod';
+import * as z from 'zod';
 import { scenarioListResponse, scenarioRun, startScenarioRequest } from './simulation';
 
 /** What the simulator can play in a demonstration room. */

@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 import { quantities } from '../climate/quantity';
 import { interval, plantingSummary } from './board';
 import { shelfEvent } from './care';

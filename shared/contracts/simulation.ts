@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 import { measuredQuantities } from '../climate/quantity';
 import { clockTime, instant } from './endpoint';
 
