@@ -1,26 +1,34 @@
 /** Kinds that compare a series with an upper limit. */
-export type AboveKind =
-  | 'aboveRange'
-  | 'fastRise'
-  | 'lampLit'
-  | 'matStuckOn'
-  | 'condensation'
-  | 'wetHours'
-  | 'sensorsDisagree'
-  | 'sensorFailed'
-  | 'dangerHigh';
-
+export const aboveKinds = [
+  'aboveRange',
+  'fastRise',
+  'lampLit',
+  'matStuckOn',
+  'condensation',
+  'wetHours',
+  'sensorsDisagree',
+  'sensorFailed',
+  'dangerHigh',
+] as const;
 /** Kinds that compare a series with a lower limit. */
-export type BelowKind = 'belowRange' | 'fastFall' | 'lampDark' | 'lightShort' | 'dangerLow';
-
+export const belowKinds = ['belowRange', 'fastFall', 'lampDark', 'lightShort', 'dangerLow'] as const;
 /** Kinds that watch for readings that don't come. */
-export type SilenceKind = 'sensorSilent' | 'deviceSilent';
-
+export const silenceKinds = ['sensorSilent', 'deviceSilent'] as const;
 /** Everything an alert can be about. */
-export type AlertKind = AboveKind | BelowKind | SilenceKind;
+export const alertKinds = [...aboveKinds, ...belowKinds, ...silenceKinds] as const;
+/** How soon someone should go to the shelf, the calmer first. */
+export const urgencies = ['lookToday', 'goNow'] as const;
 
+/** A kind that compares a series with an upper limit. */
+export type AboveKind = (typeof aboveKinds)[number];
+/** A kind that compares a series with a lower limit. */
+export type BelowKind = (typeof belowKinds)[number];
+/** A kind that watches for readings that don't come. */
+export type SilenceKind = (typeof silenceKinds)[number];
+/** What an alert can be about. */
+export type AlertKind = (typeof alertKinds)[number];
 /** How soon someone should go to the shelf. */
-export type Urgency = 'lookToday' | 'goNow';
+export type Urgency = (typeof urgencies)[number];
 
 /** How long and how far past a limit a series must be, and how surely back, for an alert to open and to clear. */
 export interface Patience {
@@ -87,15 +95,6 @@ export interface SilenceRule {
 /** A rule as stored and sent: plain JSON, told apart by `kind`. */
 export type AlertRule = LimitRule | SilenceRule;
 
-const silenceKinds: ReadonlySet<AlertKind> = new Set<SilenceKind>(['sensorSilent', 'deviceSilent']);
-const belowKinds: ReadonlySet<AlertKind> = new Set<BelowKind>([
-  'belowRange',
-  'fastFall',
-  'lampDark',
-  'lightShort',
-  'dangerLow',
-]);
-
 /**
  * Tells rules about missing readings from rules about limits.
  *
@@ -103,7 +102,7 @@ const belowKinds: ReadonlySet<AlertKind> = new Set<BelowKind>([
  * @returns Whether it is a {@link SilenceRule}.
  */
 export function isSilenceRule(rule: AlertRule): rule is SilenceRule {
-  return silenceKinds.has(rule.kind);
+  return (silenceKinds as readonly AlertKind[]).includes(rule.kind);
 }
 
 /**
@@ -113,5 +112,5 @@ export function isSilenceRule(rule: AlertRule): rule is SilenceRule {
  * @returns 1 when too high is wrong, -1 when too low is, so that `side * (value - limit)` is the excess.
  */
 export function brokenSide(kind: AboveKind | BelowKind): 1 | -1 {
-  return belowKinds.has(kind) ? -1 : 1;
+  return (belowKinds as readonly AlertKind[]).includes(kind) ? -1 : 1;
 }

@@ -24,8 +24,10 @@ export type Run = Pick<Episode, 'beganAt' | 'peakAt' | 'peakValue' | 'peakExcess
 
 /** All that a rule remembers between readings; plain JSON, kept in the database beside them. */
 export interface AlertState {
-  /** The last reading that counted [ms since 1970 UTC]; null before the first. */
+  /** The last reading of any quality [ms since 1970 UTC]; null before the first. */
   readonly lastAt: number | null;
+  /** The last reading that carried on the run or the clearing [ms since 1970 UTC]; null when there is neither. */
+  readonly carriedOnAt: number | null;
   readonly run: Run | null;
   readonly open: Episode | null;
   /** The first of the readings that say the open episode is over [ms since 1970 UTC]. */
@@ -35,6 +37,7 @@ export interface AlertState {
 /** The state before the first reading. */
 export const idleState: AlertState = Object.freeze({
   lastAt: null,
+  carriedOnAt: null,
   run: null,
   open: null,
   clearingSince: null,

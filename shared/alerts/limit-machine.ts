@@ -35,8 +35,9 @@ export function foldReadings(
   const fold = new EpisodeFold(rule, state);
   for (let i = 0; i < times.length; i += 1) {
     const quality = qualities[i];
-    if (quality === 'fail') continue;
     const at = times[i] ?? NaN;
+    fold.reach(at);
+    if (quality === 'fail') continue;
     const value = values[i] ?? NaN;
     const limit = limitAt(at);
     fold.take(at, value, limit, side * (value - limit), quality === 'pass');
@@ -49,6 +50,7 @@ type Draft<T> = { -readonly [K in keyof T]: T[K] };
 /** The fold in progress. Mutable, so that a million readings cost no allocation beyond their episodes. */
 class EpisodeFold {
   private lastAt: number;
+  private countedAt: number;
   private run: Draft<Run> | null;
   private open: Draft<Episode> | null;
   private clearingSince: number | null;
@@ -60,27 +62,34 @@ class EpisodeFold {
     state: AlertState,
   ) {
     this.lastAt = state.lastAt ?? -Infinity;
+    this.countedAt = state.carriedOnAt ?? -Infinity;
     this.run = state.run && { ...state.run };
     this.open = state.open && { ...state.open };
     this.clearingSince = state.clearingSince;
   }
 
-  take(at: number, value: number, limit: number, excess: number, isPass: boolean): void {
+  reach(at: number): void {
     requireAfter(this.lastAt, at);
-    if (at - this.lastAt > this.rule.maxGapMs) {
+    this.lastAt = at;
+    if (at - this.countedAt > this.rule.maxGapMs) {
       this.run = null;
       this.clearingSince = null;
     }
-    this.lastAt = at;
+  }
+
+  take(at: number, value: number, limit: number, excess: number, isPass: boolean): void {
+    this.countedAt = at;
     if (this.open === null) this.watch(at, value, limit, excess, isPass);
     else this.follow(this.open, at, value, limit, excess, isPass);
   }
 
   outcome(): AlertStep {
     if (this.hasNewPeak && this.open !== null) this.tell('peaked', this.open.peakAt, this.open);
+    const isUnderWay = this.run !== null || this.clearingSince !== null;
     return {
       state: {
         lastAt: Number.isFinite(this.lastAt) ? this.lastAt : null,
+        carriedOnAt: isUnderWay ? this.countedAt : null,
         run: this.run,
         open: this.open,
         clearingSince: this.clearingSince,
