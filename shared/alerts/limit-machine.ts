@@ -33,23 +33,27 @@ export function foldReadings(
   const side = brokenSide(rule.kind);
   const limitAt = limitLine(rule, context);
   const fold = new EpisodeFold(rule, state);
+  let lastAt = state.lastAt ?? -Infinity;
   for (let i = 0; i < times.length; i += 1) {
-    const quality = qualities[i];
     const at = times[i] ?? NaN;
-    fold.reach(at);
+    requireAfter(lastAt, at);
+    lastAt = at;
+    const quality = qualities[i];
     if (quality === 'fail') continue;
     const value = values[i] ?? NaN;
     const limit = limitAt(at);
-    fold.take(at, value, limit, side * (value - limit), quality === 'pass');
+    const excess = side * (value - limit);
+    // Nearly every reading is an ordinary one and needs no more than this.
+    if (fold.isIdle && !(excess > 0)) continue;
+    fold.take(at, value, limit, excess, quality === 'pass');
   }
-  return fold.outcome();
+  return fold.outcome(lastAt);
 }
 
 type Draft<T> = { -readonly [K in keyof T]: T[K] };
 
 /** The fold in progress. Mutable, so that a million readings cost no allocation beyond their episodes. */
 class EpisodeFold {
-  private lastAt: number;
   private countedAt: number;
   private run: Draft<Run> | null;
   private open: Draft<Episode> | null;
@@ -61,34 +65,32 @@ class EpisodeFold {
     private readonly rule: LimitRule,
     state: AlertState,
   ) {
-    this.lastAt = state.lastAt ?? -Infinity;
     this.countedAt = state.carriedOnAt ?? -Infinity;
     this.run = state.run && { ...state.run };
     this.open = state.open && { ...state.open };
     this.clearingSince = state.clearingSince;
   }
 
-  reach(at: number): void {
-    requireAfter(this.lastAt, at);
-    this.lastAt = at;
-    if (at - this.countedAt > this.rule.maxGapMs) {
-      this.run = null;
-      this.clearingSince = null;
-    }
+  /** Whether nothing is under way that an ordinary reading could change. */
+  get isIdle(): boolean {
+    return this.run === null && this.open === null;
   }
 
   take(at: number, value: number, limit: number, excess: number, isPass: boolean): void {
+    this.forgetBeforeGap(at);
     this.countedAt = at;
     if (this.open === null) this.watch(at, value, limit, excess, isPass);
     else this.follow(this.open, at, value, limit, excess, isPass);
   }
 
-  outcome(): AlertStep {
+  /** @param lastAt - The last reading of any quality; -Infinity when there has been none. */
+  outcome(lastAt: number): AlertStep {
+    this.forgetBeforeGap(lastAt);
     if (this.hasNewPeak && this.open !== null) this.tell('peaked', this.open.peakAt, this.open);
     const isUnderWay = this.run !== null || this.clearingSince !== null;
     return {
       state: {
-        lastAt: Number.isFinite(this.lastAt) ? this.lastAt : null,
+        lastAt: Number.isFinite(lastAt) ? lastAt : null,
         carriedOnAt: isUnderWay ? this.countedAt : null,
         run: this.run,
         open: this.open,
@@ -96,6 +98,12 @@ class EpisodeFold {
       },
       changes: this.changes,
     };
+  }
+
+  private forgetBeforeGap(at: number): void {
+    if (at - this.countedAt <= this.rule.maxGapMs) return;
+    this.run = null;
+    this.clearingSince = null;
   }
 
   private watch(at: number, value: number, limit: number, excess: number, isPass: boolean): void {
