@@ -1,4 +1,5 @@
 import {
+  Check,
   Column,
   Entity,
   Index,
@@ -14,6 +15,7 @@ import { DeviceEntity } from './device-entity';
 
 /** Measures one quantity; `key` is the device's own name for it. */
 @Entity('sensor')
+@Check('sensor_expected_interval_positive', 'expected_interval_s > 0')
 @Unique('sensor_device_key_key', ['deviceId', 'key'])
 @Index('sensor_room_idx', ['roomId'])
 export class SensorEntity {

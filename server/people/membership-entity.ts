@@ -1,4 +1,5 @@
 import {
+  Check,
   Column,
   CreateDateColumn,
   Entity,
@@ -13,6 +14,7 @@ import { PersonEntity } from './person-entity';
 
 /** A person's role in one room, and which mails they want from it. */
 @Entity('membership')
+@Check('membership_role_known', "role IN ('viewer', 'helper', 'grower', 'keeper')")
 export class MembershipEntity {
   @PrimaryColumn('uuid', { name: 'room_id', primaryKeyConstraintName: 'membership_pkey' }) roomId!: string;
   @PrimaryColumn('uuid', { name: 'person_id', primaryKeyConstraintName: 'membership_pkey' })

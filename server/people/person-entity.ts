@@ -1,8 +1,9 @@
-import { Column, CreateDateColumn, Entity, PrimaryGeneratedColumn, Unique } from 'typeorm';
+import { Check, Column, CreateDateColumn, Entity, PrimaryGeneratedColumn, Unique } from 'typeorm';
 import type { TemperatureUnit, Theme } from '@shared/contracts/people';
 
 /** Someone who signs in. The address is kept in lower case, so that one address is one person. */
 @Entity('person')
+@Check('person_email_lower_case', 'email = lower(email)')
 @Unique('person_email_key', ['email'])
 export class PersonEntity {
   @PrimaryGeneratedColumn('uuid', { primaryKeyConstraintName: 'person_pkey' }) id!: string;

@@ -1,4 +1,5 @@
 import {
+  Check,
   Column,
   CreateDateColumn,
   Entity,
@@ -14,6 +15,7 @@ import { ShelfEntity } from '../rooms/shelf-entity';
 
 /** Something growing on a shelf. */
 @Entity('planting')
+@Check('planting_count_not_negative', 'count >= 0')
 @Index('planting_room_idx', ['roomId'])
 export class PlantingEntity {
   @PrimaryGeneratedColumn('uuid', { primaryKeyConstraintName: 'planting_pkey' }) id!: string;

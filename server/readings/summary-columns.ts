@@ -6,9 +6,10 @@ export abstract class SummaryColumns {
   @Column('double precision', { name: 'covered_ms' }) coveredMs!: number;
   @Column('double precision', { nullable: true }) min!: number | null;
   @Column('double precision', { nullable: true }) max!: number | null;
-  /** Time integral, value × hours. */
-  @Column('double precision', { name: 'integral_h' }) integralH!: number;
-  @Column('double precision', { name: 'above_threshold_ms' }) aboveThresholdMs!: number;
+  /** Integral over the covered time, value × milliseconds. */
+  @Column('double precision', { name: 'integral_ms' }) integralMs!: number;
+  @Column('double precision', { name: 'above_threshold_ms', nullable: true }) aboveThresholdMs!:
+    number | null;
   @Column('double precision', { name: 'first_at_ms', nullable: true }) firstAtMs!: number | null;
   @Column('double precision', { name: 'first_value', nullable: true }) firstValue!: number | null;
   @Column('double precision', { name: 'last_at_ms', nullable: true }) lastAtMs!: number | null;

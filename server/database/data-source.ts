@@ -1,0 +1,87 @@
+import 'reflect-metadata';
+import { DataSource } from 'typeorm';
+import { AlertEntity } from '../alerts/alert-entity';
+import { AlertWatchEntity } from '../alerts/alert-watch-entity';
+import { AuditEntryEntity } from '../audit/audit-entry-entity';
+import { RoutineEntity } from '../care/routine-entity';
+import { ShelfEventEntity } from '../care/shelf-event-entity';
+import { TaskEntity } from '../care/task-entity';
+import { DeviceEntity } from '../devices/device-entity';
+import { PlacementEntity } from '../devices/placement-entity';
+import { SensorEntity } from '../devices/sensor-entity';
+import { LoggerFileEntity } from '../logger-files/logger-file-entity';
+import { LoggerFilePartEntity } from '../logger-files/logger-file-part-entity';
+import { LoggerFileRejectionEntity } from '../logger-files/logger-file-rejection-entity';
+import { MailEntity } from '../mail/mail-entity';
+import { MembershipEntity } from '../people/membership-entity';
+import { PersonEntity } from '../people/person-entity';
+import { PlantingEntity } from '../plantings/planting-entity';
+import { DailySummaryEntity } from '../readings/daily-summary-entity';
+import { HourlySummaryEntity } from '../readings/hourly-summary-entity';
+import { ReadingEntity } from '../readings/reading-entity';
+import { SensorStateEntity } from '../readings/sensor-state-entity';
+import { ShelfHourlySummaryEntity } from '../readings/shelf-hourly-summary-entity';
+import { HeatMatEntity } from '../rooms/heat-mat-entity';
+import { LampEntity } from '../rooms/lamp-entity';
+import { LampPlanEntity } from '../rooms/lamp-plan-entity';
+import { RackEntity } from '../rooms/rack-entity';
+import { RoomEntity } from '../rooms/room-entity';
+import { ShelfEntity } from '../rooms/shelf-entity';
+import { WantedRangeEntity } from '../rooms/wanted-range-entity';
+import { migrations } from './migrations/all-migrations';
+
+/** Every table that TypeORM maps. */
+const entities = [
+  AlertEntity,
+  AlertWatchEntity,
+  AuditEntryEntity,
+  DailySummaryEntity,
+  DeviceEntity,
+  HeatMatEntity,
+  HourlySummaryEntity,
+  LampEntity,
+  LampPlanEntity,
+  LoggerFileEntity,
+  LoggerFilePartEntity,
+  LoggerFileRejectionEntity,
+  MailEntity,
+  MembershipEntity,
+  PersonEntity,
+  PlacementEntity,
+  PlantingEntity,
+  RackEntity,
+  ReadingEntity,
+  RoomEntity,
+  RoutineEntity,
+  SensorEntity,
+  SensorStateEntity,
+  ShelfEntity,
+  ShelfEventEntity,
+  ShelfHourlySummaryEntity,
+  TaskEntity,
+  WantedRangeEntity,
+];
+
+/**
+ * The data source over every entity and migration; `synchronize` is off everywhere.
+ *
+ * @param url - A `postgresql://` address.
+ * @param poolSize - The most connections this process opens.
+ * @returns A data source, not yet connected.
+ */
+export function createDataSource(url: string, poolSize = 12): DataSource {
+  return new DataSource({
+    type: 'postgres',
+    url,
+    entities,
+    migrations,
+    synchronize: false,
+    migrationsTableName: 'migration',
+    uuidExtension: 'pgcrypto', // gen_random_uuid() is built in; nothing is installed.
+    installExtensions: false,
+    poolSize,
+    // A server that went away must be noticed within seconds, so that devices keep what they hold.
+    connectTimeoutMS: 5_000,
+    extra: { application_name: 'lampmeadow', statement_timeout: 120_000, idleTimeoutMillis: 30_000 },
+  });
+}

@@ -1,0 +1,22 @@
+import { CreatePeopleAndRooms1764550800000 } from './1764550800000-create-people-and-rooms';
+import { CreateRacksAndShelves1764550900000 } from './1764550900000-create-racks-and-shelves';
+import { CreateDevices1764551000000 } from './1764551000000-create-devices';
+import { CreateReadings1764551100000 } from './1764551100000-create-readings';
+import { CreateAlertsAndMail1764551200000 } from './1764551200000-create-alerts-and-mail';
+import { CreatePlantingsAndCare1764551300000 } from './1764551300000-create-plantings-and-care';
+import { CreateLoggerFiles1764551400000 } from './1764551400000-create-logger-files';
+import { CreateAuditEntry1764551500000 } from './1764551500000-create-audit-entry';
+import { CreateRequestCounters1764551600000 } from './1764551600000-create-request-counters';
+
+/** Every migration in order; a merged one is never edited. */
+export const migrations = [
+  CreatePeopleAndRooms1764550800000,
+  CreateRacksAndShelves1764550900000,
+  CreateDevices1764551000000,
+  CreateReadings1764551100000,
+  CreateAlertsAndMail1764551200000,
+  CreatePlantingsAndCare1764551300000,
+  CreateLoggerFiles1764551400000,
+  CreateAuditEntry1764551500000,
+  CreateRequestCounters1764551600000,
+];

@@ -1,0 +1,24 @@
+import type { DataSource, EntityManager } from 'typeorm';
+
+/** A connection inside a transaction, or outside one where only reading is done; stores take it, services pass it on. */
+export type Tx = EntityManager;
+
+/** Opens transactions; what services need of the database. */
+export class Transactions {
+  constructor(private readonly dataSource: DataSource) {}
+
+  /** For single statements that need no transaction. */
+  get plain(): Tx {
+    return this.dataSource.manager;
+  }
+
+  /**
+   * Runs work in one transaction.
+   *
+   * @param work - Gets the transaction; throwing rolls everything back.
+   * @returns What the work returned, after the commit.
+   */
+  run<T>(work: (tx: Tx) => Promise<T>): Promise<T> {
+    return this.dataSource.transaction(work);
+  }
+}
