@@ -1,4 +1,5 @@
 import * as z from 'zod';
+import './endpoint';
 
 /** An error answer, RFC 9457 (`application/problem+json`). */
 export const problem = z.object({
