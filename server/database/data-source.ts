@@ -20,7 +20,7 @@ import { DailySummaryEntity } from '../readings/daily-summary-entity';
 import { HourlySummaryEntity } from '../readings/hourly-summary-entity';
 import { ReadingEntity } from '../readings/reading-entity';
 import { SensorStateEntity } from '../readings/sensor-state-entity';
-import { ShelfHourlySummaryEntity } from '../readings/shelf-hourly-summary-entity';
+import { ComputedHourlySummaryEntity } from '../readings/computed-hourly-summary-entity';
 import { HeatMatEntity } from '../rooms/heat-mat-entity';
 import { LampEntity } from '../rooms/lamp-entity';
 import { LampPlanEntity } from '../rooms/lamp-plan-entity';
@@ -57,7 +57,7 @@ const entities = [
   SensorStateEntity,
   ShelfEntity,
   ShelfEventEntity,
-  ShelfHourlySummaryEntity,
+  ComputedHourlySummaryEntity,
   TaskEntity,
   WantedRangeEntity,
 ];

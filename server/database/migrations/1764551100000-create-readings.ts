@@ -18,6 +18,8 @@ export class CreateReadings1764551100000 implements MigrationInterface {
         latest_at timestamptz NOT NULL,
         latest_value double precision NOT NULL,
         latest_flags smallint NOT NULL,
+        revision integer NOT NULL,
+        computed_to timestamptz,
         CONSTRAINT sensor_state_pkey PRIMARY KEY (sensor_id),
         CONSTRAINT sensor_state_sensor_fk FOREIGN KEY (sensor_id) REFERENCES sensor(id) ON DELETE CASCADE
       )`);
@@ -57,7 +59,7 @@ export class CreateReadings1764551100000 implements MigrationInterface {
         CONSTRAINT daily_summary_sensor_fk FOREIGN KEY (sensor_id) REFERENCES sensor(id) ON DELETE CASCADE
       )`);
     await runner.query(`
-      CREATE TABLE shelf_hourly_summary (
+      CREATE TABLE computed_hourly_summary (
         count integer NOT NULL,
         covered_ms double precision NOT NULL,
         min double precision,
@@ -68,11 +70,11 @@ export class CreateReadings1764551100000 implements MigrationInterface {
         first_value double precision,
         last_at_ms double precision,
         last_value double precision,
-        shelf_id uuid NOT NULL,
+        sensor_id uuid NOT NULL,
         quantity text NOT NULL,
         start_at timestamptz NOT NULL,
-        CONSTRAINT shelf_hourly_summary_pkey PRIMARY KEY (shelf_id, quantity, start_at),
-        CONSTRAINT shelf_hourly_summary_shelf_fk FOREIGN KEY (shelf_id) REFERENCES shelf(id) ON DELETE CASCADE
+        CONSTRAINT computed_hourly_summary_pkey PRIMARY KEY (sensor_id, quantity, start_at),
+        CONSTRAINT computed_hourly_summary_sensor_fk FOREIGN KEY (sensor_id) REFERENCES sensor(id) ON DELETE CASCADE
       )`);
     // Months are made ahead of need, and where a file reaches further back. The owner's rights make the partition,
     // so that the application itself needs none to change tables.
@@ -101,7 +103,7 @@ export class CreateReadings1764551100000 implements MigrationInterface {
 
   async down(runner: QueryRunner): Promise<void> {
     await runner.query(`DROP FUNCTION ensure_reading_partitions`);
-    await runner.query(`DROP TABLE shelf_hourly_summary`);
+    await runner.query(`DROP TABLE computed_hourly_summary`);
     await runner.query(`DROP TABLE daily_summary`);
     await runner.query(`DROP TABLE hourly_summary`);
     await runner.query(`DROP TABLE sensor_state`);
