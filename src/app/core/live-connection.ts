@@ -1,11 +1,9 @@
-import { DestroyRef, effect, inject, Injectable, signal, untracked } from '@angular/core';
+import { DestroyRef, effect, inject, Injectable, untracked } from '@angular/core';
 import { liveEventSchemas, type LiveEvents } from '@shared/contracts/live-events';
 import { map, share, Subject, filter, type Observable } from 'rxjs';
+import { LiveState } from './live-state';
 import { liveSocket } from './live-socket';
 import { Session } from './session';
-
-/** Whether changes arrive by themselves: for the first time soon, now, again soon, or not without a network. */
-export type LiveState = 'connecting' | 'live' | 'reconnecting' | 'offline';
 
 /** What is told with an event. */
 export type LiveMessage<Name extends keyof LiveEvents> = Parameters<LiveEvents[Name]>[0];
@@ -18,13 +16,10 @@ const refusedRetryMs = 5_000;
 export class LiveConnection {
   private readonly socket = inject(liveSocket);
   private readonly session = inject(Session);
-  private readonly current = signal<LiveState>('connecting');
+  private readonly current = inject(LiveState);
   private readonly watching = new Subject<void>();
   private readonly messages = new Map<string, Observable<unknown>>();
   private retry: ReturnType<typeof setTimeout> | undefined;
-
-  /** Whether changes arrive by themselves. */
-  readonly state = this.current.asReadonly();
 
   /**
    * Emits each time watching begins: at first, after a lost connection, in another room. What is shown may have
@@ -107,7 +102,7 @@ export class LiveConnection {
 
   private followNetwork(): void {
     const follow = (): void => {
-      if (this.current() !== 'live') this.current.set(navigator.onLine ? 'reconnecting' : 'offline');
+      if (this.current.now() !== 'live') this.current.set(navigator.onLine ? 'reconnecting' : 'offline');
     };
     for (const change of ['online', 'offline']) addEventListener(change, follow);
     inject(DestroyRef).onDestroy(() => {
