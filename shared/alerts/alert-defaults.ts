@@ -1,0 +1,142 @@
+import type { Quantity } from '../climate/quantity';
+import type {
+  AboveRangeRule,
+  BelowRangeRule,
+  FixedLimitRule,
+  LampChange,
+  LampRule,
+  Patience,
+  SilenceRule,
+} from './alert-rule';
+
+const minute = 60_000;
+const hour = 60 * minute;
+
+/**
+ * Patience with each quantity unless a shelf says otherwise, in stored units.
+ *
+ * @remarks
+ * Common practice, no source: light answers at once, air in some tens of minutes, the root zone in hours; margins are
+ * about twice the noise of an ordinary sensor; urgent is what harms seedlings within hours rather than days.
+ */
+export const patienceDefaults: Readonly<Record<Quantity, Patience & LampChange>> = {
+  airTemperature: patience({ holdMin: 15, clearMargin: 0.5, urgentBy: 4, settleMin: 30, rampMin: 60 }),
+  rootZoneTemperature: patience({ holdMin: 30, clearMargin: 0.5, urgentBy: 4, settleMin: 60, rampMin: 120 }),
+  dewPoint: patience({ holdMin: 30, clearMargin: 0.5, urgentBy: null, settleMin: 30, rampMin: 60 }),
+  relativeHumidity: patience({ holdMin: 30, clearMargin: 3, urgentBy: 20, settleMin: 30, rampMin: 60 }),
+  vapourPressureDeficit: patience({
+    holdMin: 30,
+    clearMargin: 0.05,
+    urgentBy: 0.8,
+    settleMin: 30,
+    rampMin: 60,
+  }),
+  absoluteHumidity: patience({ holdMin: 30, clearMargin: 0.5, urgentBy: null, settleMin: 30, rampMin: 60 }),
+  ppfd: patience({ holdMin: 15, clearMargin: 10, urgentBy: null, settleMin: 5, rampMin: 0 }),
+  illuminance: patience({ holdMin: 15, clearMargin: 500, urgentBy: null, settleMin: 5, rampMin: 0 }),
+};
+
+function patience(of: {
+  holdMin: number;
+  clearMargin: number;
+  urgentBy: number | null;
+  settleMin: number;
+  rampMin: number;
+}): Patience & LampChange {
+  return {
+    holdMs: of.holdMin * minute,
+    clearMargin: of.clearMargin,
+    clearHoldMs: 10 * minute,
+    maxGapMs: 30 * minute,
+    urgentBy: of.urgentBy,
+    urgentAfterMs: 6 * hour,
+    settleMs: of.settleMin * minute,
+    rampMs: of.rampMin * minute,
+  };
+}
+
+/** What a shelf wants of a quantity while the lamps are on and while they are off; null is no limit. */
+export interface WantedLimits {
+  readonly lampsOn: { readonly low: number | null; readonly high: number | null };
+  readonly lampsOff: { readonly low: number | null; readonly high: number | null };
+}
+
+/**
+ * The two rules of a wanted range.
+ *
+ * @param quantity - The quantity it is about; gives the defaults.
+ * @param wanted - Its limits in the stored unit.
+ * @param changed - What the shelf has set differently from {@link patienceDefaults}.
+ * @returns One rule for each side, also where that side has no limit.
+ */
+export function rangeRules(
+  quantity: Quantity,
+  { lampsOn, lampsOff }: WantedLimits,
+  changed: Partial<Patience & LampChange> = {},
+): { above: AboveRangeRule; below: BelowRangeRule } {
+  const patience = { ...patienceDefaults[quantity], ...changed };
+  return {
+    above: {
+      kind: 'aboveRange',
+      lampsOn: { high: lampsOn.high },
+      lampsOff: { high: lampsOff.high },
+      ...patience,
+    },
+    below: {
+      kind: 'belowRange',
+      lampsOn: { low: lampsOn.low },
+      lampsOff: { low: lampsOff.low },
+      ...patience,
+    },
+  };
+}
+
+/** A kind whose limit does not come from a wanted range, with its default rule. */
+type StandingRule = FixedLimitRule | LampRule | SilenceRule;
+
+/** Ordinary patience of a fixed limit; each rule below says where it differs. */
+const fixed: Patience = {
+  holdMs: 15 * minute,
+  clearMargin: 0,
+  clearHoldMs: 10 * minute,
+  maxGapMs: 30 * minute,
+  urgentBy: null,
+  urgentAfterMs: null,
+};
+const danger: Patience = { ...fixed, holdMs: 5 * minute, clearMargin: 1, urgentBy: 0 };
+const light = { ...fixed, settleMs: 5 * minute, rampMs: 0 };
+
+/**
+ * Rules that apply without a wanted range. All limits are common practice without a source unless named.
+ *
+ * @remarks
+ * `dangerLow` and `dangerHigh` [°C] hold for air and root zone whatever is planted. `fastRise` and `fastFall` [°C/h]
+ * lie beyond what the lamps do to a shelf at every change: 7 °C with a time constant of 40 min makes about 9 °C/h
+ * over 15 min. `lampDark` and `lampLit` [µmol m⁻² s⁻¹] suit a PPFD sensor. `wetHours` [h] is the shorter of the
+ * 8 to 12 h of wet leaves that Botrytis needs (University of Massachusetts Extension).
+ */
+export const standingRules = {
+  dangerLow: { kind: 'dangerLow', limit: 2, ...danger },
+  dangerHigh: { kind: 'dangerHigh', limit: 38, ...danger },
+  fastFall: { kind: 'fastFall', limit: -12, ...fixed, holdMs: 0, clearMargin: 3 },
+  fastRise: { kind: 'fastRise', limit: 12, ...fixed, holdMs: 0, clearMargin: 3 },
+  lampDark: { kind: 'lampDark', limit: 10, ...light, urgentAfterMs: 4 * hour },
+  lampLit: { kind: 'lampLit', limit: 10, ...light, urgentAfterMs: 6 * hour },
+  matStuckOn: { kind: 'matStuckOn', limit: 3, ...fixed, holdMs: 2 * hour, clearMargin: 1 },
+  condensation: { kind: 'condensation', limit: 0, ...fixed, holdMs: 30 * minute, clearMargin: 0.5 },
+  wetHours: { kind: 'wetHours', limit: 8, ...fixed, holdMs: 0, urgentBy: 4 },
+  sensorsDisagree: { kind: 'sensorsDisagree', limit: 2, ...fixed, holdMs: hour, clearMargin: 0.5 },
+  sensorFailed: { kind: 'sensorFailed', limit: 0.5, ...fixed },
+  sensorSilent: { kind: 'sensorSilent', silentAfterMs: 30 * minute, urgentAfterMs: 6 * hour },
+  deviceSilent: { kind: 'deviceSilent', silentAfterMs: 15 * minute, urgentAfterMs: 2 * hour },
+} as const satisfies Readonly<Record<string, StandingRule>>;
+
+/**
+ * The rule for a day's light.
+ *
+ * @param wanted - Light hours [h] or daily light integral [mol m⁻² d⁻¹] that a day should reach.
+ * @returns A rule over `lightDays`: one short day opens it, the next day that reaches it clears it.
+ */
+export function lightShortRule(wanted: number): FixedLimitRule {
+  return { kind: 'lightShort', limit: wanted, ...fixed, holdMs: 0, clearHoldMs: 0 };
+}
