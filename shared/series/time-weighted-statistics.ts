@@ -85,8 +85,8 @@ function extremesInWindow(
   for (const { at, value } of series) {
     if (at >= window.from && at < window.to) {
       count += 1;
-      min = Math.min(min, value);
-      max = Math.max(max, value);
+      min = value < min ? value : min;
+      max = value > max ? value : max;
     }
   }
   return count === 0 ? { count, min: null, max: null } : { count, min, max };
