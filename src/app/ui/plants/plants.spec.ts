@@ -1,0 +1,142 @@
+import { TestBed } from '@angular/core/testing';
+import fc from 'fast-check';
+import { cropLook, plantForm, type DrawnStage, type PlantHabit } from './crop-look';
+import { PlantDrawing } from './plant-drawing';
+import { plantPicture, type PlantFamily, type PlantForm } from './plant-forms';
+import { PlantTray } from './plant-tray';
+import { trayLayout, type TrayPlanting } from './tray-layout';
+
+const forms: PlantForm[] = [
+  'sown',
+  'hook',
+  'twoLeaves',
+  'blades',
+  'leafy',
+  'bush',
+  'fruiting',
+  'tree',
+  'resting',
+  'empty',
+];
+const families: PlantFamily[] = [
+  'leek',
+  'onion',
+  'pepper',
+  'tomato',
+  'herb',
+  'strawberry',
+  'citrus',
+  'lettuce',
+];
+
+const planting: fc.Arbitrary<TrayPlanting> = fc.record({
+  form: fc.constantFrom(...forms),
+  family: fc.constantFrom(...families),
+  count: fc.integer({ min: 0, max: 400 }),
+  size: fc.double({ min: 0.1, max: 2, noNaN: true }),
+});
+
+describe('the drawing of a crop', () => {
+  it.each([
+    ['Dwarf tomato', 'tomato', 'leafy'],
+    ['Onion, long-day', 'onion', 'blades'],
+    ['Leek', 'leek', 'blades'],
+    ['Potted citrus', 'citrus', 'tree'],
+    ['Lemongrass', 'onion', 'blades'],
+    ['Something new', 'herb', 'bush'],
+  ])('called %s has the colours of %s and the habit %s', (crop, family, habit) => {
+    expect(cropLook(crop)).toEqual({ family, habit });
+  });
+
+  it.each<[PlantHabit, DrawnStage, PlantForm]>([
+    ['blades', 'sown', 'sown'],
+    ['leafy', 'emerging', 'hook'],
+    ['leafy', 'seedling', 'twoLeaves'],
+    ['blades', 'seedling', 'blades'],
+    ['bush', 'growingOn', 'bush'],
+    ['leafy', 'fruiting', 'fruiting'],
+    ['tree', 'fruiting', 'tree'],
+    ['tree', 'resting', 'tree'],
+    ['leafy', 'ended', 'empty'],
+  ])('of habit %s at stage %s is the form %s', (habit, stage, form) => {
+    expect(plantForm(habit, stage)).toBe(form);
+  });
+
+  it('fruits after its own family', () => {
+    expect(plantPicture('fruiting', 'strawberry')).not.toBe(plantPicture('fruiting', 'tomato'));
+    expect(plantPicture('fruiting', 'citrus')).toBe(plantPicture('tree', 'citrus'));
+  });
+});
+
+describe('plants along a board', () => {
+  it('keep to their own part of it and never overlap', () => {
+    fc.assert(
+      fc.property(fc.array(planting, { minLength: 1, maxLength: 12 }), (plantings) => {
+        const { boards, plants } = trayLayout(plantings, 408);
+        const end = boards.reduce((sum, { breadth }) => sum + breadth, 0);
+        expect(end).toBeCloseTo(408, 6);
+        plants.slice(1).forEach((plant, index) => {
+          const before = plants[index];
+          if (before === undefined) return;
+          const reach = (p: typeof plant): number => (plantPicture(p.form, p.family).breadth * p.size) / 2;
+          // A plant may vary by 4 % in size.
+          expect(plant.x - before.x).toBeGreaterThanOrEqual((reach(plant) + reach(before)) / 1.05);
+        });
+      }),
+    );
+  });
+
+  it('show at least one of each planting, however many there are', () => {
+    const { plants } = trayLayout(
+      [
+        { form: 'sown', family: 'leek', count: 2000 },
+        { form: 'tree', family: 'citrus', count: 1 },
+      ],
+      408,
+    );
+    expect(plants.filter(({ form }) => form === 'tree')).toHaveLength(1);
+    expect(plants.length).toBeLessThan(60);
+  });
+
+  it('are as many as there are where they find room', () => {
+    expect(trayLayout([{ form: 'fruiting', family: 'tomato', count: 6 }], 408).plants).toHaveLength(6);
+  });
+});
+
+describe('a plant tray', () => {
+  const tray = async (plantings: TrayPlanting[]): Promise<HTMLElement> => {
+    const fixture = TestBed.createComponent(PlantTray);
+    fixture.componentRef.setInput('plantings', plantings);
+    await fixture.whenStable();
+    return fixture.nativeElement as HTMLElement;
+  };
+
+  it('draws a board for each planting and leaves the words to others', async () => {
+    const host = await tray([
+      { form: 'hook', family: 'leek', count: 3 },
+      { form: 'sown', family: 'onion', count: 4 },
+    ]);
+    expect(host.getAttribute('aria-hidden')).toBe('true');
+    expect(host.querySelectorAll('rect')).toHaveLength(2);
+    expect(host.querySelectorAll('g.leek')).toHaveLength(3);
+    expect(host.querySelectorAll('g.onion path').length).toBeGreaterThan(4);
+  });
+
+  it('with nothing on it is one bare board', async () => {
+    const host = await tray([]);
+    expect(host.querySelectorAll('rect')).toHaveLength(1);
+    expect(host.querySelectorAll('g')).toHaveLength(0);
+  });
+});
+
+describe('a single drawing', () => {
+  it('is cropped to its plant', async () => {
+    const fixture = TestBed.createComponent(PlantDrawing);
+    fixture.componentRef.setInput('form', 'sown');
+    fixture.componentRef.setInput('family', 'leek');
+    await fixture.whenStable();
+    const host = fixture.nativeElement as HTMLElement;
+    expect(host.querySelector('svg')?.getAttribute('viewBox')).toBe('-5.5 -7 11 8');
+    expect(host.querySelectorAll('path.seed')).toHaveLength(2);
+  });
+});
