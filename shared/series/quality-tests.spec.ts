@@ -1,5 +1,6 @@
 import fc from 'fast-check';
 
+import type { MeasuredQuantity } from '../climate/quantity';
 import {
   createQualityCheck,
   FIRST_FAILED_FLAGS,
@@ -7,7 +8,6 @@ import {
   qualityHistoryMs,
   qualityLevel,
   qualityLimits,
-  type MeasuredQuantity,
   type QualityLimits,
 } from './quality-tests';
 import type { Sample, Series } from './series';

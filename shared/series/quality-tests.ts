@@ -1,8 +1,5 @@
+import type { MeasuredQuantity } from '../climate/quantity';
 import { requireAfter, type Sample, type Series } from './series';
-
-/** Quantities that sensors measure. */
-export type MeasuredQuantity =
-  'airTemperature' | 'rootZoneTemperature' | 'relativeHumidity' | 'ppfd' | 'illuminance';
 
 /** Tests that a reading is put to on arrival. */
 export type QualityTest = 'grossRange' | 'rateOfChange' | 'flatLine';
