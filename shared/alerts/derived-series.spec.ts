@@ -1,0 +1,187 @@
+import fc from 'fast-check';
+import type { ObservationColumns, Quality } from './alert-state';
+import {
+  botrytisWindow,
+  changePerHour,
+  dewPointSurplus,
+  disagreement,
+  failures,
+  joinAsOf,
+  lightDays,
+  unaskedWarmth,
+  wetHours,
+} from './derived-series';
+
+const minute = 60_000;
+const hour = 60 * minute;
+
+type Row = readonly [atMin: number, value: number, quality?: Quality];
+
+function series(...rows: Row[]): ObservationColumns {
+  return {
+    times: rows.map(([atMin]) => atMin * minute),
+    values: rows.map(([, value]) => value),
+    qualities: rows.map(([, , quality]) => quality ?? 'pass'),
+  };
+}
+
+function rowsOf({ times, values, qualities }: ObservationColumns) {
+  return Array.from(times, (at, i) => [at / minute, values[i], qualities[i]]);
+}
+
+describe('series joined as of their latest readings', () => {
+  it('has a value at every reading of either, while the other is young enough', () => {
+    const joined = joinAsOf(
+      [series([0, 1], [10, 2], [40, 3]), series([5, 10], [10, 20])],
+      20 * minute,
+      ([a = NaN, b = NaN]) => a + b,
+    );
+    expect(rowsOf(joined)).toEqual([
+      [5, 11, 'pass'],
+      [10, 22, 'pass'],
+    ]);
+  });
+
+  it('is suspect where either reading is, and knows no failed one', () => {
+    const joined = joinAsOf(
+      [series([0, 1], [10, 99, 'fail'], [20, 3]), series([0, 1, 'suspect'], [10, 2], [20, 3])],
+      60 * minute,
+      ([a = NaN, b = NaN]) => a - b,
+    );
+    expect(rowsOf(joined)).toEqual([
+      [0, 0, 'suspect'],
+      [10, -1, 'pass'],
+      [20, 0, 'pass'],
+    ]);
+  });
+});
+
+describe('series of single kinds', () => {
+  it('disagreement is the distance, whichever sensor is higher', () => {
+    const apart = disagreement(series([0, 20], [10, 25]), series([0, 22], [10, 22]), minute);
+    expect(apart.values).toEqual([2, 3]);
+  });
+
+  it('unasked warmth is the root zone above the air, and nothing while seed waits for it', () => {
+    const warmth = unaskedWarmth(
+      series([0, 26], [10, 26]),
+      series([0, 20], [10, 20]),
+      minute,
+      (at) => at === 0,
+    );
+    expect(warmth.values).toEqual([0, 6]);
+  });
+
+  // Dew points of 15.1 °C at 22 °C/65 % and 18.2 °C at 24 °C/70 %, to 0.1 °C, from FAO-56 eq. 11 inverted.
+  it.each([
+    [22, 65, 15.1],
+    [24, 70, 18.2],
+  ])(
+    'dew point surplus in air of %d °C and %d %% is zero on a surface of %d °C',
+    (temperature, humidity, dewPoint) => {
+      const surplus = dewPointSurplus(
+        { temperature: series([0, temperature]), humidity: series([0, humidity]) },
+        series([0, dewPoint]),
+        minute,
+      );
+      expect(Math.abs(surplus.values[0] ?? NaN)).toBeLessThan(0.05);
+    },
+  );
+
+  it('change per hour compares with the reading a window ago, across uneven intervals but not across gaps', () => {
+    const rates = changePerHour(series([0, 20], [10, 20.5], [16, 22], [25, 23], [120, 30]), 15 * minute);
+    // By hand: 2 °C in 16 min; 2.5 °C in 15 min; nothing within half an hour before minute 120.
+    expect(rowsOf(rates)).toEqual([
+      [16, 7.5, 'pass'],
+      [25, 10, 'pass'],
+    ]);
+  });
+
+  it('failures are 1 where a reading failed', () => {
+    expect(rowsOf(failures(series([0, 5, 'fail'], [1, 5, 'suspect'], [2, 5])))).toEqual([
+      [0, 1, 'pass'],
+      [1, 0, 'pass'],
+      [2, 0, 'pass'],
+    ]);
+  });
+
+  it('a day that readings hardly cover is suspect', () => {
+    const days = [
+      { endAt: 24 * hour, value: 14, coverage: 0.9 },
+      { endAt: 47 * hour, value: 3, coverage: 0.4 },
+    ];
+    expect(lightDays(days, 0.8)).toMatchObject({ values: [14, 3], qualities: ['pass', 'suspect'] });
+  });
+});
+
+describe('hours of wet leaves', () => {
+  const every30 = (values: readonly number[]) => series(...values.map((value, i): Row => [i * 30, value]));
+  const wetAt20 = (humidity: readonly number[]) =>
+    wetHours(every30(humidity), every30(humidity.map(() => 20)), botrytisWindow).values;
+
+  it('add up through a short dry break and start again after two dry hours', () => {
+    expect(wetAt20([95, 95, 95, 80, 80, 95, 95])).toEqual([0, 0.5, 1, 1.5, 1.5, 1.5, 2]);
+    expect(wetAt20([95, 95, 80, 80, 80, 80, 80, 95, 95])).toEqual([0, 0.5, 1, 1, 1, 1, 0, 0, 0.5]);
+  });
+
+  it('never exceed the window', () => {
+    expect(Math.max(...Array.from(wetAt20(Array.from({ length: 120 }, () => 95))))).toBe(24);
+  });
+
+  it('count only at temperatures at which Botrytis infects, 12.8 to 23.9 °C', () => {
+    const humidity = every30([95, 95, 95]);
+    expect(wetHours(humidity, every30([12, 14, 14]), botrytisWindow).values).toEqual([0, 0, 0.5]);
+    expect(wetHours(humidity, every30([24, 12, 14]), { ...botrytisWindow, betweenC: null }).values).toEqual([
+      0, 0.5, 1,
+    ]);
+  });
+
+  it('do not grow across a gap', () => {
+    expect(wetHours(series([0, 95], [31, 95]), series([0, 20], [31, 20]), botrytisWindow).values).toEqual([
+      0, 0,
+    ]);
+  });
+});
+
+describe('look-back', () => {
+  const small = { wetFromPct: 90, betweenC: null, dryAfterMs: 4, windowMs: 12, maxGapMs: 3 } as const;
+  const columns = fc
+    .array(
+      fc.record({
+        step: fc.integer({ min: 1, max: 4 }),
+        value: fc.constantFrom(80, 90, 95),
+        quality: fc.constantFrom<Quality>('pass', 'pass', 'suspect', 'fail'),
+      }),
+      { maxLength: 60 },
+    )
+    .map((steps): ObservationColumns => {
+      let at = 0;
+      return {
+        times: steps.map(({ step }) => (at += step)),
+        values: steps.map(({ value }) => value),
+        qualities: steps.map(({ quality }) => quality),
+      };
+    });
+  const from = (start: number, { times, values, qualities }: ObservationColumns): ObservationColumns => {
+    const kept = Array.from(times, (at, i) => ({ at, i })).filter(({ at }) => at >= start);
+    return {
+      times: kept.map(({ at }) => at),
+      values: kept.map(({ i }) => values[i] ?? NaN),
+      qualities: kept.map(({ i }) => qualities[i] ?? 'fail'),
+    };
+  };
+
+  it.each([
+    ['joinAsOf', 3, (a: ObservationColumns) => disagreement(a, a, 3)],
+    ['changePerHour', 10, (a: ObservationColumns) => changePerHour(a, 5)],
+    ['wetHours', 15, (a: ObservationColumns) => wetHours(a, a, small)],
+  ])('of %s suffices: from there on the series is that of all readings', (_, lookBackMs, derive) => {
+    fc.assert(
+      fc.property(columns, fc.nat(150), (readings, start) => {
+        expect(from(start, derive(from(start - lookBackMs, readings)))).toEqual(
+          from(start, derive(readings)),
+        );
+      }),
+    );
+  });
+});
