@@ -27,6 +27,8 @@ export class RoutineEntity {
   @Column('text') rule!: string;
   /** First day, in the room's calendar. */
   @Column('date', { name: 'starts_on' }) startsOn!: string;
+  /** Tasks exist for every due day before this one; null when none were planned yet. */
+  @Column('date', { name: 'planned_to', nullable: true }) plannedTo!: string | null;
   @Column('uuid', { name: 'person_id', nullable: true }) personId!: string | null;
   @Column('timestamptz', { name: 'ended_at', nullable: true }) endedAt!: Date | null;
   @CreateDateColumn({ type: 'timestamptz', name: 'created_at' }) createdAt!: Date;

@@ -1,19 +1,10 @@
-import {
-  Column,
-  Entity,
-  Index,
-  JoinColumn,
-  ManyToOne,
-  PrimaryGeneratedColumn,
-  Unique,
-  type Relation,
-} from 'typeorm';
+import { Column, Entity, Index, JoinColumn, ManyToOne, PrimaryGeneratedColumn, type Relation } from 'typeorm';
 import { RackEntity } from './rack-entity';
 import { RoomEntity } from './room-entity';
 
 /** A tier of a rack: where plants, lamps, heat mats and sensors are. Its room is kept with it, so that a room's shelves need no join. */
 @Entity('shelf')
-@Unique('shelf_room_label_key', ['roomId', 'label'])
+@Index('shelf_room_label_key', ['roomId', 'label'], { unique: true, where: 'retired_at IS NULL' })
 @Index('shelf_rack_idx', ['rackId'])
 export class ShelfEntity {
   @PrimaryGeneratedColumn('uuid', { primaryKeyConstraintName: 'shelf_pkey' }) id!: string;

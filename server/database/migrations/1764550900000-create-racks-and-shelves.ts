@@ -26,11 +26,14 @@ export class CreateRacksAndShelves1764550900000 implements MigrationInterface {
         leaf_offset_c double precision NOT NULL DEFAULT 0,
         retired_at timestamptz,
         CONSTRAINT shelf_pkey PRIMARY KEY (id),
-        CONSTRAINT shelf_room_label_key UNIQUE (room_id, label),
         CONSTRAINT shelf_room_fk FOREIGN KEY (room_id) REFERENCES room(id) ON DELETE CASCADE,
         CONSTRAINT shelf_rack_fk FOREIGN KEY (rack_id) REFERENCES rack(id) ON DELETE CASCADE
       )`);
     await runner.query(`CREATE INDEX shelf_rack_idx ON shelf (rack_id)`);
+    // A retired shelf gives its label free.
+    await runner.query(
+      `CREATE UNIQUE INDEX shelf_room_label_key ON shelf (room_id, label) WHERE retired_at IS NULL`,
+    );
     await runner.query(`
       CREATE TABLE lamp (
         id uuid NOT NULL DEFAULT gen_random_uuid(),

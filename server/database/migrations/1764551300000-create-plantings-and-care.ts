@@ -33,6 +33,7 @@ export class CreatePlantingsAndCare1764551300000 implements MigrationInterface {
         detail text NOT NULL DEFAULT '',
         rule text NOT NULL,
         starts_on date NOT NULL,
+        planned_to date,
         person_id uuid,
         ended_at timestamptz,
         created_at timestamptz NOT NULL DEFAULT now(),

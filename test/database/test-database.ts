@@ -1,0 +1,121 @@
+import { createHash, randomBytes } from 'node:crypto';
+import { readFileSync, readdirSync } from 'node:fs';
+import { join } from 'node:path';
+import { Client } from 'pg';
+import type { DataSource } from 'typeorm';
+import { createDataSource } from '../../server/database/data-source';
+import { migrate } from '../../server/database/migrate';
+import { Transactions } from '../../server/database/transactions';
+
+/** Any fixed number will do; every test process must use the same. */
+const TEMPLATE_LOCK = 7_431_906;
+const migrationFolder = join(__dirname, '../../server/database/migrations');
+const templatePrefix = 'lampmeadow_template_';
+
+/** A database of one spec file. */
+export interface TestDatabase {
+  readonly url: string;
+  readonly dataSource: DataSource;
+  readonly transactions: Transactions;
+  /** Disconnects and removes the database. */
+  drop(): Promise<void>;
+}
+
+/**
+ * Makes a migrated database by cloning a template, which is far quicker than migrating one.
+ *
+ * @returns The database, connected.
+ * @throws Error without `TEST_DATABASE_URL`, the database to make others from; `npm test` sets it.
+ */
+export async function createTestDatabase(): Promise<TestDatabase> {
+  const template = templatePrefix + migrationHash();
+  const name = `lampmeadow_test_${randomBytes(6).toString('hex')}`;
+  await withTemplateLock(async (maintenance) => {
+    await ensureTemplate(maintenance, template);
+    await maintenance.query(`CREATE DATABASE ${name} TEMPLATE ${template}`);
+  });
+  return connected(name);
+}
+
+/**
+ * Makes a database without tables.
+ *
+ * @returns The database, connected.
+ * @throws Error without `TEST_DATABASE_URL`.
+ */
+export async function createEmptyDatabase(): Promise<TestDatabase> {
+  const name = `lampmeadow_test_${randomBytes(6).toString('hex')}`;
+  await withMaintenance((maintenance) => maintenance.query(`CREATE DATABASE ${name} TEMPLATE template0`));
+  return connected(name);
+}
+
+async function connected(name: string): Promise<TestDatabase> {
+  const url = urlOf(name);
+  const dataSource = await createDataSource(url, 6).initialize();
+  return {
+    url,
+    dataSource,
+    transactions: new Transactions(dataSource),
+    drop: async () => {
+      await dataSource.destroy();
+      await withMaintenance((maintenance) => maintenance.query(`DROP DATABASE ${name} WITH (FORCE)`));
+    },
+  };
+}
+
+async function ensureTemplate(maintenance: Client, template: string): Promise<void> {
+  const { rows } = await maintenance.query<{ datname: string }>(
+    `SELECT datname FROM pg_database WHERE starts_with(datname, $1)`,
+    [templatePrefix],
+  );
+  if (rows.some(({ datname }) => datname === template)) return;
+  for (const { datname } of rows) await maintenance.query(`DROP DATABASE ${datname} WITH (FORCE)`);
+  // Renamed only once it is whole, so that a run cut off half-way leaves no template behind.
+  const unfinished = `${templatePrefix}unfinished`;
+  await maintenance.query(`CREATE DATABASE ${unfinished} TEMPLATE template0`);
+  const dataSource = await createDataSource(urlOf(unfinished), 2).initialize();
+  try {
+    await migrate(dataSource);
+  } finally {
+    await dataSource.destroy();
+  }
+  await maintenance.query(`ALTER DATABASE ${unfinished} RENAME TO ${template}`);
+}
+
+function migrationHash(): string {
+  const hash = createHash('sha256');
+  for (const file of readdirSync(migrationFolder).sort())
+    hash.update(readFileSync(join(migrationFolder, file)));
+  return hash.digest('hex').slice(0, 16);
+}
+
+/** One process at a time: a template can't be cloned while another one is connected to it. */
+function withTemplateLock(work: (maintenance: Client) => Promise<void>): Promise<void> {
+  return withMaintenance(async (maintenance) => {
+    await maintenance.query('SELECT pg_advisory_lock($1)', [TEMPLATE_LOCK]);
+    await work(maintenance); // The lock goes with the connection.
+  });
+}
+
+async function withMaintenance<T>(work: (maintenance: Client) => Promise<T>): Promise<T> {
+  const maintenance = new Client({ connectionString: maintenanceUrl() });
+  await maintenance.connect();
+  try {
+    return await work(maintenance);
+  } finally {
+    await maintenance.end();
+  }
+}
+
+function maintenanceUrl(): string {
+  const url = process.env['TEST_DATABASE_URL'];
+  if (url === undefined)
+    throw new Error('Set TEST_DATABASE_URL to a database to make others from, or use npm test');
+  return url;
+}
+
+function urlOf(database: string): string {
+  const url = new URL(maintenanceUrl());
+  url.pathname = `/${database}`;
+  return url.toString();
+}
