@@ -1,0 +1,36 @@
+import {
+  describeEpisode,
+  type EpisodeDescription,
+  type EpisodeFormatters,
+} from '@shared/alerts/describe-episode';
+import type { Alert } from '@shared/contracts/alerts';
+
+/**
+ * An alert in words.
+ *
+ * @param alert - As the server sent it.
+ * @param formatters - How its numbers and instants are written for this reader.
+ * @param now - The present [ms since 1970 UTC].
+ */
+export function describeAlert(alert: Alert, formatters: EpisodeFormatters, now: number): EpisodeDescription {
+  const clearedAt = alert.clearedAt === null ? null : Date.parse(alert.clearedAt);
+  return describeEpisode({
+    episode: {
+      beganAt: Date.parse(alert.beganAt),
+      openedAt: Date.parse(alert.openedAt),
+      peakAt: Date.parse(alert.peakAt),
+      // An alert about something that isn't a value has none, and its words use none.
+      peakValue: alert.peakValue ?? 0,
+      peakExcess: alert.peakExcess ?? 0,
+      limit: alert.peakLimit ?? 0,
+      endedAt: clearedAt,
+      clearedAt,
+      urgency: alert.urgency,
+    },
+    kind: alert.kind,
+    quantity: alert.quantity,
+    shelfLabel: alert.shelfLabel,
+    formatters,
+    now,
+  });
+}
