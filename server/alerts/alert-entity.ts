@@ -33,10 +33,11 @@ export class AlertEntity {
   @Column('timestamptz', { name: 'began_at' }) beganAt!: Date;
   @Column('timestamptz', { name: 'opened_at' }) openedAt!: Date;
   @Column('timestamptz', { name: 'peak_at' }) peakAt!: Date;
-  @Column('double precision', { name: 'peak_value', nullable: true }) peakValue!: number | null;
-  @Column('double precision', { name: 'peak_excess', nullable: true }) peakExcess!: number | null;
+  @Column('double precision', { name: 'peak_value' }) peakValue!: number;
+  @Column('double precision', { name: 'peak_excess' }) peakExcess!: number;
   /** The limit that was passed at the peak, in the stored unit. */
-  @Column('double precision', { name: 'peak_limit', nullable: true }) peakLimit!: number | null;
+  @Column('double precision', { name: 'peak_limit' }) peakLimit!: number;
+  @Column('timestamptz', { name: 'ended_at', nullable: true }) endedAt!: Date | null;
   @Column('timestamptz', { name: 'cleared_at', nullable: true }) clearedAt!: Date | null;
   /** Found by looking back (a logger file, a late batch); never mailed. */
   @Column('boolean', { name: 'found_later', default: false }) foundLater!: boolean;

@@ -9,7 +9,10 @@ import { SensorEntity } from '../devices/sensor-entity';
  * their transaction, so a restart loses nothing.
  */
 @Entity('alert_watch')
-@Index('alert_watch_sensor_key', ['sensorId', 'kind'], { unique: true, where: 'sensor_id IS NOT NULL' })
+@Index('alert_watch_sensor_key', ['sensorId', 'quantity', 'kind'], {
+  unique: true,
+  where: 'sensor_id IS NOT NULL',
+})
 @Index('alert_watch_shelf_key', ['shelfId', 'quantity', 'kind'], {
   unique: true,
   where: 'sensor_id IS NULL',

@@ -9,6 +9,10 @@ export class SensorStateEntity {
   @Column('timestamptz', { name: 'latest_at' }) latestAt!: Date;
   @Column('double precision', { name: 'latest_value' }) latestValue!: number;
   @Column('smallint', { name: 'latest_flags' }) latestFlags!: number;
+  /** Counts the transactions that changed this sensor's readings: tells a process whether what it remembers still holds. */
+  @Column('integer') revision!: number;
+  /** Humidity sensors: the last reading with its computed quantities in the sums; a later one may still find a nearer temperature. */
+  @Column('timestamptz', { name: 'computed_to', nullable: true }) computedTo!: Date | null;
 
   @OneToOne(() => SensorEntity, { onDelete: 'CASCADE' })
   @JoinColumn({ name: 'sensor_id', foreignKeyConstraintName: 'sensor_state_sensor_fk' })

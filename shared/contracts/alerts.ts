@@ -35,9 +35,12 @@ export const alert = z.object({
   beganAt: instant,
   openedAt: instant,
   peakAt: instant,
-  peakValue: z.number().nullable(),
-  peakExcess: z.number().nullable(),
-  peakLimit: z.number().nullable(),
+  peakValue: z.number(),
+  peakExcess: z.number(),
+  /** The limit that applied at the peak. */
+  peakLimit: z.number(),
+  /** The first reading that showed it to be over. */
+  endedAt: instant.nullable(),
   clearedAt: instant.nullable(),
   foundLater: z.boolean(),
   /** When the mail about it went into the outbox, null if nobody was written to. */

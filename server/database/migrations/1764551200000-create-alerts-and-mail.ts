@@ -19,7 +19,7 @@ export class CreateAlertsAndMail1764551200000 implements MigrationInterface {
       `CREATE UNIQUE INDEX alert_watch_shelf_key ON alert_watch (shelf_id, quantity, kind) WHERE sensor_id IS NULL`,
     );
     await runner.query(
-      `CREATE UNIQUE INDEX alert_watch_sensor_key ON alert_watch (sensor_id, kind) WHERE sensor_id IS NOT NULL`,
+      `CREATE UNIQUE INDEX alert_watch_sensor_key ON alert_watch (sensor_id, quantity, kind) WHERE sensor_id IS NOT NULL`,
     );
     await runner.query(`
       CREATE TABLE alert (
@@ -34,9 +34,10 @@ export class CreateAlertsAndMail1764551200000 implements MigrationInterface {
         began_at timestamptz NOT NULL,
         opened_at timestamptz NOT NULL,
         peak_at timestamptz NOT NULL,
-        peak_value double precision,
-        peak_excess double precision,
-        peak_limit double precision,
+        peak_value double precision NOT NULL,
+        peak_excess double precision NOT NULL,
+        peak_limit double precision NOT NULL,
+        ended_at timestamptz,
         cleared_at timestamptz,
         found_later boolean NOT NULL DEFAULT false,
         told_at timestamptz,

@@ -1,0 +1,44 @@
+import type { AlertRule } from '@shared/alerts/alert-rule';
+import { patienceDefaults, rangeRules, standingRules } from '@shared/alerts/alert-defaults';
+import type { Quantity } from '@shared/climate/quantity';
+import type { WantedRange } from '@shared/contracts/rooms';
+import { maxGapMs, silentAfterMs } from '@shared/series/expected-interval';
+import type { SensorOnRoad } from '../readings/reading-store';
+
+/**
+ * The rules that watch one series of a sensor.
+ *
+ * @param sensor - The sensor, on a shelf.
+ * @param quantity - Its own quantity, or a computed one for a humidity sensor.
+ * @param wanted - The shelf's wanted range of the quantity, if it has one.
+ * @returns The rules; a humidity sensor's computed quantities have no rule about silence, since the sensor has it.
+ */
+export function rulesFor(
+  sensor: SensorOnRoad,
+  quantity: Quantity,
+  wanted: WantedRange | undefined,
+): AlertRule[] {
+  const gap = { maxGapMs: Math.max(patienceDefaults[quantity].maxGapMs, maxGapMs(sensor.expectedIntervalS)) };
+  const rules: AlertRule[] = [];
+  if (wanted !== undefined) {
+    const { above, below } = rangeRules(quantity, wanted, {
+      holdMs: wanted.holdMinutes * 60_000,
+      clearMargin: wanted.clearingMargin,
+      ...gap,
+    });
+    rules.push(above, below);
+  }
+  if (quantity === 'airTemperature') {
+    rules.push({ ...standingRules.dangerLow, ...gap }, { ...standingRules.dangerHigh, ...gap });
+  }
+  if ((quantity === 'ppfd' || quantity === 'illuminance') && sensor.luxPerUmol !== null) {
+    const unit = quantity === 'ppfd' ? 1 : sensor.luxPerUmol;
+    for (const rule of [standingRules.lampDark, standingRules.lampLit]) {
+      rules.push({ ...rule, limit: rule.limit * unit, ...gap });
+    }
+  }
+  if (quantity === sensor.quantity) {
+    rules.push({ ...standingRules.sensorSilent, silentAfterMs: silentAfterMs(sensor.expectedIntervalS) });
+  }
+  return rules;
+}

@@ -1,0 +1,307 @@
+import type { AlertKind } from '@shared/alerts/alert-rule';
+import { idleState, type AlertState } from '@shared/alerts/alert-state';
+import type { Episode } from '@shared/alerts/episode';
+import type { Quantity } from '@shared/climate/quantity';
+import type { Alert } from '@shared/contracts/alerts';
+import type { Tx } from '../database/transactions';
+import type { SensorOnRoad } from '../readings/reading-store';
+
+/** A rule's standing over one series. */
+export interface Watch {
+  readonly id: string;
+  readonly sensorId: string;
+  readonly quantity: Quantity;
+  readonly kind: AlertKind;
+  readonly state: AlertState;
+}
+
+/** Which watch an episode belongs to, for writing it. */
+export interface EpisodeOfWatch {
+  readonly watch: Watch;
+  readonly sensor: SensorOnRoad;
+  readonly episode: Episode;
+  readonly foundLater: boolean;
+}
+
+interface WatchRow {
+  id: string;
+  sensor_id: string;
+  quantity: Quantity;
+  kind: AlertKind;
+  state: AlertState;
+}
+
+interface AlertRow {
+  id: string;
+  shelf_id: string;
+  shelf_label: string;
+  sensor_id: string | null;
+  quantity: Quantity;
+  kind: AlertKind;
+  urgency: Episode['urgency'];
+  began_at: Date;
+  opened_at: Date;
+  peak_at: Date;
+  peak_value: number;
+  peak_excess: number;
+  peak_limit: number;
+  ended_at: Date | null;
+  cleared_at: Date | null;
+  found_later: boolean;
+  told_at: Date | null;
+  acknowledged_at: Date | null;
+  acknowledged_by_name: string | null;
+  acknowledge_note: string;
+}
+
+const alertColumns = `a.*, sh.label AS shelf_label, p.name AS acknowledged_by_name
+  FROM alert a JOIN shelf sh ON sh.id = a.shelf_id LEFT JOIN person p ON p.id = a.acknowledged_by`;
+
+/** Queries over watches and episodes. */
+export class AlertStore {
+  /** The watches of sensors, made where a rule has none yet. */
+  async watches(
+    tx: Tx,
+    wanted: readonly { sensor: SensorOnRoad; quantity: Quantity; kind: AlertKind }[],
+  ): Promise<Watch[]> {
+    const sensorIds = [...new Set(wanted.map(({ sensor }) => sensor.id))];
+    const read = async (): Promise<WatchRow[]> =>
+      tx.query(
+        'SELECT id, sensor_id, quantity, kind, state FROM alert_watch WHERE sensor_id = ANY($1) FOR UPDATE',
+        [sensorIds],
+      );
+    let rows = await read();
+    const held = new Set(rows.map(keyOf));
+    const missing = wanted.filter(
+      ({ sensor, quantity, kind }) => !held.has(keyOf({ sensor_id: sensor.id, quantity, kind })),
+    );
+    if (missing.length > 0) {
+      await tx.query(
+        `INSERT INTO alert_watch (shelf_id, sensor_id, quantity, kind, state)
+         SELECT *, $5::jsonb FROM unnest($1::uuid[], $2::uuid[], $3::text[], $4::text[])
+         ON CONFLICT DO NOTHING`,
+        [
+          missing.map(({ sensor }) => sensor.shelfId),
+          missing.map(({ sensor }) => sensor.id),
+          missing.map(({ quantity }) => quantity),
+          missing.map(({ kind }) => kind),
+          JSON.stringify(idleState),
+        ],
+      );
+      rows = await read();
+    }
+    return rows.map((row) => ({
+      id: row.id,
+      sensorId: row.sensor_id,
+      quantity: row.quantity,
+      kind: row.kind,
+      state: row.state,
+    }));
+  }
+
+  /** Keeps where the folds stand. */
+  async saveStates(tx: Tx, states: readonly { watchId: string; state: AlertState }[]): Promise<void> {
+    if (states.length === 0) return;
+    await tx.query(
+      `UPDATE alert_watch SET state = new.state
+       FROM unnest($1::uuid[], $2::jsonb[]) AS new (id, state) WHERE alert_watch.id = new.id`,
+      [states.map(({ watchId }) => watchId), states.map(({ state }) => JSON.stringify(state))],
+    );
+  }
+
+  /**
+   * Writes episodes over those that began at the same instant; who acknowledged and who was told stays.
+   *
+   * @returns Ids of the alerts.
+   */
+  async saveEpisodes(tx: Tx, episodes: readonly EpisodeOfWatch[]): Promise<string[]> {
+    if (episodes.length === 0) return [];
+    const instant = (pick: (episode: Episode) => number | null) =>
+      episodes.map(({ episode }) => {
+        const at = pick(episode);
+        return at === null ? null : new Date(at);
+      });
+    const rows: { id: string }[] = await tx.query(
+      `INSERT INTO alert AS held (watch_id, room_id, shelf_id, sensor_id, quantity, kind, urgency, began_at, opened_at,
+         peak_at, peak_value, peak_excess, peak_limit, ended_at, cleared_at, found_later)
+       SELECT * FROM unnest($1::uuid[], $2::uuid[], $3::uuid[], $4::uuid[], $5::text[], $6::text[], $7::text[],
+         $8::timestamptz[], $9::timestamptz[], $10::timestamptz[], $11::float8[], $12::float8[], $13::float8[],
+         $14::timestamptz[], $15::timestamptz[], $16::bool[])
+       ON CONFLICT (watch_id, began_at) DO UPDATE SET urgency = excluded.urgency, opened_at = excluded.opened_at,
+         peak_at = excluded.peak_at, peak_value = excluded.peak_value, peak_excess = excluded.peak_excess,
+         peak_limit = excluded.peak_limit, ended_at = excluded.ended_at, cleared_at = excluded.cleared_at,
+         found_later = held.found_later AND excluded.found_later
+       RETURNING id`,
+      [
+        episodes.map(({ watch }) => watch.id),
+        episodes.map(({ sensor }) => sensor.roomId),
+        episodes.map(({ sensor }) => sensor.shelfId),
+        episodes.map(({ sensor }) => sensor.id),
+        episodes.map(({ watch }) => watch.quantity),
+        episodes.map(({ watch }) => watch.kind),
+        episodes.map(({ episode }) => episode.urgency),
+        instant((episode) => episode.beganAt),
+        instant((episode) => episode.openedAt),
+        instant((episode) => episode.peakAt),
+        episodes.map(({ episode }) => episode.peakValue),
+        episodes.map(({ episode }) => episode.peakExcess),
+        episodes.map(({ episode }) => episode.limit),
+        instant((episode) => episode.endedAt),
+        instant((episode) => episode.clearedAt),
+        episodes.map(({ foundLater }) => foundLater),
+      ],
+    );
+    return rows.map((row) => row.id);
+  }
+
+  /** Removes episodes of a watch that began in a span and turned out not to be. */
+  async removeEpisodes(tx: Tx, watchId: string, from: number, except: readonly number[]): Promise<void> {
+    await tx.query('DELETE FROM alert WHERE watch_id = $1 AND began_at >= $2 AND NOT (began_at = ANY($3))', [
+      watchId,
+      new Date(from),
+      except.map((at) => new Date(at)),
+    ]);
+  }
+
+  /** Removes the episodes of a watch that began at these instants. */
+  async removeBegunAt(tx: Tx, watchId: string, ats: readonly number[]): Promise<void> {
+    if (ats.length === 0) return;
+    await tx.query('DELETE FROM alert WHERE watch_id = $1 AND began_at = ANY($2)', [
+      watchId,
+      ats.map((at) => new Date(at)),
+    ]);
+  }
+
+  /** Episodes of a watch that began before an instant, the last one only, and all from then on. */
+  async episodesAround(tx: Tx, watchId: string, at: number): Promise<Episode[]> {
+    const rows: AlertRow[] = await tx.query(
+      `(SELECT * FROM alert WHERE watch_id = $1 AND began_at < $2 ORDER BY began_at DESC LIMIT 1)
+       UNION ALL
+       (SELECT * FROM alert WHERE watch_id = $1 AND began_at >= $2)
+       ORDER BY began_at`,
+      [watchId, new Date(at)],
+    );
+    return rows.map((row) => ({
+      beganAt: row.began_at.getTime(),
+      openedAt: row.opened_at.getTime(),
+      peakAt: row.peak_at.getTime(),
+      peakValue: row.peak_value,
+      peakExcess: row.peak_excess,
+      limit: row.peak_limit,
+      endedAt: row.ended_at?.getTime() ?? null,
+      clearedAt: row.cleared_at?.getTime() ?? null,
+      urgency: row.urgency,
+    }));
+  }
+
+  /** Open alerts of watches that nobody has been told of. */
+  async untold(tx: Tx, watchIds: readonly string[]): Promise<string[]> {
+    if (watchIds.length === 0) return [];
+    const rows: { id: string }[] = await tx.query(
+      'SELECT id FROM alert WHERE watch_id = ANY($1) AND cleared_at IS NULL AND told_at IS NULL',
+      [watchIds],
+    );
+    return rows.map((row) => row.id);
+  }
+
+  /** Notes that alerts have gone into the outbox; they are live ones, whatever found them first. */
+  async markTold(tx: Tx, alertIds: readonly string[], at: number): Promise<void> {
+    await tx.query('UPDATE alert SET told_at = $2, found_later = false WHERE id = ANY($1)', [
+      alertIds,
+      new Date(at),
+    ]);
+  }
+
+  /** Alerts as people see them. */
+  async byIds(tx: Tx, alertIds: readonly string[]): Promise<(Alert & { roomId: string })[]> {
+    if (alertIds.length === 0) return [];
+    const rows: (AlertRow & { room_id: string })[] = await tx.query(
+      `SELECT ${alertColumns} WHERE a.id = ANY($1) ORDER BY a.opened_at`,
+      [alertIds],
+    );
+    return rows.map((row) => ({ ...alertOf(row), roomId: row.room_id }));
+  }
+
+  /** A page of a room's alerts, newest first. */
+  async page(
+    tx: Tx,
+    roomId: string,
+    filter: {
+      isOpen: boolean | null;
+      shelfId: string | null;
+      before: { openedAt: Date; id: string } | null;
+      limit: number;
+    },
+  ): Promise<Alert[]> {
+    const rows: AlertRow[] = await tx.query(
+      `SELECT ${alertColumns}
+       WHERE a.room_id = $1
+         AND ($2::bool IS NULL OR (a.cleared_at IS NULL) = $2)
+         AND ($3::uuid IS NULL OR a.shelf_id = $3)
+         AND ($4::timestamptz IS NULL OR (a.opened_at, a.id) < ($4, $5::uuid))
+       ORDER BY a.opened_at DESC, a.id DESC LIMIT $6`,
+      [
+        roomId,
+        filter.isOpen,
+        filter.shelfId,
+        filter.before?.openedAt ?? null,
+        filter.before?.id ?? null,
+        filter.limit,
+      ],
+    );
+    return rows.map(alertOf);
+  }
+
+  /**
+   * Notes who has seen an alert; the first one stays.
+   *
+   * @returns Whether the room has such an alert.
+   */
+  async acknowledge(
+    tx: Tx,
+    roomId: string,
+    alertId: string,
+    personId: string,
+    note: string,
+  ): Promise<boolean> {
+    const rows: { id: string }[] = await tx.query(
+      `WITH held AS (SELECT id FROM alert WHERE id = $1 AND room_id = $2 FOR UPDATE),
+       noted AS (
+         UPDATE alert SET acknowledged_at = now(), acknowledged_by = $3, acknowledge_note = $4
+         FROM held WHERE alert.id = held.id AND acknowledged_at IS NULL RETURNING alert.id
+       )
+       SELECT id FROM held`,
+      [alertId, roomId, personId, note],
+    );
+    return rows.length > 0;
+  }
+}
+
+function keyOf({ sensor_id: sensorId, quantity, kind }: Omit<WatchRow, 'id' | 'state'>): string {
+  return `${sensorId} ${quantity} ${kind}`;
+}
+
+function alertOf(row: AlertRow): Alert {
+  return {
+    id: row.id,
+    shelfId: row.shelf_id,
+    shelfLabel: row.shelf_label,
+    sensorId: row.sensor_id,
+    quantity: row.quantity,
+    kind: row.kind,
+    urgency: row.urgency,
+    beganAt: row.began_at.toISOString(),
+    openedAt: row.opened_at.toISOString(),
+    peakAt: row.peak_at.toISOString(),
+    peakValue: row.peak_value,
+    peakExcess: row.peak_excess,
+    peakLimit: row.peak_limit,
+    endedAt: row.ended_at?.toISOString() ?? null,
+    clearedAt: row.cleared_at?.toISOString() ?? null,
+    foundLater: row.found_later,
+    toldAt: row.told_at?.toISOString() ?? null,
+    acknowledgedAt: row.acknowledged_at?.toISOString() ?? null,
+    acknowledgedByName: row.acknowledged_by_name,
+    acknowledgeNote: row.acknowledge_note,
+  };
+}
