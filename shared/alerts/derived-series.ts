@@ -1,4 +1,4 @@
-import { dewPointC } from '../climate/psychrometrics';
+import { airFromReadings, dewPointC } from '../climate/psychrometrics';
 import type { ObservationColumns, Quality } from './alert-state';
 
 const msPerHour = 3_600_000;
@@ -94,7 +94,7 @@ export function unaskedWarmth(
  * @param air - Air temperature [°C] and relative humidity [%].
  * @param surface - Temperature of the surface [°C].
  * @param withinMs - Longest age of a reading [ms]; see {@link joinAsOf}.
- * @returns The difference [°C], positive where water condenses; no value in air without vapour.
+ * @returns The difference [°C], positive where water condenses; no value where the readings say nothing about air.
  */
 export function dewPointSurplus(
   air: { readonly temperature: ObservationColumns; readonly humidity: ObservationColumns },
@@ -105,7 +105,8 @@ export function dewPointSurplus(
     [air.temperature, air.humidity, surface],
     withinMs,
     ([temperatureC = NaN, relativeHumidityPct = NaN, surfaceC = NaN]) => {
-      const dewPoint = dewPointC({ temperatureC, relativeHumidityPct });
+      const air = airFromReadings(temperatureC, relativeHumidityPct);
+      const dewPoint = air && dewPointC(air);
       return dewPoint === null ? null : dewPoint - surfaceC;
     },
   );
