@@ -22,8 +22,13 @@ describe('an alert in words', () => {
     expect(words.sentence).toContain('from 13:54 to 14:18');
   });
 
-  it('about silence needs no value', () => {
-    const silent = alert({ kind: 'sensorSilent', peakValue: null, peakExcess: null, peakLimit: 180_000 });
+  it('about silence counts in milliseconds', () => {
+    const silent = alert({
+      kind: 'sensorSilent',
+      peakValue: 1_560_000,
+      peakExcess: 1_380_000,
+      peakLimit: 180_000,
+    });
     expect(describeAlert(silent, formatters, now).sentence).toBe(
       'No reading since 13:54: 26 min, expected every 3 min at least.',
     );

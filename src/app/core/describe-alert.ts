@@ -19,10 +19,9 @@ export function describeAlert(alert: Alert, formatters: EpisodeFormatters, now: 
       beganAt: Date.parse(alert.beganAt),
       openedAt: Date.parse(alert.openedAt),
       peakAt: Date.parse(alert.peakAt),
-      // An alert about something that isn't a value has none, and its words use none.
-      peakValue: alert.peakValue ?? 0,
-      peakExcess: alert.peakExcess ?? 0,
-      limit: alert.peakLimit ?? 0,
+      peakValue: alert.peakValue,
+      peakExcess: alert.peakExcess,
+      limit: alert.peakLimit,
       endedAt: clearedAt,
       clearedAt,
       urgency: alert.urgency,

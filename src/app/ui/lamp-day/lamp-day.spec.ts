@@ -41,6 +41,12 @@ describe('a lamp day', () => {
     expect(words(await lampDay({ planned: [], measured: [] }))).toBe('no lamp hours');
   });
 
+  it('without a light sensor says only what is planned', async () => {
+    const host = await lampDay({ planned: [[360, 1320]], measured: null });
+    expect(words(host)).toBe('16 h planned');
+    expect(bars(host, 'measured')).toEqual([]);
+  });
+
   it('draws no tick on a day that is not today, but one at midnight', async () => {
     expect(bars(await lampDay({ planned: [], measured: [] }), 'now')).toEqual([]);
     expect(bars(await lampDay({ planned: [], measured: [], nowMinutes: 0 }), 'now')).toEqual(['0%']);

@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
-import { formatNumber } from '../format/numbers';
+import { formatNumber } from '@shared/format/numbers';
 
 /** Part of a day: minutes since the room's midnight, from (included) to (left out). */
 export type DayMinutes = readonly [from: number, to: number];
@@ -16,14 +16,15 @@ export type DayMinutes = readonly [from: number, to: number];
 })
 export class LampDay {
   readonly planned = input.required<readonly DayMinutes[]>();
-  readonly measured = input.required<readonly DayMinutes[]>();
+  /** Hours in which light was measured; null without a light sensor. */
+  readonly measured = input.required<readonly DayMinutes[] | null>();
   /** Minutes since midnight; null on a day that is not today. */
   readonly nowMinutes = input<number | null>(null);
   /** Length of this day: 1440, or 1380 or 1500 when the clocks change. */
   readonly dayMinutes = input(1440);
 
   protected readonly plannedBars = computed(() => this.planned().map((part) => this.bar(part)));
-  protected readonly measuredBars = computed(() => this.measured().map((part) => this.bar(part)));
+  protected readonly measuredBars = computed(() => (this.measured() ?? []).map((part) => this.bar(part)));
   protected readonly now = computed(() => {
     const now = this.nowMinutes();
     return now === null ? null : this.percent(now);
@@ -31,7 +32,10 @@ export class LampDay {
 
   /** "8.3 of 16 h", as seen. */
   protected readonly words = computed(() => {
-    const [measured, planned] = [minutesIn(this.measured()), minutesIn(this.planned())];
+    const planned = minutesIn(this.planned());
+    const parts = this.measured();
+    if (parts === null) return planned === 0 ? 'no lamp hours' : `${hours(planned)} h planned`;
+    const measured = minutesIn(parts);
     if (planned === 0) return measured === 0 ? 'no lamp hours' : `${hours(measured)} h, none planned`;
     return `${hours(measured)} of ${hours(planned)} h`;
   });

@@ -1,6 +1,6 @@
 import type { Quantity } from '@shared/climate/quantity';
-import { shownValue } from '../format/quantities';
-import type { TemperatureUnit } from '../format/numbers';
+import { shownValue } from '@shared/format/quantities';
+import type { TemperatureUnit } from '@shared/format/numbers';
 import type { WantedRange } from '../standing';
 import type { MeasureScale } from './measure-strip';
 

@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
-import { formatNumber, formatValue } from '../format/numbers';
+import { formatNumber, formatValue } from '@shared/format/numbers';
 import { standing, type Standing, type WantedRange } from '../standing';
 
 /** The values between which a quantity sensibly lies, for drawing. */

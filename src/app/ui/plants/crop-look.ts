@@ -1,38 +1,58 @@
+import type { PlantHabit, PlantingStage } from '@shared/growing/planting-stage';
 import type { PlantFamily, PlantForm } from './plant-forms';
 
-/** How a grown plant stands. */
-export type PlantHabit = 'blades' | 'leafy' | 'bush' | 'tree';
-
-/** A crop's colours and habit. */
-export interface CropLook {
-  readonly family: PlantFamily;
+/** What a drawing needs to know of a planting. */
+export interface DrawnPlanting {
+  readonly crop: string;
   readonly habit: PlantHabit;
+  readonly stage: PlantingStage;
+}
+
+/** How a planting is drawn. */
+export interface PlantLook {
+  readonly form: PlantForm;
+  readonly family: PlantFamily;
 }
 
 // Words in a crop's name, the more special before the more general.
-const looks: readonly (readonly [words: RegExp, look: CropLook])[] = [
-  [/leek/, { family: 'leek', habit: 'blades' }],
-  [/onion|shallot|chive|garlic|lemongrass|grass/, { family: 'onion', habit: 'blades' }],
-  [/tomato|aubergine|cucumber/, { family: 'tomato', habit: 'leafy' }],
-  [/pepper|chilli/, { family: 'pepper', habit: 'leafy' }],
-  [/strawberr/, { family: 'strawberry', habit: 'bush' }],
-  [/citrus|lemon|lime|orange|calamondin|kumquat|fig|olive/, { family: 'citrus', habit: 'tree' }],
-  [/lettuce|rocket|spinach|chard|pak choi|cress|mustard|microgreen/, { family: 'lettuce', habit: 'bush' }],
-  [/basil|mint|lemon balm|oregano/, { family: 'herb', habit: 'leafy' }],
+const familyByWord: readonly (readonly [words: RegExp, family: PlantFamily])[] = [
+  [/leek/, 'leek'],
+  [/onion|shallot|chive|garlic/, 'onion'],
+  [/tomato|aubergine/, 'tomato'],
+  [/pepper|chilli/, 'pepper'],
+  [/strawberr/, 'strawberry'],
+  [/lettuce|rocket|spinach|cress|mustard/, 'lettuce'],
 ];
 
-/** How a crop is drawn, by its name; a crop that is not known looks like a herb. */
-export function cropLook(crop: string): CropLook {
+const familyByHabit: Readonly<Record<PlantHabit, PlantFamily>> = {
+  blades: 'onion',
+  rosette: 'lettuce',
+  leafy: 'herb',
+  bush: 'herb',
+  fruiting: 'tomato',
+  berry: 'strawberry',
+  tree: 'citrus',
+};
+
+// Grown, but not in fruit.
+const grownForm: Readonly<Record<PlantHabit, PlantForm>> = {
+  blades: 'blades',
+  rosette: 'rosette',
+  leafy: 'leafy',
+  bush: 'bush',
+  fruiting: 'leafy',
+  berry: 'rosette',
+  tree: 'tree',
+};
+
+/** How a planting is drawn: its form after habit and stage, its colours after the crop, else after the habit. */
+export function plantLook({ crop, habit, stage }: DrawnPlanting): PlantLook {
   const name = crop.toLowerCase();
-  return looks.find(([words]) => words.test(name))?.[1] ?? { family: 'herb', habit: 'bush' };
+  const family = familyByWord.find(([words]) => words.test(name))?.[1] ?? familyByHabit[habit];
+  return { form: plantForm(habit, stage), family };
 }
 
-/** The stages of a planting that change its looks. */
-export type DrawnStage =
-  'sown' | 'emerging' | 'seedling' | 'growingOn' | 'fruiting' | 'resting' | 'hardeningOff' | 'out' | 'ended';
-
-/** The form in which a planting of this habit and stage is drawn. */
-export function plantForm(habit: PlantHabit, stage: DrawnStage): PlantForm {
+function plantForm(habit: PlantHabit, stage: PlantingStage): PlantForm {
   switch (stage) {
     case 'sown':
       return 'sown';
@@ -42,9 +62,9 @@ export function plantForm(habit: PlantHabit, stage: DrawnStage): PlantForm {
       return habit === 'blades' ? 'blades' : 'twoLeaves';
     case 'growingOn':
     case 'hardeningOff':
-      return habit;
+      return grownForm[habit];
     case 'fruiting':
-      return habit === 'tree' ? 'tree' : 'fruiting';
+      return habit === 'fruiting' || habit === 'berry' ? 'fruiting' : grownForm[habit];
     case 'resting':
       return habit === 'tree' ? 'tree' : 'resting';
     case 'out':

@@ -97,6 +97,18 @@ const bush: PlantPicture = {
   ],
 };
 
+/** Broad leaves that open from the ground. */
+const rosette: PlantPicture = {
+  breadth: 30,
+  height: 18,
+  shapes: [
+    ...[156, 118, 62, 24].map((way) => leaf('shade', 0, -1, way, 15, 9)),
+    ...[168, 136, 90, 44, 12].map((way) => leaf('leaf', 0, -0.6, way, 14, 8.6)),
+    ...[112, 70].map((way) => leaf('shade', 0, -0.6, way, 8.6, 6)),
+    leaf('leaf', 0, -0.6, 92, 7, 5.4),
+  ],
+};
+
 const tomato: PlantPicture = {
   breadth: 32,
   height: 50,
@@ -198,6 +210,7 @@ const byForm: Readonly<Record<Exclude<PlantForm, 'fruiting'>, PlantPicture>> = {
   blades,
   leafy,
   bush,
+  rosette,
   tree,
   resting,
   empty,

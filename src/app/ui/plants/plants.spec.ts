@@ -1,6 +1,7 @@
 import { TestBed } from '@angular/core/testing';
+import type { PlantHabit, PlantingStage } from '@shared/growing/planting-stage';
 import fc from 'fast-check';
-import { cropLook, plantForm, type DrawnStage, type PlantHabit } from './crop-look';
+import { plantLook } from './crop-look';
 import { PlantDrawing } from './plant-drawing';
 import { plantPicture, type PlantFamily, type PlantForm } from './plant-forms';
 import { PlantTray } from './plant-tray';
@@ -36,30 +37,32 @@ const planting: fc.Arbitrary<TrayPlanting> = fc.record({
   size: fc.double({ min: 0.1, max: 2, noNaN: true }),
 });
 
-describe('the drawing of a crop', () => {
-  it.each([
-    ['Dwarf tomato', 'tomato', 'leafy'],
-    ['Onion, long-day', 'onion', 'blades'],
-    ['Leek', 'leek', 'blades'],
-    ['Potted citrus', 'citrus', 'tree'],
-    ['Lemongrass', 'onion', 'blades'],
-    ['Something new', 'herb', 'bush'],
-  ])('called %s has the colours of %s and the habit %s', (crop, family, habit) => {
-    expect(cropLook(crop)).toEqual({ family, habit });
+describe('the drawing of a planting', () => {
+  it.each<[string, PlantHabit, PlantFamily]>([
+    ['Dwarf tomato', 'fruiting', 'tomato'],
+    ['Pepper, sweet', 'fruiting', 'pepper'],
+    ['Onion, long-day', 'blades', 'onion'],
+    ['Leek', 'blades', 'leek'],
+    ['Something new', 'tree', 'citrus'],
+    ['Something new', 'berry', 'strawberry'],
+  ])('of %s, which grows as %s, has the colours of %s', (crop, habit, family) => {
+    expect(plantLook({ crop, habit, stage: 'growingOn' }).family).toBe(family);
   });
 
-  it.each<[PlantHabit, DrawnStage, PlantForm]>([
+  it.each<[PlantHabit, PlantingStage, PlantForm]>([
     ['blades', 'sown', 'sown'],
     ['leafy', 'emerging', 'hook'],
     ['leafy', 'seedling', 'twoLeaves'],
     ['blades', 'seedling', 'blades'],
-    ['bush', 'growingOn', 'bush'],
-    ['leafy', 'fruiting', 'fruiting'],
+    ['fruiting', 'growingOn', 'leafy'],
+    ['fruiting', 'fruiting', 'fruiting'],
+    ['berry', 'fruiting', 'fruiting'],
     ['tree', 'fruiting', 'tree'],
     ['tree', 'resting', 'tree'],
+    ['rosette', 'resting', 'resting'],
     ['leafy', 'ended', 'empty'],
   ])('of habit %s at stage %s is the form %s', (habit, stage, form) => {
-    expect(plantForm(habit, stage)).toBe(form);
+    expect(plantLook({ crop: 'Any', habit, stage }).form).toBe(form);
   });
 
   it('fruits after its own family', () => {

@@ -1,4 +1,4 @@
-import { isTemperature, storedUnit, type Quantity } from '@shared/climate/quantity';
+import { isTemperature, storedUnit, type Quantity } from '../climate/quantity';
 import type { WantedRange } from '../standing';
 import {
   formatNumber,

@@ -1,6 +1,6 @@
-import type { EpisodeFormatters } from '@shared/alerts/describe-episode';
-import type { AlertQuantity } from '@shared/alerts/episode-words';
-import type { Quantity } from '@shared/climate/quantity';
+import type { EpisodeFormatters } from '../alerts/describe-episode';
+import type { AlertQuantity } from '../alerts/episode-words';
+import type { Quantity } from '../climate/quantity';
 import { formatNumber, formatValue, type TemperatureUnit } from './numbers';
 import { formatBareQuantity, formatQuantity, formatQuantityDifference } from './quantities';
 import { formatDuration, sayWhen } from './room-time';
