@@ -1,5 +1,5 @@
 import { isTemperature, storedUnit, type Quantity } from '../climate/quantity';
-import type { WantedRange } from '../standing';
+import type { WantedRange } from './standing';
 import {
   formatNumber,
   formatRange,

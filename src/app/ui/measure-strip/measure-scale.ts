@@ -1,7 +1,7 @@
 import type { Quantity } from '@shared/climate/quantity';
 import { shownValue } from '@shared/format/quantities';
 import type { TemperatureUnit } from '@shared/format/numbers';
-import type { WantedRange } from '../standing';
+import type { WantedRange } from '@shared/format/standing';
 import type { MeasureScale } from './measure-strip';
 
 /** Between which values each quantity lies on a shelf, in its stored unit: what a growing room sees in a year. */

@@ -1,6 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import { formatNumber, formatValue } from '@shared/format/numbers';
-import { standing, type Standing, type WantedRange } from '../standing';
+import { standing, type Standing, type WantedRange } from '@shared/format/standing';
 
 /** The values between which a quantity sensibly lies, for drawing. */
 export interface MeasureScale {
