@@ -25,8 +25,7 @@ export function refuseCrossSite(req: Request): void {
   const isOtherOrigin = origin !== undefined && hostOf(origin) !== req.headers.host;
   const token = req.session.csrfToken;
   const hasToken =
-    req.user === undefined ||
-    (token !== undefined && sameText(req.get('X-CSRF-Token') ?? '', token));
+    req.user === undefined || (token !== undefined && sameText(req.get('X-CSRF-Token') ?? '', token));
   if (isForeign || isOtherOrigin || !hasToken) {
     throw new RequestProblem(
       403,

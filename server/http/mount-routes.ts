@@ -40,9 +40,7 @@ async function answer(route: Route, support: RouteSupport, req: Request, res: Re
   if (endpoint.access !== 'device') refuseCrossSite(req);
   const granted = await support.access.grant(endpoint.access, req);
   const context = contextOf(route, granted, req, res);
-  const reply = await support.repeatable.once(endpoint, granted.person, req, () =>
-    route.handle(context),
-  );
+  const reply = await support.repeatable.once(endpoint, granted.person, req, () => route.handle(context));
   if (res.headersSent) return; // The handler streamed its answer.
   if (endpoint.status === 204) {
     res.status(204).end();

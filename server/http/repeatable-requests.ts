@@ -37,7 +37,11 @@ export class RepeatableRequests {
     const key = req.get('Idempotency-Key');
     if (key === undefined || person === undefined || endpoint.method === 'get') return run();
     if (!/^[\w-]{8,80}$/.test(key)) {
-      throw new RequestProblem(422, 'BAD_IDEMPOTENCY_KEY', 'Idempotency-Key must be 8 to 80 letters or digits.');
+      throw new RequestProblem(
+        422,
+        'BAD_IDEMPOTENCY_KEY',
+        'Idempotency-Key must be 8 to 80 letters or digits.',
+      );
     }
     const fingerprint = createHash('sha256')
       .update(JSON.stringify([endpoint.name, req.params, req.body ?? null]))
@@ -53,10 +57,10 @@ export class RepeatableRequests {
       return reply;
     } catch (error) {
       // It did not happen, so the key is free for another try.
-      await this.transactions.plain.query('DELETE FROM repeatable_request WHERE person_id = $1 AND key = $2', [
-        person.id,
-        key,
-      ]);
+      await this.transactions.plain.query(
+        'DELETE FROM repeatable_request WHERE person_id = $1 AND key = $2',
+        [person.id, key],
+      );
       throw error;
     }
   }

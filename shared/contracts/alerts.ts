@@ -1,5 +1,6 @@
 import * as z from 'zod';
 import type { AlertKind, Urgency } from '../alerts/alert-rule';
+import type { Episode } from '../alerts/episode';
 import { quantities } from '../climate/quantity';
 import { endpoint, id, instant, roomParams } from './endpoint';
 
@@ -80,3 +81,23 @@ export const acknowledgeAlert = endpoint({
   body: z.strictObject({ note: z.string().trim().max(500).default('') }),
   reply: alert,
 });
+
+/**
+ * The episode that an alert tells of, for the words and sums of shared/alerts.
+ *
+ * @param shown - The alert.
+ * @returns Its episode, instants in milliseconds.
+ */
+export function episodeOf(shown: Alert): Episode {
+  return {
+    beganAt: Date.parse(shown.beganAt),
+    openedAt: Date.parse(shown.openedAt),
+    peakAt: Date.parse(shown.peakAt),
+    peakValue: shown.peakValue,
+    peakExcess: shown.peakExcess,
+    limit: shown.peakLimit,
+    endedAt: shown.endedAt === null ? null : Date.parse(shown.endedAt),
+    clearedAt: shown.clearedAt === null ? null : Date.parse(shown.clearedAt),
+    urgency: shown.urgency,
+  };
+}

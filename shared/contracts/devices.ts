@@ -29,6 +29,7 @@ export const refusalCodes = [
   'IN_FUTURE',
   'TOO_OLD',
   'OUT_OF_RANGE',
+  'NOT_A_READING',
   'DIFFERENT_VALUE_HELD',
 ] as const;
 

@@ -1,0 +1,25 @@
+import type { MeasuredQuantity } from '@shared/climate/quantity';
+import type { Tx } from '../database/transactions';
+
+/** Queries for taking a device's readings. */
+export class DeviceIntakeStore {
+  /** The device's sensors in use, by the name that the device gives them. */
+  async sensorsOf(
+    tx: Tx,
+    deviceId: string,
+  ): Promise<Map<string, { id: string; quantity: MeasuredQuantity }>> {
+    const rows: { key: string; id: string; quantity: MeasuredQuantity }[] = await tx.query(
+      'SELECT key, id, quantity FROM sensor WHERE device_id = $1 AND retired_at IS NULL',
+      [deviceId],
+    );
+    return new Map(rows.map(({ key, id, quantity }) => [key, { id, quantity }]));
+  }
+
+  /** Notes that the device has just reported, and its battery where it said so. */
+  async noteSeen(tx: Tx, deviceId: string, batteryPct: number | null): Promise<void> {
+    await tx.query(
+      'UPDATE device SET last_seen_at = now(), battery_pct = coalesce($2, battery_pct) WHERE id = $1',
+      [deviceId, batteryPct],
+    );
+  }
+}
