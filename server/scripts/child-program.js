@@ -39,7 +39,9 @@ async function startProgram({ title, script, env, logFile, signal }) {
     child.once('error', resolve);
     child.once('close', resolve); // after its last message
   });
+  let isStopping = false;
   const stop = async () => {
+    isStopping = true;
     child.kill('SIGTERM');
     const timer = setTimeout(() => child.kill('SIGKILL'), stopTimeoutMs);
     await ended;
@@ -53,10 +55,11 @@ async function startProgram({ title, script, env, logFile, signal }) {
       if (typeof message.problem === 'string') problem = message.problem;
     });
   });
-  const failed = ended.then(() => {
-    throw new Problem(
-      problem ?? `${lastLines(logFile)}\n\n${title} has stopped unexpectedly. Its log: ${logFile}`,
-    );
+  const failed = new Promise((_resolve, reject) => {
+    void ended.then(() => {
+      const lastWords = `${lastLines(logFile)}\n\n${title} has stopped unexpectedly. Its log: ${logFile}`;
+      if (!isStopping) reject(new Problem(problem ?? lastWords));
+    });
   });
   failed.catch(() => {}); // whoever waits for it hears of it
   const ready = await Promise.race([isReady, failed, untilAborted(signal)]);
