@@ -11,6 +11,9 @@ import type { SensorOnRoad } from './reading-store';
 import { lastReadingIn } from './sensor-stream';
 import type { SensorSums, SummaryStore } from './summary-store';
 
+/** A humidity sensor, as far as reading its points needs it. */
+export type HumiditySensor = Pick<SensorOnRoad, 'id' | 'expectedIntervalS'>;
+
 /** A humidity sensor with how far its readings can now be paired for good. */
 export interface Settling {
   readonly sensor: SensorOnRoad;
@@ -107,7 +110,7 @@ export class ComputedQuantities {
    */
   async points(
     tx: Tx,
-    sensor: SensorOnRoad,
+    sensor: HumiditySensor,
     quantity: ComputedQuantity,
     from: number,
     to: number,
@@ -126,11 +129,11 @@ export function withinMs(sensor: Pick<SensorOnRoad, 'expectedIntervalS'>): numbe
   return sensor.expectedIntervalS * 1_000;
 }
 
-function spanOf(sensor: SensorOnRoad, from: number, to: number): HumiditySpan {
+function spanOf(sensor: HumiditySensor, from: number, to: number): HumiditySpan {
   return { sensorId: sensor.id, from: Math.max(0, from), to, withinMs: withinMs(sensor) };
 }
 
-function pointsOf(quantity: ComputedQuantity, sensor: SensorOnRoad, air: readonly ShelfAir[]): Sample[] {
+function pointsOf(quantity: ComputedQuantity, sensor: HumiditySensor, air: readonly ShelfAir[]): Sample[] {
   return air
     .filter(({ sensorId }) => sensorId === sensor.id)
     .flatMap(({ humidity, temperature, leafOffsetC }) =>
