@@ -2,7 +2,17 @@ import { blade, filled, leaf, line, pot, round, type Shape } from './leaf-shapes
 
 /** What a planting looks like on its shelf, by habit and stage. */
 export type PlantForm =
-  'sown' | 'hook' | 'twoLeaves' | 'blades' | 'leafy' | 'bush' | 'fruiting' | 'tree' | 'resting' | 'empty';
+  | 'sown'
+  | 'hook'
+  | 'twoLeaves'
+  | 'blades'
+  | 'leafy'
+  | 'bush'
+  | 'rosette'
+  | 'fruiting'
+  | 'tree'
+  | 'resting'
+  | 'empty';
 
 /** Which colours a plant has, and which fruit. */
 export type PlantFamily =
