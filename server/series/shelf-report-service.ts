@@ -9,7 +9,7 @@ import {
 import type { ShelfEvent } from '@shared/contracts/care';
 import type { DegreeDays, LightOfDay, QuantityStatistics, ShelfReport } from '@shared/contracts/series';
 import { maxGapMs } from '@shared/series/expected-interval';
-import { dayBounds, hoursInDay, roomDayBoundsAt, type DayBounds } from '@shared/series/room-days';
+import { dayBounds, roomDayBoundsAt, type DayBounds } from '@shared/series/room-days';
 import type { ShelfPlans } from '../board/shelf-now-service';
 import type { Transactions, Tx } from '../database/transactions';
 import { dliMolM2 } from './light-sums';
@@ -33,7 +33,6 @@ export interface DegreeDayRequest {
 }
 
 const DAY_MS = 86_400_000;
-const HOURS_A_DAY = 24;
 /** Beyond, stretches of light are too many to draw and too many to find. */
 const LONGEST_LIT_SPAN_MS = 32 * DAY_MS;
 
@@ -251,5 +250,5 @@ function dailyFromHours(
     day.degreeDaysCD += (ofDay * coveredMs) / DAY_MS;
     day.coveredMs += coveredMs;
   }
-  return [...sums.values()].filter(({ bounds }) => hoursInDay(bounds) <= HOURS_A_DAY + 1);
+  return [...sums.values()];
 }
