@@ -1,6 +1,7 @@
 const { linkSync, mkdirSync, readFileSync, renameSync, rmSync, writeFileSync } = require('node:fs');
 const { dirname } = require('node:path');
 const { setTimeout: sleep } = require('node:timers/promises');
+const { Problem } = require('./problem');
 const { identityOf, isStillRunning } = require('./processes');
 
 /**
@@ -18,6 +19,7 @@ const { identityOf, isStillRunning } = require('./processes');
  *
  * @param {string} path
  * @returns {{ claim: Claim } | { claim: null, holder: Holder }}
+ * @throws {Problem} When the folder is another user's.
  */
 function claim(path) {
   mkdirSync(dirname(path), { recursive: true });
@@ -93,10 +95,16 @@ function createWhole(path, holder) {
  * @param {string} path
  * @param {Holder} holder
  * @returns {string} Path of the file beside it.
+ * @throws {Problem} When the folder is another user's.
  */
 function writeAside(path, holder) {
   const aside = `${path}.${process.pid}`;
-  writeFileSync(aside, JSON.stringify(holder));
+  try {
+    writeFileSync(aside, JSON.stringify(holder));
+  } catch (error) {
+    if (/** @type {NodeJS.ErrnoException} */ (error).code !== 'EACCES') throw error;
+    throw new Problem(`${dirname(path)} belongs to another user; run this as that user or as root.`);
+  }
   return aside;
 }
 

@@ -4,8 +4,11 @@ const { projectFolder } = require('./project');
 
 /** @typedef {{ passed: number, failed: number }} Counts */
 
+/** How long jest may take to end after its last test. Beyond, a test has left something open that keeps it. */
+const endTimeoutMs = 20_000;
+
 /**
- * Runs jest on this terminal.
+ * Runs jest on this terminal. If it does not end by itself, it is ended, which counts as failure.
  *
  * @param {string[]} args
  * @param {NodeJS.ProcessEnv} env
@@ -24,6 +27,7 @@ function runJest(args, env, signal) {
   let counts = { passed: 0, failed: 0 };
   child.on('message', (/** @type {Counts} */ message) => {
     counts = message;
+    setTimeout(() => child.kill('SIGKILL'), endTimeoutMs).unref();
   });
   return new Promise((resolve, reject) => {
     child.once('error', reject);
