@@ -150,15 +150,13 @@ function sent(value: unknown): string | string[] {
   return Array.isArray(value) ? value.map(String) : String(value);
 }
 
-function parseReply<R extends z.ZodType>(
-  endpoint: { readonly reply: R; readonly status: number },
-  reply: unknown,
-): z.output<R> {
-  return endpoint.reply.parse(endpoint.status === 204 ? undefined : reply);
+/** An answer without content arrives as null, where the contract says that there is nothing. */
+function parseReply<R extends z.ZodType>({ reply }: { readonly reply: R }, arrived: unknown): z.output<R> {
+  return reply.parse(arrived ?? undefined);
 }
 
 function uploadStep<R extends z.ZodType>(
-  endpoint: { readonly reply: R; readonly status: number },
+  endpoint: { readonly reply: R },
   event: HttpEvent<unknown>,
 ): UploadStep<z.output<R>> | null {
   if (event.type === HttpEventType.UploadProgress)

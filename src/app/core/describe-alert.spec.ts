@@ -17,8 +17,8 @@ describe('an alert in words', () => {
     expect(words.sentence).toBe('Too warm since 13:54: 28.3 °C, wanted up to 26.');
   });
 
-  it('once cleared is told in the past', () => {
-    const words = describeAlert(alert({ clearedAt: '2026-12-01T14:18:00Z' }), formatters, now);
+  it('once ended is told in the past', () => {
+    const words = describeAlert(alert({ endedAt: '2026-12-01T14:18:00Z' }), formatters, now);
     expect(words.sentence).toContain('from 13:54 to 14:18');
   });
 

@@ -13,7 +13,6 @@ import type { Alert } from '@shared/contracts/alerts';
  * @param now - The present [ms since 1970 UTC].
  */
 export function describeAlert(alert: Alert, formatters: EpisodeFormatters, now: number): EpisodeDescription {
-  const clearedAt = alert.clearedAt === null ? null : Date.parse(alert.clearedAt);
   return describeEpisode({
     episode: {
       beganAt: Date.parse(alert.beganAt),
@@ -22,8 +21,8 @@ export function describeAlert(alert: Alert, formatters: EpisodeFormatters, now: 
       peakValue: alert.peakValue,
       peakExcess: alert.peakExcess,
       limit: alert.peakLimit,
-      endedAt: clearedAt,
-      clearedAt,
+      endedAt: instantOrNull(alert.endedAt),
+      clearedAt: instantOrNull(alert.clearedAt),
       urgency: alert.urgency,
     },
     kind: alert.kind,
@@ -32,4 +31,8 @@ export function describeAlert(alert: Alert, formatters: EpisodeFormatters, now: 
     formatters,
     now,
   });
+}
+
+function instantOrNull(at: string | null): number | null {
+  return at === null ? null : Date.parse(at);
 }

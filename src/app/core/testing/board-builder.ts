@@ -90,6 +90,7 @@ export function alert(changes: Partial<Alert> = {}): Alert {
     peakValue: 28.3,
     peakExcess: 2.3,
     peakLimit: 26,
+    endedAt: null,
     clearedAt: null,
     foundLater: false,
     toldAt: '2026-12-01T14:06:00Z',
