@@ -1,5 +1,5 @@
 import * as z from 'zod';
-import { endpoint, id, line, noContent, roomParams } from './endpoint';
+import { endpoint, id, line, roomParams } from './endpoint';
 
 /** The roles of a member in a room, weakest first; each may all that the one before may. */
 export const roles = ['viewer', 'helper', 'grower', 'keeper'] as const;
@@ -111,7 +111,6 @@ export const changePassword = endpoint({
   access: 'signedIn',
   summary: 'Change the password; other sessions are signed out',
   body: z.strictObject({ currentPassword: z.string().max(200), newPassword }),
-  reply: noContent,
 });
 
 /** Chooses which mails to get from a room. */

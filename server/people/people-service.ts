@@ -1,0 +1,121 @@
+import type { Account, Member, Membership } from '@shared/contracts/people';
+import type { AuditStore } from '../audit/audit-store';
+import type { Transactions } from '../database/transactions';
+import { invalidField, notFound } from '../http/request-problem';
+import type { RoomAccess } from '../http/route';
+import { hashPassword, passwordMatches } from './passwords';
+import type { AccountChange, MailChoice, PeopleStore } from './people-store';
+import type { SignInAttempts } from './sign-in-attempts';
+
+/** An account as it is kept; the token that goes with it belongs to the session. */
+export type StoredAccount = Omit<Account, 'csrfToken'>;
+
+/** A wish for another password, and where it comes from. */
+export interface PasswordChange {
+  readonly currentPassword: string;
+  readonly newPassword: string;
+  /** The session that stays. */
+  readonly sessionId: string;
+  readonly ip: string;
+}
+
+/** Accounts and memberships. */
+export class PeopleService {
+  constructor(
+    private readonly transactions: Transactions,
+    private readonly people: PeopleStore,
+    private readonly attempts: SignInAttempts,
+    private readonly audit: AuditStore,
+  ) {}
+
+  /** What a person is in a room; null for who is no member. For access control. */
+  membershipOf(personId: string, roomId: string): Promise<RoomAccess | null> {
+    return this.people.roomAccess(this.transactions.plain, personId, roomId);
+  }
+
+  /**
+   * A person's account with their rooms.
+   *
+   * @param personId - The person.
+   * @returns The account.
+   * @throws {@link RequestProblem} 404 when the person is gone.
+   */
+  async account(personId: string): Promise<StoredAccount> {
+    const tx = this.transactions.plain;
+    const person = await this.people.withId(tx, personId);
+    if (person === null) throw notFound('person');
+    const { id, email, name, temperatureUnit, theme } = person;
+    return { id, email, name, temperatureUnit, theme, memberships: await this.people.memberships(tx, id) };
+  }
+
+  /** Changes name, unit or theme, and returns the account. */
+  async changeAccount(personId: string, change: AccountChange): Promise<StoredAccount> {
+    if (Object.keys(change).length > 0) {
+      await this.transactions.run(async (tx) => {
+        await this.people.changeAccount(tx, personId, change);
+        await this.audit.note(tx, {
+          roomId: null,
+          personId,
+          action: 'account.change',
+          subjectId: personId,
+          detail: { ...change },
+        });
+      });
+    }
+    return this.account(personId);
+  }
+
+  /**
+   * Changes the password, and signs the person out everywhere else.
+   *
+   * @param personId - The person.
+   * @param change - Both passwords, and the session that stays.
+   * @throws {@link RequestProblem} 422 on `body.currentPassword` when it is wrong, 429 after too many wrong ones.
+   */
+  async changePassword(personId: string, change: PasswordChange): Promise<void> {
+    const person = await this.people.withId(this.transactions.plain, personId);
+    if (person === null) throw notFound('person');
+    const attempt = { email: person.email, ip: change.ip };
+    await this.attempts.count(attempt);
+    if (!(await passwordMatches(change.currentPassword, person.passwordHash))) {
+      throw invalidField('body.currentPassword', 'is not your password');
+    }
+    await this.attempts.takeBack(attempt);
+    const passwordHash = await hashPassword(change.newPassword);
+    await this.transactions.run(async (tx) => {
+      await this.people.setPasswordHash(tx, personId, passwordHash);
+      await this.people.endOtherSessions(tx, personId, change.sessionId);
+      await this.audit.note(tx, {
+        roomId: null,
+        personId,
+        action: 'password.change',
+        subjectId: personId,
+        detail: {},
+      });
+    });
+  }
+
+  /** Chooses which mails a room sends a member, and returns the membership. */
+  changeMailChoice(personId: string, roomId: string, choice: MailChoice): Promise<Membership> {
+    return this.transactions.run(async (tx) => {
+      if (Object.keys(choice).length > 0) {
+        await this.people.changeMailChoice(tx, personId, roomId, choice);
+        await this.audit.note(tx, {
+          roomId,
+          personId,
+          action: 'mail-choice.change',
+          subjectId: personId,
+          detail: { ...choice },
+        });
+      }
+      const membership = await this.people.membership(tx, personId, roomId);
+      if (membership === null) throw notFound('room');
+      return membership;
+    });
+  }
+
+  /** Everybody in a room. */
+  members(roomId: string): Promise<Member[]> {
+    return this.people.members(this.transactions.plain, roomId);
+  }
+}

@@ -1,0 +1,68 @@
+import connectPgSimple from 'connect-pg-simple';
+import type { CookieOptions, NextFunction, Request, RequestHandler, Response } from 'express';
+import session from 'express-session';
+import type { Pool } from 'pg';
+
+/** Name of the session's cookie. */
+export const sessionCookie = 'lampmeadow';
+
+const DAY_MS = 86_400_000;
+const SESSION_MS = 14 * DAY_MS;
+/** A session in use is prolonged at most this often, so that most requests write nothing. */
+const RENEWED_EVERY_MS = DAY_MS / 24;
+
+declare module 'express-session' {
+  interface SessionData {
+    /** When the session was last prolonged [ms since 1970 UTC]. */
+    renewedAt: number;
+  }
+}
+
+/** What sessions need. */
+export interface SessionSettings {
+  readonly pool: Pool;
+  /** Signs the cookie. */
+  readonly secret: string;
+  /** In production the cookie travels only over HTTPS. */
+  readonly isProduction: boolean;
+}
+
+/**
+ * The attributes of the session's cookie.
+ *
+ * @param isProduction - Whether it travels only over HTTPS.
+ * @returns Attributes for setting and clearing it.
+ */
+export function cookieOptions(isProduction: boolean): CookieOptions {
+  return { httpOnly: true, sameSite: 'lax', secure: isProduction, path: '/' };
+}
+
+/**
+ * Sessions in PostgreSQL, made at sign-in and ending fourteen days after their last use.
+ *
+ * @param settings - Connections, secret and whether this is production.
+ * @returns Middleware for Express and for the socket's handshake.
+ */
+export function sessionMiddleware({ pool, secret, isProduction }: SessionSettings): RequestHandler {
+  const Store = connectPgSimple(session);
+  const open = session({
+    name: sessionCookie,
+    secret,
+    resave: false,
+    saveUninitialized: false,
+    cookie: { ...cookieOptions(isProduction), maxAge: SESSION_MS },
+    store: new Store({ pool, tableName: 'http_session', createTableIfMissing: false, disableTouch: true }),
+  });
+  return (req: Request, res: Response, next: NextFunction) => {
+    open(req, res, (error?: unknown) => {
+      if (error === undefined) prolong(req.session, Date.now());
+      next(error);
+    });
+  };
+}
+
+/** A changed session is saved and its cookie sent again, both with a new end. Sessions of nobody are not begun. */
+function prolong(current: Request['session'], now: number): void {
+  if (current.csrfToken === undefined) return;
+  if (now - (current.renewedAt ?? 0) >= RENEWED_EVERY_MS) current.renewedAt = now;
+}
