@@ -55,6 +55,7 @@ async function startProgram({ title, script, env, logFile, signal }) {
       if (typeof message.problem === 'string') problem = message.problem;
     });
   });
+  /** @type {Promise<never>} */
   const failed = new Promise((_resolve, reject) => {
     void ended.then(() => {
       const lastWords = `${lastLines(logFile)}\n\n${title} has stopped unexpectedly. Its log: ${logFile}`;
