@@ -1,4 +1,3 @@
-import { splitMeasured } from './cell-kinds';
 import { guessUnit, isUsual, spanOf } from './guess-unit';
 import type { LoggerColumn, LoggerFileShape, RecognitionQuestion } from './logger-file-shape';
 import type { NumberParser } from './number-text';
@@ -6,6 +5,7 @@ import type { LoggerQuantity } from './quantities';
 import { quantityRules } from './quantities';
 import type { SampleTable } from './recognise-table';
 import type { LoggerUnit } from './units';
+import { unitOfText } from './units';
 
 /**
  * Asks about every column, and every quantity of a long file, whose values cannot be in their unit: a humidity of 4 %, a
@@ -16,10 +16,9 @@ export function questionUnits(
   table: SampleTable,
   parseNumber: NumberParser,
 ): RecognitionQuestion[] {
+  // A value with its own unit beside it is not in doubt.
   const numbers = (column: LoggerColumn, rows: SampleTable['rows']): number[] =>
-    rows
-      .map(({ cells }) => cells[column.index] ?? '')
-      .map((cell) => parseNumber(splitMeasured(cell)?.number ?? cell));
+    rows.map(({ cells }) => parseNumber(cells[column.index] ?? ''));
   if (shape.layout === 'wide') {
     return shape.columns.flatMap((column) => {
       const { quantity, unit, index, name } = column;
@@ -30,10 +29,15 @@ export function questionUnits(
   }
   const nameColumn = shape.columns.find(({ role }) => role === 'quantityName');
   const valueColumn = shape.columns.find(({ role }) => role === 'value');
+  const unitColumn = shape.columns.find(({ role }) => role === 'unit');
   if (nameColumn === undefined || valueColumn === undefined) return [];
+  const isIn = (unit: LoggerUnit, cells: readonly string[]): boolean =>
+    unitColumn === undefined || unitOfText(cells[unitColumn.index] ?? '') === unit;
   return Object.entries(shape.quantityNames).flatMap(([name, meaning]) => {
     if (meaning === null) return [];
-    const rows = table.rows.filter(({ cells }) => cells[nameColumn.index] === name);
+    const rows = table.rows.filter(
+      ({ cells }) => cells[nameColumn.index] === name && isIn(meaning.unit, cells),
+    );
     const subject = { ...meaning, column: valueColumn.index, name };
     return questionUnit(subject, numbers(valueColumn, rows));
   });

@@ -131,37 +131,41 @@ function usualWidth(rows: readonly SampleRow[]): number {
   )[0];
 }
 
+/**
+ * What a column holds, told from the cells that are times or numbers as soon as they are a fifth: in a short file the header, and
+ * in a damaged one the words that stand for values, may be as many.
+ */
 function usualKind(rows: readonly SampleRow[], index: number): CellKind {
   const counts = new Map<CellKind, number>();
   for (const { cells } of rows) {
     const kind = kindOfCell(cells[index] ?? '');
-    counts.set(kind, (counts.get(kind) ?? 0) + 1);
+    if (kind !== 'missing') counts.set(kind, (counts.get(kind) ?? 0) + 1);
   }
-  const filled = [...counts].filter(([kind]) => kind !== 'missing');
-  const [kind] = filled.reduce<[CellKind, number]>(
-    (best, entry) => (entry[1] > best[1] ? entry : best),
-    ['missing', 0],
-  );
-  return kind;
+  const filled = [...counts.values()].reduce((sum, count) => sum + count, 0);
+  const typed = [...counts].filter(([kind]) => kind !== 'text').sort((a, b) => b[1] - a[1]);
+  const [usual] = typed;
+  if (usual !== undefined && typed.reduce((sum, [, count]) => sum + count, 0) * 5 >= filled) return usual[0];
+  return filled === 0 ? 'missing' : 'text';
 }
 
-/** Tells whether a row has what its columns usually have: its time, or where there is none its numbers. */
+/** Tells whether a row is one of readings: it has its times, and a number or nothing where numbers are usual. */
 function fits(row: SampleRow, kinds: readonly CellKind[]): boolean {
   if (row.cells.length !== kinds.length) return false;
-  const found = row.cells.map(kindOfCell);
-  const isTyped = (kind: CellKind): boolean => kind === 'number' || isTime(kind);
-  const agrees = kinds.every(
-    (kind, index) =>
-      !isTyped(kind) ||
-      found[index] === kind ||
-      found[index] === 'missing' ||
-      isBothTimes(kind, found[index]),
+  const hasTime = kinds.some(isTime);
+  const agrees = (kind: CellKind, index: number): boolean => {
+    const found = kindOfCell(row.cells[index] ?? '');
+    return found === kind || found === 'missing' || isBothTimes(kind, found);
+  };
+  const numbers = kinds.flatMap((kind, index) => (kind === 'number' ? [agrees(kind, index)] : []));
+  if (!hasTime) return numbers.every(Boolean) && row.cells.some((cell) => kindOfCell(cell) === 'number');
+  const isTimed = kinds.every(
+    (kind, index) => !isTime(kind) || (row.cells[index] !== '' && agrees(kind, index)),
   );
-  return agrees && kinds.some((kind, index) => isTyped(kind) && found[index] !== 'missing');
+  return isTimed && numbers.some(Boolean);
 }
 
 // A whole number can be a compact date by accident, and midnight may be written as a date alone.
-function isBothTimes(usual: CellKind, found: CellKind | undefined): boolean {
+function isBothTimes(usual: CellKind, found: CellKind): boolean {
   return (usual === 'dateTime' && found === 'date') || (usual === 'number' && found === 'date');
 }
 
