@@ -15,12 +15,21 @@ describe('the local PostgreSQL', () => {
   const home = join(project.folder, '.data/postgres/main');
   const cluster = join(home, 'cluster');
   const pidFile = join(cluster, 'postmaster.pid');
-  const start = () => startPostgres({ name: 'main', log: () => {}, projectFolder: project.folder });
+  const started: Postgres[] = [];
   const postmasterPid = () => Number(readFileSync(pidFile, 'utf8').split('\n')[0]);
 
-  // One cluster for all, since making one takes most of the time; every test stops what it started.
+  // One cluster for all, since making one takes most of the time.
   beforeAll(async () => (await start()).stop());
+  afterEach(async () => {
+    for (const postgres of started.splice(0)) await postgres.stop();
+  });
   afterAll(() => project.remove());
+
+  async function start(): Promise<Postgres> {
+    const postgres = await startPostgres({ name: 'main', log: () => {}, projectFolder: project.folder });
+    started.push(postgres);
+    return postgres;
+  }
 
   async function query(
     postgres: Postgres,
@@ -45,7 +54,6 @@ describe('the local PostgreSQL', () => {
   it('writes safely unless told otherwise', async () => {
     const postgres = await start();
     expect(await query(postgres, 'SHOW fsync')).toEqual([{ fsync: 'on' }]);
-    await postgres.stop();
   });
 
   it('lets its owner create databases, and is no superuser', async () => {
@@ -54,7 +62,6 @@ describe('the local PostgreSQL', () => {
     expect(await query(postgres, 'SELECT 1 AS one', postgres.url('another'))).toEqual([{ one: 1 }]);
     const roles = await query(postgres, 'SELECT rolsuper FROM pg_roles WHERE rolname = current_user');
     expect(roles).toEqual([{ rolsuper: false }]);
-    await postgres.stop();
   });
 
   it('refuses a wrong password', async () => {
@@ -62,7 +69,6 @@ describe('the local PostgreSQL', () => {
     const wrong = new URL(postgres.url('lampmeadow'));
     wrong.password = 'guess';
     await expect(query(postgres, 'SELECT 1', wrong.href)).rejects.toMatchObject({ code: '28P01' });
-    await postgres.stop();
   });
 
   it('leaves no process when it is stopped', async () => {
@@ -95,7 +101,6 @@ describe('the local PostgreSQL', () => {
 
     expect(postgres.port).toBeGreaterThan(usual.port);
     expect(await query(postgres, 'SELECT 1 AS one')).toEqual([{ one: 1 }]);
-    await postgres.stop();
     squatter.close();
   });
 
@@ -112,8 +117,6 @@ describe('the local PostgreSQL', () => {
 
     expect(postgres.owned).toBe(true);
     expect(await query(postgres, 'SELECT value FROM kept')).toEqual([{ value: 0 }]);
-    await postgres.stop();
-    await killed.stop();
     await session.end();
   });
 
@@ -127,6 +130,5 @@ describe('the local PostgreSQL', () => {
 
     expect(postgres.owned).toBe(true);
     expect(await query(postgres, 'SELECT 1 AS one')).toEqual([{ one: 1 }]);
-    await postgres.stop();
   });
 });

@@ -33,7 +33,7 @@ describe('npm start', () => {
   }
 
   async function until(isSo: () => boolean): Promise<void> {
-    for (const deadline = Date.now() + 20_000; Date.now() < deadline; await sleep(20)) {
+    for (const deadline = Date.now() + 50_000; Date.now() < deadline; await sleep(20)) {
       if (isSo()) return;
     }
     throw new Error(`waited in vain for ${isSo.toString()}`);
