@@ -29,11 +29,13 @@ const node = {
 };
 
 module.exports = {
+  testTimeout: 120_000, // Real databases and browsers; no test asserts a time.
+  workerIdleMemoryLimit: '1GB',
   projects: [
     {
       ...node,
       displayName: 'shared',
-      testMatch: ['<rootDir>/shared/**/*.spec.ts', '<rootDir>/test/reference/**/*.spec.ts'],
+      testMatch: ['<rootDir>/shared/**/*.spec.ts', '<rootDir>/test/{logger-files,reference}/**/*.spec.ts'],
     },
     {
       ...node,
@@ -41,9 +43,7 @@ module.exports = {
       testMatch: [
         '<rootDir>/server/**/*.spec.ts',
         '<rootDir>/simulator/**/*.spec.ts',
-        '<rootDir>/test/api/**/*.spec.ts',
-        '<rootDir>/test/database/**/*.spec.ts',
-        '<rootDir>/test/scripts/**/*.spec.ts',
+        '<rootDir>/test/{api,database,faults,readings,scripts}/**/*.spec.ts',
       ],
     },
     {

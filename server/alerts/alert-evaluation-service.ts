@@ -90,14 +90,15 @@ export class AlertEvaluationService {
       news.filter(({ sensor }) => sensor.shelfId !== null),
     );
     if (watched.length === 0) return [];
-    const contexts = await this.contexts(tx, watched, origin.now);
+    const starts = await this.starts(tx, watched);
+    const contexts = await this.contexts(tx, watched, Math.min(origin.now, ...starts), origin.now);
     const folded: Folded[] = [];
-    for (const one of watched) {
+    for (const [index, one] of watched.entries()) {
       const context = contexts(one.news.sensor);
       folded.push(
         one.news.changedFrom === null
           ? advanceInOrder(one, context)
-          : await this.refold(tx, one, context, one.news.changedFrom, origin.now),
+          : await this.refold(tx, one, context, starts[index] ?? one.news.changedFrom, origin.now),
       );
     }
     return this.keep(tx, folded, origin);
@@ -153,43 +154,46 @@ export class AlertEvaluationService {
     });
   }
 
+  /** From where each watch folds: a change in the past may reach back to the episode that was open then [ms]. */
+  private async starts(tx: Tx, watched: readonly Watched[]): Promise<number[]> {
+    const starts: number[] = [];
+    for (const { watch, rule, news } of watched) {
+      if (news.changedFrom === null) {
+        starts.push(news.inOrder[0]?.at ?? Infinity);
+        continue;
+      }
+      const around = await this.store.episodesAround(tx, watch.id, news.changedFrom);
+      starts.push(Math.max(restartFrom(rule, around, news.changedFrom).at, news.sensor.placedAt ?? 0));
+    }
+    return starts;
+  }
+
   private async contexts(
     tx: Tx,
     watched: readonly Watched[],
+    from: number,
     now: number,
   ): Promise<(sensor: SensorOnRoad) => AlertContext> {
-    const starts = watched.map(({ news, watch }) =>
-      Math.min(
-        news.changedFrom ?? Infinity,
-        news.inOrder[0]?.at ?? Infinity,
-        watch.state.open?.beganAt ?? Infinity,
-        watch.state.run?.beganAt ?? Infinity,
-        now,
-      ),
-    );
     const shelfIds = [...new Set(watched.map(({ news }) => news.sensor.shelfId ?? ''))];
     const lamps = await this.sources.plannedLamps(
       tx,
       shelfIds,
-      new Date(Math.min(...starts) - LAMP_MARGIN_MS),
+      new Date(from - LAMP_MARGIN_MS),
       new Date(now + LAMP_MARGIN_MS),
     );
     const plans = new Map(shelfIds.map((shelfId) => [shelfId, lampPlan(lamps.get(shelfId) ?? [])]));
     return (sensor) => plans.get(sensor.shelfId ?? '') ?? lampPlan([]);
   }
 
-  /** Folds again from before a change in the past; episodes that began alike keep what people did with them. */
+  /** Folds again from an instant at which the rule was idle; episodes that began alike keep what people did with them. */
   private async refold(
     tx: Tx,
     one: Watched,
     context: AlertContext,
-    changedFrom: number,
+    from: number,
     now: number,
   ): Promise<Folded> {
     const { sensor, quantity } = one.news;
-    const before = await this.store.episodesAround(tx, one.watch.id, changedFrom);
-    const restart = restartFrom(one.rule, before, changedFrom);
-    const from = Math.max(restart.at, sensor.placedAt ?? 0);
     const samples = await this.sources.stored(tx, sensor, quantity, from);
     const step = fold(one.rule, context, idleState, samples);
     const ticked = tick(one.rule, step.state, now);

@@ -1,0 +1,62 @@
+import {
+  AlertEvaluationService,
+  type AlertSources,
+  type AlertTeller,
+} from '../alerts/alert-evaluation-service';
+import { AlertStore } from '../alerts/alert-store';
+import type { Transactions } from '../database/transactions';
+import { ComputedQuantities } from './computed-quantities';
+import { ComputedStore } from './computed-store';
+import { LateReadings } from './late-readings';
+import { ReadingIntakeService } from './reading-intake-service';
+import { ReadingStore } from './reading-store';
+import { StreamMemory } from './stream-memory';
+import { SummaryStore } from './summary-store';
+
+/** The road of a reading with the parts that others use too. */
+export interface IntakeParts {
+  readonly intake: ReadingIntakeService;
+  readonly readings: ReadingStore;
+  readonly summaries: SummaryStore;
+  readonly lateReadings: LateReadings;
+  readonly computed: ComputedQuantities;
+  readonly evaluation: AlertEvaluationService;
+}
+
+/**
+ * Puts the road of a reading together.
+ *
+ * @param transactions - Of the database.
+ * @param plans - Wanted ranges and planned lamps.
+ * @param teller - Writes to people.
+ * @returns The parts.
+ */
+export function intakeParts(
+  transactions: Transactions,
+  plans: Pick<AlertSources, 'wantedRangesOf' | 'plannedLamps'>,
+  teller: AlertTeller,
+): IntakeParts {
+  const readings = new ReadingStore();
+  const summaries = new SummaryStore();
+  const lateReadings = new LateReadings(readings, summaries);
+  const computed = new ComputedQuantities(new ComputedStore(), summaries);
+  const evaluation: AlertEvaluationService = new AlertEvaluationService(
+    new AlertStore(),
+    {
+      wantedRangesOf: (...of) => plans.wantedRangesOf(...of),
+      plannedLamps: (...of) => plans.plannedLamps(...of),
+      stored: (...series) => intake.stored(...series),
+    },
+    teller,
+  );
+  const intake: ReadingIntakeService = new ReadingIntakeService(
+    transactions,
+    readings,
+    summaries,
+    lateReadings,
+    computed,
+    evaluation,
+    new StreamMemory(),
+  );
+  return { intake, readings, summaries, lateReadings, computed, evaluation };
+}
