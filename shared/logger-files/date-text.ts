@@ -83,6 +83,7 @@ function dayOfParts(parts: RegExpExecArray | null, year: number, month: number, 
 
 // Words beside the month (weekdays, "de", "of") say nothing that the numbers do not.
 function dayOfNamedMonth(text: string): number {
+  if (!/\p{L}{3}/u.test(text)) return Number.NaN;
   const tokens = text.slice(0, 40).split(/[\s\-/.,]+/);
   const months = tokens.map(monthOfName).filter((month) => month !== null);
   const numbers = tokens.flatMap((token) => /^(\d+)(?:st|nd|rd|th|er|º|ª)?$/.exec(token)?.[1] ?? []);

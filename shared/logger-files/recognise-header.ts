@@ -68,14 +68,15 @@ function noHeader(table: SampleTable): RecognisedHeader {
   };
 }
 
-/** One cell less than the rows, whose first column counts and whose last is not just an empty end. */
+/** One cell less than the rows, whose first column counts: by ones, or upwards where another column is surely the time. */
 function rowNumberOffsetOf(table: SampleTable, headerRow: SampleRow | undefined): boolean {
   if (headerRow?.cells.length !== table.kinds.length - 1) return false;
-  const numbers = table.rows.slice(0, 50).map((row) => row.cells[0] ?? '');
-  const counts = numbers.every(
-    (text, index) => /^\d+$/.test(text) && (index === 0 || Number(text) > Number(numbers[index - 1])),
+  const cells = table.rows.slice(0, 50).map((row) => row.cells[0] ?? '');
+  const steps = cells.slice(1).map((cell, index) => Number(cell) - Number(cells[index]));
+  const isTimed = table.kinds.slice(1).some(isTime);
+  return (
+    cells.every((cell) => /^\d+$/.test(cell)) && steps.every((step) => (isTimed ? step > 0 : step === 1))
   );
-  return counts && table.kinds.slice(1).some(isTime);
 }
 
 // Trailing delimiters make a header a cell longer or shorter than its rows.

@@ -16,7 +16,7 @@ import type { SampleTable } from './recognise-table';
 import { recogniseTable } from './recognise-table';
 import { recogniseTime } from './recognise-time';
 import { refuseMarkup, refuseOtherFiles } from './refuse-other-files';
-import { seriesInRow } from './row-series';
+import { rowIdentity, seriesColumnsOf, seriesInRow } from './row-series';
 
 /** What recognition may know beside the file itself. */
 export interface RecognitionContext {
@@ -140,8 +140,10 @@ function headerQuestions({ columns }: LoggerFileShape): RecognitionQuestion[] {
 }
 
 function seriesOf(shape: LoggerFileShape, table: SampleTable): LoggerSeries[] {
+  const columns = seriesColumnsOf(shape);
+  const oneOfEach = new Map(table.rows.map(({ cells }) => [rowIdentity(columns, cells), cells]));
   const series = new Map<string, LoggerSeries>();
-  for (const { cells } of table.rows) {
+  for (const cells of oneOfEach.values()) {
     for (const found of seriesInRow(shape, cells)) {
       if (!series.has(found.key)) series.set(found.key, { ...found, index: series.size });
     }

@@ -27,8 +27,8 @@ export interface SampleTable {
 // Two preferences meet in a tie: a character that separates nothing else, and fewer columns of text.
 const delimiters: readonly Delimiter[] = ['\t', ';', '|', ',', 'spaces'];
 
-/** Rows that delimiters are compared by; more would not change which of them wins. */
-const JUDGED_ROWS = 500;
+/** Lines that delimiters are compared by; more would not change which of them wins. */
+const JUDGED_LINES = 500;
 
 /**
  * Cuts a sample into a table: tries each delimiter and takes the one whose rows agree best with being a table of
@@ -41,7 +41,9 @@ const JUDGED_ROWS = 500;
  */
 export function recogniseTable(text: string, isTruncated: boolean): SampleTable {
   const quote = quoteOf(text);
-  const candidates = delimiters.map((delimiter) => tableOf(text, delimiter, quote, isTruncated));
+  const judged = firstLines(text, JUDGED_LINES);
+  const isPart = isTruncated || judged.length < text.length;
+  const candidates = delimiters.map((delimiter) => tableOf(judged, delimiter, quote, isPart));
   const tables = candidates.filter((candidate) => candidate.score > 0);
   const best = tables.reduce<Candidate | null>(
     (winner, candidate) => (winner === null || candidate.score > winner.score ? candidate : winner),
@@ -54,7 +56,9 @@ export function recogniseTable(text: string, isTruncated: boolean): SampleTable 
   if (error !== null) throw error;
   refuseWide(best === null ? candidates : [best]);
   if (best === null) throw refusalOf(candidates);
-  const { delimiter, kinds, rows } = best;
+  const { delimiter, kinds } = best;
+  const { rows, error: laterError } = rowsOf(text, delimiter, quote, isTruncated);
+  if (laterError !== null) throw laterError;
   const first = rows.findIndex((row) => fits(row, kinds));
   return {
     delimiter,
@@ -74,6 +78,16 @@ interface Candidate {
   readonly error: LoggerFileError | null;
 }
 
+function firstLines(text: string, count: number): string {
+  let end = 0;
+  for (let line = 0; line < count; line += 1) {
+    const next = text.slice(end, end + MAX_LINE_LENGTH).search(/[\r\n]/);
+    if (next < 0) return text;
+    end += next + 1;
+  }
+  return text.slice(0, end);
+}
+
 function quoteOf(text: string): '"' | "'" {
   const lines = text.split('\n', 200);
   const quoted = lines.filter((line) => /(^|[,;\t|])'[^']*'(?=[,;\t|\r]|$)/.test(line));
@@ -82,9 +96,8 @@ function quoteOf(text: string): '"' | "'" {
 
 function tableOf(text: string, delimiter: Delimiter, quote: '"' | "'", isTruncated: boolean): Candidate {
   const { rows, error } = rowsOf(text, delimiter, quote, isTruncated);
-  const judged = rows.slice(0, JUDGED_ROWS);
-  const width = usualWidth(judged);
-  const ofWidth = judged.filter((row) => row.cells.length === width);
+  const width = usualWidth(rows);
+  const ofWidth = rows.filter((row) => row.cells.length === width);
   // The end of a short file may be a footer and its start is the header, so the middle speaks for the columns.
   const spoken = ofWidth.length > 8 ? ofWidth.slice(Math.floor(ofWidth.length / 4)) : ofWidth.slice(-6);
   const kinds = Array.from({ length: Math.min(width, MAX_COLUMNS) }, (_, index) => usualKind(spoken, index));
@@ -92,7 +105,7 @@ function tableOf(text: string, delimiter: Delimiter, quote: '"' | "'", isTruncat
   const typed = kinds.filter((kind) => kind !== 'text').length;
   const hasTime = kinds.some(isTime);
   const isTable = width > 1 && fitting > 0 && kinds.includes('number');
-  const score = isTable ? (fitting / judged.length) * (typed / width + (hasTime ? 1 : 0)) : 0;
+  const score = isTable ? (fitting / rows.length) * (typed / width + (hasTime ? 1 : 0)) : 0;
   return { delimiter, rows, kinds, score, error };
 }
 
