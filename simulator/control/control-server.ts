@@ -12,8 +12,8 @@ import {
 } from '@shared/contracts/simulation';
 import { scenarios } from '../scenarios/catalogue';
 import type { ScenarioTimeline } from '../scenarios/scenario-timeline';
+import { readJsonBody } from '../process/read-json-body';
 
-const LARGEST_BODY_BYTES = 10_000;
 const MINUTE_MS = 60_000;
 
 /** What the control needs of the simulator. */
@@ -86,7 +86,7 @@ async function answer(room: ControlledRoom, secret: string, request: IncomingMes
   const [, resource, run, ...more] = (request.url ?? '').split('/');
   if (resource !== 'scenarios' || more.length > 0) return refusal(404, 'NOT_FOUND', 'There is nothing here.');
   if (request.method === 'GET' && run === undefined) return { status: 200, body: listed(room) };
-  if (request.method === 'POST' && run === undefined) return start(room, await bodyOf(request));
+  if (request.method === 'POST' && run === undefined) return start(room, await readJsonBody(request));
   if (request.method === 'DELETE' && run !== undefined) {
     const hasEnded = room.timeline.end(decodeURIComponent(run), room.now());
     return hasEnded ? { status: 204 } : refusal(404, 'NOT_FOUND', 'No such scenario is running.');
@@ -114,21 +114,6 @@ function start(room: ControlledRoom, body: unknown): Answer {
     return refusal(404, 'UNKNOWN_SHELF', `The simulated room has no shelf ${parsed.data.shelf}.`);
   }
   return { status: 201, body: startScenarioNow(room, parsed.data) };
-}
-
-async function bodyOf(request: IncomingMessage): Promise<unknown> {
-  const chunks: Buffer[] = [];
-  let bytes = 0;
-  for await (const chunk of request as AsyncIterable<Buffer>) {
-    bytes += chunk.length;
-    if (bytes > LARGEST_BODY_BYTES) return undefined;
-    chunks.push(chunk);
-  }
-  try {
-    return JSON.parse(Buffer.concat(chunks).toString('utf8')) as unknown;
-  } catch {
-    return undefined; // The schema then says that an object was expected.
-  }
 }
 
 function isSame(given: string | string[] | undefined, secret: string): boolean {
