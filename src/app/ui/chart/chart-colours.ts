@@ -6,7 +6,6 @@ export interface ChartColours {
   readonly sheet: string;
   readonly sunk: string;
   readonly edge: string;
-  readonly wood: string;
   readonly leek: string;
   readonly leekTint: string;
   readonly lamp: string;
@@ -25,7 +24,6 @@ export function readChartColours(page: HTMLElement): ChartColours {
     sheet: token('--sheet'),
     sunk: token('--sunk'),
     edge: token('--edge'),
-    wood: token('--wood'),
     leek: token('--leek'),
     leekTint: token('--leek-tint'),
     lamp: token('--lamp'),

@@ -123,6 +123,8 @@ function valueAxis(unit: string, index: number, colours: ChartColours): YAXisCom
     scale: true,
     splitNumber: 3,
     position: index === 0 ? 'left' : 'right',
+    axisLine: { show: false },
+    axisTick: { show: false },
     axisLabel: { color: colours.secondInk, formatter: (value: number) => axisNumber(value) },
     splitLine: { show: index === 0, lineStyle: { color: colours.rule, width: 0.8 } },
     name: index === 0 ? undefined : unit,
@@ -136,7 +138,7 @@ function axisNumber(value: number): string {
 }
 
 function lineColour(index: number, colours: ChartColours): string {
-  return [colours.ink, colours.leek, colours.wood, colours.secondInk][index % 4] ?? colours.ink;
+  return [colours.ink, colours.leek, colours.secondInk, colours.edge][index % 4] ?? colours.ink;
 }
 
 function lineSeries(

@@ -10,6 +10,12 @@ export function spanShownBy(option: unknown): ChartSpan | null {
   return startValue === undefined || endValue === undefined ? null : { from: startValue, to: endValue };
 }
 
+/** Whether two spans are drawn alike: ECharts keeps its zoom in per cent, which rounds. */
+export function isSameSpan(one: ChartSpan, other: ChartSpan): boolean {
+  const tolerance = (one.to - one.from) / 10_000;
+  return Math.abs(one.from - other.from) <= tolerance && Math.abs(one.to - other.to) <= tolerance;
+}
+
 /** A span around the same middle, longer or shorter, kept within the whole and to ten minutes or more. */
 export function zoomedSpan(shown: ChartSpan, whole: ChartSpan, factor: number): ChartSpan {
   const length = Math.max(shortestMs, (shown.to - shown.from) * factor);

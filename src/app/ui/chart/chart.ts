@@ -6,8 +6,10 @@ import {
   computed,
   DestroyRef,
   ElementRef,
+  effect,
   inject,
   input,
+  model,
   signal,
   untracked,
 } from '@angular/core';
@@ -24,12 +26,13 @@ import { chartOption, zoomOption } from './chart-option';
 import { chartSummary } from './chart-summary';
 import { chartCsv, chartTable } from './chart-table';
 import { ChartNumbers } from './chart-numbers';
-import { spanShownBy, movedSpan, zoomedSpan } from './chart-zoom';
+import { isSameSpan, movedSpan, spanShownBy, zoomedSpan } from './chart-zoom';
 import { saveFile } from './save-file';
 
 /**
  * Lines over time in the room's own time: the wanted range as a band that steps with the lamps, lamp hours on top,
  * what is outside drawn heavier, gaps left open. Its numbers can be read as a table and saved.
+ * A heading may be projected; it stands before the buttons.
  */
 @Component({
   selector: 'app-chart',
@@ -62,11 +65,12 @@ export class Chart {
   readonly marks = input<readonly ChartMark[]>([]);
   /** The span to show; null for as far as the lines reach. */
   readonly span = input<ChartSpan | null>(null);
+  /** The part of the span that is zoomed to; null for all of it. Charts bound to one signal zoom together. */
+  readonly zoom = model<ChartSpan | null>(null);
 
   private readonly page = inject(DOCUMENT).documentElement;
   private readonly theme = inject(ThemeChoice);
   private readonly breadth = signal(640);
-  private readonly zoom = signal<ChartSpan | null>(null);
   private instance: ECharts | null = null;
 
   protected readonly isTableShown = signal(false);
@@ -118,6 +122,10 @@ export class Chart {
     });
     afterNextRender(() => watcher.observe(host));
     inject(DestroyRef).onDestroy(() => watcher.disconnect());
+    effect(() => {
+      this.zoom();
+      untracked(() => this.takeOverZoom());
+    });
   }
 
   protected keepInstance(instance: ECharts): void {
@@ -128,7 +136,8 @@ export class Chart {
     const zoom = spanShownBy(this.instance?.getOption());
     const { from, to } = this.fullSpan();
     const isWhole = zoom === null || (zoom.from <= from && zoom.to >= to);
-    this.zoom.set(isWhole ? null : zoom);
+    const shown = isWhole ? { from, to } : zoom;
+    if (!isSameSpan(shown, this.shown())) this.zoom.set(isWhole ? null : zoom);
   }
 
   protected zoomBy(factor: number): void {
@@ -160,6 +169,12 @@ export class Chart {
       type: 'text/csv;charset=utf-8',
     });
     saveFile(`${this.title()}.csv`, file);
+  }
+
+  /** Zooms to where another chart was zoomed. */
+  private takeOverZoom(): void {
+    const drawn = spanShownBy(this.instance?.getOption());
+    if (drawn !== null && !isSameSpan(drawn, this.shown())) this.show(this.shown());
   }
 
   private show({ from, to }: ChartSpan): void {

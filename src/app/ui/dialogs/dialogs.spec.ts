@@ -2,6 +2,7 @@ import { TestbedHarnessEnvironment } from '@angular/cdk/testing/testbed';
 import type { HarnessLoader } from '@angular/cdk/testing';
 import { Component, inject } from '@angular/core';
 import { TestBed } from '@angular/core/testing';
+import { MATERIAL_ANIMATIONS } from '@angular/material/core';
 import { MatButtonHarness } from '@angular/material/button/testing';
 import { MatDialogHarness } from '@angular/material/dialog/testing';
 import { MatSnackBarHarness } from '@angular/material/snack-bar/testing';
@@ -26,6 +27,9 @@ let loader: HarnessLoader;
 let host: Host;
 
 beforeEach(() => {
+  TestBed.configureTestingModule({
+    providers: [{ provide: MATERIAL_ANIMATIONS, useValue: { animationsDisabled: true } }],
+  });
   const fixture = TestBed.createComponent(Host);
   loader = TestbedHarnessEnvironment.documentRootLoader(fixture);
   host = fixture.componentInstance;

@@ -64,6 +64,17 @@ export class MeasureStrip {
     return { from, width: Math.max(0, to - from) };
   });
 
+  /** What stands under the strip, in order. */
+  protected readonly nameParts = computed(() => {
+    const parts = [
+      { kind: 'what', text: this.name() },
+      { kind: 'deviation', text: this.deviation() },
+      { kind: 'age', text: this.ageText() },
+      { kind: 'doubtful', text: this.flagged() ? 'doubtful' : null },
+    ];
+    return parts.filter(({ text }) => text !== null);
+  });
+
   protected readonly spoken = computed(() => {
     const value = this.value();
     if (value === null) return `${this.name()}: no reading`;

@@ -101,6 +101,17 @@ describe('plants along a board', () => {
     expect(plants.length).toBeLessThan(60);
   });
 
+  it('leave a small planting whole beside a flat of hundreds', () => {
+    const { plants } = trayLayout(
+      [
+        { form: 'hook', family: 'leek', count: 7 },
+        { form: 'sown', family: 'onion', count: 600 },
+      ],
+      408,
+    );
+    expect(plants.filter(({ form }) => form === 'hook')).toHaveLength(7);
+  });
+
   it('are as many as there are where they find room', () => {
     expect(trayLayout([{ form: 'fruiting', family: 'tomato', count: 6 }], 408).plants).toHaveLength(6);
   });

@@ -44,8 +44,8 @@ interface Demand {
 }
 
 /**
- * Lays plantings side by side along a board. Where there are more plants than find room, each planting is thinned by
- * the same share, never below one.
+ * Lays plantings side by side along a board. Where there are more plants than find room, the largest plantings are
+ * thinned first, never below one.
  *
  * @param breadth - Breadth of the board, in the units of the drawings.
  */
@@ -72,12 +72,18 @@ function demandOf(planting: TrayPlanting): Demand {
 }
 
 function thinned(demands: readonly Demand[], breadth: number): readonly Demand[] {
-  const wanted = demands.reduce((sum, { spacing, count }) => sum + spacing * count, 0);
-  if (wanted <= breadth) return demands;
-  return demands.map((demand) => ({
-    ...demand,
-    count: Math.max(1, Math.floor((demand.count * breadth) / wanted)),
-  }));
+  const need = ({ spacing, count }: Demand): number => spacing * count;
+  // The modest choose first, so that a few seedlings stay whole beside a flat of hundreds.
+  const byNeed = [...demands].sort((a, b) => need(a) - need(b));
+  let left = breadth;
+  const counts = new Map(
+    byNeed.map((demand, index) => {
+      const share = Math.min(need(demand), left / (byNeed.length - index));
+      left -= share;
+      return [demand, Math.max(1, Math.floor(share / demand.spacing + 1e-9))];
+    }),
+  );
+  return demands.map((demand) => ({ ...demand, count: counts.get(demand) ?? 1 }));
 }
 
 function stand(
