@@ -5,15 +5,12 @@ import { TestBed } from '@angular/core/testing';
 import { MATERIAL_ANIMATIONS } from '@angular/material/core';
 import { MatButtonHarness } from '@angular/material/button/testing';
 import { MatDialogHarness } from '@angular/material/dialog/testing';
-import { MatSnackBarHarness } from '@angular/material/snack-bar/testing';
 import { firstValueFrom } from 'rxjs';
 import { Asking } from './asking';
-import { Toast } from './toast';
 
 @Component({ template: '' })
 class Host {
   readonly asking = inject(Asking);
-  readonly toast = inject(Toast);
 }
 
 const question = {
@@ -59,21 +56,5 @@ describe('asking before a deed', () => {
     host.asking.ask(question).subscribe();
     const back = await loader.getHarness(MatButtonHarness.with({ text: 'Leave it' }));
     expect(await back.isFocused()).toBe(true);
-  });
-});
-
-describe('a toast', () => {
-  it('says what was done, without an action', async () => {
-    host.toast.say('Watered A3');
-    const toast = await loader.getHarness(MatSnackBarHarness);
-    expect(await toast.getMessage()).toBe('Watered A3');
-    expect(await toast.hasAction()).toBe(false);
-  });
-
-  it('undoes once when told to', async () => {
-    let undone = 0;
-    host.toast.sayWithUndo('Watered A3', () => (undone += 1));
-    await (await loader.getHarness(MatSnackBarHarness)).dismissWithAction();
-    expect(undone).toBe(1);
   });
 });
