@@ -1,0 +1,76 @@
+import type { LampHoursPlan } from '@shared/climate/lamp-hours';
+import type { Quantity } from '@shared/climate/quantity';
+import type { LampHours, WantedRange } from '@shared/contracts/rooms';
+import { In } from 'typeorm';
+import type { Tx } from '../database/transactions';
+import { LampPlanEntity } from './lamp-plan-entity';
+import { WantedRangeEntity } from './wanted-range-entity';
+
+/** A plan with whose it is. */
+export interface StoredLampPlan extends LampHoursPlan {
+  readonly shelfId: string;
+  readonly timeZone: string;
+}
+
+/** Lamp hours with their history, and wanted ranges. */
+export class ShelfPlansStore {
+  /** Every plan of shelves that begins before an instant, in order, with the time zone of its room. */
+  async lampPlans(tx: Tx, shelfIds: readonly string[], before: Date): Promise<StoredLampPlan[]> {
+    const rows: (Omit<StoredLampPlan, 'validFrom'> & { validFrom: Date })[] = await tx.query(
+      `SELECT shelf_id AS "shelfId", valid_from AS "validFrom", switches_on AS "switchesOn",
+         switches_off AS "switchesOff", room.time_zone AS "timeZone"
+       FROM lamp_plan JOIN shelf ON shelf.id = shelf_id JOIN room ON room.id = shelf.room_id
+       WHERE shelf_id = ANY($1) AND valid_from < $2 ORDER BY shelf_id, valid_from`,
+      [shelfIds, before],
+    );
+    return rows.map((row) => ({ ...row, validFrom: row.validFrom.getTime() }));
+  }
+
+  /** Lamp hours from an instant on; a plan of the same instant is replaced. */
+  async setLampHours(tx: Tx, shelfId: string, validFrom: Date, hours: LampHours): Promise<void> {
+    await tx.upsert(LampPlanEntity, { shelfId, validFrom, ...hours }, ['shelfId', 'validFrom']);
+  }
+
+  /** What shelves want, by shelf and quantity. */
+  async wantedRanges(tx: Tx, shelfIds: readonly string[]): Promise<(WantedRange & { shelfId: string })[]> {
+    const ranges = await tx.find(WantedRangeEntity, {
+      where: { shelfId: In([...shelfIds]) },
+      order: { shelfId: 'ASC', quantity: 'ASC' },
+    });
+    return ranges.map((range) => ({
+      shelfId: range.shelfId,
+      quantity: range.quantity,
+      lampsOn: { low: range.lampsOnLow, high: range.lampsOnHigh },
+      lampsOff: { low: range.lampsOffLow, high: range.lampsOffHigh },
+      holdMinutes: range.holdMinutes,
+      clearingMargin: range.clearingMargin,
+      reason: range.reason,
+    }));
+  }
+
+  /** Sets what a shelf wants of one quantity. */
+  async setWantedRange(tx: Tx, shelfId: string, wanted: WantedRange): Promise<void> {
+    const { quantity, lampsOn, lampsOff, holdMinutes, clearingMargin, reason } = wanted;
+    await tx.upsert(
+      WantedRangeEntity,
+      {
+        shelfId,
+        quantity,
+        lampsOnLow: lampsOn.low,
+        lampsOnHigh: lampsOn.high,
+        lampsOffLow: lampsOff.low,
+        lampsOffHigh: lampsOff.high,
+        holdMinutes,
+        clearingMargin,
+        reason,
+      },
+      ['shelfId', 'quantity'],
+    );
+  }
+
+  /** Takes a wanted range away; false when there was none. */
+  async clearWantedRange(tx: Tx, shelfId: string, quantity: Quantity): Promise<boolean> {
+    const { affected } = await tx.delete(WantedRangeEntity, { shelfId, quantity });
+    return affected === 1;
+  }
+}

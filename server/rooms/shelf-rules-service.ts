@@ -1,0 +1,76 @@
+import type { Quantity } from '@shared/climate/quantity';
+import type { LampHours, Shelf, WantedRange } from '@shared/contracts/rooms';
+import type { RoomAuthor } from '../audit/room-author';
+import type { RoomChanges } from '../audit/room-changes';
+import type { Clock } from '../clock';
+import type { Transactions, Tx } from '../database/transactions';
+import { notFound } from '../http/request-problem';
+import type { RoomHooks } from './room-hooks';
+import type { RoomsStore } from './rooms-store';
+import type { ShelfPlansService } from './shelf-plans-service';
+import type { ShelfPlansStore } from './shelf-plans-store';
+
+/** What {@link ShelfRulesService} works with. */
+export interface ShelfRulesParts {
+  readonly transactions: Transactions;
+  readonly rooms: RoomsStore;
+  readonly plans: ShelfPlansStore;
+  readonly reader: ShelfPlansService;
+  readonly changes: RoomChanges;
+  readonly hooks: Pick<RoomHooks, 'onRulesChanged'>;
+  readonly now: Clock;
+}
+
+/** Sets what alerts go by: lamp hours and wanted ranges. */
+export class ShelfRulesService {
+  constructor(private readonly parts: ShelfRulesParts) {}
+
+  /** What a shelf wants; 404 when the room has no such shelf. */
+  async wantedRanges(roomId: string, shelfId: string): Promise<WantedRange[]> {
+    const { transactions, rooms, reader, now } = this.parts;
+    const tx = transactions.plain;
+    await rooms.shelf(tx, roomId, shelfId, now());
+    return (await reader.wantedRangesOf(tx, [shelfId])).get(shelfId) ?? [];
+  }
+
+  /** Sets the lamp hours of a shelf from now on; what was planned before stays in its history. */
+  setLampHours(by: RoomAuthor, shelfId: string, hours: LampHours): Promise<Shelf> {
+    const { rooms, plans, now } = this.parts;
+    return this.change(by, shelfId, 'lamp-hours.set', { ...hours }, async (tx) => {
+      const at = now();
+      await plans.setLampHours(tx, shelfId, at, hours);
+      return rooms.shelf(tx, by.roomId, shelfId, at);
+    });
+  }
+
+  /** Sets what a shelf wants of one quantity. */
+  setWantedRange(by: RoomAuthor, shelfId: string, wanted: WantedRange): Promise<WantedRange> {
+    return this.change(by, shelfId, 'wanted-range.set', { ...wanted }, async (tx) => {
+      await this.parts.plans.setWantedRange(tx, shelfId, wanted);
+      return wanted;
+    });
+  }
+
+  /** Takes a wanted range away; 404 when there is none. */
+  clearWantedRange(by: RoomAuthor, shelfId: string, quantity: Quantity): Promise<void> {
+    return this.change(by, shelfId, 'wanted-range.clear', { quantity }, async (tx) => {
+      if (!(await this.parts.plans.clearWantedRange(tx, shelfId, quantity))) throw notFound('wanted range');
+    });
+  }
+
+  private change<T>(
+    by: RoomAuthor,
+    shelfId: string,
+    action: string,
+    detail: Readonly<Record<string, unknown>>,
+    work: (tx: Tx) => Promise<T>,
+  ): Promise<T> {
+    const { changes, rooms, hooks } = this.parts;
+    return changes.make(by, async (tx) => {
+      await rooms.lockShelf(tx, by.roomId, shelfId);
+      const result = await work(tx);
+      await hooks.onRulesChanged(tx, shelfId);
+      return { result, action, subjectId: shelfId, detail };
+    });
+  }
+}
