@@ -1,5 +1,5 @@
-import { provideHttpClient, withFetch } from '@angular/common/http';
-import { inject, provideAppInitializer, type ApplicationConfig } from '@angular/core';
+import { provideHttpClient } from '@angular/common/http';
+import { ErrorHandler, inject, provideAppInitializer, type ApplicationConfig } from '@angular/core';
 import { MatIconRegistry } from '@angular/material/icon';
 import {
   provideRouter,
@@ -8,9 +8,10 @@ import {
   withInMemoryScrolling,
 } from '@angular/router';
 import { appRoutes } from './app-routes';
+import { UnexpectedErrors } from './core/unexpected-errors';
 import { PageTitle } from './page-title';
 
-/** What the whole application shares: routes, HTTP and the icon font. */
+/** What the whole application shares: routes, HTTP, the icon font and what becomes of errors. */
 export const appConfig: ApplicationConfig = {
   providers: [
     provideRouter(
@@ -18,10 +19,12 @@ export const appConfig: ApplicationConfig = {
       withComponentInputBinding(),
       withInMemoryScrolling({ scrollPositionRestoration: 'enabled', anchorScrolling: 'enabled' }),
     ),
-    provideHttpClient(withFetch()),
+    // Without fetch, which can't say how far an upload has come.
+    provideHttpClient(),
     provideAppInitializer(() => {
       inject(MatIconRegistry).setDefaultFontSetClass('icon');
     }),
+    { provide: ErrorHandler, useClass: UnexpectedErrors },
     { provide: TitleStrategy, useExisting: PageTitle },
   ],
 };

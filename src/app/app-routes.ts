@@ -1,9 +1,36 @@
 import type { Routes } from '@angular/router';
+import { signedInGuard, signedOutGuard } from './core/signed-in-guard';
+
+const signedIn = { canActivate: [signedInGuard] };
 
 /**
  * Every page, loaded when it is first visited. A destination of the same path appears in the navigation as soon
  * as its route stands here.
  */
 export const appRoutes: Routes = [
+  { path: '', pathMatch: 'full', redirectTo: 'room' },
+  {
+    path: 'room',
+    title: 'Room',
+    ...signedIn,
+    loadComponent: () => import('./room/room').then((m) => m.Room),
+  },
+  {
+    path: 'account',
+    title: 'Your account',
+    ...signedIn,
+    loadComponent: () => import('./account/account').then((m) => m.AccountPage),
+  },
+  {
+    path: 'sign-in',
+    title: 'Sign in',
+    canActivate: [signedOutGuard],
+    loadComponent: () => import('./sign-in/sign-in').then((m) => m.SignIn),
+  },
+  {
+    path: 'unreachable',
+    title: 'No answer',
+    loadComponent: () => import('./sign-in/unreachable').then((m) => m.Unreachable),
+  },
   { path: '**', title: 'Not found', loadComponent: () => import('./not-found').then((m) => m.NotFound) },
 ];

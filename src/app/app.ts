@@ -1,15 +1,27 @@
-import { ChangeDetectionStrategy, Component, inject, signal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, inject } from '@angular/core';
 import { RouterOutlet } from '@angular/router';
 import { appRoutes } from './app-routes';
+import { LiveState } from './core/live-state';
+import { Session } from './core/session';
 import { destinationsWithin } from './destinations';
 import { HeadingFocus } from './heading-focus';
 import { AppFrame } from './ui/frame/app-frame';
+import type { RoomChoice } from './ui/frame/destination';
 
 /** The shell of the application: the frame, and the page that the address names. */
 @Component({
   selector: 'app-root',
   template: `
-    <app-frame [destinations]="destinations" [personName]="personName()">
+    <app-frame
+      accountLink="/account"
+      [destinations]="destinations"
+      [personName]="personName()"
+      [roomName]="roomName()"
+      [otherRooms]="otherRooms()"
+      [connection]="connection()"
+      (roomChosen)="chooseRoom($event)"
+      (signOutChosen)="signOut()"
+    >
       <router-outlet />
     </app-frame>
   `,
@@ -17,10 +29,33 @@ import { AppFrame } from './ui/frame/app-frame';
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class App {
+  private readonly session = inject(Session);
+  private readonly liveState = inject(LiveState);
+
   protected readonly destinations = destinationsWithin(appRoutes);
-  protected readonly personName = signal<string | null>(null);
+  protected readonly personName = computed(() => this.session.account()?.name ?? null);
+  protected readonly roomName = computed(() => this.session.room()?.roomName ?? null);
+  protected readonly otherRooms = computed(() =>
+    (this.session.account()?.memberships ?? [])
+      .filter(({ roomId }) => roomId !== this.session.roomId())
+      .map(({ roomId, roomName }) => ({ id: roomId, name: roomName })),
+  );
+  /** A connection that was never there yet is not missed. */
+  protected readonly connection = computed(() => {
+    const liveness = this.liveState.now();
+    return liveness === 'connecting' ? 'live' : liveness;
+  });
 
   constructor() {
     inject(HeadingFocus);
+  }
+
+  protected chooseRoom({ id }: RoomChoice): void {
+    this.session.chooseRoom(id);
+  }
+
+  protected signOut(): void {
+    // Nobody else waits for it: a failure is said by the application's error handler.
+    this.session.signOut().subscribe();
   }
 }

@@ -1,3 +1,4 @@
+import { silenceKinds, type AlertKind } from '@shared/alerts/alert-rule';
 import {
   describeEpisode,
   type EpisodeDescription,
@@ -35,4 +36,9 @@ export function describeAlert(alert: Alert, formatters: EpisodeFormatters, now: 
 
 function instantOrNull(at: string | null): number | null {
   return at === null ? null : Date.parse(at);
+}
+
+/** Whether an alert is about readings that don't come, and so has no value. */
+export function isSilenceKind(kind: AlertKind): boolean {
+  return (silenceKinds as readonly AlertKind[]).includes(kind);
 }

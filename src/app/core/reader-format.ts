@@ -1,0 +1,40 @@
+import { computed, inject, Injectable } from '@angular/core';
+import type { EpisodeDescription } from '@shared/alerts/describe-episode';
+import type { Quantity } from '@shared/climate/quantity';
+import type { Alert } from '@shared/contracts/alerts';
+import { episodeFormatters } from '@shared/format/episode-formatters';
+import { formatQuantity } from '@shared/format/quantities';
+import { formatTime, sayWhen, type Instant } from '@shared/format/room-time';
+import { describeAlert } from './describe-alert';
+import { RoomClock } from './room-clock';
+import { Session } from './session';
+
+/** Says values, instants and alerts in the reader's unit and the room's time zone. Templates follow its signals. */
+@Injectable({ providedIn: 'root' })
+export class ReaderFormat {
+  private readonly session = inject(Session);
+  private readonly clock = inject(RoomClock);
+  private readonly episodes = computed(() =>
+    episodeFormatters(this.session.temperatureUnit(), this.session.timeZone(), this.clock.calmNow()),
+  );
+
+  /** A stored value with its unit: "28.3 °C"; a dash for null. */
+  value(quantity: Quantity, value: number | null): string {
+    return formatQuantity(quantity, value, this.session.temperatureUnit());
+  }
+
+  /** The time of day in the room: "14:20". */
+  time(at: Instant): string {
+    return formatTime(at, this.session.timeZone());
+  }
+
+  /** When something was, as a person says it today: "14:20", "yesterday 14:20". */
+  when(at: Instant): string {
+    return sayWhen(at, this.clock.calmNow(), this.session.timeZone());
+  }
+
+  /** An alert in words. */
+  describe(alert: Alert): EpisodeDescription {
+    return describeAlert(alert, this.episodes(), this.clock.calmNow());
+  }
+}

@@ -1,0 +1,54 @@
+import { ChangeDetectionStrategy, Component, computed, inject, input, output } from '@angular/core';
+import { MatButton } from '@angular/material/button';
+import { MatIcon } from '@angular/material/icon';
+import { RouterLink } from '@angular/router';
+import { isSilenceKind } from '../../core/describe-alert';
+import type { Alert } from '@shared/contracts/alerts';
+import { formatDuration } from '@shared/format/room-time';
+import { ReaderFormat } from '../../core/reader-format';
+import { RoomClock } from '../../core/room-clock';
+import { alertLook } from '../../ui/note-line/alert-look';
+
+/** What is wrong in the room now, the newest first, with a way to say "I have seen it". */
+@Component({
+  selector: 'app-needs-a-look',
+  templateUrl: './needs-a-look.html',
+  styleUrl: './needs-a-look.scss',
+  imports: [MatButton, MatIcon, RouterLink],
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class NeedsALook {
+  readonly alerts = input.required<readonly Alert[]>();
+  /** Whether the person may acknowledge. */
+  readonly mayAcknowledge = input(false);
+  /** Alerts whose acknowledgement is under way. */
+  readonly busyIds = input<ReadonlySet<string>>(new Set());
+
+  readonly acknowledged = output<Alert>();
+
+  private readonly format = inject(ReaderFormat);
+  private readonly clock = inject(RoomClock);
+
+  protected readonly items = computed(() =>
+    this.alerts().map((alert) => ({
+      alert,
+      ...alertLook(alert.kind),
+      title: this.format.describe(alert).title,
+      detail: this.detail(alert),
+      seen: this.seen(alert),
+    })),
+  );
+
+  /** "26 min · peak 29.1 °C · mail sent 14:06" */
+  private detail(alert: Alert): string {
+    const parts = [formatDuration(this.clock.calmNow() - Date.parse(alert.beganAt))];
+    if (!isSilenceKind(alert.kind)) parts.push(`peak ${this.format.value(alert.quantity, alert.peakValue)}`);
+    if (alert.toldAt !== null) parts.push(`mail sent ${this.format.when(alert.toldAt)}`);
+    return parts.join(' · ');
+  }
+
+  private seen({ acknowledgedAt, acknowledgedByName }: Alert): string | null {
+    if (acknowledgedAt === null) return null;
+    return `Seen by ${acknowledgedByName ?? 'a former member'}, ${this.format.when(acknowledgedAt)}`;
+  }
+}

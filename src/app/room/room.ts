@@ -1,0 +1,123 @@
+import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
+import { MatDialog } from '@angular/material/dialog';
+import type { Alert } from '@shared/contracts/alerts';
+import type { ShelfEvent } from '@shared/contracts/care';
+import { finalize, type Observable } from 'rxjs';
+import { failureText } from '../core/failure-text';
+import { Notices } from '../core/notices';
+import { ReaderFormat } from '../core/reader-format';
+import { Session } from '../core/session';
+import { NoteLine } from '../ui/note-line/note-line';
+import { EmptyState } from '../ui/states/empty-state';
+import { ErrorState } from '../ui/states/error-state';
+import { RoomBoard } from './board/room-board';
+import { NeedsALook } from './needs-a-look/needs-a-look';
+import { ObservationDialog, type ObservationPlace } from './observation-dialog/observation-dialog';
+import { RoomHeading } from './room-heading/room-heading';
+import { RoomSkeleton } from './room-skeleton/room-skeleton';
+import { ScenarioPanel } from './scenario-panel/scenario-panel';
+import { ShelfBay } from './shelf-bay/shelf-bay';
+import { TodaysCare, type Tick } from './todays-care/todays-care';
+
+/** The room as it stands: its racks, what needs a look, and today's care. */
+@Component({
+  selector: 'app-room',
+  templateUrl: './room.html',
+  styleUrl: './room.scss',
+  imports: [
+    EmptyState,
+    ErrorState,
+    NeedsALook,
+    NoteLine,
+    RoomHeading,
+    RoomSkeleton,
+    ScenarioPanel,
+    ShelfBay,
+    TodaysCare,
+  ],
+  providers: [RoomBoard],
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class Room {
+  private readonly room = inject(RoomBoard);
+  private readonly session = inject(Session);
+  private readonly notices = inject(Notices);
+  private readonly format = inject(ReaderFormat);
+  private readonly dialog = inject(MatDialog);
+
+  protected readonly board = this.room.board;
+  protected readonly alertsByShelf = this.room.alertsByShelf;
+  protected readonly hasRoom = computed(() => this.session.room() !== null);
+  protected readonly isHelper = computed(() => this.session.may('helper'));
+  protected readonly isKeeper = computed(() => this.session.may('keeper'));
+  /** The same list every time, so that a quiet shelf is not drawn anew. */
+  protected readonly none: readonly Alert[] = [];
+  /** Alerts and tasks that are being changed. */
+  protected readonly busyIds = signal<ReadonlySet<string>>(new Set());
+
+  protected readonly problem = computed(() => {
+    const failure = this.room.failure();
+    return failure === null ? null : failureText(failure);
+  });
+
+  protected readonly day = computed(() => {
+    const board = this.board();
+    if (board === null) return null;
+    return { today: board.today, startAt: Date.parse(board.dayStart), endAt: Date.parse(board.dayEnd) };
+  });
+
+  protected readonly shelves = computed(() => this.board()?.racks.flatMap((rack) => rack.shelves) ?? []);
+  protected readonly shelfLabels = computed(() => this.shelves().map(({ label }) => label));
+
+  /** What is read out: an alert that has just opened, or that has just cleared. */
+  protected readonly news = computed(() => {
+    const alert = this.room.news();
+    if (alert === null) return '';
+    const { title } = this.format.describe(alert);
+    return alert.clearedAt === null ? `Needs a look: ${title}.` : `Over: ${title}.`;
+  });
+
+  protected refresh(): void {
+    this.room.refresh();
+  }
+
+  protected acknowledge(alert: Alert): void {
+    this.carryOut(alert.id, this.room.acknowledge(alert)).subscribe({
+      error: (error: unknown) => this.notices.sayFailure(error),
+    });
+  }
+
+  protected tick({ task, isDone }: Tick): void {
+    this.carryOut(task.id, this.room.tick(task, isDone)).subscribe({
+      next: (changed) => {
+        if (!isDone) return;
+        this.notices
+          .sayUndoable(`Ticked: ${task.title}`)
+          .subscribe(() => this.tick({ task: changed, isDone: false }));
+      },
+      error: (error: unknown) => this.notices.sayFailure(error),
+    });
+  }
+
+  protected noteObservation(): void {
+    const roomId = this.session.roomId();
+    if (roomId === null) return;
+    this.dialog
+      .open<ObservationDialog, ObservationPlace, ShelfEvent>(ObservationDialog, {
+        data: { roomId, shelves: this.shelves() },
+        width: '480px',
+        maxWidth: 'calc(100vw - 24px)',
+      })
+      .afterClosed()
+      .subscribe((event) => {
+        if (event !== undefined) this.notices.say('Noted');
+      });
+  }
+
+  private carryOut<T>(id: string, deed: Observable<T>): Observable<T> {
+    this.busyIds.update((ids) => new Set([...ids, id]));
+    return deed.pipe(
+      finalize(() => this.busyIds.update((ids) => new Set([...ids].filter((busy) => busy !== id)))),
+    );
+  }
+}

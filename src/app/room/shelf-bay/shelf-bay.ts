@@ -1,0 +1,87 @@
+import { ChangeDetectionStrategy, Component, computed, inject, input } from '@angular/core';
+import { RouterLink } from '@angular/router';
+import type { Alert } from '@shared/contracts/alerts';
+import type { BoardShelf } from '@shared/contracts/board';
+import { ReaderFormat } from '../../core/reader-format';
+import { RoomClock } from '../../core/room-clock';
+import { Session } from '../../core/session';
+import { LampBar } from '../../ui/lamp-bar/lamp-bar';
+import { LampDay } from '../../ui/lamp-day/lamp-day';
+import { MeasureStrip } from '../../ui/measure-strip/measure-strip';
+import { alertLook } from '../../ui/note-line/alert-look';
+import { NoteLine } from '../../ui/note-line/note-line';
+import { PlantLabel } from '../../ui/plant-label/plant-label';
+import { plantLook } from '../../ui/plants/crop-look';
+import { PlantTray } from '../../ui/plants/plant-tray';
+import { dayParts, minuteOfDay, type DaySpan } from './day-minutes';
+import { plantingSize, plantingWords } from './planting-words';
+import { firstLeafNote, shelfSituation } from './shelf-situation';
+import { shelfStrips } from './shelf-strips';
+
+/** The room's day, as a bay needs it. */
+export interface BayDay extends DaySpan {
+  /** `YYYY-MM-DD`. */
+  readonly today: string;
+}
+
+/** One shelf as it stands in its rack: the lamp above, the plants on the board, what is measured between. */
+@Component({
+  selector: 'app-shelf-bay',
+  templateUrl: './shelf-bay.html',
+  styleUrl: './shelf-bay.scss',
+  imports: [LampBar, LampDay, MeasureStrip, NoteLine, PlantLabel, PlantTray, RouterLink],
+  host: { '[class.lit]': 'shelf().now.lampDay.lit === true' },
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class ShelfBay {
+  readonly shelf = input.required<BoardShelf>();
+  /** Open alerts of this shelf. */
+  readonly alerts = input<readonly Alert[]>([]);
+  readonly day = input.required<BayDay>();
+
+  private readonly session = inject(Session);
+  private readonly clock = inject(RoomClock);
+  private readonly format = inject(ReaderFormat);
+
+  protected readonly situation = computed(() => shelfSituation(this.shelf()));
+
+  protected readonly strips = computed(() =>
+    shelfStrips(this.shelf(), this.session.temperatureUnit(), this.clock.calmNow()),
+  );
+
+  protected readonly light = computed(() => {
+    const { planned, measured } = this.shelf().now.lampDay;
+    const day = this.day();
+    return {
+      planned: dayParts(planned, day),
+      measured: dayParts(measured, day),
+      nowMinutes: minuteOfDay(this.clock.calmNow(), day),
+      dayMinutes: minuteOfDay(day.endAt, day),
+    };
+  });
+
+  protected readonly labels = computed(() =>
+    this.shelf().plantings.map((planting) => ({
+      ...planting,
+      note: plantingWords(planting, this.day().today),
+    })),
+  );
+
+  protected readonly plants = computed(() =>
+    this.shelf().plantings.map((planting) => ({
+      ...plantLook(planting),
+      count: planting.count,
+      size: plantingSize(planting, this.day().today),
+    })),
+  );
+
+  protected readonly notes = computed(() => {
+    const notes = this.alerts().map((alert) => {
+      const { sentence, tryThis } = this.format.describe(alert);
+      return { id: alert.id, ...alertLook(alert.kind), text: `${sentence} ${tryThis}` };
+    });
+    const text = firstLeafNote(this.shelf());
+    if (text === null) return notes;
+    return [...notes, { id: 'first-leaf', tone: 'leek' as const, icon: 'lightbulb', text }];
+  });
+}
