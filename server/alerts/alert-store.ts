@@ -172,6 +172,31 @@ export class AlertStore {
     ]);
   }
 
+  /** Ends the open alerts of a shelf whose quantity has no wanted range any more. */
+  async closeUnruled(tx: Tx, shelfId: string, at: Date): Promise<void> {
+    await tx.query(
+      `UPDATE alert SET ended_at = coalesce(ended_at, $2), cleared_at = $2
+       WHERE shelf_id = $1 AND cleared_at IS NULL AND kind IN ('aboveRange', 'belowRange')
+         AND NOT EXISTS (SELECT 1 FROM wanted_range w WHERE w.shelf_id = $1 AND w.quantity = alert.quantity)`,
+      [shelfId, at],
+    );
+  }
+
+  /** Ends the open alerts of a sensor and has its watches begin anew on the shelf where it is now. */
+  async restartWatches(tx: Tx, sensorId: string, state: AlertState, at: Date): Promise<void> {
+    await tx.query(
+      `UPDATE alert SET ended_at = coalesce(ended_at, $2), cleared_at = $2
+       WHERE sensor_id = $1 AND cleared_at IS NULL`,
+      [sensorId, at],
+    );
+    await tx.query(
+      `UPDATE alert_watch w SET state = $2::jsonb, shelf_id = coalesce(p.shelf_id, w.shelf_id)
+       FROM sensor s LEFT JOIN placement p ON p.sensor_id = s.id AND p.to_at IS NULL
+       WHERE w.sensor_id = $1 AND s.id = $1`,
+      [sensorId, JSON.stringify(state)],
+    );
+  }
+
   /** Episodes of a watch that began before an instant, the last one only, and all from then on. */
   async episodesAround(tx: Tx, watchId: string, at: number): Promise<Episode[]> {
     const rows: AlertRow[] = await tx.query(

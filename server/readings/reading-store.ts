@@ -205,6 +205,26 @@ export class ReadingStore {
     );
   }
 
+  /** Every sensor of a room. */
+  async sensorsOfRoom(tx: Tx, roomId: string): Promise<string[]> {
+    const rows: { id: string }[] = await tx.query('SELECT id FROM sensor WHERE room_id = $1', [roomId]);
+    return rows.map(({ id }) => id);
+  }
+
+  /** The sensors that are now on a shelf. */
+  async sensorsOnShelf(tx: Tx, shelfId: string): Promise<string[]> {
+    const rows: { sensor_id: string }[] = await tx.query(
+      'SELECT sensor_id FROM placement WHERE shelf_id = $1 AND to_at IS NULL',
+      [shelfId],
+    );
+    return rows.map((row) => row.sensor_id);
+  }
+
+  /** Makes every process read these streams anew. */
+  async reviseStates(tx: Tx, sensorIds: readonly string[]): Promise<void> {
+    await tx.query('UPDATE sensor_state SET revision = revision + 1 WHERE sensor_id = ANY($1)', [sensorIds]);
+  }
+
   /** Makes sure that the months of a span have their partitions. */
   async ensurePartitions(tx: Tx, from: number, to: number): Promise<void> {
     await tx.query('SELECT ensure_reading_partitions($1, $2)', [new Date(from), new Date(to)]);

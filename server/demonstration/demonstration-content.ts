@@ -1,0 +1,210 @@
+import type { Limits } from '@shared/contracts/rooms';
+import type { Role } from '@shared/contracts/people';
+import type { Quantity } from '@shared/climate/quantity';
+import type { CareKind } from '@shared/care/care-kind';
+import type { ShelfEventKind } from '@shared/care/shelf-event';
+import type { PlantHabit, PlantingStage } from '@shared/growing/planting-stage';
+import { STORY_DAYS_BEFORE } from '@shared/demonstration/kestrel-lane';
+
+// Everything here is invented: people, addresses, varieties and amounts.
+
+/** The password of everybody in the demonstration. It opens nothing but the demonstration. */
+export const demonstrationPassword = 'lamps on at six';
+
+/** The people of the demonstration room. */
+export const demonstrationPeople: readonly { name: string; email: string; role: Role }[] = [
+  { name: 'Maren Oduya', email: 'maren@example.org', role: 'keeper' },
+  { name: 'Tomas Kell', email: 'tomas@example.org', role: 'grower' },
+  { name: 'Jana Arkwright', email: 'jana@example.org', role: 'grower' },
+  { name: 'Pia Lindqvist', email: 'pia@example.org', role: 'helper' },
+  { name: 'Ravi Sandhill', email: 'ravi@example.org', role: 'helper' },
+  { name: 'Elin Frostad', email: 'elin@example.org', role: 'helper' },
+  { name: 'Oskar Brandt', email: 'oskar@example.org', role: 'viewer' },
+  { name: 'Nuala Byrne', email: 'nuala@example.org', role: 'viewer' },
+];
+
+/** The two racks, with the shelves of each from the top. */
+export const demonstrationRacks = [
+  { name: 'Rack A', note: 'window wall', shelves: ['A1', 'A2', 'A3', 'A4'] },
+  { name: 'Rack B', note: 'back wall', shelves: ['B1', 'B2', 'B3', 'B4'] },
+] as const;
+
+/** A planting of the demonstration, with days counted back from today. */
+export interface DemonstrationPlanting {
+  readonly shelf: string;
+  readonly crop: string;
+  readonly variety: string | null;
+  readonly habit: PlantHabit;
+  readonly count: number;
+  readonly stage: PlantingStage;
+  readonly startedDaysAgo: number;
+  readonly stageDaysAgo: number;
+}
+
+const { leekAndOnionSown, peppersSown } = STORY_DAYS_BEFORE;
+
+/** What grows. */
+export const demonstrationPlantings: readonly DemonstrationPlanting[] = [
+  planting('A1', 'Dwarf tomato', 'Amberbell', 'fruiting', 4, 'fruiting', 274, 190),
+  planting('A1', 'Dwarf tomato', 'Thimble Red', 'fruiting', 2, 'growingOn', 61, 30),
+  planting('A2', 'Basil', 'Broadleaf', 'bush', 3, 'growingOn', 84, 60),
+  planting('A2', 'Chives', null, 'blades', 5, 'growingOn', 420, 380),
+  planting('A2', 'Lemongrass', null, 'leafy', 3, 'growingOn', 210, 160),
+  planting('A3', 'Leek', 'Grey Heron', 'blades', 7, 'emerging', leekAndOnionSown, 0),
+  planting('A3', 'Onion, long-day', 'Harvest Moon', 'blades', 9, 'sown', leekAndOnionSown, leekAndOnionSown),
+  planting('A4', 'Sweet pepper', 'Lantern Yellow', 'fruiting', 6, 'sown', peppersSown, peppersSown),
+  planting('A4', 'Hot pepper', 'Little Ember', 'fruiting', 6, 'sown', peppersSown, peppersSown),
+  planting('B1', 'Strawberry', 'Evenfall', 'berry', 7, 'fruiting', 190, 95),
+  planting('B2', 'Potted citrus', 'Window Lemon', 'tree', 4, 'fruiting', 1290, 200),
+  planting('B2', 'Bay', null, 'bush', 2, 'growingOn', 2050, 1900),
+  planting('B3', 'Lettuce, cut-and-come', 'Small Hours', 'rosette', 12, 'growingOn', 44, 24),
+];
+
+function planting(
+  shelf: string,
+  crop: string,
+  variety: string | null,
+  habit: PlantHabit,
+  count: number,
+  stage: PlantingStage,
+  startedDaysAgo: number,
+  stageDaysAgo: number,
+): DemonstrationPlanting {
+  return { shelf, crop, variety, habit, count, stage, startedDaysAgo, stageDaysAgo };
+}
+
+/** What a shelf wants of a quantity, lamps on and lamps off. */
+export interface DemonstrationRange {
+  readonly shelf: string;
+  readonly quantity: Quantity;
+  readonly lampsOn: Limits;
+  readonly lampsOff: Limits;
+  readonly reason: string;
+}
+
+/** Wanted ranges: common practice, no source, set for this room. */
+export const demonstrationRanges: readonly DemonstrationRange[] = [
+  ...climate('A1', 'fruiting dwarf tomato', [20, 26, 15, 20], [45, 70, 48, 75], [0.8, 1.5, 0.4, 1.1]),
+  ...climate('A2', 'herbs in leaf', [18, 25, 15, 21], [45, 72, 48, 75], [0.7, 1.4, 0.4, 1.1]),
+  ...climate(
+    'A3',
+    'leek and onion before and at emergence',
+    [14, 24, 12, 24],
+    [70, 100, 70, 100],
+    [0, 0.7, 0, 0.7],
+  ),
+  range('A3', 'rootZoneTemperature', [14, 22, 14, 22], 'leek and onion seed'),
+  ...climate('A4', 'pepper seed under cover', [18, 28, 18, 28], [70, 100, 70, 100], [0, 0.7, 0, 0.7]),
+  range('A4', 'rootZoneTemperature', [24, 30, 24, 30], 'pepper seed on the mat'),
+  ...climate('B1', 'strawberry', [16, 23, 10, 18], [50, 76, 55, 82], [0.5, 1.2, 0.3, 0.9]),
+  ...climate('B2', 'potted citrus and bay', [17, 25, 13, 20], [45, 70, 45, 75], [0.6, 1.45, 0.4, 1.15]),
+  ...climate('B3', 'cut lettuce', [14, 22, 10, 18], [50, 78, 58, 84], [0.4, 1.1, 0.2, 0.8]),
+  range('B4', 'airTemperature', [5, 25, 5, 25], 'nothing grows here; frost and heat only'),
+];
+
+type Four = readonly [onLow: number, onHigh: number, offLow: number, offHigh: number];
+
+function climate(
+  shelf: string,
+  reason: string,
+  air: Four,
+  humidity: Four,
+  deficit: Four,
+): DemonstrationRange[] {
+  return [
+    range(shelf, 'airTemperature', air, reason),
+    range(shelf, 'relativeHumidity', humidity, reason),
+    range(shelf, 'vapourPressureDeficit', deficit, reason),
+  ];
+}
+
+function range(
+  shelf: string,
+  quantity: Quantity,
+  [onLow, onHigh, offLow, offHigh]: Four,
+  reason: string,
+): DemonstrationRange {
+  return {
+    shelf,
+    quantity,
+    lampsOn: { low: onLow, high: onHigh },
+    lampsOff: { low: offLow, high: offHigh },
+    reason,
+  };
+}
+
+/** A routine of the demonstration, with its person by e-mail. */
+export const demonstrationRoutines: readonly {
+  readonly shelf: string | null;
+  readonly kind: CareKind;
+  readonly title: string;
+  readonly detail: string;
+  readonly rule: string;
+  readonly startedDaysAgo: number;
+  readonly who: string;
+}[] = [
+  {
+    shelf: 'A3',
+    kind: 'water',
+    title: 'Water from below',
+    detail: 'About 1.2 L into the flat, until the top darkens; tip out what is left.',
+    rule: 'FREQ=DAILY;INTERVAL=2',
+    startedDaysAgo: 10,
+    who: 'maren@example.org',
+  },
+  {
+    shelf: 'A1',
+    kind: 'trim',
+    title: 'Trim and pick dwarf tomatoes',
+    detail: 'Take side shoots and yellow leaves; weigh what is picked.',
+    rule: 'FREQ=DAILY;INTERVAL=4',
+    startedDaysAgo: 96,
+    who: 'tomas@example.org',
+  },
+  {
+    shelf: 'B1',
+    kind: 'feed',
+    title: 'Feed strawberries',
+    detail: 'Half-strength feed, 2 L for the flat.',
+    rule: 'FREQ=WEEKLY',
+    startedDaysAgo: 92,
+    who: 'jana@example.org',
+  },
+  {
+    shelf: 'B2',
+    kind: 'inspect',
+    title: 'Look under the citrus leaves',
+    detail: 'Scale and mites sit along the ribs.',
+    rule: 'FREQ=WEEKLY',
+    startedDaysAgo: 84,
+    who: 'pia@example.org',
+  },
+  {
+    shelf: null,
+    kind: 'clean',
+    title: 'Wash flats and look for leaks',
+    detail: 'Both racks, from the top down.',
+    rule: 'FREQ=WEEKLY;INTERVAL=2',
+    startedDaysAgo: 98,
+    who: 'ravi@example.org',
+  },
+];
+
+/** Something that was done, for the charts' marks. */
+export const demonstrationEvents: readonly {
+  readonly shelf: string;
+  readonly daysAgo: number;
+  readonly at: string;
+  readonly kind: ShelfEventKind;
+  readonly text: string;
+}[] = [
+  { shelf: 'A1', daysAgo: 0, at: '00:10', kind: 'watered', text: 'Watered, 0.8 L' },
+  { shelf: 'A1', daysAgo: 4, at: '09:15', kind: 'picked', text: 'Trimmed, picked 212 g' },
+  { shelf: 'A1', daysAgo: 8, at: '09:40', kind: 'picked', text: 'Trimmed, picked 187 g' },
+  { shelf: 'A3', daysAgo: leekAndOnionSown, at: '10:00', kind: 'observed', text: 'Sown, covered, lamps off' },
+  { shelf: 'A3', daysAgo: 0, at: '00:20', kind: 'counted', text: 'First leeks are up' },
+  { shelf: 'A4', daysAgo: peppersSown, at: '11:00', kind: 'observed', text: 'Sown, covered, heat mat on' },
+  { shelf: 'B2', daysAgo: 23, at: '18:05', kind: 'observed', text: 'Air very dry beside the radiator' },
+  { shelf: 'B2', daysAgo: 21, at: '17:00', kind: 'observed', text: 'Radiator turned down' },
+  { shelf: 'B3', daysAgo: 6, at: '08:30', kind: 'picked', text: 'Second cut, 340 g' },
+];

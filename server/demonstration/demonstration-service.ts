@@ -1,0 +1,262 @@
+import { chmod, mkdir, readFile, writeFile } from 'node:fs/promises';
+import { dirname } from 'node:path';
+import { patienceDefaults } from '@shared/alerts/alert-defaults';
+import { simulatedRoom, type SimulatedRoom } from '@shared/contracts/simulation';
+import { kestrelLane } from '@shared/demonstration/kestrel-lane';
+import { dayBounds } from '@shared/series/room-days';
+import type { Clock } from '../clock';
+import type { Transactions, Tx } from '../database/transactions';
+import { deviceTokenHash, newDeviceToken } from '../devices/device-tokens';
+import { hashPassword } from '../people/passwords';
+import {
+  demonstrationEvents,
+  demonstrationPassword,
+  demonstrationPeople,
+  demonstrationPlantings,
+  demonstrationRacks,
+  demonstrationRanges,
+  demonstrationRoutines,
+} from './demonstration-content';
+import type { DemonstrationStore } from './demonstration-store';
+
+const DAY_MS = 86_400_000;
+/** Light sensors see light above this [µmol m⁻² s⁻¹]. */
+const LIT_ABOVE_UMOL = 5;
+const roomName = 'Kestrel Lane growing room';
+
+/** Fills an empty database with the invented room, once, and tells the simulator which room to play. */
+export class DemonstrationService {
+  constructor(
+    private readonly transactions: Transactions,
+    private readonly store: DemonstrationStore,
+    private readonly planTasks: (tx: Tx, roomId: string, from: string, to: string) => Promise<void>,
+    private readonly now: Clock,
+  ) {}
+
+  /**
+   * Fills the demonstration unless anybody is there already.
+   *
+   * @param devicesFile - Where the simulator reads its room and its tokens; written with rights for the owner only.
+   * @returns The id of the demonstration room, null when the database holds somebody else's room.
+   */
+  async fill(devicesFile: string): Promise<string | null> {
+    const held = await this.store.roomNamed(this.transactions.plain, roomName);
+    if (held !== null) return held;
+    if (await this.store.hasPeople(this.transactions.plain)) return null;
+    const passwordHash = await hashPassword(demonstrationPassword);
+    const room = await this.transactions.run((tx) => this.create(tx, passwordHash));
+    await mkdir(dirname(devicesFile), { recursive: true });
+    await writeFile(devicesFile, JSON.stringify(room, null, 2), { mode: 0o600 });
+    await chmod(devicesFile, 0o600); // An older file keeps its own rights when written over.
+    return room.roomId;
+  }
+
+  private async create(tx: Tx, passwordHash: string): Promise<SimulatedRoom> {
+    const now = this.now().getTime();
+    const plan = kestrelLane(now);
+    const roomId = await this.store.addRoom(tx, {
+      name: roomName,
+      timeZone: plan.timeZone,
+      latitudeDeg: plan.latitudeDeg,
+      longitudeDeg: plan.longitudeDeg,
+    });
+    const people = new Map<string, string>();
+    for (const person of demonstrationPeople) {
+      people.set(person.email, await this.store.addMember(tx, roomId, { ...person, passwordHash }));
+    }
+    const shelves = await this.addShelves(tx, roomId, plan);
+    await this.addRanges(tx, shelves);
+    const devices = await this.addDevices(tx, roomId, plan, shelves);
+    await this.addGrowing(tx, roomId, plan.timeZone, now, shelves);
+    await this.addCare(tx, roomId, plan.timeZone, now, shelves, people);
+    return simulatedRoom.parse({ ...plan, roomId, devices });
+  }
+
+  private async addShelves(tx: Tx, roomId: string, plan: Plan): Promise<Map<string, string>> {
+    const shelves = new Map<string, string>();
+    for (const [rackPosition, rack] of demonstrationRacks.entries()) {
+      const rackId = await this.store.addRack(tx, {
+        roomId,
+        name: rack.name,
+        note: rack.note,
+        position: rackPosition,
+      });
+      for (const [position, label] of rack.shelves.entries()) {
+        const shelfId = await this.store.addShelf(tx, {
+          roomId,
+          rackId,
+          label,
+          position,
+          widthCm: 120,
+          depthCm: 45,
+        });
+        shelves.set(label, shelfId);
+        const shelf = plan.shelves.find((candidate) => candidate.label === label);
+        if (shelf !== undefined) await this.fitOut(tx, shelfId, shelf);
+      }
+    }
+    return shelves;
+  }
+
+  private async fitOut(tx: Tx, shelfId: string, shelf: Plan['shelves'][number]): Promise<void> {
+    await this.store.addLamp(tx, {
+      shelfId,
+      kind: shelf.lamp.kind,
+      watts: shelf.lamp.watts,
+      luxPerUmol: shelf.lamp.luxPerUmol,
+      fittedOn: shelf.lamp.fittedAt.slice(0, 10),
+    });
+    for (const { from, lampPlan } of shelf.arrangements) {
+      const hours = lampPlan[0];
+      await this.store.addLampPlan(tx, {
+        shelfId,
+        validFrom: new Date(from),
+        switchesOn: hours?.on ?? null,
+        switchesOff: hours?.off ?? null,
+      });
+    }
+    if (shelf.heatMatWatts === null) return;
+    const isOn = shelf.arrangements.at(-1)?.isHeatMatOn ?? false;
+    await this.store.addHeatMat(tx, { shelfId, watts: shelf.heatMatWatts, isOn });
+  }
+
+  private async addRanges(tx: Tx, shelves: ReadonlyMap<string, string>): Promise<void> {
+    for (const { shelf, quantity, lampsOn, lampsOff, reason } of demonstrationRanges) {
+      await this.store.addWantedRange(tx, {
+        shelfId: idOf(shelves, shelf),
+        quantity,
+        lampsOnLow: lampsOn.low,
+        lampsOnHigh: lampsOn.high,
+        lampsOffLow: lampsOff.low,
+        lampsOffHigh: lampsOff.high,
+        holdMinutes: patienceDefaults[quantity].holdMs / 60_000,
+        clearingMargin: patienceDefaults[quantity].clearMargin,
+        reason,
+      });
+    }
+  }
+
+  private async addDevices(
+    tx: Tx,
+    roomId: string,
+    plan: Plan,
+    shelves: ReadonlyMap<string, string>,
+  ): Promise<SimulatedRoom['devices']> {
+    const devices: SimulatedRoom['devices'] = [];
+    for (const { name, sensors } of plan.devices) {
+      const token = newDeviceToken();
+      const deviceId = await this.store.addDevice(tx, { roomId, name, tokenHash: deviceTokenHash(token) });
+      for (const sensor of sensors) {
+        const luxPerUmol = plan.shelves.find(({ label }) => label === sensor.shelf)?.lamp.luxPerUmol ?? 1;
+        await this.store.addPlacedSensor(
+          tx,
+          {
+            roomId,
+            deviceId,
+            key: sensor.key,
+            quantity: sensor.quantity,
+            expectedIntervalS: sensor.expectedIntervalSeconds,
+            lightThreshold: lightThreshold(sensor.quantity, luxPerUmol),
+          },
+          {
+            shelfId: idOf(shelves, sensor.shelf),
+            fromAt: new Date(plan.shelves[0]?.arrangements[0]?.from ?? 0),
+          },
+        );
+      }
+      devices.push({ id: deviceId, name, token, sensors });
+    }
+    return devices;
+  }
+
+  private async addGrowing(
+    tx: Tx,
+    roomId: string,
+    zone: string,
+    now: number,
+    shelves: ReadonlyMap<string, string>,
+  ): Promise<void> {
+    for (const { shelf, startedDaysAgo, stageDaysAgo, ...planting } of demonstrationPlantings) {
+      await this.store.addPlanting(tx, {
+        ...planting,
+        roomId,
+        shelfId: idOf(shelves, shelf),
+        startedOn: dayBefore(now, startedDaysAgo, zone),
+        stageSince: dayBefore(now, stageDaysAgo, zone),
+      });
+    }
+    for (const { shelf, daysAgo, at, kind, text } of demonstrationEvents) {
+      const { start } = dayBounds(dayBefore(now, daysAgo, zone), zone);
+      const [hours = 0, minutes = 0] = at.split(':').map(Number);
+      const instant = Math.min(now, start + (hours * 60 + minutes) * 60_000);
+      await this.store.addShelfEvent(tx, {
+        shelfId: idOf(shelves, shelf),
+        at: new Date(instant),
+        kind,
+        text,
+      });
+    }
+  }
+
+  private async addCare(
+    tx: Tx,
+    roomId: string,
+    zone: string,
+    now: number,
+    shelves: ReadonlyMap<string, string>,
+    people: ReadonlyMap<string, string>,
+  ): Promise<void> {
+    const today = dayBefore(now, 0, zone);
+    for (const { shelf, startedDaysAgo, who, ...routine } of demonstrationRoutines) {
+      await this.store.addRoutine(tx, {
+        ...routine,
+        roomId,
+        shelfId: shelf === null ? null : idOf(shelves, shelf),
+        startsOn: dayBefore(now, startedDaysAgo, zone),
+        personId: people.get(who) ?? null,
+      });
+    }
+    await this.planTasks(tx, roomId, dayBefore(now, 1, zone), dayBefore(now, -14, zone));
+    await this.store.completeTasksBefore(tx, roomId, today);
+    await this.store.addTask(tx, {
+      roomId,
+      shelfId: idOf(shelves, 'A3'),
+      kind: 'switchLamps',
+      title: 'Switch the lamps on',
+      detail: 'The first leeks are up. The onions beside them keep their cover.',
+      dueOn: today,
+      personId: people.get('maren@example.org') ?? null,
+    });
+  }
+}
+
+type Plan = ReturnType<typeof kestrelLane>;
+
+function idOf(shelves: ReadonlyMap<string, string>, label: string): string {
+  const shelfId = shelves.get(label);
+  if (shelfId === undefined) throw new Error(`The demonstration has no shelf ${label}`);
+  return shelfId;
+}
+
+function dayBefore(now: number, days: number, zone: string): string {
+  return dayBounds(now - days * DAY_MS, zone).date;
+}
+
+function lightThreshold(quantity: string, luxPerUmol: number): number | null {
+  if (quantity === 'ppfd') return LIT_ABOVE_UMOL;
+  return quantity === 'illuminance' ? LIT_ABOVE_UMOL * luxPerUmol : null;
+}
+
+/**
+ * Whether the simulator's file is still there.
+ *
+ * @param devicesFile - Its path.
+ * @returns False when it is gone or no room; the simulator then has nothing to play.
+ */
+export async function hasDevicesFile(devicesFile: string): Promise<boolean> {
+  try {
+    return simulatedRoom.safeParse(JSON.parse(await readFile(devicesFile, 'utf8'))).success;
+  } catch {
+    return false; // Not there, or not JSON.
+  }
+}
