@@ -78,6 +78,12 @@ interface Candidate {
   readonly error: LoggerFileError | null;
 }
 
+/** Tells whether the numbers of a column are as long as seconds or milliseconds since 1970, which no measured value is. */
+function isUnixTime(rows: readonly SampleRow[], index: number): boolean {
+  const numbers = rows.map(({ cells }) => cells[index] ?? '').filter((cell) => kindOfCell(cell) === 'number');
+  return numbers.every((cell) => /^\d{9,10}(\.\d+)?$|^\d{12,13}$/.test(cell));
+}
+
 function firstLines(text: string, count: number): string {
   let end = 0;
   for (let line = 0; line < count; line += 1) {
@@ -103,7 +109,9 @@ function tableOf(text: string, delimiter: Delimiter, quote: '"' | "'", isTruncat
   const kinds = Array.from({ length: Math.min(width, MAX_COLUMNS) }, (_, index) => usualKind(spoken, index));
   const fitting = ofWidth.filter((row) => fits(row, kinds)).length;
   const typed = kinds.filter((kind) => kind !== 'text').length;
-  const hasTime = kinds.some(isTime);
+  const hasTime = kinds.some(
+    (kind, index) => isTime(kind) || (kind === 'number' && isUnixTime(spoken, index)),
+  );
   const isTable = width > 1 && fitting > 0 && kinds.includes('number');
   const score = isTable ? (fitting / rows.length) * (typed / width + (hasTime ? 1 : 0)) : 0;
   return { delimiter, rows, kinds, score, error };
