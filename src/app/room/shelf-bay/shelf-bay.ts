@@ -14,7 +14,7 @@ import { PlantLabel } from '../../ui/plant-label/plant-label';
 import { plantLook } from '../../ui/plants/crop-look';
 import { PlantTray } from '../../ui/plants/plant-tray';
 import { dayParts, minuteOfDay, type DaySpan } from './day-minutes';
-import { plantingSize, plantingWords } from './planting-words';
+import { plantingSize, plantingWords } from '../../core/planting-words';
 import { firstLeafNote, shelfSituation } from './shelf-situation';
 import { shelfStrips } from './shelf-strips';
 

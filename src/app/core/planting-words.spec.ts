@@ -1,4 +1,4 @@
-import { planting } from '../../core/testing/board-builder';
+import { planting } from './testing/board-builder';
 import { plantingSize, plantingWords } from './planting-words';
 
 const today = '2026-12-01';
