@@ -16,6 +16,12 @@ export const appRoutes: Routes = [
     loadComponent: () => import('./room/room').then((m) => m.Room),
   },
   {
+    path: 'shelf/:shelfId',
+    title: 'Shelf',
+    ...signedIn,
+    loadComponent: () => import('./shelf/shelf-page').then((m) => m.ShelfPage),
+  },
+  {
     path: 'account',
     title: 'Your account',
     ...signedIn,

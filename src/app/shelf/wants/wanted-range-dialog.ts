@@ -1,0 +1,116 @@
+import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
+import { toSignal } from '@angular/core/rxjs-interop';
+import { FormControl, FormGroup, ReactiveFormsModule } from '@angular/forms';
+import { MatButton } from '@angular/material/button';
+import { MAT_DIALOG_DATA, MatDialogModule, MatDialogRef } from '@angular/material/dialog';
+import { MatFormFieldModule } from '@angular/material/form-field';
+import { MatInput } from '@angular/material/input';
+import { MatSelectModule } from '@angular/material/select';
+import type { Quantity } from '@shared/climate/quantity';
+import { clearWantedRange, setWantedRange, type WantedRange } from '@shared/contracts/rooms';
+import { shownUnit } from '@shared/format/quantities';
+import { finalize, type Observable } from 'rxjs';
+import { ApiClient } from '../../core/api-client';
+import { failureText } from '../../core/failure-text';
+import { Session } from '../../core/session';
+import { ProblemText } from '../../ui/states/problem-text';
+import { quantityTitle } from '../quantity-title';
+import { rangeProblem, savedRange, typedRange } from './wanted-range-form';
+
+/** Which range is changed. */
+export interface WantedRangeSubject {
+  readonly params: { readonly roomId: string; readonly shelfId: string };
+  /** Null to set a first one. */
+  readonly range: WantedRange | null;
+  /** The quantities to choose from, at least one; only that of the range where there is one. */
+  readonly quantities: readonly Quantity[];
+}
+
+const numberField = (): FormControl<number | null> => new FormControl<number | null>(null);
+
+/** Sets or removes a wanted range. Closes with true once that is saved. */
+@Component({
+  selector: 'app-wanted-range-dialog',
+  templateUrl: './wanted-range-dialog.html',
+  styleUrl: './dialog-form.scss',
+  imports: [
+    MatButton,
+    MatDialogModule,
+    MatFormFieldModule,
+    MatInput,
+    MatSelectModule,
+    ProblemText,
+    ReactiveFormsModule,
+  ],
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class WantedRangeDialog {
+  private readonly api = inject(ApiClient);
+  private readonly dialog = inject<MatDialogRef<WantedRangeDialog, boolean>>(MatDialogRef);
+  private readonly unit = inject(Session).temperatureUnit();
+  protected readonly subject = inject<WantedRangeSubject>(MAT_DIALOG_DATA);
+
+  protected readonly quantityField = new FormControl<Quantity>(
+    this.subject.quantities[0] ?? 'airTemperature',
+    {
+      nonNullable: true,
+    },
+  );
+  private readonly quantity = toSignal(this.quantityField.valueChanges, {
+    initialValue: this.quantityField.value,
+  });
+  protected readonly title = computed(() => quantityTitle(this.quantity()));
+  protected readonly shownUnit = computed(() => shownUnit(this.quantity(), this.unit));
+  protected readonly choices = this.subject.quantities.map((quantity) => ({
+    quantity,
+    title: quantityTitle(quantity),
+  }));
+
+  protected readonly sides = [
+    { legend: 'With lamps on', low: 'onLow', high: 'onHigh' },
+    { legend: 'With lamps off', low: 'offLow', high: 'offHigh' },
+  ] as const;
+  protected readonly fields = new FormGroup({
+    onLow: numberField(),
+    onHigh: numberField(),
+    offLow: numberField(),
+    offHigh: numberField(),
+    holdMinutes: numberField(),
+    clearingMargin: numberField(),
+    reason: new FormControl('', { nonNullable: true }),
+  });
+  protected readonly isSaving = signal(false);
+  protected readonly problem = signal<string | null>(null);
+
+  constructor() {
+    this.fields.setValue(typedRange(this.quantity(), this.subject.range, this.unit));
+    this.quantityField.valueChanges.subscribe((quantity) =>
+      this.fields.setValue(typedRange(quantity, null, this.unit)),
+    );
+  }
+
+  protected save(): void {
+    const typed = this.fields.getRawValue();
+    const problem = rangeProblem(typed);
+    this.problem.set(problem);
+    if (problem !== null) return;
+    const body = savedRange(this.quantity(), typed, this.unit);
+    this.finish(this.api.call(setWantedRange, { params: this.target(), body }));
+  }
+
+  protected remove(): void {
+    this.finish(this.api.call(clearWantedRange, { params: this.target() }));
+  }
+
+  private target() {
+    return { ...this.subject.params, quantity: this.quantity() };
+  }
+
+  private finish(call: Observable<unknown>): void {
+    this.isSaving.set(true);
+    call.pipe(finalize(() => this.isSaving.set(false))).subscribe({
+      next: () => this.dialog.close(true),
+      error: (error: unknown) => this.problem.set(failureText(error)),
+    });
+  }
+}

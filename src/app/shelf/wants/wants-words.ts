@@ -1,0 +1,76 @@
+import type { Quantity } from '@shared/climate/quantity';
+import type { PlantingSummary } from '@shared/contracts/board';
+import type { LampHours, Shelf, WantedRange } from '@shared/contracts/rooms';
+import { formatNumber, type TemperatureUnit } from '@shared/format/numbers';
+import { formatQuantityRange } from '@shared/format/quantities';
+import { quantityTitle } from '../quantity-title';
+
+/** One thing that the shelf should be, in words. */
+export interface WantLine {
+  readonly text: string;
+  /** Why, or what follows from it; empty when there is nothing to say. */
+  readonly reason: string;
+}
+
+const minutesOfDay = 24 * 60;
+
+/** Hours that lamps are planned on each day. @returns 0 to 24. */
+export function plannedHours({ switchesOn, switchesOff }: LampHours): number {
+  if (switchesOn === null || switchesOff === null) return 0;
+  const minutes = (minuteOf(switchesOff) - minuteOf(switchesOn) + minutesOfDay) % minutesOfDay;
+  return (minutes === 0 ? minutesOfDay : minutes) / 60;
+}
+
+/** The lamp hours in words. */
+export function lampWords({ lamps, lampHours }: Pick<Shelf, 'lamps' | 'lampHours'>): WantLine {
+  if (lamps.length === 0) return { text: 'No lamp fitted', reason: '' };
+  const hours = plannedHours(lampHours);
+  if (hours === 0) return { text: 'Lamps off all day', reason: 'This shelf is kept dark.' };
+  const reason = `${formatNumber(hours, Number.isInteger(hours) ? 0 : 1)} h a day`;
+  return hours === 24
+    ? { text: 'Lamps on all day', reason }
+    : { text: `Lamps ${lampHours.switchesOn}–${lampHours.switchesOff}`, reason };
+}
+
+/** A wanted range in words, with what it is there for. */
+export function rangeWords(range: WantedRange, temperatureUnit: TemperatureUnit): WantLine {
+  const { quantity, lampsOn, lampsOff, reason } = range;
+  const title = quantityTitle(quantity);
+  const [on, off] = [lampsOn, lampsOff].map(({ low, high }) =>
+    low === null && high === null ? null : formatQuantityRange(quantity, { low, high }, temperatureUnit),
+  );
+  if (on === off) return { text: `${title} ${on ?? 'is free'}`, reason };
+  if (off === null) return { text: `${title} ${on} with lamps on`, reason };
+  if (on === null) return { text: `${title} ${off} with lamps off`, reason };
+  return { text: `${title} ${on} with lamps on, ${off} with lamps off`, reason };
+}
+
+/** The heat mat in words; null where none is fitted. */
+export function matWords(
+  { heatMat }: Pick<Shelf, 'heatMat'>,
+  plantings: readonly PlantingSummary[],
+): WantLine | null {
+  if (heatMat === null) return null;
+  const waits = plantings.some(({ stage }) => stage === 'sown' || stage === 'emerging');
+  return {
+    text: `Heat mat ${heatMat.isOn ? 'on' : 'off'}, ${formatNumber(heatMat.watts, 0)} W`,
+    reason: waits ? 'Seed here waits to come up.' : 'Nothing here is waiting to germinate.',
+  };
+}
+
+/** The icon of each quantity. */
+export const quantityIcons: Readonly<Record<Quantity, string>> = {
+  airTemperature: 'thermostat',
+  rootZoneTemperature: 'psychiatry',
+  relativeHumidity: 'humidity_percentage',
+  ppfd: 'light_mode',
+  illuminance: 'light_mode',
+  vapourPressureDeficit: 'humidity_mid',
+  dewPoint: 'dew_point',
+  absoluteHumidity: 'humidity_high',
+};
+
+function minuteOf(clockTime: string): number {
+  const [hours = 0, minutes = 0] = clockTime.split(':').map(Number);
+  return hours * 60 + minutes;
+}
