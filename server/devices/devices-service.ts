@@ -6,6 +6,7 @@ import type { Clock } from '../clock';
 import type { Transactions, Tx } from '../database/transactions';
 import { conflict, invalidField } from '../http/request-problem';
 import type { DeviceAccess } from '../http/route';
+import type { RoomsService } from '../rooms/rooms-service';
 import { deviceTokenHash, newDeviceToken } from './device-tokens';
 import type { DevicesStore, NewSensor } from './devices-store';
 
@@ -19,6 +20,7 @@ export interface DeviceHooks {
 export interface DevicesParts {
   readonly transactions: Transactions;
   readonly devices: DevicesStore;
+  readonly rooms: Pick<RoomsService, 'requireShelf'>;
   readonly changes: RoomChanges;
   readonly hooks: DeviceHooks;
   readonly now: Clock;
@@ -123,14 +125,14 @@ export class DevicesService {
    *   is known, 422 for an instant that is still to come.
    */
   async place(by: RoomAuthor, sensorId: string, placement: NewPlacement): Promise<Sensor> {
-    const { devices, hooks, now } = this.parts;
+    const { devices, rooms, hooks, now } = this.parts;
     const { shelfId, from } = placement;
     if (from.getTime() > now().getTime() + CLOCK_TOLERANCE_MS) {
       throw invalidField('body.from', 'is still to come');
     }
     return this.parts.changes.make(by, async (tx) => {
       await devices.lockSensor(tx, by.roomId, sensorId);
-      await devices.requireShelf(tx, by.roomId, shelfId);
+      await rooms.requireShelf(tx, by.roomId, shelfId);
       if (await this.move(tx, sensorId, placement)) await hooks.onPlacementsChanged(tx, sensorId, from);
       const result = await devices.sensor(tx, by.roomId, sensorId);
       const detail = { shelfId, from: from.toISOString() };

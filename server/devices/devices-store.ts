@@ -119,15 +119,6 @@ export class DevicesStore {
     if (rows.length === 0) throw notFound('sensor');
   }
 
-  /** 404 when the room has no such shelf in use; else it can't be retired until the transaction ends. */
-  async requireShelf(tx: Tx, roomId: string, shelfId: string): Promise<void> {
-    const rows: unknown[] = await tx.query(
-      `SELECT FROM shelf WHERE id = $1 AND room_id = $2 AND retired_at IS NULL FOR SHARE`,
-      [shelfId, roomId],
-    );
-    if (rows.length === 0) throw notFound('shelf');
-  }
-
   /** The newest placement of a sensor, or null. */
   newestPlacement(tx: Tx, sensorId: string): Promise<PlacementEntity | null> {
     return tx.findOne(PlacementEntity, { where: { sensorId }, order: { fromAt: 'DESC' } });

@@ -38,6 +38,16 @@ export class RoomsService {
     return this.parts.rooms.racks(this.parts.transactions.plain, roomId, this.parts.now());
   }
 
+  /** Every room. */
+  all(tx: Tx): Promise<Room[]> {
+    return this.parts.rooms.all(tx);
+  }
+
+  /** 404 when the room has no such shelf in use; else it stays in use until the transaction ends. */
+  requireShelf(tx: Tx, roomId: string, shelfId: string): Promise<void> {
+    return this.parts.rooms.requireShelf(tx, roomId, shelfId);
+  }
+
   /** Changes what is given of the room; with a new time zone all days are counted anew. */
   changeRoom(by: RoomAuthor, change: RoomChange): Promise<Room> {
     const { rooms, hooks } = this.parts;

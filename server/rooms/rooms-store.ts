@@ -71,6 +71,11 @@ export class RoomsStore {
     return room === null ? null : settingsOf(room);
   }
 
+  /** Every room. */
+  async all(tx: Tx): Promise<Room[]> {
+    return (await tx.find(RoomEntity, { order: { id: 'ASC' } })).map(settingsOf);
+  }
+
   /** The room's settings, held until the transaction ends. */
   async lockRoom(tx: Tx, roomId: string): Promise<Room> {
     const room = await tx.findOne(RoomEntity, { where: { id: roomId }, lock: { mode: 'pessimistic_write' } });
@@ -119,6 +124,15 @@ export class RoomsStore {
       .getOne();
     if (shelf === null) throw notFound('shelf');
     return shelf;
+  }
+
+  /** 404 when the room has no such shelf in use; else it can't be retired until the transaction ends. */
+  async requireShelf(tx: Tx, roomId: string, shelfId: string): Promise<void> {
+    const rows: unknown[] = await tx.query(
+      `SELECT FROM shelf WHERE id = $1 AND room_id = $2 AND retired_at IS NULL FOR SHARE`,
+      [shelfId, roomId],
+    );
+    if (rows.length === 0) throw notFound('shelf');
   }
 
   /** Adds a rack after the others. */
