@@ -11,7 +11,7 @@ import type { CareService } from './care-service';
  */
 export function careRoutes(care: CareService): Route[] {
   return [
-    route(contract.listTasks, ({ room, query }) => care.tasksOf(room.id, query.from, query.to)),
+    route(contract.listTasks, ({ room, query }) => care.listTasks(room.id, query)),
     route(contract.completeTask, (context) =>
       care.completeTask(authorOf(context), context.params.taskId, context.body.note),
     ),

@@ -34,7 +34,7 @@ export class CareService {
   constructor(private readonly parts: CareParts) {}
 
   /** Tasks due from a day up to another, exclusive, with everything late before it. */
-  tasksOf(roomId: string, from: string, to: string): Promise<Task[]> {
+  listTasks(roomId: string, { from, to }: { readonly from: string; readonly to: string }): Promise<Task[]> {
     return this.parts.care.tasks(this.parts.transactions.plain, roomId, from, to);
   }
 

@@ -23,34 +23,34 @@ export interface SessionSettings {
   readonly pool: Pool;
   /** Signs the cookie. */
   readonly secret: string;
-  /** In production the cookie travels only over HTTPS. */
-  readonly isProduction: boolean;
+  /** Whether the cookie travels only over HTTPS. */
+  readonly isHttps: boolean;
 }
 
 /**
  * The attributes of the session's cookie.
  *
- * @param isProduction - Whether it travels only over HTTPS.
+ * @param isHttps - Whether it travels only over HTTPS.
  * @returns Attributes for setting and clearing it.
  */
-export function cookieOptions(isProduction: boolean): CookieOptions {
-  return { httpOnly: true, sameSite: 'lax', secure: isProduction, path: '/' };
+export function cookieOptions(isHttps: boolean): CookieOptions {
+  return { httpOnly: true, sameSite: 'lax', secure: isHttps, path: '/' };
 }
 
 /**
  * Sessions in PostgreSQL, made at sign-in and ending fourteen days after their last use.
  *
- * @param settings - Connections, secret and whether this is production.
+ * @param settings - Connections, secret and whether pages come over HTTPS.
  * @returns Middleware for Express and for the socket's handshake.
  */
-export function sessionMiddleware({ pool, secret, isProduction }: SessionSettings): RequestHandler {
+export function sessionMiddleware({ pool, secret, isHttps }: SessionSettings): RequestHandler {
   const Store = connectPgSimple(session);
   const open = session({
     name: sessionCookie,
     secret,
     resave: false,
     saveUninitialized: false,
-    cookie: { ...cookieOptions(isProduction), maxAge: SESSION_MS },
+    cookie: { ...cookieOptions(isHttps), maxAge: SESSION_MS },
     store: new Store({ pool, tableName: 'http_session', createTableIfMissing: false, disableTouch: true }),
   });
   return (req: Request, res: Response, next: NextFunction) => {

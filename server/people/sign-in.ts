@@ -44,7 +44,7 @@ export function configureSignIn(
 export class SignIn {
   constructor(
     private readonly passport: passport.Authenticator,
-    private readonly isProduction: boolean,
+    private readonly isHttps: boolean,
   ) {}
 
   /**
@@ -81,7 +81,7 @@ export class SignIn {
         error === undefined || error === null ? resolve() : reject(error as Error),
       );
     });
-    res.clearCookie(sessionCookie, cookieOptions(this.isProduction));
+    res.clearCookie(sessionCookie, cookieOptions(this.isHttps));
   }
 
   private authenticated(req: Request, res: Response): Promise<SignedInPerson | null> {
