@@ -5,6 +5,7 @@ import { startControlServer, startScenarioNow, type ControlledRoom } from './con
 import { DeviceFleet } from './devices/device-fleet';
 import { readRoom } from './devices/read-room';
 import { RoomTime } from './devices/room-time';
+import { catchUp } from './history/catch-up';
 import { readSettings } from './process/read-settings';
 import { Problem, runProcess, type Running } from './process/run-process';
 import { ScenarioTimeline } from './scenarios/scenario-timeline';
@@ -43,6 +44,12 @@ runProcess(async (): Promise<Running> => {
   const secret = values.SIMULATOR_CONTROL_SECRET;
   const control =
     secret === undefined ? null : await startControlServer(controlled, secret, values.SIMULATOR_CONTROL_PORT);
+  // A room that begins at another time than now is a rehearsal, and has no past.
+  if (values.SIMULATOR_START === undefined) {
+    const { LAMPMEADOW_URL: url, SIMULATOR_SEED: seed } = values;
+    const stored = await catchUp({ room, url, seed, nowMs: time.now() });
+    console.info(`history: ${stored} readings stored`);
+  }
   const fleet = new DeviceFleet({
     room,
     url: values.LAMPMEADOW_URL,

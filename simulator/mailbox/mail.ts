@@ -53,6 +53,8 @@ export async function readMail(
   };
 }
 
-function addressText(address: AddressObject | undefined): string | undefined {
-  return address?.text === '' ? undefined : address?.text;
+function addressText(from: AddressObject | undefined): string | undefined {
+  const [sender] = from?.value ?? [];
+  if (sender?.address === undefined) return undefined;
+  return sender.name === '' ? sender.address : `${sender.name} <${sender.address}>`;
 }

@@ -29,7 +29,7 @@ export function listPage(mails: readonly ListedMail[], query: MailQuery): string
         <h1>Mailbox</h1>
         <p>What would have gone out by e-mail, newest first. Nothing here has left this machine.</p>
       </header>
-      <form action="/" method="get">
+      <form action="/" method="get" role="search" aria-label="Mails">
         <label>To <input name="to" value="${query.to ?? ''}" /></label>
         <label>Subject <input name="subject" value="${query.subject ?? ''}" /></label>
         <button>Show</button>
@@ -76,8 +76,8 @@ export function mailPage(mail: ReceivedMail, view: MailView, conversation: reado
       ${
         conversation.length < 2
           ? null
-          : html`<section>
-              <h2>Conversation</h2>
+          : html`<section aria-labelledby="conversation">
+              <h2 id="conversation">Conversation</h2>
               <ol class="mails">
                 ${conversation.map((other) =>
                   other === mail

@@ -47,7 +47,7 @@ describe('the mailbox', () => {
     });
     const [mail] = await mails();
     expect(mail).toMatchObject({
-      from: '"Lampmeadow" <lampmeadow@example.org>',
+      from: 'Lampmeadow <lampmeadow@example.org>',
       to: ['grower@example.org'],
       subject: 'Zu trocken: 34 % – Regal B2',
       html: '<p>Luft zu trocken</p>',

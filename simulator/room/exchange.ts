@@ -23,9 +23,10 @@ export function settle(
 ): number {
   let conductance = 0;
   let pull = inflow;
-  for (const [strength, towards] of exchanges) {
-    conductance += strength;
-    pull += strength * towards;
+  // By index: taking the pairs apart by pattern cost an eighth of the whole model's time.
+  for (const exchange of exchanges) {
+    conductance += exchange[0];
+    pull += exchange[0] * exchange[1];
   }
   const target = pull / conductance;
   return target + (value - target) * Math.exp((-seconds * conductance) / capacity);

@@ -8,6 +8,9 @@ const MINUTE = 60_000;
 const NOON = Date.parse('2025-12-01T12:00:00Z');
 const START = NOON - 90 * MINUTE;
 
+const room = kestrelLane(NOON);
+const calmNoon = new RoomModel(room, 1, NOON, () => calmRoom);
+
 function span(overrides: Partial<ScenarioSpan>): ScenarioSpan {
   const between = { from: new Date(START).toISOString(), to: new Date(NOON + 90 * MINUTE).toISOString() };
   return { scenario: 'timer-fails', shelf: 'A1', ...between, ...overrides };
@@ -19,10 +22,8 @@ function atNoon(
   shelf: string,
 ): { disturbed: ShelfClimate; calm: ShelfClimate } {
   const timeline = new ScenarioTimeline([span(overrides)]);
-  const room = kestrelLane(NOON);
   const disturbed = new RoomModel(room, 1, NOON, (at) => timeline.disturbanceAt(at));
-  const calm = new RoomModel(room, 1, NOON, () => calmRoom);
-  return { disturbed: disturbed.climateOf(shelf), calm: calm.climateOf(shelf) };
+  return { disturbed: disturbed.climateOf(shelf), calm: calmNoon.climateOf(shelf) };
 }
 
 describe('a scenario', () => {
