@@ -15,12 +15,12 @@ describe('people', () => {
 
   beforeAll(async () => {
     application = await startTestApplication();
-    tx = application.database.dataSource.manager;
+    tx = application.tx;
   });
   afterAll(() => application.stop());
 
   const trySignIn = (email: string, password: string, ip = '192.0.2.1') =>
-    request(application.app).post('/api/v1/session').set('X-Forwarded-For', ip).send({ email, password });
+    request(application.express).post('/api/v1/session').set('X-Forwarded-For', ip).send({ email, password });
 
   describe('signing in', () => {
     it('with the right password, whatever the case of the address, answers with the account', async () => {
@@ -74,9 +74,9 @@ describe('people', () => {
 
     it('starts a new session, so that one planted beforehand is worth nothing', async () => {
       const person = await aPerson(tx);
-      const planted = await Caller.signedIn(application.app, await aPerson(tx));
+      const planted = await Caller.signedIn(application.express, await aPerson(tx));
 
-      const reply = await request(application.app)
+      const reply = await request(application.express)
         .post('/api/v1/session')
         .set({ Cookie: planted.cookie, 'X-CSRF-Token': planted.csrfToken })
         .send({ email: person.email, password: testPassword })
@@ -88,7 +88,7 @@ describe('people', () => {
     });
 
     it('sent by another site is refused', async () => {
-      await request(application.app)
+      await request(application.express)
         .post('/api/v1/session')
         .set('Sec-Fetch-Site', 'cross-site')
         .send({ email: (await aPerson(tx)).email, password: testPassword })
@@ -133,7 +133,7 @@ describe('people', () => {
 
   describe('a session', () => {
     it('ends for good when its person signs out', async () => {
-      const caller = await Caller.signedIn(application.app, await aPerson(tx));
+      const caller = await Caller.signedIn(application.express, await aPerson(tx));
 
       const reply = await caller.delete('/session').expect(204);
 
@@ -143,7 +143,7 @@ describe('people', () => {
 
     it('keeps only the id of its person, and ends with the person', async () => {
       const person = await aPerson(tx);
-      const caller = await Caller.signedIn(application.app, person);
+      const caller = await Caller.signedIn(application.express, person);
       const rows: { sess: { passport: unknown } }[] = await tx.query(
         `SELECT sess FROM http_session WHERE sess->'passport'->>'user' = $1`,
         [person.id],
@@ -157,7 +157,7 @@ describe('people', () => {
 
     it('is prolonged when it is used an hour later, and not before', async () => {
       const person = await aPerson(tx);
-      const caller = await Caller.signedIn(application.app, person);
+      const caller = await Caller.signedIn(application.express, person);
       expect((await caller.get('/account')).headers['set-cookie']).toBeUndefined();
       await tx.query(
         `UPDATE http_session SET expire = now() + interval '1 minute',
@@ -177,9 +177,9 @@ describe('people', () => {
     });
 
     it('writes nothing without the token that its pages know', async () => {
-      const caller = await Caller.signedIn(application.app, await aPerson(tx));
+      const caller = await Caller.signedIn(application.express, await aPerson(tx));
 
-      const reply = await request(application.app)
+      const reply = await request(application.express)
         .patch('/api/v1/account')
         .set('Cookie', caller.cookie)
         .send({ name: 'Forged' })
@@ -192,7 +192,7 @@ describe('people', () => {
   describe('the account', () => {
     it('changes what is given and keeps the rest', async () => {
       const person = await aPerson(tx);
-      const caller = await Caller.signedIn(application.app, person);
+      const caller = await Caller.signedIn(application.express, person);
 
       const reply = await caller
         .patch('/account', { temperatureUnit: 'fahrenheit', theme: 'lampsOff' })
@@ -210,7 +210,7 @@ describe('people', () => {
 
     it('keeps who changed it, in the audit table', async () => {
       const person = await aPerson(tx);
-      const caller = await Caller.signedIn(application.app, person);
+      const caller = await Caller.signedIn(application.express, person);
 
       await caller.patch('/account', { name: 'Wren Ashby' }).expect(200);
 
@@ -225,9 +225,9 @@ describe('people', () => {
 
     it('changes for who knows the current one, and signs the person out everywhere else', async () => {
       const person = await aPerson(tx);
-      const here = await Caller.signedIn(application.app, person);
-      const elsewhere = await Caller.signedIn(application.app, person);
-      const somebodyElse = await Caller.signedIn(application.app, await aPerson(tx));
+      const here = await Caller.signedIn(application.express, person);
+      const elsewhere = await Caller.signedIn(application.express, person);
+      const somebodyElse = await Caller.signedIn(application.express, await aPerson(tx));
 
       await here.put('/account/password', { currentPassword: testPassword, newPassword: next }).expect(204);
 
@@ -239,7 +239,7 @@ describe('people', () => {
     });
 
     it('stays when the current one is wrong, and cannot be guessed that way', async () => {
-      const caller = await Caller.signedIn(application.app, await aPerson(tx));
+      const caller = await Caller.signedIn(application.express, await aPerson(tx));
       const change = { currentPassword: 'not it', newPassword: next };
 
       const refused = await caller.put('/account/password', change).expect(422);
@@ -250,7 +250,7 @@ describe('people', () => {
     });
 
     it('must have twelve characters', async () => {
-      const caller = await Caller.signedIn(application.app, await aPerson(tx));
+      const caller = await Caller.signedIn(application.express, await aPerson(tx));
 
       const refused = await caller
         .put('/account/password', { currentPassword: testPassword, newPassword: 'elevenchars' })
@@ -266,7 +266,7 @@ describe('people', () => {
       const [here, there] = [await aRoom(tx), await aRoom(tx)];
       await aMember(tx, { personId: person.id, roomId: here.id });
       await aMember(tx, { personId: person.id, roomId: there.id });
-      const caller = await Caller.signedIn(application.app, person);
+      const caller = await Caller.signedIn(application.express, person);
 
       const reply = await caller
         .patch(`/rooms/${here.id}/membership`, { mailAlertCleared: true })
@@ -286,7 +286,9 @@ describe('people', () => {
       await aMember(tx, { roomId: room.id, personId: keeper.id, role: 'keeper' });
       await aMember(tx);
 
-      const reply = await (await Caller.signedIn(application.app, first)).get(`/rooms/${room.id}/members`);
+      const reply = await (
+        await Caller.signedIn(application.express, first)
+      ).get(`/rooms/${room.id}/members`);
 
       expect(reply.body).toEqual([
         { personId: keeper.id, name: 'Zinnia', role: 'keeper' },
