@@ -14,7 +14,7 @@ describe('an alert’s numbers for their reader', () => {
   it('name the unit of a day’s light, which has no series', () => {
     const { value, bareValue, difference } = episodeFormatters('°C', 'Europe/Dublin', now);
     expect(plain(value(9.2, 'lightHours'))).toBe('9.2 h');
-    expect(bareValue(16, 'lightHours')).toBe('16.0');
+    expect(bareValue(16, 'lightHours')).toBe('16');
     expect(plain(difference(3, 'dailyLightIntegral'))).toBe('3.0 mol/m²');
   });
 

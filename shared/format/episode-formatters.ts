@@ -26,7 +26,9 @@ export function episodeFormatters(
         ? formatValue(value, sumUnit[quantity], 1)
         : formatQuantity(quantity, value, temperatureUnit),
     bareValue: (value, quantity) =>
-      isSum(quantity) ? formatNumber(value, 1) : formatBareQuantity(quantity, value, temperatureUnit),
+      plainly(
+        isSum(quantity) ? formatNumber(value, 1) : formatBareQuantity(quantity, value, temperatureUnit),
+      ),
     difference: (difference, quantity) =>
       isSum(quantity)
         ? formatValue(difference, sumUnit[quantity], 1)
@@ -34,6 +36,11 @@ export function episodeFormatters(
     duration: formatDuration,
     time: (at) => sayWhen(at, now, zone),
   };
+}
+
+/** A limit as a person set it: 26, not 26.0. */
+function plainly(figures: string): string {
+  return figures.replace(/\.0+$/, '');
 }
 
 function isSum(quantity: AlertQuantity): quantity is Exclude<AlertQuantity, Quantity> {

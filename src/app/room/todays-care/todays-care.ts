@@ -46,7 +46,7 @@ export class TodaysCare {
     this.tasks().map((task) => ({
       task,
       isDone: task.doneAt !== null,
-      title: task.shelfLabel === null ? task.title : `${task.title} · ${task.shelfLabel}`,
+      title: task.shelfLabel === null ? task.title : `${task.title} ·\u00a0${task.shelfLabel}`,
       late: task.doneAt === null ? lateness(task.dueOn, this.today()) : null,
       detail: task.doneAt === null ? task.detail : this.done(task, task.doneAt),
       initials: initialsOf(task.personName),
