@@ -35,7 +35,7 @@ export interface ChartManner {
 }
 
 const textFont = "'Atkinson Hyperlegible Next Variable', system-ui, sans-serif";
-const tickBreadth = 92;
+const tickBreadth = 80;
 const dashes: readonly LineSeriesOption['lineStyle'][] = [
   { type: 'solid' },
   { type: [7, 4] },
