@@ -8,7 +8,7 @@ import { MatInput } from '@angular/material/input';
 import { MatSelectModule } from '@angular/material/select';
 import type { Quantity } from '@shared/climate/quantity';
 import { clearWantedRange, setWantedRange, type WantedRange } from '@shared/contracts/rooms';
-import { shownUnit } from '@shared/format/quantities';
+import { quantityName, shownUnit } from '@shared/format/quantities';
 import { finalize, type Observable } from 'rxjs';
 import { ApiClient } from '../../core/api-client';
 import { failureText } from '../../core/failure-text';
@@ -59,7 +59,7 @@ export class WantedRangeDialog {
   private readonly quantity = toSignal(this.quantityField.valueChanges, {
     initialValue: this.quantityField.value,
   });
-  protected readonly title = computed(() => quantityTitle(this.quantity()));
+  protected readonly name = computed(() => quantityName[this.quantity()]);
   protected readonly shownUnit = computed(() => shownUnit(this.quantity(), this.unit));
   protected readonly choices = this.subject.quantities.map((quantity) => ({
     quantity,

@@ -37,7 +37,9 @@ export function rangeWords(range: WantedRange, temperatureUnit: TemperatureUnit)
   const { quantity, lampsOn, lampsOff, reason } = range;
   const title = quantityTitle(quantity);
   const [on, off] = [lampsOn, lampsOff].map(({ low, high }) =>
-    low === null && high === null ? null : formatQuantityRange(quantity, { low, high }, temperatureUnit),
+    low === null && high === null
+      ? null
+      : unbroken(formatQuantityRange(quantity, { low, high }, temperatureUnit)),
   );
   if (on === off) return { text: `${title} ${on ?? 'is free'}`, reason };
   if (off === null) return { text: `${title} ${on} with lamps on`, reason };
@@ -69,6 +71,11 @@ export const quantityIcons: Readonly<Record<Quantity, string>> = {
   dewPoint: 'dew_point',
   absoluteHumidity: 'humidity_high',
 };
+
+/** A range that stays on one line: a browser may break after a dash. */
+function unbroken(range: string): string {
+  return range.replace('–', '\u2060–\u2060');
+}
 
 function minuteOf(clockTime: string): number {
   const [hours = 0, minutes = 0] = clockTime.split(':').map(Number);
