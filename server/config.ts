@@ -34,7 +34,9 @@ export interface Config {
   readonly host: string;
   readonly port: number;
   readonly publicUrl: string | null;
-  readonly isProduction: boolean;
+  /** Pages travel over HTTPS: cookies are secure and browsers are told to stay with it. */
+  readonly isHttps: boolean;
+  readonly isTest: boolean;
   readonly sessionSecret: string | null;
   readonly trustProxyHops: number;
   readonly webProcesses: number;
@@ -62,9 +64,6 @@ export function readConfig(environment: Readonly<Record<string, string | undefin
     throw new Error(`These settings are not usable: ${reasons.join('; ')}`);
   }
   const values = parsed.data;
-  if (values.NODE_ENV === 'production' && values.SESSION_SECRET === undefined) {
-    throw new Error('SESSION_SECRET must be set in production');
-  }
   const hasControl =
     values.SIMULATOR_CONTROL_URL !== undefined && values.SIMULATOR_CONTROL_SECRET !== undefined;
   return {
@@ -72,7 +71,8 @@ export function readConfig(environment: Readonly<Record<string, string | undefin
     host: values.HOST,
     port: values.PORT,
     publicUrl: values.PUBLIC_URL ?? null,
-    isProduction: values.NODE_ENV === 'production',
+    isHttps: values.PUBLIC_URL?.startsWith('https:') ?? false,
+    isTest: values.NODE_ENV === 'test',
     sessionSecret: values.SESSION_SECRET ?? null,
     trustProxyHops: values.TRUST_PROXY_HOPS,
     webProcesses: values.WEB_PROCESSES,

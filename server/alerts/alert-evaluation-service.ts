@@ -54,6 +54,8 @@ const LAMP_MARGIN_MS = 2 * 86_400_000;
 interface Watched {
   readonly watch: Watch;
   readonly rule: AlertRule;
+  /** Earlier readings are not judged by the rule [ms]. */
+  readonly judgesFrom: number;
   readonly news: SeriesNews;
 }
 
@@ -139,7 +141,7 @@ export class AlertEvaluationService {
         item.sensor,
         item.quantity,
         wanted.get(item.sensor.shelfId ?? '')?.find(({ quantity }) => quantity === item.quantity),
-      ).map((rule) => ({ rule, news: item })),
+      ).map((watching) => ({ ...watching, news: item })),
     );
     const watches = await this.store.watches(
       tx,
@@ -148,22 +150,22 @@ export class AlertEvaluationService {
     const byKey = new Map(
       watches.map((watch) => [`${watch.sensorId} ${watch.quantity} ${watch.kind}`, watch]),
     );
-    return ruled.flatMap(({ rule, news: item }) => {
+    return ruled.flatMap(({ rule, judgesFrom, news: item }) => {
       const watch = byKey.get(`${item.sensor.id} ${item.quantity} ${rule.kind}`);
-      return watch === undefined ? [] : [{ watch, rule, news: item }];
+      return watch === undefined ? [] : [{ watch, rule, judgesFrom, news: item }];
     });
   }
 
   /** From where each watch folds: a change in the past may reach back to the episode that was open then [ms]. */
   private async starts(tx: Tx, watched: readonly Watched[]): Promise<number[]> {
     const starts: number[] = [];
-    for (const { watch, rule, news } of watched) {
+    for (const { watch, rule, judgesFrom, news } of watched) {
       if (news.changedFrom === null) {
         starts.push(news.inOrder[0]?.at ?? Infinity);
         continue;
       }
       const around = await this.store.episodesAround(tx, watch.id, news.changedFrom);
-      starts.push(Math.max(restartFrom(rule, around, news.changedFrom).at, news.sensor.placedAt ?? 0));
+      starts.push(Math.max(restartFrom(rule, around, news.changedFrom).at, judgesFrom));
     }
     return starts;
   }
@@ -258,8 +260,7 @@ function wasOpen(watch: Watch, episode: Episode): boolean {
 }
 
 function advanceInOrder(one: Watched, context: AlertContext): Folded {
-  const from = one.news.sensor.placedAt ?? 0;
-  const samples = one.news.inOrder.filter(({ at }) => at >= from);
+  const samples = one.news.inOrder.filter(({ at }) => at >= one.judgesFrom);
   const step = fold(one.rule, context, stateBefore(one), samples);
   return { ...one, state: step.state, ...outcomeOf(step.changes) };
 }

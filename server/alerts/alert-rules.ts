@@ -5,40 +5,63 @@ import type { WantedRange } from '@shared/contracts/rooms';
 import { maxGapMs, silentAfterMs } from '@shared/series/expected-interval';
 import type { SensorOnRoad } from '../readings/reading-store';
 
+/** A rule with the instant from which it judges readings [ms]. */
+export interface WatchingRule {
+  readonly rule: AlertRule;
+  readonly judgesFrom: number;
+}
+
 /**
  * The rules that watch one series of a sensor.
  *
  * @param sensor - The sensor, on a shelf.
  * @param quantity - Its own quantity, or a computed one for a humidity sensor.
  * @param wanted - The shelf's wanted range of the quantity, if it has one.
- * @returns The rules; a humidity sensor's computed quantities have no rule about silence, since the sensor has it.
+ * @returns The rules with the instant from which each judges; a humidity sensor's computed quantities have no rule about silence, since the sensor has it.
  */
 export function rulesFor(
   sensor: SensorOnRoad,
   quantity: Quantity,
   wanted: WantedRange | undefined,
-): AlertRule[] {
+): WatchingRule[] {
   const gap = { maxGapMs: Math.max(patienceDefaults[quantity].maxGapMs, maxGapMs(sensor.expectedIntervalS)) };
-  const rules: AlertRule[] = [];
-  if (wanted !== undefined) {
-    const { above, below } = rangeRules(quantity, wanted, {
-      holdMs: wanted.holdMinutes * 60_000,
-      clearMargin: wanted.clearingMargin,
-      ...gap,
-    });
-    rules.push(above, below);
-  }
+  const placedAt = sensor.placedAt ?? 0;
+  const standing: AlertRule[] = [];
   if (quantity === 'airTemperature') {
-    rules.push({ ...standingRules.dangerLow, ...gap }, { ...standingRules.dangerHigh, ...gap });
+    standing.push({ ...standingRules.dangerLow, ...gap }, { ...standingRules.dangerHigh, ...gap });
   }
   if ((quantity === 'ppfd' || quantity === 'illuminance') && sensor.luxPerUmol !== null) {
     const unit = quantity === 'ppfd' ? 1 : sensor.luxPerUmol;
     for (const rule of [standingRules.lampDark, standingRules.lampLit]) {
-      rules.push({ ...rule, limit: rule.limit * unit, ...gap });
+      standing.push({ ...rule, limit: rule.limit * unit, ...gap });
     }
   }
   if (quantity === sensor.quantity) {
-    rules.push({ ...standingRules.sensorSilent, silentAfterMs: silentAfterMs(sensor.expectedIntervalS) });
+    standing.push({ ...standingRules.sensorSilent, silentAfterMs: silentAfterMs(sensor.expectedIntervalS) });
   }
-  return rules;
+  return [
+    ...rangeRulesOf(quantity, wanted, gap).map(({ rule, since }) => ({
+      rule,
+      judgesFrom: Math.max(placedAt, since),
+    })),
+    ...standing.map((rule) => ({ rule, judgesFrom: placedAt })),
+  ];
+}
+
+function rangeRulesOf(
+  quantity: Quantity,
+  wanted: WantedRange | undefined,
+  gap: { readonly maxGapMs: number },
+): { rule: AlertRule; since: number }[] {
+  if (wanted === undefined) return [];
+  const since = Date.parse(wanted.since);
+  const { above, below } = rangeRules(quantity, wanted, {
+    holdMs: wanted.holdMinutes * 60_000,
+    clearMargin: wanted.clearingMargin,
+    ...gap,
+  });
+  return [
+    { rule: above, since },
+    { rule: below, since },
+  ];
 }

@@ -19,7 +19,7 @@ export class AlertService {
   constructor(
     private readonly transactions: Transactions,
     private readonly store: AlertStore,
-    private readonly live: () => LiveFeed,
+    private readonly live: LiveFeed,
   ) {}
 
   /**
@@ -63,14 +63,14 @@ export class AlertService {
     const [alert] = await this.store.byIds(plain, [alertId]);
     if (alert === undefined) throw notFound('alert');
     const { roomId: _room, ...shown } = alert;
-    this.live().publish(roomId, 'alert:changed', shown);
+    this.live.publish(roomId, 'alert:changed', shown);
     return shown;
   }
 
   /** Tells dashboards about alerts that changed; to be called after the commit. */
   async publishChanged(alertIds: readonly string[]): Promise<void> {
     for (const { roomId, ...alert } of await this.store.byIds(this.transactions.plain, alertIds)) {
-      this.live().publish(roomId, 'alert:changed', alert);
+      this.live.publish(roomId, 'alert:changed', alert);
     }
   }
 }

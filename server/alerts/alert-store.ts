@@ -172,18 +172,22 @@ export class AlertStore {
     ]);
   }
 
-  /** Ends the open alerts of a shelf whose quantity has no wanted range any more. */
-  async closeUnruled(tx: Tx, shelfId: string, at: Date): Promise<void> {
+  /** Ends the open range alerts of a shelf's quantity and has its watches begin anew. */
+  async restartRangeWatches(tx: Tx, shelfId: string, quantity: Quantity, at: Date): Promise<void> {
     await tx.query(
-      `UPDATE alert SET ended_at = coalesce(ended_at, $2), cleared_at = $2
-       WHERE shelf_id = $1 AND cleared_at IS NULL AND kind IN ('aboveRange', 'belowRange')
-         AND NOT EXISTS (SELECT 1 FROM wanted_range w WHERE w.shelf_id = $1 AND w.quantity = alert.quantity)`,
-      [shelfId, at],
+      `UPDATE alert SET ended_at = coalesce(ended_at, $3), cleared_at = $3
+       WHERE shelf_id = $1 AND quantity = $2 AND kind IN ('aboveRange', 'belowRange') AND cleared_at IS NULL`,
+      [shelfId, quantity, at],
+    );
+    await tx.query(
+      `UPDATE alert_watch SET state = $3::jsonb
+       WHERE shelf_id = $1 AND quantity = $2 AND kind IN ('aboveRange', 'belowRange')`,
+      [shelfId, quantity, JSON.stringify(idleState)],
     );
   }
 
   /** Ends the open alerts of a sensor and has its watches begin anew on the shelf where it is now. */
-  async restartWatches(tx: Tx, sensorId: string, state: AlertState, at: Date): Promise<void> {
+  async restartWatches(tx: Tx, sensorId: string, at: Date): Promise<void> {
     await tx.query(
       `UPDATE alert SET ended_at = coalesce(ended_at, $2), cleared_at = $2
        WHERE sensor_id = $1 AND cleared_at IS NULL`,
@@ -193,7 +197,7 @@ export class AlertStore {
       `UPDATE alert_watch w SET state = $2::jsonb, shelf_id = coalesce(p.shelf_id, w.shelf_id)
        FROM sensor s LEFT JOIN placement p ON p.sensor_id = s.id AND p.to_at IS NULL
        WHERE w.sensor_id = $1 AND s.id = $1`,
-      [sensorId, JSON.stringify(state)],
+      [sensorId, JSON.stringify(idleState)],
     );
   }
 

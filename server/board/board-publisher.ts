@@ -15,7 +15,7 @@ export class BoardPublisher implements IntakeListener {
   constructor(
     private readonly boards: BoardService,
     private readonly alerts: AlertService,
-    private readonly live: () => LiveFeed,
+    private readonly live: LiveFeed,
     private readonly log: Pick<Logger, 'warn'>,
     private readonly delayMs = 250,
   ) {}
@@ -48,7 +48,7 @@ export class BoardPublisher implements IntakeListener {
     this.waiting.clear();
     for (const [roomId, shelfIds] of rooms) {
       for (const shelf of await this.boards.changedShelves(roomId, shelfIds)) {
-        this.live().publish(roomId, 'shelf:measured', shelf);
+        this.live.publish(roomId, 'shelf:measured', shelf);
       }
     }
   }

@@ -13,6 +13,7 @@ export interface BoardSources {
   roomOf(tx: Tx, roomId: string): Promise<{ name: string; timeZone: string } | null>;
   plantingsOn(tx: Tx, shelfIds: readonly string[]): Promise<Map<string, PlantingSummary[]>>;
   openAlerts(roomId: string): Promise<Alert[]>;
+  /** Tasks due from a day up to another, exclusive, with everything late before it. */
   tasksOf(roomId: string, from: string, to: string): Promise<Task[]>;
 }
 
@@ -20,8 +21,8 @@ type UsedShelf = ShelfRow & { readonly shelfId: string };
 
 /** Missed readings after which a sensor no longer counts as reporting. */
 const REPORTING_INTERVALS = 3;
-/** Days ahead whose tasks the board shows as coming up. */
-const AHEAD_MS = 3 * 86_400_000;
+/** Today's tasks and those of so much time ahead, as coming up. */
+const AHEAD_MS = 4 * 86_400_000;
 
 /** Puts the first screen together. */
 export class BoardService {

@@ -80,12 +80,21 @@ export interface DemonstrationRange {
   readonly lampsOn: Limits;
   readonly lampsOff: Limits;
   readonly reason: string;
+  /** Days since which the shelf wants it; what grew there before wanted something else. */
+  readonly sinceDaysAgo: number;
 }
+
+/** Since what stands there now was sown; on other shelves, ever since. */
+const sinceSowing: Readonly<Record<string, number>> = {
+  A3: leekAndOnionSown,
+  A4: peppersSown,
+  B4: STORY_DAYS_BEFORE.shelfB4Emptied,
+};
 
 /** Wanted ranges: common practice, no source, set for this room. */
 export const demonstrationRanges: readonly DemonstrationRange[] = [
-  ...climate('A1', 'fruiting dwarf tomato', [20, 26, 15, 20], [45, 70, 48, 75], [0.8, 1.5, 0.4, 1.1]),
-  ...climate('A2', 'herbs in leaf', [18, 25, 15, 21], [45, 72, 48, 75], [0.7, 1.4, 0.4, 1.1]),
+  ...climate('A1', 'fruiting dwarf tomato', [20, 26, 15, 21], [45, 70, 48, 75], [0.8, 1.5, 0.4, 1.1]),
+  ...climate('A2', 'herbs in leaf', [18, 25, 15, 22], [45, 72, 48, 75], [0.7, 1.4, 0.4, 1.2]),
   ...climate(
     'A3',
     'leek and onion before and at emergence',
@@ -96,9 +105,9 @@ export const demonstrationRanges: readonly DemonstrationRange[] = [
   range('A3', 'rootZoneTemperature', [14, 22, 14, 22], 'leek and onion seed'),
   ...climate('A4', 'pepper seed under cover', [18, 28, 18, 28], [70, 100, 70, 100], [0, 0.7, 0, 0.7]),
   range('A4', 'rootZoneTemperature', [24, 30, 24, 30], 'pepper seed on the mat'),
-  ...climate('B1', 'strawberry', [16, 23, 10, 18], [50, 76, 55, 82], [0.5, 1.2, 0.3, 0.9]),
-  ...climate('B2', 'potted citrus and bay', [17, 25, 13, 20], [45, 70, 45, 75], [0.6, 1.45, 0.4, 1.15]),
-  ...climate('B3', 'cut lettuce', [14, 22, 10, 18], [50, 78, 58, 84], [0.4, 1.1, 0.2, 0.8]),
+  ...climate('B1', 'strawberry', [16, 24, 10, 20], [50, 76, 55, 82], [0.5, 1.2, 0.3, 0.9]),
+  ...climate('B2', 'potted citrus and bay', [17, 25, 13, 22], [45, 70, 45, 75], [0.6, 1.45, 0.4, 1.15]),
+  ...climate('B3', 'cut lettuce', [14, 23, 10, 20], [50, 78, 58, 84], [0.4, 1.1, 0.2, 0.8]),
   range('B4', 'airTemperature', [5, 25, 5, 25], 'nothing grows here; frost and heat only'),
 ];
 
@@ -130,6 +139,7 @@ function range(
     lampsOn: { low: onLow, high: onHigh },
     lampsOff: { low: offLow, high: offHigh },
     reason,
+    sinceDaysAgo: sinceSowing[shelf] ?? 200,
   };
 }
 

@@ -1,4 +1,4 @@
-import { chmod, mkdir, readFile, writeFile } from 'node:fs/promises';
+import { chmod, mkdir, writeFile } from 'node:fs/promises';
 import { dirname } from 'node:path';
 import { patienceDefaults } from '@shared/alerts/alert-defaults';
 import { simulatedRoom, type SimulatedRoom } from '@shared/contracts/simulation';
@@ -29,7 +29,7 @@ export class DemonstrationService {
   constructor(
     private readonly transactions: Transactions,
     private readonly store: DemonstrationStore,
-    private readonly planTasks: (tx: Tx, roomId: string, from: string, to: string) => Promise<void>,
+    private readonly planTasks: (tx: Tx, roomId: string, before: string) => Promise<void>,
     private readonly now: Clock,
   ) {}
 
@@ -65,7 +65,7 @@ export class DemonstrationService {
       people.set(person.email, await this.store.addMember(tx, roomId, { ...person, passwordHash }));
     }
     const shelves = await this.addShelves(tx, roomId, plan);
-    await this.addRanges(tx, shelves);
+    await this.addRanges(tx, now, plan.timeZone, shelves);
     const devices = await this.addDevices(tx, roomId, plan, shelves);
     await this.addGrowing(tx, roomId, plan.timeZone, now, shelves);
     await this.addCare(tx, roomId, plan.timeZone, now, shelves, people);
@@ -120,8 +120,13 @@ export class DemonstrationService {
     await this.store.addHeatMat(tx, { shelfId, watts: shelf.heatMatWatts, isOn });
   }
 
-  private async addRanges(tx: Tx, shelves: ReadonlyMap<string, string>): Promise<void> {
-    for (const { shelf, quantity, lampsOn, lampsOff, reason } of demonstrationRanges) {
+  private async addRanges(
+    tx: Tx,
+    now: number,
+    zone: string,
+    shelves: ReadonlyMap<string, string>,
+  ): Promise<void> {
+    for (const { shelf, quantity, lampsOn, lampsOff, reason, sinceDaysAgo } of demonstrationRanges) {
       await this.store.addWantedRange(tx, {
         shelfId: idOf(shelves, shelf),
         quantity,
@@ -132,6 +137,8 @@ export class DemonstrationService {
         holdMinutes: patienceDefaults[quantity].holdMs / 60_000,
         clearingMargin: patienceDefaults[quantity].clearMargin,
         reason,
+        // From the noon after, when covers, lamps and mats had done their part.
+        since: new Date(dayBounds(dayBefore(now, sinceDaysAgo - 1, zone), zone).start + DAY_MS / 2),
       });
     }
   }
@@ -216,7 +223,7 @@ export class DemonstrationService {
         personId: people.get(who) ?? null,
       });
     }
-    await this.planTasks(tx, roomId, dayBefore(now, 1, zone), dayBefore(now, -14, zone));
+    await this.planTasks(tx, roomId, dayBefore(now, -14, zone));
     await this.store.completeTasksBefore(tx, roomId, today);
     await this.store.addTask(tx, {
       roomId,
@@ -245,18 +252,4 @@ function dayBefore(now: number, days: number, zone: string): string {
 function lightThreshold(quantity: string, luxPerUmol: number): number | null {
   if (quantity === 'ppfd') return LIT_ABOVE_UMOL;
   return quantity === 'illuminance' ? LIT_ABOVE_UMOL * luxPerUmol : null;
-}
-
-/**
- * Whether the simulator's file is still there.
- *
- * @param devicesFile - Its path.
- * @returns False when it is gone or no room; the simulator then has nothing to play.
- */
-export async function hasDevicesFile(devicesFile: string): Promise<boolean> {
-  try {
-    return simulatedRoom.safeParse(JSON.parse(await readFile(devicesFile, 'utf8'))).success;
-  } catch {
-    return false; // Not there, or not JSON.
-  }
 }

@@ -1,4 +1,4 @@
-import { postReadings } from '@shared/contracts/devices';
+import { getDeviceState, postReadings } from '@shared/contracts/devices';
 import { route, type Route } from '../http/route';
 import type { DeviceIntakeService } from './device-intake-service';
 
@@ -9,5 +9,8 @@ import type { DeviceIntakeService } from './device-intake-service';
  * @returns Its routes.
  */
 export function deviceIntakeRoutes(intake: DeviceIntakeService): Route[] {
-  return [route(postReadings, ({ device, body }) => intake.takeSenml(device, body))];
+  return [
+    route(postReadings, ({ device, body }) => intake.takeSenml(device, body)),
+    route(getDeviceState, ({ device }) => intake.state(device)),
+  ];
 }

@@ -90,6 +90,17 @@ export class DeviceIntakeService {
     };
   }
 
+  /**
+   * What is held of a device's sensors.
+   *
+   * @param device - Whose token it was.
+   * @returns The newest reading of each, null before the first.
+   */
+  async state(device: DeviceAccess): Promise<{ sensor: string; latestAt: string | null }[]> {
+    const newest = await this.store.newest(this.transactions.plain, device.id);
+    return newest.map(({ sensor, latestAt }) => ({ sensor, latestAt: latestAt?.toISOString() ?? null }));
+  }
+
   private async take(
     device: DeviceAccess,
     readings: readonly SentReading[],

@@ -22,4 +22,14 @@ export class DeviceIntakeStore {
       [deviceId, batteryPct],
     );
   }
+
+  /** The newest reading held of each of a device's sensors. */
+  async newest(tx: Tx, deviceId: string): Promise<{ sensor: string; latestAt: Date | null }[]> {
+    return tx.query(
+      `SELECT s.key AS sensor, st.latest_at AS "latestAt"
+       FROM sensor s LEFT JOIN sensor_state st ON st.sensor_id = s.id
+       WHERE s.device_id = $1 AND s.retired_at IS NULL ORDER BY s.key`,
+      [deviceId],
+    );
+  }
 }

@@ -4,10 +4,10 @@ import helmet from 'helmet';
 /**
  * Headers that keep a page to itself: nothing from elsewhere, no inline script, no frame around it.
  *
- * @param isProduction - Whether pages travel over HTTPS only.
+ * @param isHttps - Whether pages travel over HTTPS.
  * @returns The middleware.
  */
-export function securityHeaders(isProduction: boolean): RequestHandler {
+export function securityHeaders(isHttps: boolean): RequestHandler {
   return helmet({
     contentSecurityPolicy: {
       directives: {
@@ -22,10 +22,10 @@ export function securityHeaders(isProduction: boolean): RequestHandler {
         'base-uri': ["'self'"],
         'form-action': ["'self'"],
         'frame-ancestors': ["'none'"],
-        'upgrade-insecure-requests': isProduction ? [] : null,
+        'upgrade-insecure-requests': isHttps ? [] : null,
       },
     },
-    strictTransportSecurity: isProduction ? { maxAge: 31_536_000 } : false,
+    strictTransportSecurity: isHttps ? { maxAge: 31_536_000 } : false,
     referrerPolicy: { policy: 'same-origin' },
   });
 }

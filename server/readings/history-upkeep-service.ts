@@ -1,5 +1,4 @@
-import { idleState } from '@shared/alerts/alert-state';
-import type { AlertEvaluationService } from '../alerts/alert-evaluation-service';
+import type { Quantity } from '@shared/climate/quantity';
 import type { AlertStore } from '../alerts/alert-store';
 import type { Clock } from '../clock';
 import type { Tx } from '../database/transactions';
@@ -16,7 +15,6 @@ export class HistoryUpkeepService {
     private readonly lateReadings: LateReadings,
     private readonly computed: ComputedQuantities,
     private readonly alerts: AlertStore,
-    private readonly evaluation: AlertEvaluationService,
     private readonly now: Clock,
   ) {}
 
@@ -30,15 +28,10 @@ export class HistoryUpkeepService {
     await this.readings.reviseStates(tx, ids);
   }
 
-  /** Judges what goes on by the new rules; what no rule watches any more is over. */
-  async onRulesChanged(tx: Tx, shelfId: string): Promise<void> {
-    const now = this.now().getTime();
-    const sensors = await this.readings.lockSensors(tx, await this.readings.sensorsOnShelf(tx, shelfId));
-    const news = sensors.flatMap((sensor) =>
-      quantitiesOf(sensor).map((quantity) => ({ sensor, quantity, inOrder: [], changedFrom: now })),
-    );
-    await this.evaluation.observe(tx, news, { isLive: false, now });
-    await this.alerts.closeUnruled(tx, shelfId, new Date(now));
+  /** Ends what was open by the old range; the new one judges from now on. */
+  async onRangeChanged(tx: Tx, shelfId: string, quantity: Quantity): Promise<void> {
+    await this.readings.lockSensors(tx, await this.readings.sensorsOnShelf(tx, shelfId));
+    await this.alerts.restartRangeWatches(tx, shelfId, quantity, this.now());
   }
 
   /** Computes the shelf's deficit anew with the other leaf temperature. */
@@ -49,7 +42,7 @@ export class HistoryUpkeepService {
 
   /** Ends the sensor's alerts where it was, and pairs readings anew from then on. */
   async onPlacementsChanged(tx: Tx, sensorId: string, from: Date): Promise<void> {
-    await this.alerts.restartWatches(tx, sensorId, idleState, this.now());
+    await this.alerts.restartWatches(tx, sensorId, this.now());
     const [own] = await this.readings.lockSensors(tx, [sensorId]);
     if (own === undefined) return;
     const concerned =
@@ -69,10 +62,4 @@ export class HistoryUpkeepService {
       await this.computed.recompute(tx, sensor, { from: at, to }, computedTo);
     }
   }
-}
-
-function quantitiesOf(sensor: SensorOnRoad): (SensorOnRoad['quantity'] | 'vapourPressureDeficit')[] {
-  return sensor.quantity === 'relativeHumidity'
-    ? ['relativeHumidity', 'vapourPressureDeficit']
-    : [sensor.quantity];
 }

@@ -45,12 +45,13 @@ export class ShelfPlansStore {
       holdMinutes: range.holdMinutes,
       clearingMargin: range.clearingMargin,
       reason: range.reason,
+      since: range.since.toISOString(),
     }));
   }
 
   /** Sets what a shelf wants of one quantity. */
   async setWantedRange(tx: Tx, shelfId: string, wanted: WantedRange): Promise<void> {
-    const { quantity, lampsOn, lampsOff, holdMinutes, clearingMargin, reason } = wanted;
+    const { quantity, lampsOn, lampsOff, holdMinutes, clearingMargin, reason, since } = wanted;
     await tx.upsert(
       WantedRangeEntity,
       {
@@ -63,6 +64,7 @@ export class ShelfPlansStore {
         holdMinutes,
         clearingMargin,
         reason,
+        since: new Date(since),
       },
       ['shelfId', 'quantity'],
     );

@@ -17,7 +17,7 @@ export interface ShelfRulesParts {
   readonly plans: ShelfPlansStore;
   readonly reader: ShelfPlansService;
   readonly changes: RoomChanges;
-  readonly hooks: Pick<RoomHooks, 'onRulesChanged'>;
+  readonly hooks: Pick<RoomHooks, 'onRangeChanged'>;
   readonly now: Clock;
 }
 
@@ -43,10 +43,13 @@ export class ShelfRulesService {
     });
   }
 
-  /** Sets what a shelf wants of one quantity. */
-  setWantedRange(by: RoomAuthor, shelfId: string, wanted: WantedRange): Promise<WantedRange> {
-    return this.change(by, shelfId, 'wanted-range.set', { ...wanted }, async (tx) => {
-      await this.parts.plans.setWantedRange(tx, shelfId, wanted);
+  /** Sets what a shelf wants of one quantity, from now on. */
+  setWantedRange(by: RoomAuthor, shelfId: string, range: Omit<WantedRange, 'since'>): Promise<WantedRange> {
+    const { plans, hooks, now } = this.parts;
+    return this.change(by, shelfId, 'wanted-range.set', { ...range }, async (tx) => {
+      const wanted = { ...range, since: now().toISOString() };
+      await plans.setWantedRange(tx, shelfId, wanted);
+      await hooks.onRangeChanged(tx, shelfId, range.quantity);
       return wanted;
     });
   }
@@ -55,6 +58,7 @@ export class ShelfRulesService {
   clearWantedRange(by: RoomAuthor, shelfId: string, quantity: Quantity): Promise<void> {
     return this.change(by, shelfId, 'wanted-range.clear', { quantity }, async (tx) => {
       if (!(await this.parts.plans.clearWantedRange(tx, shelfId, quantity))) throw notFound('wanted range');
+      await this.parts.hooks.onRangeChanged(tx, shelfId, quantity);
     });
   }
 
@@ -65,11 +69,10 @@ export class ShelfRulesService {
     detail: Readonly<Record<string, unknown>>,
     work: (tx: Tx) => Promise<T>,
   ): Promise<T> {
-    const { changes, rooms, hooks } = this.parts;
+    const { changes, rooms } = this.parts;
     return changes.make(by, async (tx) => {
       await rooms.lockShelf(tx, by.roomId, shelfId);
       const result = await work(tx);
-      await hooks.onRulesChanged(tx, shelfId);
       return { result, action, subjectId: shelfId, detail };
     });
   }

@@ -16,6 +16,8 @@ export class WantedRangeEntity {
   @Column('double precision', { name: 'clearing_margin' }) clearingMargin!: number;
   /** Where the range came from, in a person's words. */
   @Column('text', { default: '' }) reason!: string;
+  /** Readings before this instant are not judged by it: a new range does not rewrite history. */
+  @Column('timestamptz', { default: () => 'now()' }) since!: Date;
 
   @ManyToOne(() => ShelfEntity, { onDelete: 'CASCADE' })
   @JoinColumn({ name: 'shelf_id', foreignKeyConstraintName: 'wanted_range_shelf_fk' })

@@ -1,8 +1,9 @@
+const { randomBytes } = require('node:crypto');
 const { join } = require('node:path');
 const { startProgram } = require('./child-program');
 const { portFor } = require('./free-port');
 
-const usualPorts = { web: 4280, mailboxPage: 4380, mailboxSmtp: 4525 };
+const usualPorts = { web: 4280, mailboxPage: 4380, mailboxSmtp: 4525, simulator: 4480 };
 
 /**
  * The running application.
@@ -48,9 +49,20 @@ async function startApplication({ folder, env, log, signal, defer }) {
   const devices = { LAMPMEADOW_DEVICES_FILE: join(folder, '.data/demonstration/devices.json') };
   const web = await portFor(env, 'PORT', usualPorts.web, log);
   const mail = isSet(env['SMTP_URL']) ? {} : await startMailbox(start, env, log);
-  const { address, notes } = await start('server', 'The server', { PORT: String(web), ...mail, ...devices });
-  if (env['LAMPMEADOW_DEMO'] !== 'off') {
-    await start('simulator', 'The simulator', { LAMPMEADOW_URL: address, ...devices });
+  const hasSimulator = env['LAMPMEADOW_DEMO'] !== 'off';
+  const control = hasSimulator ? await controlOf(env, log) : null;
+  const { address, notes } = await start('server', 'The server', {
+    PORT: String(web),
+    ...mail,
+    ...devices,
+    ...control?.forServer,
+  });
+  if (control !== null) {
+    await start('simulator', 'The simulator', {
+      LAMPMEADOW_URL: address,
+      ...devices,
+      ...control.forSimulator,
+    });
   }
   return { address, notes, failed: Promise.race(programs.map((program) => program.failed)) };
 }
@@ -69,6 +81,22 @@ async function startMailbox(start, env, log) {
     MAILBOX_SMTP_PORT: String(smtp),
   });
   return { SMTP_URL: `smtp://127.0.0.1:${smtpPort}`, MAILBOX_URL: address };
+}
+
+/**
+ * How the server tells the simulator which scenario to play: a port on loopback and a secret that only they know.
+ *
+ * @param {NodeJS.ProcessEnv} env
+ * @param {(line: string) => void} log
+ * @returns {Promise<{forServer: NodeJS.ProcessEnv, forSimulator: NodeJS.ProcessEnv}>}
+ */
+async function controlOf(env, log) {
+  const port = await portFor(env, 'SIMULATOR_CONTROL_PORT', usualPorts.simulator, log);
+  const secret = { SIMULATOR_CONTROL_SECRET: randomBytes(24).toString('base64url') };
+  return {
+    forServer: { ...secret, SIMULATOR_CONTROL_URL: `http://127.0.0.1:${port}` },
+    forSimulator: { ...secret, SIMULATOR_CONTROL_PORT: String(port) },
+  };
 }
 
 /**

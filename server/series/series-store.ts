@@ -127,6 +127,16 @@ export class SeriesStore {
     }));
   }
 
+  /** Lux for one µmol m⁻² s⁻¹ under the newest lamp of a shelf; null without a lamp. */
+  async luxPerUmolOf(tx: Tx, shelfId: string): Promise<number | null> {
+    const rows: { lux_per_umol: number }[] = await tx.query(
+      `SELECT lux_per_umol FROM lamp WHERE shelf_id = $1 AND removed_on IS NULL
+       ORDER BY fitted_on DESC, id LIMIT 1`,
+      [shelfId],
+    );
+    return rows[0]?.lux_per_umol ?? null;
+  }
+
   /** What was ever measured on a shelf, and since when. */
   async everMeasured(
     tx: Tx,

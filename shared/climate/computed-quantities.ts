@@ -47,7 +47,12 @@ export function computedValue(
   if (air === null) return null;
   switch (quantity) {
     case 'vapourPressureDeficit':
-      return vapourPressureDeficitKPa({ ...air, leafOffsetC });
+      // Spelled out: a spread costs more than the sum itself, a million times.
+      return vapourPressureDeficitKPa({
+        temperatureC: air.temperatureC,
+        relativeHumidityPct: air.relativeHumidityPct,
+        leafOffsetC,
+      });
     case 'dewPoint':
       return dewPointC(air);
     case 'absoluteHumidity':

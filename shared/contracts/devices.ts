@@ -76,6 +76,16 @@ export const postReadings = endpoint({
   media: { request: 'application/senml+json' },
 });
 
+/** Tells a device what is held of each of its sensors, so that it can go on from there. */
+export const getDeviceState = endpoint({
+  name: 'getDeviceState',
+  method: 'get',
+  path: '/devices/state',
+  access: 'device',
+  summary: 'The newest reading held of each sensor of this device',
+  reply: z.array(z.object({ sensor: z.string(), latestAt: instant.nullable() })),
+});
+
 /** A sensor with the shelf where it is now. */
 export const sensor = z.object({
   id,

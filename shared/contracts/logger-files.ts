@@ -1,15 +1,20 @@
 import * as z from 'zod';
-import { measuredQuantities } from '../climate/quantity';
-import { endpoint, id, instant, roomParams } from './endpoint';
+import { quantities } from '../climate/quantity';
+import { endpoint, id, instant, line, roomParams } from './endpoint';
 import { timeZone } from './rooms';
 
-/** Where a file stands on its way in. Nothing is stored before `broughtIn`, and all of it then. */
+/**
+ * Where a file stands on its way in. Nothing is stored before `broughtIn`, and all of it then; after `takenOut` nothing
+ * is any more, but the file is still there.
+ */
 export const loggerFileStatuses = [
   'uploaded',
   'checking',
   'checked',
   'bringingIn',
   'broughtIn',
+  'takingOut',
+  'takenOut',
   'failed',
   'cancelled',
 ] as const;
@@ -24,7 +29,11 @@ export const loggerFileResult = z.object({
   /** Held with another value. */
   different: z.number().int(),
   rejected: z.number().int(),
-  /** Brought in but doubted by a quality test. */
+  /** Cells that say themselves that they hold no value. */
+  missing: z.number().int(),
+  /** Of `alreadyHeld` and `different`, those for which a device had brought a reading. */
+  heldLive: z.number().int(),
+  /** Fresh or replacing, but doubted by a quality test. */
   flagged: z.number().int(),
   from: instant.nullable(),
   to: instant.nullable(),
@@ -42,6 +51,16 @@ export const differingChoice = z.enum(['keep', 'replace']);
 /** Keep what is held, or replace it by what the file says. */
 export type DifferingChoice = z.infer<typeof differingChoice>;
 
+/** Why nothing of a file was stored. */
+export const fileFailure = z.object({
+  code: z.string(),
+  message: z.string(),
+  line: z.number().nullable(),
+  column: z.number().nullable(),
+});
+/** Why nothing of a file was stored. */
+export type FileFailure = z.infer<typeof fileFailure>;
+
 /** A file in the list. */
 export const loggerFile = z.object({
   id,
@@ -52,37 +71,60 @@ export const loggerFile = z.object({
   status: z.enum(loggerFileStatuses),
   /** Bytes read of bytes in all, while checking or bringing in. */
   progress: z.object({ done: z.number(), total: z.number() }).nullable(),
-  failure: z
-    .object({
-      code: z.string(),
-      message: z.string(),
-      line: z.number().nullable(),
-      column: z.number().nullable(),
-    })
-    .nullable(),
+  failure: fileFailure.nullable(),
   result: loggerFileResult.nullable(),
+  /** What was done where another value was held. */
+  differing: differingChoice.nullable(),
   broughtInAt: instant.nullable(),
+  broughtInByName: z.string().nullable(),
+  profileName: z.string().nullable(),
 });
 /** A file in the list. */
 export type LoggerFile = z.infer<typeof loggerFile>;
 
-/** A column of a file, what it was taken for, and where its readings will go. */
+/** A column of a file and what it was taken for. */
 export const fileColumn = z.object({
   index: z.number().int(),
   name: z.string(),
   role: z.string(),
-  quantity: z.enum(measuredQuantities).nullable(),
+  quantity: z.enum(quantities).nullable(),
   unit: z.string().nullable(),
   reason: z.string(),
+});
+/** A column of a file and what it was taken for. */
+export type FileColumn = z.infer<typeof fileColumn>;
+
+/** A series of a file, a column or one sensor's rows, and where its readings will go. */
+export const fileSeries = z.object({
+  /** The same in every file of this layout. */
+  key: z.string(),
+  column: z.number().int(),
+  sensorName: z.string(),
+  name: z.string(),
+  quantity: z.enum(quantities),
+  unit: z.string(),
+  /** Units that it may be in, the stored one first. */
+  units: z.array(z.string()),
+  /** Computed from others here, so it needs no sensor. */
+  isCompared: z.boolean(),
   proposals: z.array(z.object({ sensorId: id, reason: z.string() })),
   sensorId: id.nullable(),
+  /** A sensor that is made when the file is brought in, on this shelf or on none. */
+  newSensor: z.object({ shelfId: id.nullable() }).nullable(),
 });
-/** A column of a file. */
-export type FileColumn = z.infer<typeof fileColumn>;
+/** A series of a file and where its readings will go. */
+export type FileSeries = z.infer<typeof fileSeries>;
+
+/** How files of one layout are read and matched, kept under a name. */
+export const fileProfile = z.object({ id, name: z.string(), usedAt: instant });
+/** How files of one layout are read and matched. */
+export type FileProfile = z.infer<typeof fileProfile>;
 
 /** One line of the file as a person sees it before deciding. */
 export const previewRow = z.object({
   line: z.number().int(),
+  /** At the start of the file, at its end, or further in with something odd. */
+  part: z.enum(['first', 'odd', 'last']),
   cells: z.array(z.string()),
   at: instant.nullable(),
   /** By column: the value in the stored unit. */
@@ -110,7 +152,12 @@ export const loggerFileDetail = loggerFile.extend({
   decimalMark: z.string(),
   timeFormat: z.string(),
   zone: z.string(),
+  startsAt: instant.nullable(),
   columns: z.array(fileColumn),
+  series: z.array(fileSeries),
+  profileId: id.nullable(),
+  /** Profiles kept for this layout, the last used first. */
+  profiles: z.array(fileProfile),
   questions: z.array(fileQuestion),
   preview: z.array(previewRow),
 });
@@ -167,18 +214,35 @@ export const matchLoggerFile = endpoint({
   summary: 'Match columns to sensors and answer what the file leaves open',
   params: fileParams,
   body: z.strictObject({
+    /** Begins with what a profile says; the rest of the request changes that. */
+    profileId: id.optional(),
+    /** What columns hold; null for what is not read. */
     columns: z
       .array(
         z.strictObject({
           index: z.number().int().nonnegative(),
-          sensorId: id.nullable(),
-          unit: z.string().max(20).nullable().optional(),
+          quantity: z.enum(quantities).nullable(),
+          unit: z.string().max(20).nullable(),
         }),
       )
-      .max(512),
+      .max(512)
+      .optional(),
+    /** Where the series go; both null for nowhere. Those left out stay as they are. */
+    series: z
+      .array(
+        z.strictObject({
+          key: z.string().max(2_000),
+          sensorId: id.nullable().default(null),
+          newSensor: z.strictObject({ shelfId: id.nullable() }).nullable().default(null),
+        }),
+      )
+      .max(512)
+      .optional(),
     dateOrder: z.enum(['dayFirst', 'monthFirst']).optional(),
     zone: timeZone.optional(),
     startsAt: instant.optional(),
+    /** Keeps the outcome as a profile of this name. */
+    saveAs: line(80).optional(),
   }),
   reply: loggerFileDetail,
 });
@@ -219,6 +283,44 @@ export const cancelLoggerFile = endpoint({
   reply: loggerFile,
 });
 
+/** Takes a brought-in file's readings out again; what they replaced comes back. */
+export const takeOutLoggerFile = endpoint({
+  name: 'takeOutLoggerFile',
+  method: 'post',
+  path: '/rooms/:roomId/logger-files/:fileId/take-out',
+  access: 'grower',
+  summary: 'Take the readings of a file out again; what they replaced comes back',
+  params: fileParams,
+  reply: loggerFile,
+  status: 202,
+});
+
+/** One request for scripts: uploads a file, reads and matches it by a profile, and brings it in before it answers. */
+export const importLoggerFile = endpoint({
+  name: 'importLoggerFile',
+  method: 'post',
+  path: '/rooms/:roomId/logger-files/bring-in',
+  access: 'grower',
+  summary: 'Upload a logger file (field `file`) and bring it in by a profile, all or nothing',
+  params: roomParams,
+  query: z.object({ profile: line(80), differing: differingChoice.default('keep') }),
+  reply: loggerFile,
+  status: 201,
+  media: { request: 'multipart/form-data' },
+});
+
+/** The file as it was uploaded. */
+export const downloadLoggerFile = endpoint({
+  name: 'downloadLoggerFile',
+  method: 'get',
+  path: '/rooms/:roomId/logger-files/:fileId/original',
+  access: 'viewer',
+  summary: 'The original file, as it was uploaded',
+  params: fileParams,
+  reply: z.string(),
+  media: { reply: 'application/octet-stream' },
+});
+
 /** A line that can't be used. */
 export const rejection = z.object({
   line: z.number().int(),
@@ -241,9 +343,57 @@ export const listRejections = endpoint({
   query: z.object({ after: z.coerce.number().int().nonnegative().default(0) }),
   reply: z.object({
     rejections: z.array(rejection),
+    /** All of them; of very many only the first ten thousand are kept. */
     total: z.number().int(),
     nextAfter: z.number().int().nullable(),
   }),
+});
+
+/** The lines that can't be used, as a CSV file without formulas. */
+export const downloadRejections = endpoint({
+  name: 'downloadRejections',
+  method: 'get',
+  path: '/rooms/:roomId/logger-files/:fileId/rejections.csv',
+  access: 'viewer',
+  summary: 'Lines that can’t be used, with reasons, as CSV',
+  params: fileParams,
+  reply: z.string(),
+  media: { reply: 'text/csv' },
+});
+
+/** The room's profiles. */
+export const listFileProfiles = endpoint({
+  name: 'listFileProfiles',
+  method: 'get',
+  path: '/rooms/:roomId/logger-file-profiles',
+  access: 'viewer',
+  summary: 'How logger files of known layouts are read, by name',
+  params: roomParams,
+  reply: z.object({ profiles: z.array(fileProfile) }),
+});
+
+const profileParams = roomParams.extend({ profileId: id });
+
+/** Gives a profile another name. */
+export const renameFileProfile = endpoint({
+  name: 'renameFileProfile',
+  method: 'patch',
+  path: '/rooms/:roomId/logger-file-profiles/:profileId',
+  access: 'grower',
+  summary: 'Rename a profile',
+  params: profileParams,
+  body: z.strictObject({ name: line(80) }),
+  reply: fileProfile,
+});
+
+/** Forgets a profile; files that were read by it stay. */
+export const removeFileProfile = endpoint({
+  name: 'removeFileProfile',
+  method: 'delete',
+  path: '/rooms/:roomId/logger-file-profiles/:profileId',
+  access: 'grower',
+  summary: 'Forget a profile',
+  params: profileParams,
 });
 
 /** Removes a file and, if it was brought in, its readings. */

@@ -1,7 +1,7 @@
 import * as z from 'zod';
 import { lampKinds, type LampKind } from '../climate/light';
 import { quantities } from '../climate/quantity';
-import { clockTime, day, endpoint, id, line, roomParams } from './endpoint';
+import { clockTime, day, endpoint, id, instant, line, roomParams } from './endpoint';
 
 /** An IANA time zone that this runtime knows. */
 export const timeZone = z.string().refine(
@@ -231,6 +231,8 @@ export const wantedRange = z.object({
   holdMinutes: z.number(),
   clearingMargin: z.number(),
   reason: z.string(),
+  /** Readings are judged by it from this instant on. */
+  since: instant,
 });
 /** What a shelf wants of one quantity. */
 export type WantedRange = z.infer<typeof wantedRange>;

@@ -10,11 +10,11 @@ export function maxGapMs(expectedIntervalS: number): number {
 }
 
 /**
- * When a sensor counts as silent: after three missed readings, but not before ten minutes. Common practice, no source.
+ * When a sensor counts as silent: after three missed readings, but not before half an hour. Common practice, no source.
  *
  * @param expectedIntervalS - The sensor's expected interval [s], above 0.
  * @returns Time without a reading [ms].
  */
 export function silentAfterMs(expectedIntervalS: number): number {
-  return Math.max(10 * 60_000, expectedIntervalS * 3_000);
+  return Math.max(30 * 60_000, expectedIntervalS * 3_000);
 }

@@ -5,7 +5,7 @@ import type { ShelfClimate } from '../room/room-model';
 import { fullDrift, type SensorEffect } from '../scenarios/catalogue';
 
 const DAY_MS = 86_400_000;
-const OUTAGE_MS = 30 * 60_000;
+const OUTAGE_MS = 20 * 60_000;
 const SHARE_OF_READINGS_LOST = 0.002;
 const SHARE_OF_OUTAGES = 1 / 500;
 /** The time from one height of a sensor's slow wandering to the next. */

@@ -15,6 +15,7 @@ export const tightRanges: WantedRange[] = [
     holdMinutes: 10,
     clearingMargin: 0.5,
     reason: 'for the test',
+    since: '2026-01-01T00:00:00Z',
   },
   {
     quantity: 'vapourPressureDeficit',
@@ -23,6 +24,7 @@ export const tightRanges: WantedRange[] = [
     holdMinutes: 10,
     clearingMargin: 0.05,
     reason: 'for the test',
+    since: '2026-01-01T00:00:00Z',
   },
 ];
 

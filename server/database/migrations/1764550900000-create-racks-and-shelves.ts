@@ -80,6 +80,7 @@ export class CreateRacksAndShelves1764550900000 implements MigrationInterface {
         hold_minutes double precision NOT NULL,
         clearing_margin double precision NOT NULL,
         reason text NOT NULL DEFAULT '',
+        since timestamptz NOT NULL DEFAULT now(),
         CONSTRAINT wanted_range_pkey PRIMARY KEY (shelf_id, quantity),
         CONSTRAINT wanted_range_shelf_fk FOREIGN KEY (shelf_id) REFERENCES shelf(id) ON DELETE CASCADE
       )`);

@@ -77,7 +77,8 @@ export class CreateReadings1764551100000 implements MigrationInterface {
         CONSTRAINT computed_hourly_summary_sensor_fk FOREIGN KEY (sensor_id) REFERENCES sensor(id) ON DELETE CASCADE
       )`);
     // Months are made ahead of need, and where a file reaches further back. The owner's rights make the partition,
-    // so that the application itself needs none to change tables.
+    // so that the application itself needs none to change tables. A table is made apart and then attached: that does
+    // not wait for the transactions that are writing readings, nor make others wait.
     await runner.query(`
       CREATE FUNCTION ensure_reading_partitions(from_at timestamptz, to_at timestamptz) RETURNS void
       LANGUAGE plpgsql SECURITY DEFINER SET search_path = pg_catalog, public, pg_temp AS $$
@@ -89,12 +90,16 @@ export class CreateReadings1764551100000 implements MigrationInterface {
           partition_name := 'reading_' || to_char(month, 'YYYY_MM');
           IF to_regclass('public.' || partition_name) IS NULL THEN
             PERFORM pg_advisory_xact_lock(hashtext('reading_partitions'));
-            EXECUTE format(
-              'CREATE TABLE IF NOT EXISTS public.%I PARTITION OF public.reading FOR VALUES FROM (%L) TO (%L)',
-              partition_name,
-              month AT TIME ZONE 'UTC',
-              (month + interval '1 month') AT TIME ZONE 'UTC'
-            );
+            -- Another session may just have made it, which the cache behind to_regclass does not know yet.
+            IF NOT EXISTS (SELECT 1 FROM pg_class WHERE relname = partition_name) THEN
+              EXECUTE format('CREATE TABLE public.%I (LIKE public.reading INCLUDING ALL)', partition_name);
+              EXECUTE format(
+                'ALTER TABLE public.reading ATTACH PARTITION public.%I FOR VALUES FROM (%L) TO (%L)',
+                partition_name,
+                month AT TIME ZONE 'UTC',
+                (month + interval '1 month') AT TIME ZONE 'UTC'
+              );
+            END IF;
           END IF;
           month := month + interval '1 month';
         END LOOP;

@@ -7,6 +7,7 @@ import { CreatePlantingsAndCare1764551300000 } from './1764551300000-create-plan
 import { CreateLoggerFiles1764551400000 } from './1764551400000-create-logger-files';
 import { CreateAuditEntry1764551500000 } from './1764551500000-create-audit-entry';
 import { CreateRequestCounters1764551600000 } from './1764551600000-create-request-counters';
+import { CreateSocketAttachments1764551700000 } from './1764551700000-create-socket-attachments';
 
 /** Every migration in order; a merged one is never edited. */
 export const migrations = [
@@ -19,4 +20,5 @@ export const migrations = [
   CreateLoggerFiles1764551400000,
   CreateAuditEntry1764551500000,
   CreateRequestCounters1764551600000,
+  CreateSocketAttachments1764551700000,
 ];

@@ -1,0 +1,47 @@
+import type { Logger } from 'pino';
+import type { App } from '../app';
+import type { Transactions } from '../database/transactions';
+import { RepeatingJob } from './repeating-job';
+import { whenAlone } from './single-runner';
+
+const MINUTE_MS = 60_000;
+const HOUR_MS = 60 * MINUTE_MS;
+/** Partitions are made this far ahead of need. */
+const AHEAD_MS = 62 * 24 * HOUR_MS;
+
+/**
+ * Starts what happens by the clock. Several processes may run this: each piece of work runs in one of them at a time.
+ *
+ * @param app - Whose services.
+ * @param transactions - Of its database.
+ * @param log - For rounds that failed.
+ * @returns Stops them all, after the work in hand.
+ */
+export function startJobs(app: App, transactions: Transactions, log: Logger): () => Promise<void> {
+  const { silenceJob, care } = app.services;
+  const alone = (name: string, everyMs: number, work: () => Promise<void>): RepeatingJob =>
+    new RepeatingJob(name, everyMs, async () => void (await whenAlone(transactions, name, work)), log);
+  const jobs = [
+    alone('silence', MINUTE_MS / 4, () => silenceJob.run()),
+    alone('tasks', HOUR_MS, () => care.planAhead()),
+    alone('partitions', 6 * HOUR_MS, async () => {
+      const now = Date.now();
+      await transactions.plain.query('SELECT ensure_reading_partitions($1, $2)', [
+        new Date(now),
+        new Date(now + AHEAD_MS),
+      ]);
+    }),
+    alone('sweep', HOUR_MS, async () => {
+      await transactions.plain.query('DELETE FROM rate_limit WHERE resets_at < now()');
+      await transactions.plain.query(
+        "DELETE FROM repeatable_request WHERE created_at < now() - interval '2 days'",
+      );
+    }),
+  ];
+  for (const job of jobs) job.start();
+  app.outbox?.start();
+  return async () => {
+    await app.outbox?.stop();
+    await Promise.all(jobs.map((job) => job.stop()));
+  };
+}

@@ -1,0 +1,70 @@
+import cluster from 'node:cluster';
+import { join } from 'node:path';
+import { pino } from 'pino';
+import type { AddressInfo } from 'node:net';
+import { buildApp, loggedError, type App } from './app';
+import { systemClock } from './clock';
+import { readConfig, type Config } from './config';
+import { createDataSource } from './database/data-source';
+import { migrate } from './database/migrate';
+import { Transactions } from './database/transactions';
+import { demonstrationNotes, fillDemonstration } from './demonstration/fill-demonstration';
+import { startJobs } from './jobs/start-jobs';
+import { startProcesses } from './processes';
+
+const webFolder = join(__dirname, '../web/browser');
+
+/** Starts what the settings name, says so to whoever started it, and stops cleanly. */
+async function main(): Promise<void> {
+  const config = readConfig(process.env);
+  if (config.webProcesses > 1 && cluster.isPrimary) {
+    await startProcesses(config);
+    return;
+  }
+  const stop = await serve(config);
+  let stopping: Promise<void> | null = null;
+  const end = (): void => {
+    stopping ??= stop().finally(() => process.exit(0));
+  };
+  for (const signal of ['SIGTERM', 'SIGINT'] as const) process.on(signal, end);
+  process.on('disconnect', end);
+}
+
+/** Connects, migrates, fills and listens; the answer stops it all. */
+async function serve(config: Config): Promise<() => Promise<void>> {
+  const log = pino({ level: config.logLevel, serializers: { err: loggedError } });
+  const dataSource = await createDataSource(config.databaseUrl).initialize();
+  await migrate(dataSource);
+  const app = await buildApp({ dataSource, config, log, now: systemClock, webFolder });
+  const room = await fillDemonstration(new Transactions(dataSource), app.services.care, config, systemClock);
+  app.services.setDemonstrationRoom(room);
+  const address = await listen(app, config);
+  app.setPublicUrl(address);
+  const stopJobs = startJobs(app, new Transactions(dataSource), log);
+  log.info({ address }, 'listening');
+  process.send?.({ ready: true, address, notes: room === null ? [] : demonstrationNotes() });
+  return async () => {
+    await stopJobs();
+    await app.close();
+    await dataSource.destroy();
+  };
+}
+
+function listen({ http }: App, config: Config): Promise<string> {
+  return new Promise((resolve, reject) => {
+    http.once('error', reject);
+    http.listen(config.port, config.host, () => {
+      const { port } = http.address() as AddressInfo;
+      const host = config.host.includes(':') ? `[${config.host}]` : config.host;
+      resolve(`http://${host}:${port}`);
+    });
+  });
+}
+
+main().catch((error: unknown) => {
+  const problem = error instanceof Error ? error.message : String(error);
+  process.exitCode = 1;
+  console.error(problem);
+  if (process.send === undefined) process.exit();
+  else process.send({ problem }, () => process.exit());
+});

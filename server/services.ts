@@ -1,0 +1,206 @@
+import type passport from 'passport';
+import type { Logger } from 'pino';
+import { AlertService } from './alerts/alert-service';
+import { alertRoutes } from './alerts/alert-routes';
+import { AlertStore } from './alerts/alert-store';
+import { SilenceJob } from './alerts/silence-job';
+import { AuditStore } from './audit/audit-store';
+import { RoomChanges } from './audit/room-changes';
+import { BoardPublisher } from './board/board-publisher';
+import { boardRoutes } from './board/board-routes';
+import { BoardService } from './board/board-service';
+import { BoardStore } from './board/board-store';
+import { ShelfNowService } from './board/shelf-now-service';
+import { careRoutes } from './care/care-routes';
+import { CareService } from './care/care-service';
+import { CareStore } from './care/care-store';
+import type { Clock } from './clock';
+import type { Config } from './config';
+import type { Transactions } from './database/transactions';
+import { ScenariosService } from './demonstration/scenarios-service';
+import { scenariosRoutes } from './demonstration/scenarios-routes';
+import { DeviceIntakeService } from './devices/device-intake-service';
+import { deviceIntakeRoutes } from './devices/device-intake-routes';
+import { DeviceIntakeStore } from './devices/device-intake-store';
+import { devicesRoutes } from './devices/devices-routes';
+import { DevicesService } from './devices/devices-service';
+import { DevicesStore } from './devices/devices-store';
+import type { AccessLookup } from './http/access';
+import type { Route } from './http/route';
+import type { LiveRelay } from './live/live-relay';
+import { MailAlertTeller } from './mail/alert-teller';
+import { MailStore } from './mail/mail-store';
+import { peopleRoutes } from './people/people-routes';
+import { PeopleService } from './people/people-service';
+import { PeopleStore } from './people/people-store';
+import { SignIn } from './people/sign-in';
+import { SignInAttempts } from './people/sign-in-attempts';
+import { PlantingsService } from './plantings/plantings-service';
+import { PlantingsStore } from './plantings/plantings-store';
+import { HistoryUpkeepService } from './readings/history-upkeep-service';
+import { intakeParts } from './readings/intake-parts';
+import { roomsRoutes } from './rooms/rooms-routes';
+import { RoomsService } from './rooms/rooms-service';
+import { RoomsStore } from './rooms/rooms-store';
+import { ShelfPlansService } from './rooms/shelf-plans-service';
+import { ShelfPlansStore } from './rooms/shelf-plans-store';
+import { ShelfRulesService } from './rooms/shelf-rules-service';
+import { LightStore } from './series/light-store';
+import { seriesRoutes } from './series/series-routes';
+import { SeriesService } from './series/series-service';
+import { SeriesStore } from './series/series-store';
+import { ShelfPageService } from './series/shelf-page-service';
+import { ShelfReportService } from './series/shelf-report-service';
+
+/** What the services stand on. */
+export interface Foundation {
+  readonly transactions: Transactions;
+  readonly passport: passport.Authenticator;
+  readonly relay: LiveRelay;
+  readonly config: Config;
+  readonly log: Logger;
+  readonly now: Clock;
+  /** Where links in mails lead, without a trailing slash. */
+  readonly publicUrl: () => string;
+}
+
+/** Everything that the process and the tests hold on to. */
+export interface Services {
+  readonly routes: readonly Route[];
+  readonly accessLookup: AccessLookup;
+  readonly peopleStore: PeopleStore;
+  readonly mailStore: MailStore;
+  readonly deviceIntake: DeviceIntakeService;
+  readonly boardPublisher: BoardPublisher;
+  readonly silenceJob: SilenceJob;
+  readonly care: CareService;
+  /** Tells the scenarios which room is the demonstration. */
+  setDemonstrationRoom(roomId: string | null): void;
+}
+
+/**
+ * Makes every area's service and joins them: the one place that knows all areas.
+ *
+ * @param foundation - What they stand on.
+ * @returns The services and their routes.
+ */
+export function composeServices(foundation: Foundation): Services {
+  const { transactions, relay, config, log, now } = foundation;
+  const audit = new AuditStore();
+  const changes = new RoomChanges(transactions, audit, relay);
+
+  const peopleStore = new PeopleStore();
+  const attempts = new SignInAttempts(transactions);
+  const people = new PeopleService(transactions, peopleStore, attempts, audit);
+
+  const plansStore = new ShelfPlansStore();
+  const plans = new ShelfPlansService(plansStore);
+  const plantings = new PlantingsService(new PlantingsStore());
+
+  const alertStore = new AlertStore();
+  const mailStore = new MailStore();
+  const mailDomain = domainOf(config.mailFrom);
+  const teller = new MailAlertTeller(alertStore, mailStore, foundation.publicUrl, mailDomain);
+  const road = intakeParts(transactions, plans, teller);
+  const hooks = new HistoryUpkeepService(
+    road.readings,
+    road.lateReadings,
+    road.computed,
+    alertStore,
+    now,
+  );
+
+  const roomsStore = new RoomsStore();
+  const rooms = new RoomsService({ transactions, rooms: roomsStore, changes, hooks, now });
+  const rules = new ShelfRulesService({
+    transactions,
+    rooms: roomsStore,
+    plans: plansStore,
+    reader: plans,
+    changes,
+    hooks,
+    now,
+  });
+  const devices = new DevicesService({
+    transactions,
+    devices: new DevicesStore(),
+    rooms,
+    changes,
+    hooks,
+    now,
+  });
+  const care = new CareService({ transactions, care: new CareStore(), rooms, people, feed: relay, now });
+  const alerts = new AlertService(transactions, alertStore, relay);
+
+  const lightStore = new LightStore();
+  const boardStore = new BoardStore();
+  const boards = new BoardService(
+    transactions,
+    boardStore,
+    new ShelfNowService(boardStore, lightStore, plans),
+    {
+      roomOf: (tx, roomId) => rooms.roomOf(tx, roomId),
+      plantingsOn: (tx, shelfIds) => plantings.plantingsOn(tx, shelfIds),
+      openAlerts: (roomId) => alerts.open(roomId),
+      tasksOf: (roomId, from, to) => care.listTasks(roomId, { from, to }),
+    },
+    now,
+  );
+  const boardPublisher = new BoardPublisher(boards, alerts, relay, log);
+  const deviceIntake = new DeviceIntakeService(
+    transactions,
+    new DeviceIntakeStore(),
+    road.intake,
+    boardPublisher,
+    now,
+    (error) => log.warn({ err: error }, 'batch not stored; the device keeps it'),
+  );
+
+  const seriesStore = new SeriesStore();
+  const series = new SeriesService(transactions, seriesStore, road.readings, road.computed, plans);
+  const pages = new ShelfPageService(transactions, seriesStore, {
+    racksOf: (roomId) => rooms.racksOf(roomId),
+    plantingsOn: (tx, shelfIds) => plantings.plantingsOn(tx, shelfIds),
+    wantedRangesOf: (tx, shelfIds) => plans.wantedRangesOf(tx, shelfIds),
+  });
+  const reports = new ShelfReportService(transactions, seriesStore, series, lightStore, {
+    plannedLamps: (...of) => plans.plannedLamps(...of),
+    wantedRangesOf: (...of) => plans.wantedRangesOf(...of),
+    eventsOf: (...of) => care.eventsOf(...of),
+    luxPerUmolOf: (tx, shelfId) => seriesStore.luxPerUmolOf(tx, shelfId),
+  });
+
+  let demonstrationRoom: string | null = null;
+  const scenarios = new ScenariosService(config.simulatorControl, () => demonstrationRoom);
+
+  return {
+    routes: [
+      ...peopleRoutes(people, new SignIn(foundation.passport, config.isHttps), attempts),
+      ...roomsRoutes(rooms, rules),
+      ...devicesRoutes(devices),
+      ...deviceIntakeRoutes(deviceIntake),
+      ...boardRoutes(boards),
+      ...seriesRoutes(pages, series, reports),
+      ...alertRoutes(alerts),
+      ...careRoutes(care),
+      ...scenariosRoutes(scenarios),
+    ],
+    accessLookup: {
+      membershipOf: (personId, roomId) => people.membershipOf(personId, roomId),
+      deviceOf: (token) => devices.deviceOf(token),
+    },
+    peopleStore,
+    mailStore,
+    deviceIntake,
+    boardPublisher,
+    silenceJob: new SilenceJob(transactions, road.readings, road.evaluation, alerts, now),
+    care,
+    setDemonstrationRoom: (roomId) => {
+      demonstrationRoom = roomId;
+    },
+  };
+}
+
+function domainOf(mailFrom: string): string {
+  return /@([^>\s]+)/.exec(mailFrom)?.[1] ?? 'localhost';
+}
