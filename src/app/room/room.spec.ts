@@ -1,7 +1,7 @@
 import type { HttpTestingController } from '@angular/common/http/testing';
 import { TestbedHarnessEnvironment } from '@angular/cdk/testing/testbed';
 import type { HarnessLoader } from '@angular/cdk/testing';
-import { TestBed, type ComponentFixture } from '@angular/core/testing';
+import { DeferBlockBehavior, DeferBlockState, TestBed, type ComponentFixture } from '@angular/core/testing';
 import { MATERIAL_ANIMATIONS } from '@angular/material/core';
 import { MatButtonHarness } from '@angular/material/button/testing';
 import { MatCheckboxHarness } from '@angular/material/checkbox/testing';
@@ -31,6 +31,7 @@ describe('the room screen', () => {
   async function opened(role: Role | null): Promise<void> {
     socket = new FakeSocket();
     TestBed.configureTestingModule({
+      deferBlockBehavior: DeferBlockBehavior.Manual,
       providers: [
         ...providePlayedServer(socket),
         { provide: MATERIAL_ANIMATIONS, useValue: { animationsDisabled: true } },
@@ -181,6 +182,8 @@ describe('the room screen', () => {
     expect(await Promise.all(buttons.map((button) => button.getText()))).toEqual(['dark_modeLamps-off view']);
     TestBed.resetTestingModule();
     await shown(board(), 'keeper');
+    const [scenarios] = await fixture.getDeferBlocks();
+    await scenarios?.render(DeferBlockState.Complete);
     server.expectOne(`${base}/scenarios`).flush(null, { status: 404, statusText: 'x' });
   });
 });

@@ -1,8 +1,9 @@
-import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, inject, signal, type Type } from '@angular/core';
 import { MatDialog } from '@angular/material/dialog';
 import type { Alert } from '@shared/contracts/alerts';
 import type { ShelfEvent } from '@shared/contracts/care';
-import { finalize, type Observable } from 'rxjs';
+import { catchError, finalize, from, switchMap, throwError, type Observable } from 'rxjs';
+import { ApiFailure } from '../core/api-failure';
 import { failureText } from '../core/failure-text';
 import { Notices } from '../core/notices';
 import { ReaderFormat } from '../core/reader-format';
@@ -12,7 +13,7 @@ import { EmptyState } from '../ui/states/empty-state';
 import { ErrorState } from '../ui/states/error-state';
 import { RoomBoard } from './board/room-board';
 import { NeedsALook } from './needs-a-look/needs-a-look';
-import { ObservationDialog, type ObservationPlace } from './observation-dialog/observation-dialog';
+import type { ObservationDialog, ObservationPlace } from './observation-dialog/observation-dialog';
 import { RoomHeading } from './room-heading/room-heading';
 import { RoomSkeleton } from './room-skeleton/room-skeleton';
 import { ScenarioPanel } from './scenario-panel/scenario-panel';
@@ -102,16 +103,28 @@ export class Room {
   protected noteObservation(): void {
     const roomId = this.session.roomId();
     if (roomId === null) return;
-    this.dialog
-      .open<ObservationDialog, ObservationPlace, ShelfEvent>(ObservationDialog, {
+    // Forms are loaded with the first note: the racks shouldn't wait for them.
+    from(import('./observation-dialog/observation-dialog'))
+      .pipe(
+        catchError((cause: unknown) => throwError(() => new ApiFailure('offline', { cause }))),
+        switchMap((part) => this.openDialog(part.ObservationDialog, roomId)),
+      )
+      .subscribe({
+        next: (event) => {
+          if (event !== undefined) this.notices.say('Noted');
+        },
+        error: (error: unknown) => this.notices.sayFailure(error),
+      });
+  }
+
+  private openDialog(dialog: Type<ObservationDialog>, roomId: string): Observable<ShelfEvent | undefined> {
+    return this.dialog
+      .open<ObservationDialog, ObservationPlace, ShelfEvent>(dialog, {
         data: { roomId, shelves: this.shelves() },
         width: '480px',
         maxWidth: 'calc(100vw - 24px)',
       })
-      .afterClosed()
-      .subscribe((event) => {
-        if (event !== undefined) this.notices.say('Noted');
-      });
+      .afterClosed();
   }
 
   private carryOut<T>(id: string, deed: Observable<T>): Observable<T> {
