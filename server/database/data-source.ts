@@ -11,7 +11,9 @@ import { PlacementEntity } from '../devices/placement-entity';
 import { SensorEntity } from '../devices/sensor-entity';
 import { LoggerFileEntity } from '../logger-files/logger-file-entity';
 import { LoggerFilePartEntity } from '../logger-files/logger-file-part-entity';
+import { LoggerFileProfileEntity } from '../logger-files/logger-file-profile-entity';
 import { LoggerFileRejectionEntity } from '../logger-files/logger-file-rejection-entity';
+import { LoggerFileReplacedEntity } from '../logger-files/logger-file-replaced-entity';
 import { MailEntity } from '../mail/mail-entity';
 import { MembershipEntity } from '../people/membership-entity';
 import { PersonEntity } from '../people/person-entity';
@@ -43,7 +45,9 @@ const entities = [
   LampPlanEntity,
   LoggerFileEntity,
   LoggerFilePartEntity,
+  LoggerFileProfileEntity,
   LoggerFileRejectionEntity,
+  LoggerFileReplacedEntity,
   MailEntity,
   MembershipEntity,
   PersonEntity,

@@ -1,0 +1,231 @@
+import { computedValue } from '@shared/climate/computed-quantities';
+import { computedQuantities, type ComputedQuantity } from '@shared/climate/quantity';
+import { maxGapMs } from '@shared/series/expected-interval';
+import { pairNearest } from '@shared/series/pair-nearest';
+import { createPeriodFold, type PeriodFold, type PeriodSums } from '@shared/series/period-summary';
+import { FIRST_FAILED_FLAGS } from '@shared/series/quality-tests';
+import { utcHourBounds } from '@shared/series/room-days';
+import type { Sample } from '@shared/series/series';
+import { BulkSpans } from './bulk-spans';
+import { within, type BulkSums, type BulkTrack } from './bulk-track';
+import { withinMs } from './computed-quantities';
+import type { TouchedSpan } from './late-readings';
+import { lastReadingIn } from './sensor-stream';
+import { settledUpTo } from './settling';
+
+/** A thermometer's time on a shelf [ms], both ends included. */
+export interface ThermometerStay {
+  readonly track: BulkTrack;
+  readonly from: number;
+  readonly to: number;
+}
+
+/** A hygrometer's time on a shelf [ms], half-open, with the thermometers that were ever there. */
+export interface HygrometerStay {
+  readonly from: number;
+  readonly to: number;
+  readonly leafOffsetC: number;
+  readonly thermometers: readonly ThermometerStay[];
+}
+
+interface Running {
+  readonly quantity: ComputedQuantity;
+  fold: PeriodFold;
+  newest: PeriodSums | undefined;
+  savedTo: number;
+}
+
+/** A computed quantity's sums. */
+export interface ComputedBulkSums extends BulkSums {
+  readonly quantity: ComputedQuantity;
+}
+
+/** The computed quantities of one hygrometer, paired and summed as its readings pass. */
+export class BulkComputed {
+  /** Deficits [kPa] since the last {@link BulkComputed.clearDeficits}, for the alerts. */
+  readonly deficits: Sample[] = [];
+  /** Up to where points are in the sums [ms]. */
+  settledTo = -Infinity;
+  private readonly withinMs: number;
+  private readonly reachMs: number;
+  private humidity: Sample[] = [];
+  private readonly temperatures: Sample[][];
+  private readonly running: Running[];
+  private readonly newPoints: BulkSpans;
+
+  /**
+   * @param track - The hygrometer's readings.
+   * @param stays - Where it was, in order.
+   * @param beside - The thermometers on its shelf now.
+   */
+  constructor(
+    readonly track: BulkTrack,
+    private readonly stays: readonly HygrometerStay[],
+    private readonly beside: readonly BulkTrack[],
+  ) {
+    this.withinMs = withinMs(track.sensor);
+    this.reachMs = this.withinMs + maxGapMs(track.sensor.expectedIntervalS);
+    this.temperatures = stays.map(() => []);
+    this.newPoints = new BulkSpans(this.reachMs);
+    this.running = computedQuantities.map((quantity) => ({
+      quantity,
+      fold: this.newFold(undefined),
+      newest: undefined,
+      savedTo: -Infinity,
+    }));
+  }
+
+  /** Where humidity or temperature first changed [ms]; null when neither did. */
+  get changedFrom(): number | null {
+    const own = this.track.spans.firstAt ?? Infinity;
+    const theirs = this.thermometers().map(({ spans }) => (spans.firstAt ?? Infinity) - this.withinMs);
+    const first = Math.min(own, ...theirs);
+    return Number.isFinite(first) ? first : null;
+  }
+
+  /** Takes what the tracks have in their columns. */
+  take(): void {
+    const { ats, values, flags } = this.track.columns;
+    for (let index = 0; index < ats.length; index += 1) {
+      if ((flags[index] ?? 0) >= FIRST_FAILED_FLAGS) continue;
+      this.humidity.push({ at: ats[index] ?? 0, value: values[index] ?? 0 });
+    }
+    this.stays.forEach(({ thermometers }, stay) => {
+      const fresh = temperaturesOf(thermometers);
+      const known = this.temperatures[stay];
+      if (fresh.length > 0) this.temperatures[stay] = known === undefined ? fresh : known.concat(fresh);
+    });
+  }
+
+  /**
+   * Pairs and sums what can't change any more.
+   *
+   * @param clock - Every reading before this instant has been taken [ms].
+   */
+  settle(clock: number): void {
+    this.settleUpTo(Math.min(this.settledBound(), clock - 1));
+  }
+
+  /** Pairs and sums what there is, at the end. */
+  settleLast(): void {
+    const held = this.track.sensor.computedTo ?? -Infinity;
+    this.settleUpTo(Math.max(this.settledBound(), Math.min(held, this.track.latest?.at ?? -Infinity)));
+  }
+
+  /** Forgets the deficits once the alerts have read them. */
+  clearDeficits(): void {
+    this.deficits.length = 0;
+  }
+
+  /** As {@link BulkTrack.completeSums}. */
+  completeSums(isLast: boolean): ComputedBulkSums[] {
+    return this.running.map((one) => {
+      const touched = one.fold.touched();
+      const to = isLast ? Infinity : (touched.at(-1)?.start ?? one.savedTo);
+      const stretches = this.touched({ from: one.savedTo, to });
+      one.savedTo = to;
+      one.newest = touched.at(-1) ?? one.newest;
+      one.fold = this.newFold(one.newest);
+      return { quantity: one.quantity, stretches, sums: within(stretches, touched) };
+    });
+  }
+
+  private touched(window: TouchedSpan): TouchedSpan[] {
+    const reaches = [this.track, ...this.thermometers()].map(({ spans }) => spans).concat(this.newPoints);
+    return merged(reaches.flatMap((spans) => spans.touchedPeriods(window, this.reachMs, utcHourBounds)));
+  }
+
+  private thermometers(): BulkTrack[] {
+    return [...new Set(this.stays.flatMap(({ thermometers }) => thermometers.map(({ track }) => track)))];
+  }
+
+  private settledBound(): number {
+    const { beside } = this;
+    const tracks = [this.track, ...beside];
+    return settledUpTo(
+      this.track.sensor,
+      beside.map(({ sensor }) => sensor),
+      ({ id }) => tracks.find(({ sensor }) => sensor.id === id)?.latest?.at ?? -Infinity,
+    );
+  }
+
+  private settleUpTo(bound: number): void {
+    if (bound <= this.settledTo) return;
+    this.settledTo = bound;
+    const end = countUpTo(this.humidity, bound);
+    const ripe = this.humidity.slice(0, end);
+    this.humidity = this.humidity.slice(end);
+    this.stays.forEach((stay, index) => {
+      const there = ripe.filter(({ at }) => at >= stay.from && at < stay.to);
+      const temperatures = this.temperatures[index] ?? [];
+      if (there.length > 0 && temperatures.length > 0) this.sum(there, temperatures, stay.leafOffsetC);
+      this.temperatures[index] = temperatures.slice(countUpTo(temperatures, bound - this.withinMs - 1));
+    });
+  }
+
+  private sum(humidity: readonly Sample[], temperatures: readonly Sample[], leafOffsetC: number): void {
+    const before = this.track.sensor.computedTo ?? -Infinity;
+    for (const { at, value: humidityPct, other: temperatureC } of pairNearest(
+      humidity,
+      temperatures,
+      this.withinMs,
+    )) {
+      if (at > before) this.newPoints.add(at);
+      for (const { quantity, fold } of this.running) {
+        const value = computedValue(quantity, temperatureC, humidityPct, leafOffsetC);
+        if (value === null) continue;
+        const point = { at, value };
+        fold.add(point);
+        if (quantity === 'vapourPressureDeficit') this.deficits.push(point);
+      }
+    }
+  }
+
+  private newFold(newest: PeriodSums | undefined): PeriodFold {
+    return createPeriodFold({
+      boundsAt: utcHourBounds,
+      maxGapMs: maxGapMs(this.track.sensor.expectedIntervalS),
+      threshold: null,
+      previous: lastReadingIn(newest),
+      load: (start) => (newest?.start === start ? newest : undefined),
+    });
+  }
+}
+
+/** Good temperatures of a shelf in order of time; of two at one instant that of the sensor named first. */
+function temperaturesOf(thermometers: readonly ThermometerStay[]): Sample[] {
+  const lists = thermometers.map(({ track: { columns }, from, to }) => {
+    const samples: Sample[] = [];
+    for (let index = 0; index < columns.ats.length; index += 1) {
+      const at = columns.ats[index] ?? 0;
+      const isGood = (columns.flags[index] ?? 0) < FIRST_FAILED_FLAGS;
+      if (isGood && at >= from && at <= to) samples.push({ at, value: columns.values[index] ?? 0 });
+    }
+    return samples;
+  });
+  const filled = lists.filter(({ length }) => length > 0);
+  if (filled.length <= 1) return filled[0] ?? [];
+  const together = filled.flat().sort((a, b) => a.at - b.at); // Stable: the first named stays first.
+  return together.filter(({ at }, index) => at !== together[index - 1]?.at);
+}
+
+function countUpTo(samples: readonly Sample[], at: number): number {
+  let low = 0;
+  let high = samples.length;
+  while (low < high) {
+    const middle = (low + high) >>> 1;
+    if ((samples[middle]?.at ?? Infinity) <= at) low = middle + 1;
+    else high = middle;
+  }
+  return low;
+}
+
+function merged(stretches: TouchedSpan[]): TouchedSpan[] {
+  const joined: { from: number; to: number }[] = [];
+  for (const { from, to } of stretches.sort((a, b) => a.from - b.from)) {
+    const last = joined.at(-1);
+    if (last !== undefined && from <= last.to) last.to = Math.max(last.to, to);
+    else joined.push({ from, to });
+  }
+  return joined;
+}

@@ -1,0 +1,205 @@
+import type { AlertReplay } from '../alerts/alert-replay';
+import type { Tx } from '../database/transactions';
+import type { BulkComputed } from './bulk-computed';
+import { BulkHeld, type HeldReading } from './bulk-held';
+import type { BulkTrack } from './bulk-track';
+import type { BulkWriter } from './bulk-writer';
+
+/** Readings of some sensors in order of time, in columns. */
+export interface BulkBatch {
+  /** Which sensor, by its place in their list. */
+  readonly sensors: number[];
+  /** [ms since 1970]. */
+  readonly ats: number[];
+  readonly values: number[];
+}
+
+/** What became of the readings of a file so far. */
+export interface BulkCounts {
+  fresh: number;
+  alreadyHeld: number;
+  /** Held, or earlier in the file itself, with another value. */
+  different: number;
+  /** Of those held already, the ones that devices brought. */
+  heldLive: number;
+  /** Fresh or replacing, but doubted by a quality test. */
+  flagged: number;
+}
+
+/** What a {@link BulkIntake} works with. */
+export interface BulkIntakeParts {
+  /** Sees what is held; nobody else may be changing it. */
+  readonly reader: Tx;
+  /** The sensors of the file and those that hang together with them, by their place. */
+  readonly tracks: readonly BulkTrack[];
+  readonly computed: readonly BulkComputed[];
+  /** The replay of each track's own series; null for what nobody watches. */
+  readonly replays: readonly (AlertReplay | null)[];
+  /** The replay of each computed deficit; null for what nobody watches. */
+  readonly deficitReplays: readonly (AlertReplay | null)[];
+  /** Writes what changes; null when the file is only looked through. */
+  readonly writer: BulkWriter | null;
+  readonly replacesDiffering: boolean;
+  /** From where what is held has to be read [ms]. */
+  readonly heldFrom: (firstAt: number) => number;
+}
+
+/** Readings that are not in order of time have to be sorted first. */
+export class OutOfOrder extends Error {
+  override readonly name = 'OutOfOrder';
+}
+
+/** Rows that are kept in columns before sums and alerts read them. */
+const COLUMN_ROWS = 60_000;
+
+/**
+ * Takes any number of readings in order of time, merges them with what is held, and keeps sums, computed quantities and
+ * alert episodes right, in one pass with the memory of a few thousand readings.
+ */
+export class BulkIntake {
+  readonly counts: BulkCounts = { fresh: 0, alreadyHeld: 0, different: 0, heldLive: 0, flagged: 0 };
+  private held: BulkHeld | null = null;
+  private page: HeldReading[] = [];
+  private position = 0;
+  private clock = -Infinity;
+  /** Everything before this instant has been taken [ms]. */
+  private passedTo = -Infinity;
+  /** What is held at the instant of the clock and has not been met in the file. */
+  private atClock: HeldReading[] = [];
+  private rowsInColumns = 0;
+
+  constructor(private readonly parts: BulkIntakeParts) {}
+
+  /**
+   * Takes the next readings.
+   *
+   * @param batch - Not before those taken already.
+   * @throws {@link OutOfOrder} for a reading before another one.
+   */
+  async take(batch: BulkBatch): Promise<void> {
+    const { sensors, ats, values } = batch;
+    if (ats.length === 0) return;
+    await this.parts.writer?.prepare(ats);
+    this.held ??= this.openHeld(ats[0] ?? 0);
+    for (let index = 0; index < ats.length; index += 1) {
+      const at = ats[index] ?? 0;
+      if (at !== this.clock) {
+        if (at < this.clock) throw new OutOfOrder(`Reading ${index} goes back in time.`);
+        if (at >= this.held.knownTo) await this.readHeldTo(this.held, at);
+        this.passHeldBefore(at);
+        this.clock = at;
+        this.passedTo = at;
+      }
+      this.takeOne(sensors[index] ?? 0, at, values[index] ?? 0);
+    }
+    await this.settle();
+  }
+
+  /** Readings were removed or restored in the database already, in some spans of the tracks: computes anew what follows from that. */
+  async recompute(from: number): Promise<void> {
+    this.held = this.openHeld(from);
+  }
+
+  /** Takes what is held after the last reading, and writes everything that is left. */
+  async finish(): Promise<void> {
+    if (this.held === null) return;
+    await this.readHeldTo(this.held, Infinity);
+    this.passHeldBefore(Infinity);
+    await this.settleColumns(true);
+    await this.parts.writer?.finish();
+  }
+
+  private openHeld(firstAt: number): BulkHeld {
+    const ids = this.parts.tracks.map(({ sensor }) => sensor.id);
+    return new BulkHeld(this.parts.reader, ids, this.parts.heldFrom(firstAt));
+  }
+
+  private async readHeldTo(held: BulkHeld, at: number): Promise<void> {
+    while (held.knownTo <= at && held.knownTo < Infinity) {
+      this.passHeldBefore(held.knownTo);
+      this.passedTo = held.knownTo;
+      this.page = await held.next();
+      this.position = 0;
+      await this.settle();
+    }
+  }
+
+  private passHeldBefore(at: number): void {
+    if (this.clock < at) {
+      for (const one of this.atClock) this.passHeld(one);
+      this.atClock = [];
+    }
+    for (let one = this.page[this.position]; one !== undefined; one = this.page[this.position]) {
+      if (one.at > at) return;
+      this.position += 1;
+      if (one.at === at) this.atClock.push(one);
+      else this.passHeld(one);
+    }
+  }
+
+  private passHeld({ sensor, at, value, flags }: HeldReading): void {
+    this.parts.tracks[sensor]?.takeHeld(at, value, flags);
+    this.rowsInColumns += 1;
+  }
+
+  private takeOne(sensor: number, at: number, value: number): void {
+    const track = this.parts.tracks[sensor];
+    if (track === undefined) return;
+    if (at === track.broughtTo) {
+      // The file names an instant twice; the first one counts.
+      if (value === track.broughtValue) this.counts.alreadyHeld += 1;
+      else this.counts.different += 1;
+      return;
+    }
+    track.broughtTo = at;
+    track.broughtValue = value;
+    this.rowsInColumns += 1;
+    const place = this.atClock.length === 0 ? -1 : this.atClock.findIndex((one) => one.sensor === sensor);
+    const held = place === -1 ? undefined : this.atClock.splice(place, 1)[0];
+    if (held === undefined) {
+      this.counts.fresh += 1;
+      const flags = track.takeFresh(at, value);
+      if (flags !== 0) this.counts.flagged += 1;
+      this.parts.writer?.fresh(track, at, value, flags);
+    } else this.meet(track, held, value);
+  }
+
+  private meet(track: BulkTrack, held: HeldReading, value: number): void {
+    if (held.isLive) this.counts.heldLive += 1;
+    const isSame = held.value === value;
+    if (isSame) this.counts.alreadyHeld += 1;
+    else this.counts.different += 1;
+    if (isSame || !this.parts.replacesDiffering) track.takeHeld(held.at, held.value, held.flags);
+    else if (track.takeReplacement(held.at, value) !== 0) this.counts.flagged += 1;
+  }
+
+  private async settle(): Promise<void> {
+    if (this.rowsInColumns >= COLUMN_ROWS) await this.settleColumns(false);
+    await this.parts.writer?.drained();
+  }
+
+  private async settleColumns(isLast: boolean): Promise<void> {
+    const { tracks, computed, replays, deficitReplays, reader, writer } = this.parts;
+    const rows = this.rowsInColumns;
+    this.rowsInColumns = 0;
+    for (const one of computed) {
+      one.take();
+      if (isLast) one.settleLast();
+      else one.settle(this.passedTo);
+    }
+    for (const [index, track] of tracks.entries()) {
+      await replays[index]?.take(reader, track.columns, track.spans.firstAt);
+    }
+    for (const [index, one] of computed.entries()) {
+      const deficits = {
+        ats: one.deficits.map(({ at }) => at),
+        values: one.deficits.map(({ value }) => value),
+        flags: one.deficits.map(() => 0),
+      };
+      await deficitReplays[index]?.take(reader, deficits, one.changedFrom);
+      one.clearDeficits();
+    }
+    for (const track of tracks) track.clearColumns();
+    await writer?.settled(rows);
+  }
+}

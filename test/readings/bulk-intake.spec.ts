@@ -1,0 +1,132 @@
+import fc from 'fast-check';
+import type { DataSource } from 'typeorm';
+import { AlertStore } from '../../server/alerts/alert-store';
+import { BulkIntakeService } from '../../server/readings/bulk-intake-service';
+import { BulkStore } from '../../server/readings/bulk-store';
+import { createTestDatabase, type TestDatabase } from '../database/test-database';
+import {
+  keptOf,
+  roadOver,
+  send,
+  sensorsOnAShelf,
+  tightRanges,
+  type Sent,
+  type ShelfSensors,
+} from './intake-harness';
+
+const start = Date.UTC(2026, 2, 28, 20); // The night in which Dublin's clocks go forward.
+const step = 5 * 60_000;
+const count = 96;
+const now = start + count * step;
+
+// Invented: a night with a warm and a dry spell, a spike and a gap, so that every kind of rule has something to do.
+const readings: Sent[] = Array.from({ length: count }, (_, index): Sent[] => {
+  const at = start + index * step;
+  if (index >= 60 && index < 66) return [];
+  const isWarm = index > 20 && index < 40;
+  return [
+    { of: 'temperature', at, value: index === 50 ? 999 : (isWarm ? 26 : 21) + (index % 7) / 10 },
+    { of: 'humidity', at: at + 1_000, value: index > 70 ? 35 : 62 + (index % 5) },
+  ];
+}).flat();
+
+describe('readings of a file', () => {
+  let database: TestDatabase;
+
+  beforeAll(async () => {
+    database = await createTestDatabase();
+  });
+  afterAll(() => database.drop());
+
+  async function keptAfterLive(batches: readonly (readonly Sent[])[]): Promise<unknown> {
+    const sensors = await sensorsOnAShelf(database.dataSource.manager);
+    await send(roadOver(database.dataSource), sensors, batches, now);
+    return keptOf(database.dataSource.manager, sensors);
+  }
+
+  it('bring what live readings bring, whatever was held before and whatever comes after', async () => {
+    const reference = await keptAfterLive([readings]);
+    const ways = fc.record({
+      // Which readings come live before the file, which live after it; the file holds all of them or the rest.
+      before: fc.constantFrom('none', 'first', 'middle', 'last', 'even', 'humidity'),
+      after: fc.constantFrom('none', 'last', 'middle', 'temperature'),
+      isWhole: fc.boolean(),
+      size: fc.constantFrom(1, 9, 1_000),
+    });
+    await fc.assert(
+      fc.asyncProperty(ways, async ({ before, after, isWhole, size }) => {
+        const sensors = await sensorsOnAShelf(database.dataSource.manager);
+        const road = roadOver(database.dataSource);
+        const early = pick(before);
+        const late = pick(after).filter((reading) => !early.includes(reading));
+        await send(road, sensors, [early], now);
+        const file = readings.filter(
+          (reading) => !late.includes(reading) && (isWhole || !early.includes(reading)),
+        );
+        const counts = await bringIn(database.dataSource, sensors, file, size);
+        expect(counts.fresh).toBe(readings.length - early.length - late.length);
+        expect(counts.fresh + counts.alreadyHeld).toBe(file.length);
+        await send(road, sensors, [late], now);
+        expect(await keptOf(database.dataSource.manager, sensors)).toEqual(reference);
+      }),
+      { numRuns: 40, seed: 20260328 },
+    );
+  });
+});
+
+function pick(which: string): Sent[] {
+  return readings.filter(({ of }, index) => {
+    const share = index / readings.length;
+    switch (which) {
+      case 'first':
+        return share < 0.4;
+      case 'middle':
+        return share > 0.3 && share < 0.6;
+      case 'last':
+        return share > 0.7;
+      case 'even':
+        return index % 4 < 2;
+      default:
+        return of === which;
+    }
+  });
+}
+
+async function bringIn(
+  dataSource: DataSource,
+  sensors: ShelfSensors,
+  file: readonly Sent[],
+  size: number,
+): Promise<{ fresh: number; alreadyHeld: number }> {
+  const road = roadOver(dataSource);
+  const service = new BulkIntakeService(new BulkStore(), road.readings, road.computed, new AlertStore(), {
+    wantedRangesOf: async (_tx, shelfIds) => new Map(shelfIds.map((id) => [id, tightRanges])),
+    plannedLamps: async () => new Map(),
+  });
+  const sensorIds = [sensors.temperature, sensors.humidity];
+  const reader = dataSource.createQueryRunner();
+  const fileId = '00000000-0000-4000-8000-000000000001';
+  try {
+    return await road.transactions.run(async (tx) => {
+      const locked = await service.lock(tx, sensorIds);
+      const { intake } = await service.open(tx, reader.manager, locked, {
+        fileId,
+        sensorIds,
+        replacesDiffering: false,
+        now,
+      });
+      for (let from = 0; from < file.length; from += size) {
+        const piece = file.slice(from, from + size);
+        await intake.take({
+          sensors: piece.map(({ of }) => sensorIds.indexOf(sensors[of])),
+          ats: piece.map(({ at }) => at),
+          values: piece.map(({ value }) => value),
+        });
+      }
+      await intake.finish();
+      return intake.counts;
+    });
+  } finally {
+    await reader.release();
+  }
+}
