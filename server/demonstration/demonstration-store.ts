@@ -81,11 +81,14 @@ export class DemonstrationStore {
     await tx.save(WantedRangeEntity, range);
   }
 
-  /** Ticks what was due before a day, so that the past looks lived in. */
+  /** Ticks what was due before a day, so that the past looks lived in; the last feeding was forgotten. */
   async completeTasksBefore(tx: Tx, roomId: string, day: string): Promise<void> {
     await tx.query(
       `UPDATE task SET done_at = due_on + time '09:00', done_by = person_id
-       WHERE room_id = $1 AND due_on < $2 AND kind <> 'feed'`,
+       WHERE room_id = $1 AND due_on < $2
+         AND (kind <> 'feed' OR due_on < (
+           SELECT max(due_on) FROM task late WHERE late.room_id = $1 AND late.kind = 'feed' AND late.due_on < $2
+         ))`,
       [roomId, day],
     );
   }
