@@ -246,7 +246,7 @@ describe('rooms', () => {
   });
 
   describe('wanted ranges', () => {
-    const range: Omit<WantedRange, 'quantity'> = {
+    const range: Omit<WantedRange, 'quantity' | 'since'> = {
       lampsOn: { low: 0, high: 25 },
       lampsOff: { low: null, high: 22 },
       holdMinutes: 15,
@@ -262,7 +262,11 @@ describe('rooms', () => {
       await staff.grower.put(`${path}/airTemperature`, { ...range, holdMinutes: 0 }).expect(200);
       const reply = await staff.grower.put(`${path}/airTemperature`, range).expect(200);
 
-      expect(reply.body).toEqual({ quantity: 'airTemperature', ...range });
+      expect(reply.body).toEqual({
+        quantity: 'airTemperature',
+        ...range,
+        since: application.now.toISOString(),
+      });
       const listed = (await staff.viewer.get(path).expect(200)).body as WantedRange[];
       expect(listed.map(({ quantity }) => quantity)).toEqual(['airTemperature', 'relativeHumidity']);
       expect(listed[0]).toEqual(reply.body);

@@ -1,0 +1,155 @@
+/** What a caller is answered: a refusal's status, or that the request went through to the handler. */
+export type Outcome = 401 | 403 | 404 | 'allowed';
+
+/** Everybody that the table is about: nobody signed in, a device with its token, a keeper of another room, members. */
+export const callers = ['nobody', 'device', 'outsider', 'viewer', 'helper', 'grower', 'keeper'] as const;
+/** One of {@link callers}. */
+export type CallerName = (typeof callers)[number];
+
+type Outcomes = Readonly<Record<CallerName, Outcome>>;
+
+/** One endpoint: what each caller is answered, and a good request where the endpoint's parameters alone make none. */
+export interface AccessRow {
+  readonly outcomes: Outcomes;
+  readonly body?: object;
+  readonly query?: string;
+}
+
+const anyone: Outcomes = {
+  nobody: 'allowed',
+  device: 'allowed',
+  outsider: 'allowed',
+  viewer: 'allowed',
+  helper: 'allowed',
+  grower: 'allowed',
+  keeper: 'allowed',
+};
+const signedIn: Outcomes = { ...anyone, nobody: 401, device: 401 };
+const device: Outcomes = {
+  nobody: 401,
+  device: 'allowed',
+  outsider: 401,
+  viewer: 401,
+  helper: 401,
+  grower: 401,
+  keeper: 401,
+};
+const viewer: Outcomes = {
+  nobody: 401,
+  device: 401,
+  outsider: 404,
+  viewer: 'allowed',
+  helper: 'allowed',
+  grower: 'allowed',
+  keeper: 'allowed',
+};
+const helper: Outcomes = {
+  nobody: 401,
+  device: 401,
+  outsider: 404,
+  viewer: 403,
+  helper: 'allowed',
+  grower: 'allowed',
+  keeper: 'allowed',
+};
+const grower: Outcomes = {
+  nobody: 401,
+  device: 401,
+  outsider: 404,
+  viewer: 403,
+  helper: 403,
+  grower: 'allowed',
+  keeper: 'allowed',
+};
+const keeper: Outcomes = {
+  nobody: 401,
+  device: 401,
+  outsider: 404,
+  viewer: 403,
+  helper: 403,
+  grower: 403,
+  keeper: 'allowed',
+};
+
+const span = 'from=2026-04-01T00:00:00Z&to=2026-04-02T00:00:00Z';
+const noLimits = { low: null, high: null };
+
+/**
+ * Who may what, endpoint by endpoint: written out by hand from the roles that people know, so that it agrees with the
+ * contract only if both are right.
+ */
+export const accessTable: Readonly<Record<string, AccessRow>> = {
+  signIn: { outcomes: anyone },
+  signOut: { outcomes: signedIn },
+  getAccount: { outcomes: signedIn },
+  changeAccount: { outcomes: signedIn },
+  changePassword: { outcomes: signedIn },
+  changeMailChoice: { outcomes: viewer },
+  listMembers: { outcomes: viewer },
+
+  getRoom: { outcomes: viewer },
+  changeRoom: { outcomes: keeper },
+  listRacks: { outcomes: viewer },
+  addRack: { outcomes: keeper },
+  addShelf: { outcomes: keeper, body: { label: 'new' } },
+  changeShelf: { outcomes: keeper, body: { widthCm: 90 } },
+  retireShelf: { outcomes: keeper },
+  fitLamp: { outcomes: keeper, body: { kind: 'whiteLed', watts: 40, fittedOn: '2026-01-01' } },
+  setLampHours: { outcomes: grower, body: { switchesOn: '06:00', switchesOff: '22:00' } },
+  setHeatMat: { outcomes: grower, body: { watts: 40, isOn: true } },
+  listWantedRanges: { outcomes: viewer },
+  setWantedRange: {
+    outcomes: grower,
+    body: { lampsOn: noLimits, lampsOff: noLimits, holdMinutes: 15, clearingMargin: 0.5 },
+  },
+  clearWantedRange: { outcomes: grower },
+
+  postReadings: { outcomes: device },
+  getDeviceState: { outcomes: device },
+  listDevices: { outcomes: viewer },
+  addDevice: { outcomes: keeper },
+  renewDeviceToken: { outcomes: keeper },
+  revokeDevice: { outcomes: keeper },
+  addSensor: {
+    outcomes: keeper,
+    body: { key: 'new', quantity: 'airTemperature', expectedIntervalS: 60 },
+  },
+  placeSensor: { outcomes: keeper, body: { from: '2026-04-01T00:00:00Z' } },
+
+  getBoard: { outcomes: viewer },
+  getShelf: { outcomes: viewer },
+  getSeries: { outcomes: viewer, query: span },
+  getShelfReport: { outcomes: viewer, query: span },
+  getDegreeDays: { outcomes: viewer, query: span },
+
+  uploadLoggerFile: { outcomes: grower },
+  importLoggerFile: { outcomes: grower },
+  listLoggerFiles: { outcomes: viewer },
+  getLoggerFile: { outcomes: viewer },
+  matchLoggerFile: { outcomes: grower },
+  checkLoggerFile: { outcomes: grower },
+  bringInLoggerFile: { outcomes: grower },
+  cancelLoggerFile: { outcomes: grower },
+  takeOutLoggerFile: { outcomes: grower },
+  downloadLoggerFile: { outcomes: viewer },
+  listRejections: { outcomes: viewer },
+  downloadRejections: { outcomes: viewer },
+  removeLoggerFile: { outcomes: grower },
+  listFileProfiles: { outcomes: viewer },
+  renameFileProfile: { outcomes: grower, body: { name: 'another name' } },
+  removeFileProfile: { outcomes: grower },
+
+  listAlerts: { outcomes: viewer },
+  acknowledgeAlert: { outcomes: helper },
+
+  listTasks: { outcomes: viewer, query: 'from=2026-04-01&to=2026-04-08' },
+  completeTask: { outcomes: helper },
+  reopenTask: { outcomes: helper },
+  listRoutines: { outcomes: viewer },
+  addRoutine: { outcomes: grower },
+  addShelfEvent: { outcomes: helper, body: { kind: 'observed', text: 'up' } },
+
+  listScenarios: { outcomes: keeper },
+  startScenario: { outcomes: keeper },
+  stopScenario: { outcomes: keeper },
+};
