@@ -1,5 +1,6 @@
 import type { Routine, ShelfEvent, Task } from '@shared/contracts/care';
 import type { Problem } from '@shared/contracts/problem';
+import { LiveRelay } from '../../server/live/live-relay';
 import { RoutineEntity } from '../../server/care/routine-entity';
 import { TaskEntity } from '../../server/care/task-entity';
 import { aRoutine, aTask } from '../builders/care';
@@ -69,6 +70,22 @@ describe('care', () => {
         note: 'dry at the edges',
       });
       expect(second.body).toEqual(first.body);
+    });
+
+    it('that change are told to the dashboards of their room, and only then', async () => {
+      const task = await aTask(tx, { roomId: staff.room.id });
+      const path = `${staff.path}/tasks/${task.id}/completion`;
+      const published = jest.spyOn(LiveRelay.prototype, 'publish');
+
+      const ticked = await staff.helper.put(path).expect(200);
+      await staff.helper.put(path).expect(200);
+      const reopened = await staff.helper.delete(path).expect(200);
+
+      expect(published.mock.calls).toEqual([
+        [staff.room.id, 'task:changed', ticked.body],
+        [staff.room.id, 'task:changed', reopened.body],
+      ]);
+      published.mockRestore();
     });
 
     it('are open again once the tick is taken back', async () => {

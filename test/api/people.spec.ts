@@ -4,6 +4,7 @@ import type { Problem } from '@shared/contracts/problem';
 import { AuditEntryEntity } from '../../server/audit/audit-entry-entity';
 import { PersonEntity } from '../../server/people/person-entity';
 import type { Tx } from '../../server/database/transactions';
+import { sessionSecret } from '../../server/people/session-secret';
 import { aMember, aPerson, testPassword } from '../builders/people';
 import { aRoom } from '../builders/rooms';
 import { Caller, cookieOf } from './caller';
@@ -174,6 +175,33 @@ describe('people', () => {
         [person.id],
       );
       expect(rows).toHaveLength(1);
+    });
+
+    it('is signed with the configured secret, or with one that all processes share', async () => {
+      const { transactions } = application.database;
+
+      const [first, second] = await Promise.all([
+        sessionSecret(transactions, null),
+        sessionSecret(transactions, null),
+      ]);
+
+      expect(first).toMatch(/^[\w-]{43}$/);
+      expect(second).toBe(first);
+      expect(await sessionSecret(transactions, 'configured')).toBe('configured');
+    });
+
+    it('travels only over HTTPS where pages do', async () => {
+      const secure = await startTestApplication({ PUBLIC_URL: 'https://room.example.org' });
+      const person = await aPerson(secure.tx);
+
+      const reply = await request(secure.express)
+        .post('/api/v1/session')
+        .set('X-Forwarded-Proto', 'https')
+        .send({ email: person.email, password: testPassword })
+        .expect(200);
+
+      expect(String(reply.headers['set-cookie'])).toContain('; Secure');
+      await secure.stop();
     });
 
     it('writes nothing without the token that its pages know', async () => {
