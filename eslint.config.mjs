@@ -82,7 +82,7 @@ export default [
       ],
       '@typescript-eslint/no-floating-promises': 'error',
       '@typescript-eslint/no-explicit-any': 'error',
-      '@typescript-eslint/no-unused-vars': ['error', { argsIgnorePattern: '^_' }],
+      '@typescript-eslint/no-unused-vars': ['error', { argsIgnorePattern: '^_', ignoreRestSiblings: true }],
       'tsdoc/syntax': 'error',
       'max-lines': ['error', { max: 400, skipBlankLines: true, skipComments: true }],
     },
@@ -98,7 +98,8 @@ export default [
           patterns: [
             {
               regex: '^(?!\\.|simple-statistics|luxon|rrule|csv-parse|iconv-lite)',
-              message: 'shared/ domain code imports only simple-statistics, luxon, rrule, csv-parse and iconv-lite.',
+              message:
+                'shared/ domain code imports only simple-statistics, luxon, rrule, csv-parse and iconv-lite.',
             },
           ],
         },
@@ -111,7 +112,10 @@ export default [
       ],
       'no-restricted-syntax': [
         'error',
-        { selector: "NewExpression[callee.name='Date'][arguments.length=0]", message: 'Pass the instant in.' },
+        {
+          selector: "NewExpression[callee.name='Date'][arguments.length=0]",
+          message: 'Pass the instant in.',
+        },
       ],
     },
   },

@@ -128,8 +128,8 @@ export class DeviceIntakeService {
     const now = this.now().getTime();
     const outcome = await this.intake.store(bySensor, { isLive: true, now }, seen);
     this.listener.readingsStored(outcome);
-    const different = accepted.filter(({ sensorId, at }) =>
-      outcome.receipts.get(sensorId)?.different.includes(at),
+    const different = accepted.filter(
+      ({ sensorId, at }) => outcome.receipts.get(sensorId)?.different.includes(at) === true,
     );
     const receipts = [...outcome.receipts.values()];
     return {
