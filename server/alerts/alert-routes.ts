@@ -1,4 +1,4 @@
-import { acknowledgeAlert, listAlerts } from '@shared/contracts/alerts';
+import { acknowledgeAlert, getAlert, listAlerts } from '@shared/contracts/alerts';
 import { route, type Route } from '../http/route';
 import type { AlertService } from './alert-service';
 
@@ -11,6 +11,7 @@ import type { AlertService } from './alert-service';
 export function alertRoutes(alerts: AlertService): Route[] {
   return [
     route(listAlerts, ({ room, query }) => alerts.list(room.id, query)),
+    route(getAlert, ({ room, params }) => alerts.one(room.id, params.alertId)),
     route(acknowledgeAlert, ({ room, params, person, body }) =>
       alerts.acknowledge(room.id, params.alertId, person, body.note),
     ),

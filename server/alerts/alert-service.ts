@@ -48,6 +48,21 @@ export class AlertService {
   }
 
   /**
+   * One alert.
+   *
+   * @param roomId - Whose.
+   * @param alertId - Which.
+   * @returns The alert as it is now.
+   * @throws RequestProblem 404 when the room has no such alert.
+   */
+  async one(roomId: string, alertId: string): Promise<Alert> {
+    const [found] = await this.store.byIds(this.transactions.plain, [alertId]);
+    if (found?.roomId !== roomId) throw notFound('alert');
+    const { roomId: _room, ...alert } = found;
+    return alert;
+  }
+
+  /**
    * Notes that somebody has seen an alert; the first one stays.
    *
    * @param roomId - Whose.

@@ -70,6 +70,17 @@ export const listAlerts = endpoint({
   reply: z.object({ alerts: z.array(alert), nextCursor: z.string().nullable() }),
 });
 
+/** One alert. */
+export const getAlert = endpoint({
+  name: 'getAlert',
+  method: 'get',
+  path: '/rooms/:roomId/alerts/:alertId',
+  access: 'viewer',
+  summary: 'One alert of the room',
+  params: roomParams.extend({ alertId: id }),
+  reply: alert,
+});
+
 /** Says "I have seen it". */
 export const acknowledgeAlert = endpoint({
   name: 'acknowledgeAlert',

@@ -61,6 +61,7 @@ export const endpoints: readonly Endpoint[] = [
   loggerFiles.renameFileProfile,
   loggerFiles.removeFileProfile,
   alerts.listAlerts,
+  alerts.getAlert,
   alerts.acknowledgeAlert,
   care.listTasks,
   care.completeTask,

@@ -140,6 +140,7 @@ export const accessTable: Readonly<Record<string, AccessRow>> = {
   removeFileProfile: { outcomes: grower },
 
   listAlerts: { outcomes: viewer },
+  getAlert: { outcomes: viewer },
   acknowledgeAlert: { outcomes: helper },
 
   listTasks: { outcomes: viewer, query: 'from=2026-04-01&to=2026-04-08' },
