@@ -121,14 +121,20 @@ function wordsOf(facts: EpisodeFacts): Words {
       };
     case 'sensorFailed':
       return {
-        title: `${sideWords[quantity].noun} sensor ${is === 'is' ? 'fails' : 'failed'} its quality tests`,
+        title: `${sensorNoun(quantity)} ${is === 'is' ? 'fails' : 'failed'} its quality tests`,
         sentence: `${spanned('Readings failed their quality tests')}.`,
       };
     case 'sensorSilent':
-      return silenceWords(facts, `${sideWords[quantity].noun} sensor`);
+      return silenceWords(facts, sensorNoun(quantity));
     case 'deviceSilent':
       return silenceWords(facts, 'device');
   }
+}
+
+/** Air has a temperature and a humidity: their sensors go by what they measure, not by where. */
+function sensorNoun(quantity: AlertQuantity): string {
+  if (quantity === 'relativeHumidity') return 'humidity sensor';
+  return `${sideWords[quantity].noun} sensor`;
 }
 
 const msPerHour = 3_600_000;
