@@ -22,6 +22,36 @@ export const appRoutes: Routes = [
     loadComponent: () => import('./shelf/shelf-page').then((m) => m.ShelfPage),
   },
   {
+    path: 'alerts',
+    title: 'Alerts',
+    ...signedIn,
+    loadComponent: () => import('./alerts/alerts-page').then((m) => m.AlertsPage),
+  },
+  {
+    path: 'alerts/:alertId',
+    title: 'Alert',
+    ...signedIn,
+    loadComponent: () => import('./alerts/alert-page/alert-page').then((m) => m.AlertPage),
+  },
+  {
+    path: 'loggers',
+    title: 'Logger files',
+    ...signedIn,
+    loadComponent: () => import('./loggers/file-list/loggers-page').then((m) => m.LoggersPage),
+  },
+  {
+    path: 'loggers/new',
+    title: 'Bring in a file',
+    ...signedIn,
+    loadComponent: () => import('./loggers/choose-file/choose-file').then((m) => m.ChooseFile),
+  },
+  {
+    path: 'loggers/:fileId',
+    title: 'Logger file',
+    ...signedIn,
+    loadComponent: () => import('./loggers/logger-file-page').then((m) => m.LoggerFilePage),
+  },
+  {
     path: 'account',
     title: 'Your account',
     ...signedIn,

@@ -1,6 +1,7 @@
-import { ChangeDetectionStrategy, Component, computed, inject } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, effect, inject, Injector } from '@angular/core';
 import { RouterOutlet } from '@angular/router';
 import { appRoutes } from './app-routes';
+import { AlertInbox } from './core/alert-inbox';
 import { LiveState } from './core/live-state';
 import { Session } from './core/session';
 import { destinationsWithin } from './destinations';
@@ -19,6 +20,7 @@ import type { RoomChoice } from './ui/frame/destination';
       [roomName]="roomName()"
       [otherRooms]="otherRooms()"
       [connection]="connection()"
+      [badges]="badges()"
       (roomChosen)="chooseRoom($event)"
       (signOutChosen)="signOut()"
     >
@@ -31,6 +33,8 @@ import type { RoomChoice } from './ui/frame/destination';
 export class App {
   private readonly session = inject(Session);
   private readonly liveState = inject(LiveState);
+  private readonly injector = inject(Injector);
+  private readonly inbox = inject(AlertInbox);
 
   protected readonly destinations = destinationsWithin(appRoutes);
   protected readonly personName = computed(() => this.session.account()?.name ?? null);
@@ -46,8 +50,16 @@ export class App {
     return liveness === 'connecting' ? 'live' : liveness;
   });
 
+  protected readonly badges = computed(() => ({ '/alerts': this.inbox.unseenCount() }));
+
   constructor() {
     inject(HeadingFocus);
+    const whenSignedIn = effect(() => {
+      if (this.session.account() === null) return;
+      whenSignedIn.destroy();
+      // Loaded late: it brings socket.io along, which the first page needs for nothing else.
+      void import('./core/alert-feed').then(({ AlertFeed }) => this.injector.get(AlertFeed));
+    });
   }
 
   protected chooseRoom({ id }: RoomChoice): void {

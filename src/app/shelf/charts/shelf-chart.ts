@@ -29,7 +29,7 @@ import { keptValue } from '../kept-value';
 import { quantityTitle } from '../quantity-title';
 import { ShelfData } from '../shelf-data';
 import { chartMarks } from './chart-marks';
-import { hasReadings, shownLines, shownWanted, withLive, type LiveValue } from './shown-series';
+import { hasReadings, shownLines, shownWanted, withLive, type LiveValue } from '../../core/shown-series';
 
 /** One quantity of the shelf: its newest value, what is wanted of it, and its chart. */
 @Component({

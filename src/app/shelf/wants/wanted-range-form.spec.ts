@@ -8,6 +8,7 @@ const range: WantedRange = {
   lampsOff: { low: 16, high: null },
   holdMinutes: 10,
   clearingMargin: 0.5,
+  since: '2026-11-01T00:00:00Z',
   reason: 'Where both plantings’ ranges meet',
 };
 

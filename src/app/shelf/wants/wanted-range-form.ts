@@ -15,7 +15,7 @@ export interface TypedRange {
 }
 
 /** What is saved of a range. */
-export type SavedRange = Omit<WantedRange, 'quantity'>;
+export type SavedRange = Omit<WantedRange, 'quantity' | 'since'>;
 
 const longestHoldMinutes = 1440;
 const widestMargin = 50;

@@ -33,6 +33,7 @@ function range(changes: Partial<WantedRange> = {}): WantedRange {
     lampsOff: { low: 16, high: 20 },
     holdMinutes: 10,
     clearingMargin: 0.5,
+    since: '2026-11-01T00:00:00Z',
     reason: 'Where both plantings’ ranges meet',
     ...changes,
   };

@@ -1,10 +1,24 @@
 import type { Quantity } from '@shared/climate/quantity';
 import type { Measure } from '@shared/contracts/board';
-import type { Series } from '@shared/contracts/series';
+import type { ChartPoint, Series } from '@shared/contracts/series';
 import type { TemperatureUnit } from '@shared/format/numbers';
 import { quantityDecimals, shownRange, shownUnit, shownValue } from '@shared/format/quantities';
+import type { WantedRange } from '@shared/format/standing';
 import { maxGapMs } from '@shared/series/expected-interval';
-import type { ChartLine, ChartPoint, WantedSpan } from '../../ui/chart/chart-data';
+
+/** A line ready to be drawn, in the reader's unit. */
+export interface ShownLine {
+  readonly name: string;
+  readonly unit: string;
+  readonly decimals: number;
+  readonly points: readonly ChartPoint[];
+}
+
+/** What is wanted from one instant to another [ms since 1970 UTC], in the reader's unit. */
+export interface ShownWanted extends WantedRange {
+  readonly from: number;
+  readonly to: number;
+}
 
 /** A value that came after the chart was fetched. */
 export type LiveValue = Pick<Measure, 'at' | 'value' | 'expectedIntervalS'>;
@@ -18,7 +32,7 @@ export function shownLines(
   { quantity, lines }: Series,
   live: readonly LiveValue[],
   temperatureUnit: TemperatureUnit,
-): ChartLine[] {
+): ShownLine[] {
   const newest = newestLine(lines.map(({ points }) => points));
   return lines.map(({ name, resolution, points }, index) => ({
     name,
@@ -31,7 +45,7 @@ export function shownLines(
 }
 
 /** The wanted range over time in the reader's unit; where nothing is wanted there is no span. */
-export function shownWanted({ quantity, wanted }: Series, temperatureUnit: TemperatureUnit): WantedSpan[] {
+export function shownWanted({ quantity, wanted }: Series, temperatureUnit: TemperatureUnit): ShownWanted[] {
   return wanted
     .filter(({ low, high }) => low !== null || high !== null)
     .map(({ from, to, ...range }) => ({

@@ -1,5 +1,5 @@
 import type { ChartPoint, Series } from '@shared/contracts/series';
-import { inventedId } from '../../core/testing/board-builder';
+import { inventedId } from './testing/board-builder';
 import { hasReadings, shownLines, shownWanted, withLive, type LiveValue } from './shown-series';
 
 const start = Date.parse('2026-12-01T14:00:00Z');

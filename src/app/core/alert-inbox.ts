@@ -1,0 +1,34 @@
+import { computed, Injectable, signal } from '@angular/core';
+import type { Alert } from '@shared/contracts/alerts';
+
+/**
+ * The open alerts of the room, for the badge in the navigation and whoever lists them. It only holds them; the feed
+ * fills it, so that the frame needn't load the live connection to count.
+ */
+@Injectable({ providedIn: 'root' })
+export class AlertInbox {
+  private readonly held = signal<readonly Alert[] | null>(null);
+
+  /** Open alerts, the newest first; null until they have been fetched. */
+  readonly open = this.held.asReadonly();
+  /** How many of them nobody has seen yet. */
+  readonly unseenCount = computed(
+    () => (this.held() ?? []).filter(({ acknowledgedAt }) => acknowledgedAt === null).length,
+  );
+
+  /** Holds what was fetched; null forgets another room's. */
+  hold(alerts: readonly Alert[] | null): void {
+    this.held.set(alerts);
+  }
+
+  /** Takes over an alert that opened, got worse, was acknowledged or cleared. */
+  takeOver(alert: Alert): void {
+    this.held.update((alerts) => {
+      if (alerts === null) return null;
+      const others = alerts.filter(({ id }) => id !== alert.id);
+      if (alert.clearedAt !== null) return others;
+      const isKnown = others.length < alerts.length;
+      return isKnown ? alerts.map((one) => (one.id === alert.id ? alert : one)) : [alert, ...alerts];
+    });
+  }
+}
