@@ -1,0 +1,47 @@
+import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
+import { MatFormFieldModule } from '@angular/material/form-field';
+import { MatSelectModule } from '@angular/material/select';
+import type { FileSeries } from '@shared/contracts/logger-files';
+import type { SensorChoice, ShelfChoice } from '../logger-file-data';
+import { goalOf, goalText, type SeriesGoal } from './series-goal';
+
+/** Where the readings of one series go: to a sensor of the room, to a new one, or nowhere. */
+@Component({
+  selector: 'app-series-choice',
+  templateUrl: './series-choice.html',
+  styleUrl: './choice.scss',
+  imports: [MatFormFieldModule, MatSelectModule],
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class SeriesChoice {
+  readonly series = input.required<FileSeries>();
+  readonly sensors = input.required<readonly SensorChoice[]>();
+  readonly shelves = input.required<readonly ShelfChoice[]>();
+  readonly mayMatch = input.required<boolean>();
+  readonly matched = output<SeriesGoal>();
+
+  protected readonly name = computed(() => {
+    const { sensorName, name } = this.series();
+    return [sensorName, name].filter((part) => part !== '').join(' · ') || 'no name';
+  });
+  protected readonly goal = computed(() => goalText(this.series()));
+
+  private readonly fitting = computed(() =>
+    this.sensors().filter(({ quantity }) => quantity === this.series().quantity),
+  );
+  protected readonly proposed = computed(() =>
+    this.series().proposals.flatMap(({ sensorId }) => this.fitting().filter(({ id }) => id === sensorId)),
+  );
+  protected readonly others = computed(() =>
+    this.fitting().filter((sensor) => !this.proposed().includes(sensor)),
+  );
+  /** Why the chosen sensor was proposed; null for one that was not. */
+  protected readonly reason = computed(() => {
+    const { proposals, sensorId } = this.series();
+    return proposals.find((proposal) => proposal.sensorId === sensorId)?.reason ?? null;
+  });
+
+  protected choose(goal: string): void {
+    this.matched.emit(goalOf(goal));
+  }
+}
