@@ -7,6 +7,7 @@ import type { DeviceRequests, LiveEvents, LiveRequests } from '@shared/contracts
 import type { AccessLookup } from '../http/access';
 import type { DeviceAccess, SignedInPerson } from '../http/route';
 import type { DeviceIntakeService } from '../devices/device-intake-service';
+import { adapterPool } from './adapter-pool';
 import type { LiveFeed } from './live-feed';
 
 /** What the sockets need. */
@@ -41,7 +42,7 @@ export class LiveServer implements LiveFeed {
     this.io = new Server(parts.http, {
       serveClient: false,
       maxHttpBufferSize: MAX_FRAME_BYTES,
-      adapter: createAdapter(parts.pool, { tableName: 'socket_io_attachment' }),
+      adapter: createAdapter(adapterPool(parts.pool), { tableName: 'socket_io_attachment' }),
       // A page of another site must not ride on the session cookie.
       allowRequest: (req, decide) => {
         const origin = req.headers.origin;

@@ -24,16 +24,17 @@ const shownCharacters = 4000;
  * @param {object} options
  * @param {string} options.title - What it is to a reader, such as `The server`.
  * @param {string} options.script
+ * @param {string[]} [options.args] - Its command line.
  * @param {NodeJS.ProcessEnv} options.env
  * @param {string} options.logFile - Takes what it writes; that of the run before is kept beside it.
  * @param {AbortSignal} options.signal - Gives up waiting.
  * @returns {Promise<ChildProgram>}
  * @throws {Problem} When it ends before it is ready.
  */
-async function startProgram({ title, script, env, logFile, signal }) {
+async function startProgram({ title, script, args = [], env, logFile, signal }) {
   const log = openLog(logFile);
   // A session of its own: Ctrl-C reaches this script alone, which then stops its programs in order.
-  const child = fork(script, { env, detached: true, stdio: ['ignore', log, log, 'ipc'] });
+  const child = fork(script, args, { env, detached: true, stdio: ['ignore', log, log, 'ipc'] });
   closeSync(log);
   const ended = new Promise((resolve) => {
     child.once('error', resolve);

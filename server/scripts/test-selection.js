@@ -5,7 +5,7 @@ const { runCommand } = require('./run-command');
 /**
  * What some tests need to run.
  *
- * @typedef {{ database: boolean, browser: boolean }} TestNeeds
+ * @typedef {{ database: boolean, builds: boolean, browser: boolean }} TestNeeds
  */
 
 /**
@@ -26,7 +26,8 @@ async function selectedTests(args, signal) {
 }
 
 /**
- * What test files need, which follows from where they lie: pure code and pages need nothing, journeys need both.
+ * What test files need, which follows from where they lie: pure code and pages need nothing, faults the built server
+ * beside a database, journeys a browser too.
  *
  * @param {string[]} paths - From the project's folder.
  * @returns {TestNeeds}
@@ -34,6 +35,7 @@ async function selectedTests(args, signal) {
 function needsOf(paths) {
   return {
     database: paths.some((path) => !/^(shared|src|test\/reference)\//.test(path)),
+    builds: paths.some((path) => /^test\/(e2e|faults)\//.test(path)),
     browser: paths.some((path) => path.startsWith('test/e2e/')),
   };
 }

@@ -21,10 +21,8 @@ void runScript(async (context) => {
   const env = { ...process.env };
   delete env['DATABASE_URL']; // what is lived with is out of the tests' reach
   if (needs.database) env['TEST_DATABASE_URL'] = (await testDatabase('test', context)).url;
-  if (needs.browser) {
-    env['CHROMIUM_PATH'] = await ensureChromium({ log, signal });
-    await ensureBuilt([serverBuild, webBuild], { log, signal });
-  }
+  if (needs.browser) env['CHROMIUM_PATH'] = await ensureChromium({ log, signal });
+  if (needs.builds) await ensureBuilt([serverBuild, webBuild], { log, signal });
   const result = await runJest(args, env, signal);
   counts = result.counts;
   if (counts.passed + counts.failed === 0) throw new Problem('No test ran.');

@@ -41,12 +41,15 @@ describe('installed packages', () => {
 });
 
 describe('what tests need', () => {
+  const nothing = { database: false, builds: false, browser: false };
+
   it.each([
-    ['pure code', ['shared/climate/psychrometrics.spec.ts'], { database: false, browser: false }],
-    ['pages', ['src/app/ui/chart.spec.ts'], { database: false, browser: false }],
-    ['the server', ['shared/a.spec.ts', 'server/b.spec.ts'], { database: true, browser: false }],
-    ['journeys', ['test/e2e/sow.spec.ts'], { database: true, browser: true }],
-    ['nothing', [], { database: false, browser: false }],
+    ['pure code', ['shared/climate/psychrometrics.spec.ts'], nothing],
+    ['pages', ['src/app/ui/chart.spec.ts'], nothing],
+    ['the server', ['shared/a.spec.ts', 'server/b.spec.ts'], { ...nothing, database: true }],
+    ['faults', ['test/faults/power-cut.spec.ts'], { database: true, builds: true, browser: false }],
+    ['journeys', ['test/e2e/sow.spec.ts'], { database: true, builds: true, browser: true }],
+    ['nothing', [], nothing],
   ])('follows from where they lie, for %s', (_what, paths, needs) => {
     expect(needsOf(paths)).toEqual(needs);
   });

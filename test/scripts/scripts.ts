@@ -13,6 +13,14 @@ export interface Application {
   failed: Promise<never>;
 }
 
+/** A running program as server/scripts/child-program.js hands it out. */
+export interface ChildProgram {
+  /** The message with which it said that it is ready. */
+  ready: Readonly<Record<string, unknown>>;
+  failed: Promise<never>;
+  stop(): Promise<void>;
+}
+
 /** What the scripts export, as far as specs use it. They are plain JavaScript, so their types are given here. */
 interface Scripts {
   application: {
@@ -30,6 +38,16 @@ interface Scripts {
       folder: string,
       work: () => Promise<unknown>,
     ): Promise<boolean>;
+  };
+  'child-program': {
+    startProgram(options: {
+      title: string;
+      script: string;
+      args?: string[];
+      env: NodeJS.ProcessEnv;
+      logFile: string;
+      signal: AbortSignal;
+    }): Promise<ChildProgram>;
   };
   'exclusive-claim': {
     claim(
@@ -54,7 +72,9 @@ interface Scripts {
     }): Promise<Postgres>;
   };
   processes: { processesIn(program: string, folder: string): number[] };
-  'test-selection': { needsOf(paths: string[]): { database: boolean; browser: boolean } };
+  'test-selection': {
+    needsOf(paths: string[]): { database: boolean; builds: boolean; browser: boolean };
+  };
 }
 
 /**
