@@ -1,6 +1,7 @@
 import { parseArgs } from 'node:util';
 import * as z from 'zod';
 import { startScenarioRequest, type StartScenarioRequest } from '@shared/contracts/simulation';
+import { HISTORY_DAYS } from '@shared/demonstration/kestrel-lane';
 import { startControlServer, startScenarioNow, type ControlledRoom } from './control/control-server';
 import { DeviceFleet } from './devices/device-fleet';
 import { readRoom } from './devices/read-room';
@@ -15,6 +16,8 @@ const settings = z.object({
   LAMPMEADOW_DEVICES_FILE: z.string().min(1),
   SIMULATOR_INTERVAL_SECONDS: z.coerce.number().int().min(1).max(3600).default(10),
   SIMULATOR_SEED: z.coerce.number().int().default(1),
+  /** How much past a room without readings gets. */
+  SIMULATOR_HISTORY_DAYS: z.coerce.number().min(0).max(1000).default(HISTORY_DAYS),
   /** Room seconds per real second. */
   SIMULATOR_SPEED: z.coerce.number().positive().max(10_000).default(1),
   /** The room's time at the beginning; now, when it is left out. */
@@ -46,8 +49,8 @@ runProcess(async (): Promise<Running> => {
     secret === undefined ? null : await startControlServer(controlled, secret, values.SIMULATOR_CONTROL_PORT);
   // A room that begins at another time than now is a rehearsal, and has no past.
   if (values.SIMULATOR_START === undefined) {
-    const { LAMPMEADOW_URL: url, SIMULATOR_SEED: seed } = values;
-    const stored = await catchUp({ room, url, seed, nowMs: time.now() });
+    const { LAMPMEADOW_URL: url, SIMULATOR_SEED: seed, SIMULATOR_HISTORY_DAYS: days } = values;
+    const stored = await catchUp({ room, url, seed, days, nowMs: time.now() });
     console.info(`history: ${stored} readings stored`);
   }
   const fleet = new DeviceFleet({

@@ -1,6 +1,5 @@
 import { getDeviceState, readingsReceipt, type SenmlPack } from '@shared/contracts/devices';
 import type { SimulatedRoom } from '@shared/contracts/simulation';
-import { HISTORY_DAYS } from '@shared/demonstration/kestrel-lane';
 import { historyRows } from './history-rows';
 
 /** What has to be caught up with. */
@@ -9,6 +8,8 @@ export interface CatchUpRequest {
   /** Address of the server, without a path. */
   readonly url: string;
   readonly seed: number;
+  /** How far back it goes at most. */
+  readonly days: number;
   readonly nowMs: number;
 }
 
@@ -34,8 +35,10 @@ interface Parcel {
  * @throws Error when the server keeps refusing.
  */
 export async function catchUp(request: CatchUpRequest): Promise<number> {
-  const { room, url, seed, nowMs } = request;
-  const parcels = await Promise.all(room.devices.map(({ token }) => parcelFor(url, token, nowMs)));
+  const { room, url, seed, days, nowMs } = request;
+  const parcels = await Promise.all(
+    room.devices.map(({ token }) => parcelFor(url, token, nowMs - days * DAY_MS)),
+  );
   const stepMs = STEP_SECONDS * 1000;
   const earliest = Math.min(...parcels.map(({ resumeMs }) => resumeMs));
   const fromMs = (Math.floor(earliest / stepMs) + 1) * stepMs;
@@ -61,12 +64,12 @@ export async function catchUp(request: CatchUpRequest): Promise<number> {
   return counter.stored;
 }
 
-async function parcelFor(url: string, token: string, nowMs: number): Promise<Parcel> {
+async function parcelFor(url: string, token: string, earliestMs: number): Promise<Parcel> {
   const answer = await fetch(`${url}/api/v1${getDeviceState.path}`, { headers: bearer(token) });
   if (!answer.ok) throw new Error(`the server does not know this room's devices (${answer.status})`);
   const state = getDeviceState.reply.parse(await answer.json());
   const newest = state.map(({ latestAt }) => (latestAt === null ? -Infinity : Date.parse(latestAt)));
-  const resumeMs = Math.max(nowMs - HISTORY_DAYS * DAY_MS, ...newest);
+  const resumeMs = Math.max(earliestMs, ...newest);
   return { token, resumeMs, records: [], sending: Promise.resolve() };
 }
 
