@@ -28,6 +28,9 @@ import { DevicesStore } from './devices/devices-store';
 import type { AccessLookup } from './http/access';
 import type { Route } from './http/route';
 import type { LiveRelay } from './live/live-relay';
+import { loggerFileParts } from './logger-files/logger-file-parts';
+import { loggerFileRoutes } from './logger-files/logger-file-routes';
+import type { LoggerFileRunner } from './logger-files/logger-file-runner';
 import { MailAlertTeller } from './mail/alert-teller';
 import { MailStore } from './mail/mail-store';
 import { peopleRoutes } from './people/people-routes';
@@ -74,6 +77,7 @@ export interface Services {
   readonly boardPublisher: BoardPublisher;
   readonly silenceJob: SilenceJob;
   readonly care: CareService;
+  readonly loggerFiles: LoggerFileRunner;
   /** Tells the scenarios which room is the demonstration. */
   setDemonstrationRoom(roomId: string | null): void;
 }
@@ -132,6 +136,18 @@ export function composeServices(foundation: Foundation): Services {
   const care = new CareService({ transactions, care: new CareStore(), rooms, people, feed: relay, now });
   const alerts = new AlertService(transactions, alertStore, relay);
 
+  const loggerFiles = loggerFileParts({
+    transactions,
+    road,
+    alertStore,
+    plans,
+    audit,
+    feed: relay,
+    publishAlerts: (alertIds) => alerts.publishChanged(alertIds),
+    now,
+    onError: (error) => log.error({ err: error }, 'work on a logger file failed'),
+  });
+
   const lightStore = new LightStore();
   const boardStore = new BoardStore();
   const boards = new BoardService(
@@ -182,6 +198,7 @@ export function composeServices(foundation: Foundation): Services {
       ...boardRoutes(boards),
       ...seriesRoutes(pages, series, reports),
       ...alertRoutes(alerts),
+      ...loggerFileRoutes(loggerFiles.files, config.uploadMaxBytes),
       ...careRoutes(care),
       ...scenariosRoutes(scenarios),
     ],
@@ -195,6 +212,7 @@ export function composeServices(foundation: Foundation): Services {
     boardPublisher,
     silenceJob: new SilenceJob(transactions, road.readings, road.evaluation, alerts, now),
     care,
+    loggerFiles: loggerFiles.runner,
     setDemonstrationRoom: (roomId) => {
       demonstrationRoom = roomId;
     },

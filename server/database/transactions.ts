@@ -13,6 +13,17 @@ export class Transactions {
   }
 
   /**
+   * Takes a connection out of the pool, for what belongs to a connection, such as its advisory locks.
+   *
+   * @returns The connection, outside any transaction, and the way to give it back.
+   */
+  async connection(): Promise<{ readonly tx: Tx; release(): Promise<void> }> {
+    const runner = this.dataSource.createQueryRunner();
+    await runner.connect();
+    return { tx: runner.manager, release: () => runner.release() };
+  }
+
+  /**
    * Runs work in one transaction.
    *
    * @param work - Gets the transaction; throwing rolls everything back.

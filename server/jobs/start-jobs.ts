@@ -18,11 +18,12 @@ const AHEAD_MS = 62 * 24 * HOUR_MS;
  * @returns Stops them all, after the work in hand.
  */
 export function startJobs(app: App, transactions: Transactions, log: Logger): () => Promise<void> {
-  const { silenceJob, care } = app.services;
+  const { silenceJob, care, loggerFiles } = app.services;
   const alone = (name: string, everyMs: number, work: () => Promise<void>): RepeatingJob =>
     new RepeatingJob(name, everyMs, async () => void (await whenAlone(transactions, name, work)), log);
   const jobs = [
     alone('silence', MINUTE_MS / 4, () => silenceJob.run()),
+    alone('logger files left behind', MINUTE_MS / 4, () => loggerFiles.failAbandoned()),
     alone('tasks', HOUR_MS, () => care.planAhead()),
     alone('partitions', 6 * HOUR_MS, async () => {
       const now = Date.now();
@@ -43,5 +44,6 @@ export function startJobs(app: App, transactions: Transactions, log: Logger): ()
   return async () => {
     await app.outbox?.stop();
     await Promise.all(jobs.map((job) => job.stop()));
+    await loggerFiles.settled();
   };
 }

@@ -3,23 +3,30 @@ import { maxGapMs } from '@shared/series/expected-interval';
 import { qualityHistoryMs, qualityLimits } from '@shared/series/quality-tests';
 import { AlertReplay, type ReplayedSeries, type ReplaySources } from '../alerts/alert-replay';
 import type { AlertStore } from '../alerts/alert-store';
-import type { Tx } from '../database/transactions';
+import type { Transactions, Tx } from '../database/transactions';
 import { BulkComputed, type HygrometerStay } from './bulk-computed';
 import { BulkIntake } from './bulk-intake';
 import type { BulkStore, StayRow } from './bulk-store';
 import { BulkTrack } from './bulk-track';
 import { BulkWriter } from './bulk-writer';
 import { withinMs, type ComputedQuantities } from './computed-quantities';
+import type { TouchedSpan } from './late-readings';
 import type { FlaggedSample, ReadingStore, SensorOnRoad } from './reading-store';
 import { temperaturesBeside } from './settling';
 
 /** How a file is to be taken in. */
 export interface BulkOrder {
-  /** The file; null when readings were removed already and only what follows is computed anew. */
-  readonly fileId: string | null;
+  readonly fileId: string;
   /** Its sensors, in the order in which batches name them. */
   readonly sensorIds: readonly string[];
   readonly replacesDiffering: boolean;
+  /** The present [ms]. */
+  readonly now: number;
+}
+
+/** Where readings were removed or put back. */
+export interface BulkRemoval {
+  readonly spans: ReadonlyMap<string, TouchedSpan>;
   /** The present [ms]. */
   readonly now: number;
 }
@@ -32,7 +39,7 @@ export interface OpenBulkIntake {
   readonly tracks: readonly BulkTrack[];
 }
 
-/** A room's day and what its bounds may be moved by. */
+/** A room's day, twice. */
 const TWO_DAYS_MS = 2 * 86_400_000;
 
 /** Puts the bulk road of readings together: the same checks, sums and alerts as for live readings, a million at a time. */
@@ -40,6 +47,7 @@ export class BulkIntakeService {
   private readonly sources: ReplaySources;
 
   constructor(
+    private readonly transactions: Transactions,
     private readonly store: BulkStore,
     private readonly readings: ReadingStore,
     private readonly computed: ComputedQuantities,
@@ -89,27 +97,59 @@ export class BulkIntakeService {
   }
 
   /**
-   * Begins to store a file's readings, or to compute anew what follows from their removal.
+   * Begins to store a file's readings.
    *
-   * @param tx - The transaction of the change, holding the locks of {@link BulkIntakeService.lock}.
-   * @param reader - Sees what is held; may be `tx` itself when nothing new is stored.
+   * @param tx - The transaction, holding the locks of {@link BulkIntakeService.lock}.
+   * @param reader - Another connection; sees what is held while `tx` is busy copying.
    * @param sensors - As `lock` returned them.
    * @param order - See {@link BulkOrder}.
    * @returns What to hand the readings to.
    */
-  async open(
+  open(tx: Tx, reader: Tx, sensors: readonly SensorOnRoad[], order: BulkOrder): Promise<OpenBulkIntake> {
+    return this.join(tx, reader, sensors, sensors, order);
+  }
+
+  /**
+   * Computes anew what follows from readings that were removed or put back.
+   *
+   * @param tx - The transaction that did it, holding the locks of {@link BulkIntakeService.lock}.
+   * @param before - As `lock` returned them before the change.
+   * @param removal - Where readings changed, by sensor, and the present [ms].
+   * @returns Ids of the alerts that changed.
+   */
+  async recompute(tx: Tx, before: readonly SensorOnRoad[], removal: BulkRemoval): Promise<string[]> {
+    const sensors = await this.store.standing(tx, before);
+    const { intake, writer, tracks } = await this.join(tx, tx, sensors, before, {
+      fileId: null,
+      sensorIds: [...removal.spans.keys()],
+      replacesDiffering: false,
+      now: removal.now,
+    });
+    for (const { sensor, spans } of tracks) {
+      const span = removal.spans.get(sensor.id);
+      if (span !== undefined) spans.addSpan(span);
+    }
+    await intake.recompute(Math.min(...[...removal.spans.values()].map(({ from }) => from)));
+    await intake.finish();
+    await this.store.saveStanding(tx, sensors);
+    return writer?.alertIds ?? [];
+  }
+
+  private async join(
     tx: Tx,
     reader: Tx,
     sensors: readonly SensorOnRoad[],
-    order: BulkOrder,
+    before: readonly SensorOnRoad[],
+    order: Omit<BulkOrder, 'fileId'> & { readonly fileId: string | null },
   ): Promise<OpenBulkIntake> {
     const tracks = sensors.map((sensor, place) => new BulkTrack(sensor, place));
     const computed = await this.computedOf(tx, tracks);
-    const { replays, deficitReplays } = await this.replaysOf(tx, tracks, computed, order);
+    const { replays, deficitReplays } = await this.replaysOf(tx, tracks, before, computed, order);
     const shared = { tracks, computed, replays, deficitReplays };
     const writer = new BulkWriter({
       tx,
-      beside: reader,
+      reader,
+      plain: this.transactions.plain,
       store: this.store,
       readings: this.readings,
       fileId: order.fileId,
@@ -147,17 +187,19 @@ export class BulkIntakeService {
   private async replaysOf(
     tx: Tx,
     tracks: readonly BulkTrack[],
+    before: readonly SensorOnRoad[],
     computed: readonly BulkComputed[],
-    order: BulkOrder,
+    order: Pick<BulkOrder, 'sensorIds' | 'now'>,
   ): Promise<{ replays: (AlertReplay | null)[]; deficitReplays: (AlertReplay | null)[] }> {
+    const seen = (sensor: SensorOnRoad): SensorOnRoad => before.find(({ id }) => id === sensor.id) ?? sensor;
     const own = tracks.map(({ sensor }): ReplayedSeries | null => {
       const isWatched = sensor.shelfId !== null && order.sensorIds.includes(sensor.id);
-      return isWatched ? { sensor, quantity: sensor.quantity, seenTo: sensor.latestAt } : null;
+      return isWatched ? { sensor, quantity: sensor.quantity, seenTo: seen(sensor).latestAt } : null;
     });
     const deficits = computed.map(({ track: { sensor } }): ReplayedSeries | null =>
       sensor.shelfId === null
         ? null
-        : { sensor, quantity: 'vapourPressureDeficit', seenTo: sensor.computedTo },
+        : { sensor, quantity: 'vapourPressureDeficit', seenTo: seen(sensor).computedTo },
     );
     const watched = [...own, ...deficits].filter((one) => one !== null);
     const begun = await AlertReplay.begin(tx, this.alerts, this.sources, watched, order.now);
@@ -168,12 +210,12 @@ export class BulkIntakeService {
 
   private async storedBetween(
     tx: Tx,
-    { sensor, quantity, seenTo }: ReplayedSeries,
+    { sensor, quantity }: ReplayedSeries,
     from: number,
     to: number,
   ): Promise<FlaggedSample[]> {
     if (isMeasured(quantity)) return this.readings.between(tx, sensor.id, from, to, true);
-    const end = Math.min(to, (seenTo ?? 0) + 1);
+    const end = Math.min(to, (sensor.computedTo ?? 0) + 1);
     const points = await this.computed.points(tx, sensor, quantity, from, end);
     return points.map((point) => ({ ...point, flags: 0 }));
   }

@@ -4,7 +4,8 @@ import { BulkCopy, uuidBytes } from './bulk-copy';
 import type { ComputedBulkSums } from './bulk-computed';
 import type { BulkSums } from './bulk-track';
 import type { TouchedSpan } from './late-readings';
-import type { FlaggedSample } from './reading-store';
+import type { FlaggedSample, SensorOnRoad } from './reading-store';
+import { settledUpTo, temperaturesBeside } from './settling';
 
 const sumColumns = [
   'count',
@@ -76,6 +77,60 @@ export class BulkStore {
       thermometerFrom: row.thermometer_from_at.getTime(),
       thermometerTo: row.thermometer_to_at?.getTime() ?? Infinity,
     }));
+  }
+
+  /**
+   * Sensors as they stand after some of their readings were removed.
+   *
+   * @param tx - Of the removal.
+   * @param before - As they stood.
+   */
+  async standing(tx: Tx, before: readonly SensorOnRoad[]): Promise<SensorOnRoad[]> {
+    const rows: { id: string; at: Date; value: number; flags: number }[] = await tx.query(
+      `SELECT wanted.id, newest.at, newest.value, newest.flags FROM unnest($1::uuid[]) AS wanted (id)
+       CROSS JOIN LATERAL (
+         SELECT at, value, flags FROM reading WHERE sensor_id = wanted.id ORDER BY at DESC LIMIT 1
+       ) AS newest`,
+      [before.map(({ id }) => id)],
+    );
+    const now = before.map((sensor): SensorOnRoad => {
+      const newest = rows.find(({ id }) => id === sensor.id);
+      const latestAt = newest?.at.getTime() ?? null;
+      return {
+        ...sensor,
+        latestAt,
+        latestValue: newest?.value ?? null,
+        latestFlags: newest?.flags ?? 0,
+      };
+    });
+    return now.map((sensor) => {
+      if (sensor.computedTo === null) return sensor;
+      const beside = temperaturesBeside(sensor, now);
+      const settledTo = settledUpTo(sensor, beside, ({ latestAt }) => latestAt ?? -Infinity);
+      const computedTo = Math.min(sensor.computedTo, settledTo);
+      return { ...sensor, computedTo: Number.isFinite(computedTo) ? computedTo : null };
+    });
+  }
+
+  /** Writes how sensors stand after a removal; one without any reading left has no state. */
+  async saveStanding(tx: Tx, sensors: readonly SensorOnRoad[]): Promise<void> {
+    const held = sensors.filter(({ latestAt }) => latestAt !== null);
+    const empty = sensors.filter(({ latestAt }) => latestAt === null);
+    await tx.query('DELETE FROM sensor_state WHERE sensor_id = ANY($1)', [empty.map(({ id }) => id)]);
+    await tx.query(
+      `UPDATE sensor_state AS held SET latest_at = new.at, latest_value = new.value, latest_flags = new.flags,
+         computed_to = new.computed_to, revision = held.revision + 1
+       FROM unnest($1::uuid[], $2::timestamptz[], $3::float8[], $4::smallint[], $5::timestamptz[])
+         AS new (sensor_id, at, value, flags, computed_to)
+       WHERE held.sensor_id = new.sensor_id`,
+      [
+        held.map(({ id }) => id),
+        held.map(({ latestAt }) => new Date(latestAt ?? 0)),
+        held.map(({ latestValue }) => latestValue),
+        held.map(({ latestFlags }) => latestFlags),
+        held.map(({ computedTo }) => (computedTo === null ? null : new Date(computedTo))),
+      ],
+    );
   }
 
   /** Replaces the hourly and daily sums of one sensor where they changed. */

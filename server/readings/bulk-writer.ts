@@ -10,8 +10,10 @@ import type { ReadingStore } from './reading-store';
 export interface BulkWriterParts {
   /** The transaction; holds the sensors' locks. */
   readonly tx: Tx;
-  /** Another connection: sees what was held, and makes partitions while `tx` is busy copying. */
-  readonly beside: Tx;
+  /** Sees what is held. */
+  readonly reader: Tx;
+  /** Outside any transaction: makes partitions that everybody sees at once. */
+  readonly plain: Tx;
   readonly store: BulkStore;
   readonly readings: ReadingStore;
   /** The file that brings the readings; null when none is brought. */
@@ -94,7 +96,7 @@ export class BulkWriter {
   /** Writes everything that is left: sums, states of the sensors, alerts. */
   async finish(): Promise<void> {
     await this.writeStretch(true);
-    const { tx, beside, readings, tracks, computed, replays, deficitReplays } = this.parts;
+    const { tx, reader, readings, tracks, computed, replays, deficitReplays } = this.parts;
     const changed = tracks.filter(
       ({ sensor, spans }) =>
         spans.firstAt !== null ||
@@ -110,10 +112,10 @@ export class BulkWriter {
       }),
     );
     for (const [index, track] of tracks.entries()) {
-      this.alertIds.push(...((await replays[index]?.finish(tx, beside, track.spans.firstAt)) ?? []));
+      this.alertIds.push(...((await replays[index]?.finish(tx, reader, track.spans.firstAt)) ?? []));
     }
     for (const [index, one] of computed.entries()) {
-      this.alertIds.push(...((await deficitReplays[index]?.finish(tx, beside, one.changedFrom)) ?? []));
+      this.alertIds.push(...((await deficitReplays[index]?.finish(tx, reader, one.changedFrom)) ?? []));
     }
   }
 
@@ -153,7 +155,7 @@ export class BulkWriter {
       month = monthOf(at);
       const name = new Date(at).toISOString().slice(0, 7).replace('-', '_');
       if (this.months.has(name)) continue;
-      const rows: { exists: boolean }[] = await this.parts.beside.query(
+      const rows: { exists: boolean }[] = await this.parts.plain.query(
         'SELECT to_regclass($1) IS NOT NULL AS exists',
         [`reading_${name}`],
       );
@@ -166,7 +168,7 @@ export class BulkWriter {
   /** Makes some months' partitions at once: files go on in time, and each partition interrupts the COPY. */
   private async ensureMonthsFrom(from: number): Promise<void> {
     const to = Math.max(from, Math.min(from + MONTHS_AHEAD_MS, this.parts.now));
-    await this.parts.readings.ensurePartitions(this.parts.beside, from, to);
+    await this.parts.readings.ensurePartitions(this.parts.plain, from, to);
   }
 }
 

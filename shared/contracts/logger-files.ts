@@ -139,7 +139,10 @@ export const fileQuestion = z.object({
   code: z.string(),
   text: z.string(),
   column: z.number().nullable(),
+  /** What may be answered, where the answers can be listed. */
   options: z.array(z.object({ value: z.string(), label: z.string() })),
+  /** What is assumed as long as nobody says otherwise. */
+  answer: z.string().nullable(),
 });
 /** Something only the person can know. */
 export type FileQuestion = z.infer<typeof fileQuestion>;
@@ -221,6 +224,17 @@ export const matchLoggerFile = endpoint({
       .array(
         z.strictObject({
           index: z.number().int().nonnegative(),
+          quantity: z.enum(quantities).nullable(),
+          unit: z.string().max(20).nullable(),
+        }),
+      )
+      .max(512)
+      .optional(),
+    /** What the names in the quantity column of a long file stand for; null for what is not read. */
+    names: z
+      .array(
+        z.strictObject({
+          name: z.string().max(200),
           quantity: z.enum(quantities).nullable(),
           unit: z.string().max(20).nullable(),
         }),

@@ -99,10 +99,13 @@ async function bringIn(
   size: number,
 ): Promise<{ fresh: number; alreadyHeld: number }> {
   const road = roadOver(dataSource);
-  const service = new BulkIntakeService(new BulkStore(), road.readings, road.computed, new AlertStore(), {
-    wantedRangesOf: async (_tx, shelfIds) => new Map(shelfIds.map((id) => [id, tightRanges])),
+  const plans = {
+    wantedRangesOf: async (_tx: unknown, shelfIds: readonly string[]) =>
+      new Map(shelfIds.map((id) => [id, tightRanges])),
     plannedLamps: async () => new Map(),
-  });
+  };
+  const { transactions, readings: store, computed } = road;
+  const service = new BulkIntakeService(transactions, new BulkStore(), store, computed, new AlertStore(), plans);
   const sensorIds = [sensors.temperature, sensors.humidity];
   const reader = dataSource.createQueryRunner();
   const fileId = '00000000-0000-4000-8000-000000000001';

@@ -1,0 +1,96 @@
+import { createLoggerFileReader, type LoggerFileReader } from '@shared/logger-files/logger-file-reader';
+import type { LoggerFileShape } from '@shared/logger-files/logger-file-shape';
+import type { ReadingRejection } from '@shared/logger-files/reading-rejection';
+import type { BulkBatch } from '../readings/bulk-intake';
+import { FileStatistics } from './file-statistics';
+
+/** Of very many unusable lines only the first are kept; all are counted. */
+const MOST_REJECTIONS = 10_000;
+
+/** How a file is read. */
+export interface FileReading {
+  readonly shape: LoggerFileShape;
+  /** When elapsed time began [ms]; null where the file has instants. */
+  readonly startsAt: number | null;
+  /** The present [ms]. */
+  readonly now: number;
+  /** Sensors by the key of their series, as places in their list. */
+  readonly places: ReadonlyMap<string, number>;
+}
+
+/** Turns the bytes of a file into batches of readings, and notes what can't be used. */
+export class FileReadings {
+  readonly rejections: ReadingRejection[] = [];
+  readonly rejectedByCode = new Map<string, number>();
+  readonly statistics = new FileStatistics();
+  rejected = 0;
+  missing = 0;
+  private readonly reader: LoggerFileReader;
+  private batch = emptyBatch();
+  /** By the index of the series; -1 for one that is not brought in. */
+  private readonly placeOf: number[] = [];
+
+  constructor({ shape, startsAt, now, places }: FileReading) {
+    const { placeOf, statistics } = this;
+    this.reader = createLoggerFileReader(
+      onlyMatched(shape, places),
+      {
+        onReading: (series, at, value) => {
+          let place = placeOf[series.index];
+          if (place === undefined) {
+            place = places.get(series.key) ?? -1;
+            placeOf[series.index] = place;
+          }
+          if (place === -1) return;
+          statistics.take(place, at);
+          const { sensors, ats, values } = this.batch;
+          sensors.push(place);
+          ats.push(at);
+          values.push(value);
+        },
+        onRejected: (rejection) => this.reject(rejection),
+      },
+      { referenceMs: now, ...(startsAt === null ? {} : { startAtMs: startsAt }) },
+    );
+  }
+
+  /** Readings of the next piece, in the order of the file. */
+  read(piece: Buffer): BulkBatch {
+    this.reader.write(piece);
+    return this.takeBatch();
+  }
+
+  /** What is left at the end of the file. */
+  end(): BulkBatch {
+    this.missing = this.reader.end().missing;
+    return this.takeBatch();
+  }
+
+  private takeBatch(): BulkBatch {
+    const { batch } = this;
+    this.batch = emptyBatch();
+    return batch;
+  }
+
+  private reject(rejection: ReadingRejection): void {
+    this.rejected += 1;
+    this.rejectedByCode.set(rejection.code, (this.rejectedByCode.get(rejection.code) ?? 0) + 1);
+    if (this.rejections.length < MOST_REJECTIONS) this.rejections.push(rejection);
+  }
+}
+
+function emptyBatch(): BulkBatch {
+  return { sensors: [], ats: [], values: [] };
+}
+
+/** In a file with a column a quantity, what goes nowhere need not be read. */
+function onlyMatched(shape: LoggerFileShape, places: ReadonlyMap<string, number>): LoggerFileShape {
+  if (shape.layout !== 'wide') return shape;
+  const columns = new Set([...places.keys()].map((key) => Number(key.slice(key.lastIndexOf('|') + 1))));
+  return {
+    ...shape,
+    columns: shape.columns.map((column) =>
+      column.role === 'quantity' && !columns.has(column.index) ? { ...column, role: 'ignore' } : column,
+    ),
+  };
+}
