@@ -85,6 +85,14 @@ describe('today’s care', () => {
     expect(await (await box()).isDisabled()).toBe(true);
   });
 
+  it('keeps what is due on a later day apart, with its day and nothing to tick', async () => {
+    await shown([task({ dueOn: '2026-12-03' })]);
+    expect(text('.quiet')).toBe('Nothing is due today.');
+    expect(text('.coming-up b')).toBe('Feed strawberries · A1');
+    expect(text('.coming-up p')).toBe('Thu 3 Dec · Jo Ashdown');
+    expect(page().querySelector('.coming-up mat-checkbox')).toBeNull();
+  });
+
   it('says so when nothing is due', async () => {
     await shown([]);
     expect(text('.quiet')).toBe('Nothing is due today.');

@@ -4,7 +4,9 @@ import {
   MatCheckbox,
   type MatCheckboxDefaultOptions,
 } from '@angular/material/checkbox';
+import { MatIcon } from '@angular/material/icon';
 import type { Task } from '@shared/contracts/care';
+import { formatShortDay } from '@shared/format/room-time';
 import { ReaderFormat } from '../../core/reader-format';
 import { lateness } from './lateness';
 
@@ -19,7 +21,7 @@ export interface Tick {
   selector: 'app-todays-care',
   templateUrl: './todays-care.html',
   styleUrl: './todays-care.scss',
-  imports: [MatCheckbox],
+  imports: [MatCheckbox, MatIcon],
   // A box shows what the server has stored, so it never ticks itself.
   providers: [
     {
@@ -43,14 +45,22 @@ export class TodaysCare {
   private readonly format = inject(ReaderFormat);
 
   protected readonly items = computed(() =>
-    this.tasks().map((task) => ({
-      task,
-      isDone: task.doneAt !== null,
-      title: task.shelfLabel === null ? task.title : `${task.title} ·\u00a0${task.shelfLabel}`,
-      late: task.doneAt === null ? lateness(task.dueOn, this.today()) : null,
-      detail: task.doneAt === null ? task.detail : this.done(task, task.doneAt),
-      initials: initialsOf(task.personName),
-    })),
+    this.tasks()
+      .filter(({ dueOn }) => dueOn <= this.today())
+      .map((task) => ({
+        task,
+        isDone: task.doneAt !== null,
+        title: titleOf(task),
+        late: task.doneAt === null ? lateness(task.dueOn, this.today()) : null,
+        detail: task.doneAt === null ? task.detail : this.done(task, task.doneAt),
+        initials: initialsOf(task.personName),
+      })),
+  );
+
+  protected readonly comingUp = computed(() =>
+    this.tasks()
+      .filter(({ dueOn }) => dueOn > this.today())
+      .map((task) => ({ id: task.id, title: titleOf(task), when: whenDue(task) })),
   );
 
   protected tick(task: Task): void {
@@ -63,6 +73,17 @@ export class TodaysCare {
     const when = this.format.when(doneAt);
     return doneByName === null ? when : `${when} by ${doneByName}`;
   }
+}
+
+/** "Feed strawberries · B1", the label never alone on a line. */
+function titleOf({ title, shelfLabel }: Task): string {
+  return shelfLabel === null ? title : `${title} ·\u00a0${shelfLabel}`;
+}
+
+/** "Thu 3 Dec · Maren Oxley". A day of the calendar has no time zone, so it is written as UTC counts it. */
+function whenDue({ dueOn, personName }: Task): string {
+  const day = formatShortDay(`${dueOn}T00:00:00Z`, 'UTC');
+  return personName === null ? day : `${day} · ${personName}`;
 }
 
 /** First letters of the first and last name. */
