@@ -40,11 +40,17 @@ export class AlertsPage {
   protected readonly history = inject(AlertHistory);
 
   protected readonly showsAll = computed(() => this.show() === 'all');
-  private readonly openHere = computed(
-    () =>
-      this.inbox.open()?.filter(({ shelfId }) => this.shelf() === undefined || shelfId === this.shelf()) ??
-      null,
-  );
+  /** Those of the chosen shelf, urgent ones first. */
+  private readonly openHere = computed(() => {
+    const here = this.inbox
+      .open()
+      ?.filter(({ shelfId }) => this.shelf() === undefined || shelfId === this.shelf());
+    if (here === undefined) return null;
+    const [urgent, calm] = [true, false].map((isUrgent) =>
+      here.filter(({ urgency }) => (urgency === 'goNow') === isUrgent),
+    );
+    return [...(urgent ?? []), ...(calm ?? [])];
+  });
   protected readonly alerts = computed(() => (this.showsAll() ? this.history.alerts() : this.openHere()));
   protected readonly openCount = computed(() => this.inbox.open()?.length ?? 0);
   protected readonly failure = computed(() => {

@@ -91,7 +91,6 @@ export function shapeWords(file: LoggerFileDetail): readonly (readonly [name: st
     ['Header', file.headerLine === null ? 'none' : `line ${file.headerLine}`],
     ['Decimal mark', file.decimalMark === ',' ? 'comma' : 'point'],
     ['Dates', timeFormatNames[file.timeFormat] ?? file.timeFormat],
-    ['Time zone', file.zone],
   ];
 }
 

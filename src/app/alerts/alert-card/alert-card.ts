@@ -51,9 +51,10 @@ export class AlertCard {
     return parts.join(' · ');
   });
   protected readonly seen = computed(() => {
-    const { acknowledgedAt, acknowledgedByName } = this.alert();
+    const { acknowledgedAt, acknowledgedByName, acknowledgeNote } = this.alert();
     if (acknowledgedAt === null) return null;
-    return `Seen by ${acknowledgedByName ?? 'somebody who has left'}, ${this.format.when(acknowledgedAt)}`;
+    const note = acknowledgeNote === '' ? '' : `: “${acknowledgeNote}”`;
+    return `Seen by ${acknowledgedByName ?? 'somebody who has left'}, ${this.format.when(acknowledgedAt)}${note}`;
   });
   protected readonly canAcknowledge = computed(
     () => this.alert().acknowledgedAt === null && !this.isOver() && this.session.may('helper'),

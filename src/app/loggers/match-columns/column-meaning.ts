@@ -28,6 +28,8 @@ export class ColumnMeaning {
   /** The series of this column; several in a long file, none where nothing is read from it. */
   readonly series = input.required<readonly FileSeries[]>();
   readonly mayMatch = input.required<boolean>();
+  /** Whether rows name their quantity themselves; then no column holds values of its own. */
+  readonly isLong = input.required<boolean>();
   readonly changed = output<ColumnHolds>();
 
   protected readonly quantities = quantities.map((quantity) => ({
@@ -38,7 +40,7 @@ export class ColumnMeaning {
   protected readonly name = computed(() => this.column().name || `column ${this.column().index + 1}`);
   /** Times, names and row numbers are what they are. */
   protected readonly isChangeable = computed(
-    () => this.mayMatch() && ['quantity', 'ignore'].includes(this.column().role),
+    () => this.mayMatch() && !this.isLong() && ['quantity', 'ignore'].includes(this.column().role),
   );
   protected readonly holds = computed(() => {
     const { quantity, role } = this.column();

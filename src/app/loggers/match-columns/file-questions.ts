@@ -1,10 +1,11 @@
-import { ChangeDetectionStrategy, Component, input, output, signal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, inject, input, output, signal } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { MatFormFieldModule } from '@angular/material/form-field';
 import { MatInput } from '@angular/material/input';
 import { MatRadioModule } from '@angular/material/radio';
 import type { FileQuestion } from '@shared/contracts/logger-files';
 import { createLocalTime } from '@shared/logger-files/local-time';
+import { ReaderFormat } from '../../core/reader-format';
 import { ProblemText } from '../../ui/states/problem-text';
 
 /** What a person answered. */
@@ -40,14 +41,22 @@ const startQuestion = 'ELAPSED_NEEDS_START';
             Use this start
           </button>
           <app-problem-text [message]="problem()" />
-        } @else {
+          @if (question.answer) {
+            <p>Taken for now: {{ format.when(question.answer) }}.</p>
+          }
+        } @else if (!isLong()) {
           <mat-radio-group
             [attr.aria-label]="question.text"
             [disabled]="!mayAnswer()"
             (change)="answered.emit({ code: question.code, column: question.column, value: $event.value })"
           >
             @for (option of question.options; track option.value) {
-              <mat-radio-button [value]="option.value">{{ option.label }}</mat-radio-button>
+              <mat-radio-button [value]="option.value">
+                {{ option.label }}
+                @if (option.value === question.answer) {
+                  <span class="assumed">(taken for now)</span>
+                }
+              </mat-radio-button>
             }
           </mat-radio-group>
         }
@@ -75,6 +84,12 @@ const startQuestion = 'ELAPSED_NEEDS_START';
       column-gap: 18px;
     }
 
+    p,
+    .assumed {
+      margin: 6px 0 0;
+      color: var(--ink-2);
+    }
+
     button {
       margin-left: 10px;
       min-height: var(--target);
@@ -88,8 +103,11 @@ export class FileQuestions {
   /** IANA name of the room's time zone. */
   readonly zone = input.required<string>();
   readonly mayAnswer = input.required<boolean>();
+  /** Whether units are chosen at the series themselves. */
+  readonly isLong = input.required<boolean>();
   readonly answered = output<FileAnswer>();
 
+  protected readonly format = inject(ReaderFormat);
   protected readonly startCode = startQuestion;
   protected readonly problem = signal<string | null>(null);
 

@@ -1,5 +1,5 @@
 import { BreakpointObserver } from '@angular/cdk/layout';
-import { ChangeDetectionStrategy, Component, computed, inject, input, output } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, inject, input, output, signal } from '@angular/core';
 import { toSignal } from '@angular/core/rxjs-interop';
 import { MatButton } from '@angular/material/button';
 import { MatFormFieldModule } from '@angular/material/form-field';
@@ -14,9 +14,7 @@ import { FileProfiles } from './file-profiles';
 import { FileQuestions, type FileAnswer } from './file-questions';
 import { previewLines } from './preview-cells';
 import { SeriesChoice } from './series-choice';
-import type { SeriesGoal } from './series-goal';
-
-const blockingQuestions: readonly string[] = ['AMBIGUOUS_DAY_MONTH', 'ELAPSED_NEEDS_START'];
+import { proposedGoals, type SeriesGoal } from './series-goal';
 
 /** The second step: which series is which sensor, with lines of the file as they would be stored. */
 @Component({
@@ -63,6 +61,23 @@ export class MatchColumns {
     () => this.isNarrow() || this.columns().some(({ series }) => series.length > 1),
   );
 
+  /** Whether rows name their quantity themselves, so that one column holds several series. */
+  protected readonly isLong = computed(() => this.file().columns.some(({ role }) => role === 'value'));
+  protected readonly proposals = computed(() => proposedGoals(this.file().series));
+  protected readonly proposalWords = computed(() => {
+    const count = this.proposals().length;
+    return count === 1 ? 'For one series a sensor is proposed.' : `For ${count} series sensors are proposed.`;
+  });
+
+  /** Whether the person has said how the dates are written, where that is in doubt. */
+  private readonly isDateOrderSaid = signal(false);
+  private readonly mustAnswer = computed(() =>
+    this.file().questions.some(({ code, answer }) => {
+      if (code === 'ELAPSED_NEEDS_START') return answer === null;
+      // Whoever kept the profile has answered it.
+      return code === 'AMBIGUOUS_DAY_MONTH' && !this.isDateOrderSaid() && this.file().profileId === null;
+    }),
+  );
   private readonly goalCount = computed(
     () =>
       this.file().series.filter(({ sensorId, newSensor }) => sensorId !== null || newSensor !== null).length,
@@ -70,8 +85,7 @@ export class MatchColumns {
   /** What must be done before the file can be checked; null when nothing. */
   protected readonly missing = computed(() => {
     if (!this.mayMatch()) return 'Growers and keepers of the room may bring files in.';
-    if (this.file().questions.some(({ code }) => blockingQuestions.includes(code)))
-      return 'Answer the question above first.';
+    if (this.mustAnswer()) return 'Answer the question above first.';
     return this.goalCount() === 0 ? 'Say of at least one column which sensor it is.' : null;
   });
 
@@ -79,14 +93,24 @@ export class MatchColumns {
     this.data.match({ series: [{ key, ...goal }] });
   }
 
+  protected takeProposals(): void {
+    this.data.match({ series: [...this.proposals()] });
+  }
+
+  /** @param series - One of a file whose rows name their quantity; the name stands for the unit from now on. */
+  protected nameUnit({ name, quantity }: FileSeries, unit: string): void {
+    this.data.match({ names: [{ name, quantity, unit }] });
+  }
+
   protected hold(holds: ColumnHolds): void {
     this.data.match({ columns: [holds] });
   }
 
   protected answer({ code, column, value }: FileAnswer): void {
-    if (code === 'AMBIGUOUS_DAY_MONTH')
+    if (code === 'AMBIGUOUS_DAY_MONTH') {
+      this.isDateOrderSaid.set(true);
       this.data.match({ dateOrder: value === 'monthFirst' ? 'monthFirst' : 'dayFirst' });
-    else if (code === 'ELAPSED_NEEDS_START') this.data.match({ startsAt: value });
+    } else if (code === 'ELAPSED_NEEDS_START') this.data.match({ startsAt: value });
     else this.changeUnit(column, value);
   }
 

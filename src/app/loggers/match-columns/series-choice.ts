@@ -18,7 +18,10 @@ export class SeriesChoice {
   readonly sensors = input.required<readonly SensorChoice[]>();
   readonly shelves = input.required<readonly ShelfChoice[]>();
   readonly mayMatch = input.required<boolean>();
+  /** Whether the unit is chosen here: in a file whose rows name their quantity, no column has one. */
+  readonly hasUnit = input(false);
   readonly matched = output<SeriesGoal>();
+  readonly unitChosen = output<string>();
 
   protected readonly name = computed(() => {
     const { sensorName, name } = this.series();
@@ -29,11 +32,17 @@ export class SeriesChoice {
   private readonly fitting = computed(() =>
     this.sensors().filter(({ quantity }) => quantity === this.series().quantity),
   );
-  protected readonly proposed = computed(() =>
-    this.series().proposals.flatMap(({ sensorId }) => this.fitting().filter(({ id }) => id === sensorId)),
-  );
+  /** The best sensor for it, where the series names one. */
+  protected readonly proposed = computed(() => {
+    const best = this.series().proposals[0]?.sensorId;
+    return this.fitting().filter(({ id }) => id === best);
+  });
   protected readonly others = computed(() =>
     this.fitting().filter((sensor) => !this.proposed().includes(sensor)),
+  );
+  /** The chosen sensor shortly; null where the list's own words are shown. */
+  protected readonly chosenWords = computed(
+    () => this.sensors().find(({ id }) => id === this.series().sensorId)?.words ?? null,
   );
   /** Why the chosen sensor was proposed; null for one that was not. */
   protected readonly reason = computed(() => {

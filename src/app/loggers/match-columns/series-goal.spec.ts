@@ -1,5 +1,6 @@
 import { inventedId } from '../../core/testing/board-builder';
-import { goalOf, goalText } from './series-goal';
+import { fileSeries } from '../testing/logger-file-builder';
+import { goalOf, goalText, proposedGoals } from './series-goal';
 
 describe('where a series goes', () => {
   it.each([
@@ -17,5 +18,29 @@ describe('where a series goes', () => {
       goalText({ sensorId: null, newSensor: { shelfId: null } }),
     ];
     expect(new Set(texts).size).toBe(2);
+  });
+});
+
+describe('the proposals for a file', () => {
+  const [first, second] = [inventedId(702), inventedId(703)];
+  const open = (key: string, ...sensorIds: string[]) =>
+    fileSeries({
+      key,
+      sensorId: null,
+      proposals: sensorIds.map((sensorId) => ({ sensorId, reason: 'It measures that.' })),
+    });
+
+  it('give each series its best sensor that no other has', () => {
+    expect(proposedGoals([open('1', first, second), open('2', first, second), open('3', first)])).toEqual([
+      { key: '1', sensorId: first },
+      { key: '2', sensorId: second },
+    ]);
+  });
+
+  it('leave alone what a person has chosen, and what is only compared', () => {
+    const chosen = fileSeries({ key: '1', sensorId: first });
+    const made = { ...open('2', second), newSensor: { shelfId: null } };
+    const compared = { ...open('3', second), isCompared: true };
+    expect(proposedGoals([chosen, made, compared, open('4', first)])).toEqual([]);
   });
 });

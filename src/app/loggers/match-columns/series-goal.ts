@@ -19,3 +19,19 @@ export function goalOf(text: string): SeriesGoal {
   const shelfId = text.slice(newSensor.length);
   return { sensorId: null, newSensor: { shelfId: shelfId === '' ? null : shelfId } };
 }
+
+/**
+ * The best proposal for every series that goes nowhere yet; no sensor is proposed twice.
+ *
+ * @returns Only the series that have one.
+ */
+export function proposedGoals(series: readonly FileSeries[]): readonly { key: string; sensorId: string }[] {
+  const taken = new Set(series.map(({ sensorId }) => sensorId));
+  return series.flatMap(({ key, sensorId, newSensor: made, isCompared, proposals }) => {
+    if (sensorId !== null || made !== null || isCompared) return [];
+    const best = proposals.find((proposal) => !taken.has(proposal.sensorId));
+    if (best === undefined) return [];
+    taken.add(best.sensorId);
+    return [{ key, sensorId: best.sensorId }];
+  });
+}
