@@ -1,4 +1,4 @@
-import { Validator } from '@seriousme/openapi-schema-validator';
+import SwaggerParser from '@apidevtools/swagger-parser';
 import request from 'supertest';
 import { endpoints } from '@shared/contracts/api';
 import { startTestApplication, type TestApplication } from './test-application';
@@ -13,10 +13,10 @@ describe('the API', () => {
   it('describes itself as valid OpenAPI 3.1, with every endpoint', async () => {
     const reply = await request(application.express).get('/api/v1/openapi.json').expect(200);
     const document = reply.body as { openapi: string; paths: Record<string, Record<string, unknown>> };
-    const validator = new Validator();
-    const { valid, errors } = await validator.validate(document);
-    expect({ valid, errors }).toEqual({ valid: true, errors: undefined });
-    expect(validator.version).toBe('3.1');
+    expect(document.openapi).toMatch(/^3\.1\./);
+    await expect(SwaggerParser.validate(structuredClone(document) as never)).resolves.toBeDefined();
+    // The validator does object to what is none.
+    await expect(SwaggerParser.validate({ ...document, info: {} } as never)).rejects.toThrow();
     const described = Object.values(document.paths).flatMap((path) => Object.keys(path));
     expect(described).toHaveLength(endpoints.length);
   });
