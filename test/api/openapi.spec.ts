@@ -1,7 +1,20 @@
-import SwaggerParser from '@apidevtools/swagger-parser';
+import { spawnSync } from 'node:child_process';
 import request from 'supertest';
 import { endpoints } from '@shared/contracts/api';
 import { startTestApplication, type TestApplication } from './test-application';
+
+/** What a validator of the OpenAPI schema says; it is a module that Jest can't load, so it runs by itself. */
+function objectionTo(document: unknown): string {
+  const script = `
+    const parser = require('@apidevtools/swagger-parser');
+    const document = JSON.parse(require('node:fs').readFileSync(0, 'utf8'));
+    parser.validate(document).catch((error) => { console.error(error.message); process.exitCode = 1; });`;
+  const { status, stderr } = spawnSync(process.execPath, ['--no-warnings', '-e', script], {
+    input: JSON.stringify(document),
+    encoding: 'utf8',
+  });
+  return status === 0 ? '' : stderr;
+}
 
 describe('the API', () => {
   let application: TestApplication;
@@ -14,9 +27,9 @@ describe('the API', () => {
     const reply = await request(application.express).get('/api/v1/openapi.json').expect(200);
     const document = reply.body as { openapi: string; paths: Record<string, Record<string, unknown>> };
     expect(document.openapi).toMatch(/^3\.1\./);
-    await expect(SwaggerParser.validate(structuredClone(document) as never)).resolves.toBeDefined();
+    expect(objectionTo(document)).toBe('');
     // The validator does object to what is none.
-    await expect(SwaggerParser.validate({ ...document, info: {} } as never)).rejects.toThrow();
+    expect(objectionTo({ ...document, info: {} })).toContain("must have required property 'title'");
     const described = Object.values(document.paths).flatMap((path) => Object.keys(path));
     expect(described).toHaveLength(endpoints.length);
   });
