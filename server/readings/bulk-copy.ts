@@ -1,6 +1,6 @@
 import { once } from 'node:events';
 import type { PoolClient } from 'pg';
-import { from as copyFrom, type CopyStreamQuery } from 'pg-copy-streams';
+import { from as copyFrom, to as copyTo, type CopyStreamQuery } from 'pg-copy-streams';
 import type { Tx } from '../database/transactions';
 
 const CHUNK_BYTES = 65_536;
@@ -127,6 +127,22 @@ export class BulkCopy {
   private throwFailure(): void {
     if (this.failure !== null) throw this.failure;
   }
+}
+
+/**
+ * Reads the rows of a query by `COPY` in its binary format.
+ *
+ * @param tx - The transaction.
+ * @param query - A query of ours, without parameters.
+ * @returns The rows as they come, without what stands before and after them.
+ */
+export async function copyOut(tx: Tx, query: string): Promise<Buffer> {
+  const client = await clientOf(tx);
+  const stream = client.query(copyTo(`COPY (${query}) TO STDOUT (FORMAT binary)`));
+  const chunks: Buffer[] = [];
+  for await (const chunk of stream as AsyncIterable<Buffer>) chunks.push(chunk);
+  const rows = Buffer.concat(chunks);
+  return rows.subarray(SIGNATURE.length, rows.length - END.length);
 }
 
 /**

@@ -1,7 +1,7 @@
 import type { AlertReplay } from '../alerts/alert-replay';
 import type { Tx } from '../database/transactions';
 import type { BulkComputed } from './bulk-computed';
-import { BulkHeld, type HeldReading } from './bulk-held';
+import { BulkHeld, type HeldPage } from './bulk-held';
 import type { BulkTrack } from './bulk-track';
 import type { BulkWriter } from './bulk-writer';
 
@@ -50,7 +50,7 @@ export class OutOfOrder extends Error {
 }
 
 /** Rows that are kept in columns before sums and alerts read them. */
-const COLUMN_ROWS = 60_000;
+const COLUMN_ROWS = 12_000;
 
 /**
  * Takes any number of readings in order of time, merges them with what is held, and keeps sums, computed quantities and
@@ -59,13 +59,13 @@ const COLUMN_ROWS = 60_000;
 export class BulkIntake {
   readonly counts: BulkCounts = { fresh: 0, alreadyHeld: 0, different: 0, heldLive: 0, flagged: 0 };
   private held: BulkHeld | null = null;
-  private page: HeldReading[] = [];
+  private page: HeldPage | null = null;
   private position = 0;
   private clock = -Infinity;
   /** Everything before this instant has been taken [ms]. */
   private passedTo = -Infinity;
-  /** What is held at the instant of the clock and has not been met in the file. */
-  private atClock: HeldReading[] = [];
+  /** Rows of the page at the instant of the clock that have not been met in the file. */
+  private atClock: number[] = [];
   private rowsInColumns = 0;
 
   constructor(private readonly parts: BulkIntakeParts) {}
@@ -125,20 +125,22 @@ export class BulkIntake {
   }
 
   private passHeldBefore(at: number): void {
-    if (this.clock < at) {
-      for (const one of this.atClock) this.passHeld(one);
+    const { page } = this;
+    if (page === null) return;
+    if (this.clock < at && this.atClock.length > 0) {
+      for (const row of this.atClock) this.passHeld(page, row);
       this.atClock = [];
     }
-    for (let one = this.page[this.position]; one !== undefined; one = this.page[this.position]) {
-      if (one.at > at) return;
-      this.position += 1;
-      if (one.at === at) this.atClock.push(one);
-      else this.passHeld(one);
+    for (; this.position < page.length; this.position += 1) {
+      const heldAt = page.ats[this.position] ?? Infinity;
+      if (heldAt > at) return;
+      if (heldAt === at) this.atClock.push(this.position);
+      else this.passHeld(page, this.position);
     }
   }
 
-  private passHeld({ sensor, at, value, flags }: HeldReading): void {
-    this.parts.tracks[sensor]?.takeHeld(at, value, flags);
+  private passHeld({ sensors, ats, values, flags }: HeldPage, row: number): void {
+    this.parts.tracks[sensors[row] ?? -1]?.takeHeld(ats[row] ?? 0, values[row] ?? 0, flags[row] ?? 0);
     this.rowsInColumns += 1;
   }
 
@@ -154,23 +156,36 @@ export class BulkIntake {
     track.broughtTo = at;
     track.broughtValue = value;
     this.rowsInColumns += 1;
-    const place = this.atClock.length === 0 ? -1 : this.atClock.findIndex((one) => one.sensor === sensor);
-    const held = place === -1 ? undefined : this.atClock.splice(place, 1)[0];
-    if (held === undefined) {
+    const row = this.heldAtClock(sensor);
+    if (row === null) {
       this.counts.fresh += 1;
       const flags = track.takeFresh(at, value);
       if (flags !== 0) this.counts.flagged += 1;
       this.parts.writer?.fresh(track, at, value, flags);
-    } else this.meet(track, held, value);
+    } else this.meet(track, row, at, value);
   }
 
-  private meet(track: BulkTrack, held: HeldReading, value: number): void {
-    if (held.isLive) this.counts.heldLive += 1;
-    const isSame = held.value === value;
+  /** The row of the page that holds a sensor's reading at the instant of the clock; null when nothing is held. */
+  private heldAtClock(sensor: number): number | null {
+    const { page, atClock } = this;
+    if (page === null) return null;
+    for (let index = 0; index < atClock.length; index += 1) {
+      const row = atClock[index] ?? 0;
+      if (page.sensors[row] !== sensor) continue;
+      atClock.splice(index, 1);
+      return row;
+    }
+    return null;
+  }
+
+  private meet(track: BulkTrack, row: number, at: number, value: number): void {
+    const held = this.page?.values[row] ?? 0;
+    if (this.page?.isLive[row] === 1) this.counts.heldLive += 1;
+    const isSame = held === value;
     if (isSame) this.counts.alreadyHeld += 1;
     else this.counts.different += 1;
-    if (isSame || !this.parts.replacesDiffering) track.takeHeld(held.at, held.value, held.flags);
-    else if (track.takeReplacement(held.at, value) !== 0) this.counts.flagged += 1;
+    if (isSame || !this.parts.replacesDiffering) track.takeHeld(at, held, this.page?.flags[row] ?? 0);
+    else if (track.takeReplacement(at, value) !== 0) this.counts.flagged += 1;
   }
 
   private async settle(): Promise<void> {
