@@ -45,7 +45,10 @@ export class MatchColumns {
       .pipe(map(({ matches }) => matches)),
     { initialValue: false },
   );
-  protected readonly zones = Intl.supportedValuesOf('timeZone');
+  /** UTC, which files often say, is in no browser's list. */
+  protected readonly zones = computed(() => [
+    ...new Set([this.file().zone, 'UTC', ...Intl.supportedValuesOf('timeZone')]),
+  ]);
   protected readonly roomZone = inject(Session).timeZone;
   protected readonly shape = computed(() => shapeWords(this.file()));
   protected readonly lines = computed(() => previewLines(this.file()));
