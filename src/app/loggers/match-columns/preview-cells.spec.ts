@@ -17,7 +17,7 @@ describe('the preview of a file', () => {
   it('marks a problem in its cell, or on the line where it has none', () => {
     const [inCell, onLine] = shown({
       preview: [
-        previewRow({ problem: { column: 1, message: 'Not a number' } }),
+        previewRow({ problem: { column: 2, message: 'Not a number' } }),
         previewRow({ problem: { column: null, message: 'Too few cells' } }),
       ],
     });

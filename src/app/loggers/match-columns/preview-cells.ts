@@ -42,7 +42,8 @@ export function previewLines({
           series.find((one) => one.column === column.index),
           values[String(column.index)] ?? null,
         ),
-        problem: problem?.column === column.index ? problem.message : null,
+        // Places in a file are told as a person counts them, from 1.
+        problem: problem?.column === column.index + 1 ? problem.message : null,
       })),
     };
   });

@@ -28,6 +28,7 @@ describe('the marks of a chart', () => {
 
   it('say the kind of an event once', () => {
     expect(eventText({ kind: 'watered', text: 'Watered, 0.8 L' })).toBe('Watered, 0.8 L');
+    expect(eventText({ kind: 'picked', text: 'Trimmed, picked 212 g' })).toBe('Trimmed, picked 212 g');
     expect(eventText({ kind: 'picked', text: '212 g' })).toBe('Picked: 212 g');
   });
 });

@@ -17,10 +17,10 @@ export const eventLooks: Readonly<Record<ShelfEventKind, { readonly icon: string
     observed: { icon: 'visibility', word: 'Observed' },
   };
 
-/** An event in words: "Watered: 0.8 L". A text that begins with the word itself stands alone. */
+/** An event in words: "Watered: 0.8 L". A text that says the word itself stands alone. */
 export function eventText({ kind, text }: Pick<ShelfEvent, 'kind' | 'text'>): string {
   const { word } = eventLooks[kind];
-  return text.toLowerCase().startsWith(word.toLowerCase()) ? text : `${word}: ${text}`;
+  return text.toLowerCase().includes(word.toLowerCase()) ? text : `${word}: ${text}`;
 }
 
 /**

@@ -12,15 +12,19 @@ const day = (changes: Partial<LightOfDay> = {}): LightOfDay => ({
 
 describe('the light of days', () => {
   it('is listed newest first, with what is known of each', () => {
-    const rows = lightRows([
-      day({ day: '2026-11-29', lightHours: 0, coverage: 0, dliMolM2D: null }),
-      day({ lightHours: 0, plannedHours: 10.5, dliMolM2D: 0, coverage: 0.6 }),
-    ]);
+    const rows = lightRows(
+      [
+        day({ day: '2026-11-29', lightHours: 0, coverage: 0, dliMolM2D: null }),
+        day({ lightHours: 0, plannedHours: 10.5, dliMolM2D: 0, coverage: 0.6 }),
+      ],
+      '2026-12-01',
+    );
     expect(rows).toMatchObject([
-      { when: 'Mon 30 Nov', hours: '0.0 of 10.5\u00a0h', dli: '0.0', held: '60\u00a0%' },
-      { when: 'Sun 29 Nov', hours: '–', dli: '–', held: '0\u00a0%' },
+      { when: 'Mon 30 Nov', hours: '0.0 of 10.5\u00a0h', dli: '0.0', reservation: '60\u00a0% held' },
+      { when: 'Sun 29 Nov', hours: '–', dli: '–', reservation: '0\u00a0% held' },
     ]);
-    expect(lightRows([day()])[0]?.held).toBeNull();
+    expect(lightRows([day()], '2026-12-01')[0]?.reservation).toBeNull();
+    expect(lightRows([day({ coverage: 0.6 })], '2026-11-30')[0]?.reservation).toBe('so far');
   });
 
   it('is averaged over days that were measured, dark ones among them', () => {

@@ -14,12 +14,16 @@ export interface LightRow {
   readonly lit: number;
   readonly planned: number;
   readonly dli: string;
-  /** How much of the day is known, when it isn't all; null when it is. */
-  readonly held: string | null;
+  /** Why the day is not whole: that it isn't over, or how much of it is known; null for a whole day. */
+  readonly reservation: string | null;
 }
 
-/** The days, the newest first. */
-export function lightRows(light: readonly LightOfDay[]): LightRow[] {
+/**
+ * The days, the newest first.
+ *
+ * @param today - The room's day, `YYYY-MM-DD`; null while it isn't known.
+ */
+export function lightRows(light: readonly LightOfDay[], today: string | null): LightRow[] {
   return [...light].reverse().map(({ day, lightHours, plannedHours, dliMolM2D, coverage }) => ({
     day,
     when: dayWords(day),
@@ -27,7 +31,7 @@ export function lightRows(light: readonly LightOfDay[]): LightRow[] {
     lit: lightHours,
     planned: plannedHours,
     dli: formatNumber(dliMolM2D, 1),
-    held: coverage < leastCoverage ? formatShare(coverage) : null,
+    reservation: day === today ? 'so far' : coverage < leastCoverage ? `${formatShare(coverage)} held` : null,
   }));
 }
 

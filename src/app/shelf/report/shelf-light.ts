@@ -13,44 +13,50 @@ const fewDays = 7;
     @if (summary(); as summary) {
       <p class="sum">{{ summary }}</p>
     }
-    <table>
-      <thead>
-        <tr>
-          <th scope="col">day</th>
-          <th scope="col"><span class="read-out-only">share of the plan</span></th>
-          <th scope="col">lit</th>
-          <th scope="col">DLI</th>
-        </tr>
-      </thead>
-      <tbody>
-        @for (row of rows(); track row.day) {
+    @if (rows().length > 0) {
+      <table>
+        <thead>
           <tr>
-            <th scope="row">
-              {{ row.when }}
-              @if (row.held) {
-                <br /><small>{{ row.held }} held</small>
-              }
-            </th>
-            <td class="bar">
-              <meter
-                min="0"
-                [max]="row.planned || 24"
-                [value]="row.lit"
-                [attr.aria-label]="row.when + ' light'"
-              ></meter>
-            </td>
-            <td>{{ row.hours }}</td>
-            <td>{{ row.dli }}</td>
+            <th scope="col">day</th>
+            <th scope="col"><span class="read-out-only">share of the plan</span></th>
+            <th scope="col">lit</th>
+            <th scope="col">DLI</th>
           </tr>
-        }
-      </tbody>
-    </table>
+        </thead>
+        <tbody>
+          @for (row of rows(); track row.day) {
+            <tr>
+              <th scope="row">
+                {{ row.when }}
+                @if (row.reservation) {
+                  <br /><small>{{ row.reservation }}</small>
+                }
+              </th>
+              <td class="bar">
+                <meter
+                  min="0"
+                  [max]="row.planned || 24"
+                  [value]="row.lit"
+                  [attr.aria-label]="row.when + ' light'"
+                ></meter>
+              </td>
+              <td>{{ row.hours }}</td>
+              <td>{{ row.dli }}</td>
+            </tr>
+          }
+        </tbody>
+      </table>
+    }
     @if (hiddenDays() > 0) {
       <button matButton class="more" type="button" (click)="showsAll.set(true)">
         Show {{ hiddenDays() }} more days
       </button>
     }
-    <p>DLI is the light of a day, in mol/m².</p>
+    <p>
+      {{
+        rows().length > 0 ? 'DLI is the light of a day, in mol/m².' : 'No light was measured in this span.'
+      }}
+    </p>
   `,
   styleUrl: './report.scss',
   imports: [MatButton],
@@ -61,7 +67,7 @@ export class ShelfLight {
 
   protected readonly showsAll = signal(false);
   private readonly light = computed(() => this.data.report()?.light ?? []);
-  private readonly allRows = computed(() => lightRows(this.light()));
+  private readonly allRows = computed(() => lightRows(this.light(), this.data.today()));
   protected readonly summary = computed(() => lightSummary(this.light()));
   protected readonly rows = computed(() =>
     this.showsAll() ? this.allRows() : this.allRows().slice(0, fewDays),

@@ -1,11 +1,12 @@
 import { ChangeDetectionStrategy, Component, computed, inject } from '@angular/core';
+import type { Quantity } from '@shared/climate/quantity';
 import { formatShare } from '@shared/format/numbers';
 import { formatBareQuantity, shownUnit } from '@shared/format/quantities';
 import { failureText } from '../../core/failure-text';
 import { Session } from '../../core/session';
 import { ErrorState } from '../../ui/states/error-state';
 import { LoadingLines } from '../../ui/states/loading-lines';
-import { quantityTitle } from '../quantity-title';
+import { chartedQuantities, quantityTitle } from '../quantity-title';
 import { ShelfData } from '../shelf-data';
 import { spanWords } from '../span/shelf-span';
 
@@ -40,7 +41,7 @@ import { spanWords } from '../span/shelf-span';
             </tr>
           } @empty {
             <tr>
-              <th scope="row">Nothing measured</th>
+              <td class="none" colspan="6">Nothing was measured in this span.</td>
             </tr>
           }
         </tbody>
@@ -69,7 +70,8 @@ export class SpanTable {
     const report = this.data.report();
     const temperatureUnit = this.session.temperatureUnit();
     if (report === null) return null;
-    return report.statistics.map(({ quantity, min, mean, max, inRange, coverage }) => {
+    const statistics = [...report.statistics].sort((a, b) => placeOf(a.quantity) - placeOf(b.quantity));
+    return statistics.map(({ quantity, min, mean, max, inRange, coverage }) => {
       const bare = (value: number | null): string => formatBareQuantity(quantity, value, temperatureUnit);
       return {
         quantity,
@@ -83,4 +85,10 @@ export class SpanTable {
       };
     });
   });
+}
+
+/** As the charts stand, then what has none. */
+function placeOf(quantity: Quantity): number {
+  const place = chartedQuantities.indexOf(quantity);
+  return place === -1 ? chartedQuantities.length : place;
 }
