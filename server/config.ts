@@ -19,6 +19,8 @@ const settings = z.object({
     .string()
     .regex(/^smtps?:\/\//, { error: 'must be an smtp:// or smtps:// address' })
     .optional(),
+  /** Page of the local mailbox, to be told to whoever starts the application. */
+  MAILBOX_URL: z.url().optional(),
   MAIL_FROM: z.string().min(3).default('Lampmeadow <lampmeadow@example.org>'),
   UPLOAD_MAX_MB: z.coerce.number().min(1).max(2000).default(100),
   LAMPMEADOW_DEMO: onOff.default(true),
@@ -41,6 +43,7 @@ export interface Config {
   readonly trustProxyHops: number;
   readonly webProcesses: number;
   readonly smtpUrl: string | null;
+  readonly mailboxUrl: string | null;
   readonly mailFrom: string;
   readonly uploadMaxBytes: number;
   readonly isDemonstration: boolean;
@@ -77,6 +80,7 @@ export function readConfig(environment: Readonly<Record<string, string | undefin
     trustProxyHops: values.TRUST_PROXY_HOPS,
     webProcesses: values.WEB_PROCESSES,
     smtpUrl: values.SMTP_URL ?? null,
+    mailboxUrl: values.MAILBOX_URL ?? null,
     mailFrom: values.MAIL_FROM,
     uploadMaxBytes: Math.round(values.UPLOAD_MAX_MB * 1_000_000),
     isDemonstration: values.LAMPMEADOW_DEMO,

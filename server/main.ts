@@ -42,12 +42,21 @@ async function serve(config: Config): Promise<() => Promise<void>> {
   app.setPublicUrl(address);
   const stopJobs = startJobs(app, new Transactions(dataSource), log);
   log.info({ address }, 'listening');
-  process.send?.({ ready: true, address, notes: room === null ? [] : demonstrationNotes() });
+  process.send?.({ ready: true, address, notes: notesFor(config, room !== null) });
   return async () => {
     await stopJobs();
     await app.close();
     await dataSource.destroy();
   };
+}
+
+function notesFor(config: Config, hasDemonstration: boolean): string[] {
+  return [
+    ...(hasDemonstration ? demonstrationNotes() : []),
+    ...(config.mailboxUrl === null
+      ? []
+      : ['', `Mails that go out arrive in the local mailbox at ${config.mailboxUrl}`]),
+  ];
 }
 
 function listen({ http }: App, config: Config): Promise<string> {
