@@ -179,10 +179,11 @@ export class AlertReplay {
       one.found.clear();
     }
     const from = Math.min(...this.running.map(({ restartedAt }) => restartedAt ?? Infinity));
-    if (from >= passedTo) return;
     const shelfId = sensor.shelfId ?? '';
-    const plans = await lampPlans(reader, this.sources, [shelfId], from, this.now);
+    // What passes from now on lies in the past, too, even where nothing held has to be judged again.
+    const plans = await lampPlans(reader, this.sources, [shelfId], Math.min(from, passedTo), this.now);
     this.context = plans.get(shelfId) ?? this.context;
+    if (from >= passedTo) return;
     const stored = await this.sources.storedBetween(reader, this.series, from, passedTo);
     this.fold(columnsOf(stored));
   }

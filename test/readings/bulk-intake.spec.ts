@@ -9,7 +9,8 @@ import {
   roadOver,
   send,
   sensorsOnAShelf,
-  tightRanges,
+  unlitAndTight,
+  type Plans,
   type Sent,
   type ShelfSensors,
 } from './intake-harness';
@@ -72,7 +73,62 @@ describe('readings of a file', () => {
       { numRuns: 40, seed: 20260328 },
     );
   });
+
+  it('older than what is held are judged by the lamps of their own time', async () => {
+    const sensors = await sensorsOnAShelf(database.dataSource.manager);
+    const days = (from: number, to: number): Sent[] =>
+      Array.from({ length: ((to - from) * 86_400_000) / step }, (_, index) => {
+        const at = firstDay + from * 86_400_000 + index * step;
+        return { of: 'temperature', at, value: isLit(at) ? 24 : 17 };
+      });
+    await send(roadOver(database.dataSource, litByDay), sensors, [days(8, 10)], firstDay + 10 * 86_400_000);
+    await bringIn(database.dataSource, sensors, days(0, 4), 1_000, litByDay);
+    const kept = (await keptOf(database.dataSource.manager, sensors)) as {
+      temperature: { alerts: unknown[] };
+    };
+    expect(kept.temperature.alerts.filter((alert) => !isSilence(alert))).toEqual([]);
+  });
 });
+
+const firstDay = Date.UTC(2026, 1, 1);
+const hourMs = 3_600_000;
+
+function isLit(at: number): boolean {
+  const hour = Math.floor((at % 86_400_000) / hourMs);
+  return hour >= 6 && hour < 22;
+}
+
+function isSilence(alert: unknown): boolean {
+  return (alert as { kind: string }).kind === 'sensorSilent';
+}
+
+/** Lamps from 6 to 22 h, and ranges so that each value is right only with its lamps. */
+const litByDay: Plans = {
+  wantedRangesOf: async (_tx, shelfIds) =>
+    new Map(
+      shelfIds.map((id) => [
+        id,
+        [
+          {
+            quantity: 'airTemperature',
+            lampsOn: { low: 20, high: 26 },
+            lampsOff: { low: 15, high: 21 },
+            holdMinutes: 15,
+            clearingMargin: 0.5,
+            reason: 'for the test',
+            since: '2026-01-01T00:00:00Z',
+          },
+        ],
+      ]),
+    ),
+  plannedLamps: async (_tx, shelfIds, from, to) => {
+    const lit: { onAt: number; offAt: number }[] = [];
+    for (let day = Math.floor(from.getTime() / 86_400_000); day * 86_400_000 < to.getTime(); day += 1) {
+      lit.push({ onAt: day * 86_400_000 + 6 * hourMs, offAt: day * 86_400_000 + 22 * hourMs });
+    }
+    return new Map(shelfIds.map((id) => [id, lit]));
+  },
+};
 
 function pick(which: string): Sent[] {
   return readings.filter(({ of }, index) => {
@@ -97,15 +153,18 @@ async function bringIn(
   sensors: ShelfSensors,
   file: readonly Sent[],
   size: number,
+  plans: Plans = unlitAndTight,
 ): Promise<{ fresh: number; alreadyHeld: number }> {
-  const road = roadOver(dataSource);
-  const plans = {
-    wantedRangesOf: async (_tx: unknown, shelfIds: readonly string[]) =>
-      new Map(shelfIds.map((id) => [id, tightRanges])),
-    plannedLamps: async () => new Map(),
-  };
+  const road = roadOver(dataSource, plans);
   const { transactions, readings: store, computed } = road;
-  const service = new BulkIntakeService(transactions, new BulkStore(), store, computed, new AlertStore(), plans);
+  const service = new BulkIntakeService(
+    transactions,
+    new BulkStore(),
+    store,
+    computed,
+    new AlertStore(),
+    plans,
+  );
   const sensorIds = [sensors.temperature, sensors.humidity];
   const reader = dataSource.createQueryRunner();
   const fileId = '00000000-0000-4000-8000-000000000001';

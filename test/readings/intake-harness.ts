@@ -1,5 +1,6 @@
 import type { Sample } from '@shared/series/series';
 import type { WantedRange } from '@shared/contracts/rooms';
+import type { AlertSources } from '../../server/alerts/alert-evaluation-service';
 import { Transactions, type Tx } from '../../server/database/transactions';
 import { intakeParts, type IntakeParts } from '../../server/readings/intake-parts';
 import type { DataSource } from 'typeorm';
@@ -28,17 +29,25 @@ export const tightRanges: WantedRange[] = [
   },
 ];
 
-/** The road with every shelf wanting {@link tightRanges} and nobody to write to. */
-export function roadOver(dataSource: DataSource): IntakeParts & { transactions: Transactions } {
+/** What shelves are meant to have. */
+export type Plans = Pick<AlertSources, 'wantedRangesOf' | 'plannedLamps'>;
+
+/** Every shelf wants {@link tightRanges} and is never lit. */
+export const unlitAndTight: Plans = {
+  wantedRangesOf: async (_tx, shelfIds) => new Map(shelfIds.map((id) => [id, tightRanges])),
+  plannedLamps: async () => new Map(),
+};
+
+/** The road with nobody to write to. */
+export function roadOver(
+  dataSource: DataSource,
+  plans: Plans = unlitAndTight,
+): IntakeParts & { transactions: Transactions } {
   const transactions = new Transactions(dataSource);
-  const parts = intakeParts(
-    transactions,
-    {
-      wantedRangesOf: async (_tx, shelfIds) => new Map(shelfIds.map((id) => [id, tightRanges])),
-      plannedLamps: async () => new Map(),
-    },
-    { tellOpened: async () => undefined, tellCleared: async () => undefined },
-  );
+  const parts = intakeParts(transactions, plans, {
+    tellOpened: async () => undefined,
+    tellCleared: async () => undefined,
+  });
   return { ...parts, transactions };
 }
 
