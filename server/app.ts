@@ -64,6 +64,7 @@ export async function buildApp(parts: AppParts): Promise<App> {
   const pool = (dataSource.driver as unknown as { master: Pool }).master;
   const passport = new Passport();
   const relay = new LiveRelay();
+  const secret = await sessionSecret(transactions, config.sessionSecret);
   let publicUrl = config.publicUrl ?? '';
   const services = composeServices({
     transactions,
@@ -73,11 +74,12 @@ export async function buildApp(parts: AppParts): Promise<App> {
     log,
     now,
     publicUrl: () => publicUrl,
+    secret,
   });
   configureSignIn(passport, services.peopleStore, transactions);
   const session = sessionMiddleware({
     pool,
-    secret: await sessionSecret(transactions, config.sessionSecret),
+    secret,
     isHttps: config.isHttps,
   });
   const passportSession = passport.session();
@@ -128,13 +130,16 @@ export async function buildApp(parts: AppParts): Promise<App> {
   const outbox =
     config.smtpUrl === null
       ? null
-      : new OutboxWorker(
+      : new OutboxWorker({
           transactions,
-          services.mailStore,
-          nodemailer.createTransport(config.smtpUrl),
-          config.mailFrom,
+          mails: services.mailStore,
+          composer: services.mailComposer,
+          transport: nodemailer.createTransport(config.smtpUrl),
+          from: config.mailFrom,
+          publicUrl: () => publicUrl,
           log,
-        );
+          now,
+        });
   return {
     http,
     express: app,

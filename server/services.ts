@@ -32,7 +32,15 @@ import { loggerFileParts } from './logger-files/logger-file-parts';
 import { loggerFileRoutes } from './logger-files/logger-file-routes';
 import type { LoggerFileRunner } from './logger-files/logger-file-runner';
 import { MailAlertTeller } from './mail/alert-teller';
+import { EscalationJob } from './mail/escalation-job';
+import { EscalationService } from './mail/escalation-service';
+import { MailComposer } from './mail/mail-composer';
+import { MailLinkTokens } from './mail/mail-link-tokens';
+import { MailLinksService } from './mail/mail-links-service';
+import { mailRoutes } from './mail/mail-routes';
 import { MailStore } from './mail/mail-store';
+import { MorningLetterJob } from './mail/morning-letter-job';
+import { TellingStore } from './mail/telling-store';
 import { peopleRoutes } from './people/people-routes';
 import { PeopleService } from './people/people-service';
 import { PeopleStore } from './people/people-store';
@@ -65,6 +73,8 @@ export interface Foundation {
   readonly now: Clock;
   /** Where links in mails lead, without a trailing slash. */
   readonly publicUrl: () => string;
+  /** Seals the links in mails. */
+  readonly secret: string;
 }
 
 /** Everything that the process and the tests hold on to. */
@@ -73,6 +83,9 @@ export interface Services {
   readonly accessLookup: AccessLookup;
   readonly peopleStore: PeopleStore;
   readonly mailStore: MailStore;
+  readonly mailComposer: MailComposer;
+  readonly escalationJob: EscalationJob;
+  readonly morningLetterJob: MorningLetterJob;
   readonly deviceIntake: DeviceIntakeService;
   readonly boardPublisher: BoardPublisher;
   readonly silenceJob: SilenceJob;
@@ -103,16 +116,11 @@ export function composeServices(foundation: Foundation): Services {
 
   const alertStore = new AlertStore();
   const mailStore = new MailStore();
+  const tellings = new TellingStore();
   const mailDomain = domainOf(config.mailFrom);
-  const teller = new MailAlertTeller(alertStore, mailStore, foundation.publicUrl, mailDomain);
+  const teller = new MailAlertTeller({ alerts: alertStore, tellings, mailDomain });
   const road = intakeParts(transactions, plans, teller);
-  const hooks = new HistoryUpkeepService(
-    road.readings,
-    road.lateReadings,
-    road.computed,
-    alertStore,
-    now,
-  );
+  const hooks = new HistoryUpkeepService(road.readings, road.lateReadings, road.computed, alertStore, now);
 
   const roomsStore = new RoomsStore();
   const rooms = new RoomsService({ transactions, rooms: roomsStore, changes, hooks, now });
@@ -186,12 +194,41 @@ export function composeServices(foundation: Foundation): Services {
     luxPerUmolOf: (tx, shelfId) => seriesStore.luxPerUmolOf(tx, shelfId),
   });
 
+  const { publicUrl } = foundation;
+  const tokens = new MailLinkTokens(foundation.secret);
+  const mailComposer = new MailComposer({
+    alerts: alertStore,
+    tellings,
+    mails: mailStore,
+    tokens,
+    publicUrl,
+    seriesOf: (...of) => series.series(...of),
+  });
+  const morningLetterJob = new MorningLetterJob({
+    transactions,
+    tellings,
+    mails: mailStore,
+    composer: mailComposer,
+    publicUrl,
+    mailDomain,
+    now,
+    racksOf: (roomId) => rooms.racksOf(roomId),
+    reportOf: (...of) => reports.report(...of),
+    openAlertsOf: (roomId) => alerts.open(roomId),
+    newestAlertsOf: async (roomId) => (await alerts.list(roomId, { limit: 200 })).alerts,
+    tasksOf: (roomId, from, to) => care.listTasks(roomId, { from, to }),
+  });
+
   let demonstrationRoom: string | null = null;
   const scenarios = new ScenariosService(config.simulatorControl, () => demonstrationRoom);
 
   return {
     routes: [
       ...peopleRoutes(people, new SignIn(foundation.passport, config.isHttps), attempts),
+      ...mailRoutes(
+        new MailLinksService(transactions, tellings, people, tokens),
+        new EscalationService(transactions, tellings, changes),
+      ),
       ...roomsRoutes(rooms, rules),
       ...devicesRoutes(devices),
       ...deviceIntakeRoutes(deviceIntake),
@@ -208,6 +245,9 @@ export function composeServices(foundation: Foundation): Services {
     },
     peopleStore,
     mailStore,
+    mailComposer,
+    escalationJob: new EscalationJob(transactions, tellings, teller, now),
+    morningLetterJob,
     deviceIntake,
     boardPublisher,
     silenceJob: new SilenceJob(transactions, road.readings, road.evaluation, alerts, now),

@@ -15,6 +15,9 @@ import { LoggerFileProfileEntity } from '../logger-files/logger-file-profile-ent
 import { LoggerFileRejectionEntity } from '../logger-files/logger-file-rejection-entity';
 import { LoggerFileReplacedEntity } from '../logger-files/logger-file-replaced-entity';
 import { MailEntity } from '../mail/mail-entity';
+import { MorningLetterEntity } from '../mail/morning-letter-entity';
+import { RoomEscalationEntity } from '../mail/room-escalation-entity';
+import { ToldAlertEntity } from '../mail/told-alert-entity';
 import { MembershipEntity } from '../people/membership-entity';
 import { PersonEntity } from '../people/person-entity';
 import { PlantingEntity } from '../plantings/planting-entity';
@@ -50,12 +53,14 @@ const entities = [
   LoggerFileReplacedEntity,
   MailEntity,
   MembershipEntity,
+  MorningLetterEntity,
   PersonEntity,
   PlacementEntity,
   PlantingEntity,
   RackEntity,
   ReadingEntity,
   RoomEntity,
+  RoomEscalationEntity,
   RoutineEntity,
   SensorEntity,
   SensorStateEntity,
@@ -63,6 +68,7 @@ const entities = [
   ShelfEventEntity,
   ComputedHourlySummaryEntity,
   TaskEntity,
+  ToldAlertEntity,
   WantedRangeEntity,
 ];
 

@@ -18,12 +18,14 @@ const AHEAD_MS = 62 * 24 * HOUR_MS;
  * @returns Stops them all, after the work in hand.
  */
 export function startJobs(app: App, transactions: Transactions, log: Logger): () => Promise<void> {
-  const { silenceJob, care, loggerFiles } = app.services;
+  const { silenceJob, escalationJob, morningLetterJob, care, loggerFiles } = app.services;
   const alone = (name: string, everyMs: number, work: () => Promise<void>): RepeatingJob =>
     new RepeatingJob(name, everyMs, async () => void (await whenAlone(transactions, name, work)), log);
   const jobs = [
     alone('silence', MINUTE_MS / 4, () => silenceJob.run()),
     alone('logger files left behind', MINUTE_MS / 4, () => loggerFiles.failAbandoned()),
+    alone('escalation', MINUTE_MS / 2, () => escalationJob.run()),
+    alone('morning letters', MINUTE_MS, () => morningLetterJob.run()),
     alone('tasks', HOUR_MS, () => care.planAhead()),
     alone('partitions', 6 * HOUR_MS, async () => {
       const now = Date.now();

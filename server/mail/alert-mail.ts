@@ -1,128 +1,169 @@
 import { describeEpisode, type EpisodeDescription } from '@shared/alerts/describe-episode';
 import { episodeOf } from '@shared/contracts/alerts';
+import type { Series } from '@shared/contracts/series';
 import { episodeFormatters } from '@shared/format/episode-formatters';
-import { escapeHtml } from './escape-html';
-import type { AlertOfRoom, NewMail, Recipient } from './mail-store';
+import { formatDuration, sayWhen } from '@shared/format/room-time';
+import { drawAlertChart, type AlertChartData } from './alert-chart';
+import type { MailKind, MailPicture } from './mail-entity';
+import type { MailSection, SectionPicture } from './mail-layout';
+import type { AlertOfRoom, Recipient, RoomOfMail } from './telling-store';
 
-/** What alert mails need beside alerts and people. */
-export interface AlertMailSetting {
-  readonly roomName: string;
-  readonly timeZone: string;
+/** For whom, about which room, and when a mail is written. */
+export interface MailSetting {
+  readonly recipient: Recipient;
+  readonly room: RoomOfMail;
   /** Where links lead, without a trailing slash. */
   readonly publicUrl: string;
-  /** Right side of Message-IDs. */
-  readonly mailDomain: string;
   readonly now: number;
 }
 
+/** A section about an alert, with the picture in it. */
+export interface AlertSection {
+  readonly section: MailSection;
+  readonly picture: MailPicture | null;
+}
+
+const HOUR_MS = 3_600_000;
+/** Before the episode, so that one sees how it came. */
+const LEAD_MS = 3 * HOUR_MS;
+/** A chart that small shows no more. */
+const LONGEST_CHART_MS = 72 * HOUR_MS;
+
 /**
- * One mail about alerts that opened together. A single alert begins a conversation of its own, which the mail about its
- * clearing carries on.
+ * The span that an alert's chart shows.
  *
- * @param alerts - At least one, of one room.
- * @param recipient - To whom.
- * @param setting - Room, links and clock.
- * @returns The mail for the outbox.
+ * @param alert - The alert.
+ * @param now - The present [ms].
+ * @returns From some hours before it began to its end and a little more, or now [ms].
  */
-export function openedMail(
-  alerts: readonly AlertOfRoom[],
-  recipient: Recipient,
-  setting: AlertMailSetting,
-): NewMail {
-  const told = alerts.map((alert) => ({ alert, words: wordsFor(alert, recipient, setting) }));
-  const [first] = told;
-  const isOne = told.length === 1;
-  const subject =
-    isOne && first !== undefined
-      ? `${first.words.title} · ${setting.roomName}`
-      : `${told.length} shelves or sensors need a look · ${setting.roomName}`;
-  return letter(recipient, setting, {
-    messageId: messageId(alerts, 'opened', recipient, setting),
-    inReplyTo: null,
-    subject,
-    parts: told.map(({ alert, words }) => ({
-      heading: words.title,
-      lines: [words.sentence, words.tryThis, ...(words.caution === null ? [] : [words.caution])],
-      link: linkTo(alert, setting),
-    })),
-  });
+export function chartSpan(alert: AlertOfRoom, now: number): { readonly from: number; readonly to: number } {
+  const to = alert.clearedAt === null ? now : Math.min(now, Date.parse(alert.clearedAt) + HOUR_MS);
+  return { from: Math.max(Date.parse(alert.beganAt) - LEAD_MS, to - LONGEST_CHART_MS), to };
 }
 
 /**
- * The mail that an alert is over, in the conversation of its opening.
+ * What a mail says of one alert.
  *
- * @param alert - Cleared.
- * @param recipient - To whom.
- * @param setting - Room, links and clock.
- * @returns The mail for the outbox.
+ * @param alert - The alert.
+ * @param setting - For whom and when.
+ * @param series - The readings around it; null leaves the chart out.
+ * @returns The section, and the chart in it.
  */
-export function clearedMail(alert: AlertOfRoom, recipient: Recipient, setting: AlertMailSetting): NewMail {
-  const words = wordsFor(alert, recipient, setting);
-  return letter(recipient, setting, {
-    messageId: messageId([alert], 'cleared', recipient, setting),
-    inReplyTo: messageId([alert], 'opened', recipient, setting),
-    subject: `Over: ${words.title} · ${setting.roomName}`,
-    parts: [{ heading: words.title, lines: [words.sentence, 'It is over.'], link: linkTo(alert, setting) }],
-  });
-}
-
-interface Letter {
-  readonly messageId: string;
-  readonly inReplyTo: string | null;
-  readonly subject: string;
-  readonly parts: readonly { heading: string; lines: readonly string[]; link: string }[];
-}
-
-function letter(recipient: Recipient, setting: AlertMailSetting, { parts, ...head }: Letter): NewMail {
-  const reason = `You get this as a member of ${setting.roomName}. Choose your mails: ${setting.publicUrl}/account`;
-  const text = parts.map((part) => [part.heading, '', ...part.lines, '', part.link].join('\n')).join('\n\n');
+export function alertSection(alert: AlertOfRoom, setting: MailSetting, series: Series | null): AlertSection {
+  const words = wordsFor(alert, setting);
+  const isOver = alert.clearedAt !== null;
+  const png = series === null ? null : drawAlertChart(chartData(alert, setting.now, series));
+  const cid = `chart-${alert.id}@lampmeadow`;
   return {
-    personId: recipient.personId,
-    toAddress: recipient.email,
-    ...head,
-    textBody: `${text}\n\n--\n${reason}\n`,
-    htmlBody: page(parts.map(sectionOf).join(''), reason),
+    section: {
+      heading: words.title,
+      lines: isOver ? [words.sentence, overLine(alert, setting)] : [words.sentence, words.tryThis],
+      caution: isOver ? null : words.caution,
+      picture: png === null ? null : captionOf(cid, words, alert, setting),
+      links: [
+        { text: 'See the alert', url: `${setting.publicUrl}/alerts/${alert.id}` },
+        { text: `See shelf ${alert.shelfLabel}`, url: `${setting.publicUrl}/shelf/${alert.shelfId}` },
+      ],
+    },
+    picture: png === null ? null : { cid, png: png.toString('base64') },
   };
 }
 
-function sectionOf(part: Letter['parts'][number]): string {
-  const [sentence, ...rest] = part.lines.map(escapeHtml);
-  return `<section style="margin:0 0 24px">
-<h1 style="font:600 20px Georgia,serif;margin:0 0 8px">${escapeHtml(part.heading)}</h1>
-<p style="margin:0 0 8px">${sentence ?? ''}</p>
-${rest.map((line) => `<p style="margin:0 0 8px;opacity:.8">${line}</p>`).join('\n')}
-<p style="margin:12px 0 0"><a href="${escapeHtml(part.link)}" style="color:#2b5d49;font-weight:600">Look at the shelf</a></p>
-</section>`;
+/**
+ * The subject of a mail that begins a conversation.
+ *
+ * @param alerts - At least one.
+ * @param setting - For whom and when.
+ * @returns What and where; how many when there are several.
+ */
+export function alertSubject(alerts: readonly AlertOfRoom[], setting: MailSetting): string {
+  const [first] = alerts;
+  const isUrgent = alerts.some(({ urgency, clearedAt }) => urgency === 'goNow' && clearedAt === null);
+  const what =
+    alerts.length === 1 && first !== undefined
+      ? wordsFor(first, setting).title
+      : `${alerts.length} alerts${placesOf(alerts)}`;
+  return `${isUrgent ? 'Go now: ' : ''}${what} · ${setting.room.name}`;
 }
 
-function page(sections: string, reason: string): string {
-  return `<!doctype html><html lang="en"><head><meta charset="utf-8"><meta name="viewport" content="width=device-width">
-<meta name="color-scheme" content="light dark"><style>@media (prefers-color-scheme: dark){.page{background:#15120f!important;color:#f2e8d8!important}.page a{color:#93c9ac!important}}</style></head>
-<body class="page" style="margin:0;padding:24px;background:#f6f0e4;color:#231c15;font:16px/1.5 system-ui,sans-serif">
-<div style="max-width:560px;margin:0 auto">${sections}<p style="font-size:13px;opacity:.75;margin:0">${escapeHtml(reason)}</p></div></body></html>`;
+/**
+ * The first line of a mail about alerts.
+ *
+ * @param kind - Why it is written.
+ * @param count - How many alerts it tells.
+ * @returns The line; null where the alert speaks for itself.
+ */
+export function alertOpening(kind: MailKind, count: number): string | null {
+  const [it, they] = count === 1 ? ['This alert', 'it'] : ['These alerts', 'them'];
+  switch (kind) {
+    case 'urgent':
+      return `${it} became urgent: go now.`;
+    case 'escalated':
+      return `Nobody has acknowledged ${they} yet, so the room’s keepers are asked to look.`;
+    case 'cleared':
+      return count === 1 ? 'It is over.' : 'These are over.';
+    case 'opened':
+      return count === 1 ? null : 'These came together; one cause may be behind them, such as a power cut.';
+    case 'letter':
+      return null;
+  }
 }
 
-function wordsFor(alert: AlertOfRoom, recipient: Recipient, setting: AlertMailSetting): EpisodeDescription {
+/** What an alert is, in the recipient's units and the room's time. */
+export function wordsFor(alert: AlertOfRoom, { recipient, room, now }: MailSetting): EpisodeDescription {
   const unit = recipient.temperatureUnit === 'fahrenheit' ? '°F' : '°C';
   return describeEpisode({
     episode: episodeOf(alert),
     kind: alert.kind,
     quantity: alert.quantity,
     shelfLabel: alert.shelfLabel,
-    formatters: episodeFormatters(unit, setting.timeZone, setting.now),
-    now: setting.now,
+    formatters: episodeFormatters(unit, room.timeZone, now),
+    now,
   });
 }
 
-function linkTo(alert: AlertOfRoom, setting: AlertMailSetting): string {
-  return `${setting.publicUrl}/shelf/${alert.shelfId}`;
+function placesOf(alerts: readonly AlertOfRoom[]): string {
+  const labels = [...new Set(alerts.map(({ shelfLabel }) => shelfLabel))].sort();
+  return labels.length > 4 ? ` on ${labels.length} shelves` : ` on ${labels.join(', ')}`;
 }
 
-function messageId(
-  alerts: readonly AlertOfRoom[],
-  what: string,
-  recipient: Recipient,
-  { mailDomain }: AlertMailSetting,
-): string {
-  return `<alert-${alerts[0]?.id ?? ''}-${what}-${recipient.personId}@${mailDomain}>`;
+function overLine({ beganAt, endedAt, clearedAt }: AlertOfRoom, { room, now }: MailSetting): string {
+  const end = endedAt ?? clearedAt ?? beganAt;
+  const lasted = formatDuration(Date.parse(end) - Date.parse(beganAt));
+  return `Over since ${sayWhen(end, now, room.timeZone)}, after ${lasted}.`;
+}
+
+function captionOf(
+  cid: string,
+  words: EpisodeDescription,
+  alert: AlertOfRoom,
+  { room, now }: MailSetting,
+): SectionPicture {
+  const { from, to } = chartSpan(alert, now);
+  const [start, end] = [sayWhen(from, now, room.timeZone), sayWhen(to, now, room.timeZone)];
+  return {
+    cid,
+    alt: `Chart from ${start} to ${end}. ${words.sentence} The green band is what was wanted.`,
+    ends: [start, to === now ? `now, ${end}` : end],
+  };
+}
+
+function chartData(alert: AlertOfRoom, now: number, series: Series): AlertChartData {
+  const line = series.lines.find(({ sensorId }) => sensorId === alert.sensorId) ?? series.lines[0];
+  const span = chartSpan(alert, now);
+  const hasLimit = ['aboveRange', 'belowRange', 'dangerHigh', 'dangerLow'].includes(alert.kind);
+  return {
+    ...span,
+    points: line?.points ?? [],
+    wanted: series.wanted.map((step) => ({
+      ...step,
+      from: Date.parse(step.from),
+      to: Date.parse(step.to),
+    })),
+    episode: {
+      from: Date.parse(alert.beganAt),
+      to: alert.endedAt === null ? span.to : Date.parse(alert.endedAt),
+    },
+    limit: hasLimit ? alert.peakLimit : null,
+  };
 }

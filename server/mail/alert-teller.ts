@@ -1,66 +1,173 @@
+import { randomUUID } from 'node:crypto';
+import { mailDueAt, pastQuietHours } from '@shared/mail/mail-choice';
 import type { AlertTeller } from '../alerts/alert-evaluation-service';
 import type { Tx } from '../database/transactions';
-import { clearedMail, openedMail, type AlertMailSetting } from './alert-mail';
-import type { AlertOfRoom, MailStore } from './mail-store';
+import type { AlertOfRoom, Recipient, RoomOfMail, Telling, TellingStore, Told } from './telling-store';
 
 /** Finds the alerts by id, for whoever tells of them. */
 export interface AlertFinder {
   byIds(tx: Tx, alertIds: readonly string[]): Promise<AlertOfRoom[]>;
 }
 
+/** What telling of alerts needs. */
+export interface TellerParts {
+  readonly alerts: AlertFinder;
+  readonly tellings: TellingStore;
+  /** Right side of Message-IDs. */
+  readonly mailDomain: string;
+  /** How long a mail waits for more alerts of the same room to join it [ms]: a power cut is one mail. */
+  readonly collectMs?: number;
+}
+
+const COLLECT_MS = 60_000;
+
 /** Writes mails about alerts into the outbox, in the transaction that changes the alerts. */
 export class MailAlertTeller implements AlertTeller {
-  constructor(
-    private readonly alerts: AlertFinder,
-    private readonly mails: MailStore,
-    private readonly publicUrl: () => string,
-    private readonly mailDomain: string,
-  ) {}
+  private readonly collectMs: number;
+
+  constructor(private readonly parts: TellerParts) {
+    this.collectMs = parts.collectMs ?? COLLECT_MS;
+  }
+
+  /**
+   * Who a room's alerts go to, as things are. Care is not shared out yet, so that is every member; who wants which mail
+   * is for each to choose.
+   *
+   * @param tx - Any.
+   * @param roomId - The room.
+   * @param _at - When the alert is told [ms], for the rota.
+   */
+  onDuty(tx: Tx, roomId: string, _at: number): Promise<Recipient[]> {
+    return this.parts.tellings.recipients(tx, roomId);
+  }
 
   async tellOpened(tx: Tx, alertIds: readonly string[], now: number): Promise<void> {
-    await this.eachRoom(tx, alertIds, now, async (alerts, roomId, setting) => {
-      const recipients = await this.mails.recipients(tx, roomId, 'opened');
-      await this.mails.add(
-        tx,
-        recipients.map((recipient) => openedMail(alerts, recipient, setting)),
-      );
+    await this.eachRoom(tx, alertIds, async (alerts, room) => {
+      for (const recipient of await this.onDuty(tx, room.id, now)) {
+        const due = alerts.flatMap((alert) => {
+          const at = mailDueAt(recipient.mails, alert.urgency, now, room.timeZone);
+          return at === null ? [] : [{ alert, at }];
+        });
+        // Soonest first, so that what quiet hours would hold back joins an urgent mail of the same moment.
+        for (const dueAt of [...new Set(due.map(({ at }) => at))].sort((a, b) => a - b)) {
+          const together = due.filter(({ at }) => at === dueAt).map(({ alert }) => alert);
+          await this.write(
+            tx,
+            room,
+            { recipient, kind: 'opened', alerts: together, dueAt, inReplyTo: null },
+            now,
+          );
+        }
+      }
     });
   }
 
   async tellCleared(tx: Tx, alertIds: readonly string[], now: number): Promise<void> {
-    await this.eachRoom(tx, alertIds, now, async (alerts, roomId, setting) => {
-      const told = alerts.filter(({ clearedAt, toldAt }) => clearedAt !== null && toldAt !== null);
-      if (told.length === 0) return;
-      const recipients = await this.mails.recipients(tx, roomId, 'cleared');
-      await this.mails.add(
+    await this.eachRoom(tx, alertIds, async (alerts, room) => {
+      const cleared = alerts.filter(({ clearedAt, toldAt }) => clearedAt !== null && toldAt !== null);
+      if (cleared.length === 0) return;
+      const told = await this.parts.tellings.told(
         tx,
-        told.flatMap((alert) => recipients.map((recipient) => clearedMail(alert, recipient, setting))),
+        cleared.map(({ id }) => id),
       );
+      for (const recipient of await this.parts.tellings.recipients(tx, room.id)) {
+        if (!recipient.mails.cleared) continue;
+        const dueAt = pastQuietHours(recipient.mails, 'lookToday', now, room.timeZone);
+        for (const alert of cleared) {
+          const before = toldTo(told, alert, recipient);
+          if (before.length === 0 || before.some(({ reason }) => reason === 'cleared')) continue;
+          const inReplyTo = before[0]?.messageId ?? null;
+          await this.write(tx, room, { recipient, kind: 'cleared', alerts: [alert], dueAt, inReplyTo }, now);
+        }
+      }
+    });
+  }
+
+  /** Tells of alerts that have become urgent since they were told, through quiet hours that held them back. */
+  async tellUrgent(tx: Tx, alertIds: readonly string[], now: number): Promise<void> {
+    await this.eachRoom(tx, alertIds, async (alerts, room) => {
+      const told = await this.parts.tellings.told(tx, alertIds);
+      for (const recipient of await this.onDuty(tx, room.id, now)) {
+        if (recipient.mails.goNow !== 'atOnce') continue;
+        for (const alert of alerts) {
+          const before = toldTo(told, alert, recipient);
+          if (before.some(({ urgency }) => urgency === 'goNow')) continue;
+          const waiting = before.find(({ isComposed }) => !isComposed);
+          if (waiting !== undefined) {
+            await this.parts.tellings.hasten(tx, waiting.messageId, alert.id, new Date(now + this.collectMs));
+            continue;
+          }
+          const inReplyTo = before[0]?.messageId ?? null;
+          await this.write(
+            tx,
+            room,
+            { recipient, kind: 'urgent', alerts: [alert], dueAt: now, inReplyTo },
+            now,
+          );
+        }
+      }
+    });
+  }
+
+  /** Tells keepers of alerts that nobody has acknowledged: those who have had no mail about it, else all again. */
+  async tellUnseen(tx: Tx, alertIds: readonly string[], now: number): Promise<void> {
+    await this.eachRoom(tx, alertIds, async (alerts, room) => {
+      const told = await this.parts.tellings.told(tx, alertIds);
+      const recipients = await this.parts.tellings.recipients(tx, room.id);
+      const keepers = recipients.filter(({ role }) => role === 'keeper');
+      for (const alert of alerts) {
+        const willing = keepers.filter(({ mails }) => mails[alert.urgency] !== 'never');
+        const unwritten = willing.filter((keeper) => toldTo(told, alert, keeper).length === 0);
+        for (const recipient of unwritten.length > 0 ? unwritten : willing) {
+          const dueAt = pastQuietHours(recipient.mails, alert.urgency, now, room.timeZone);
+          const inReplyTo = toldTo(told, alert, recipient)[0]?.messageId ?? null;
+          await this.write(
+            tx,
+            room,
+            { recipient, kind: 'escalated', alerts: [alert], dueAt, inReplyTo },
+            now,
+          );
+        }
+      }
+    });
+  }
+
+  private write(
+    tx: Tx,
+    room: RoomOfMail,
+    telling: Pick<Telling, 'recipient' | 'kind' | 'alerts' | 'dueAt' | 'inReplyTo'>,
+    now: number,
+  ): Promise<void> {
+    const isHeldBack = telling.dueAt > now;
+    return this.parts.tellings.tell(tx, {
+      ...telling,
+      roomId: room.id,
+      isHeldBack,
+      dueAt: isHeldBack ? telling.dueAt : now + this.collectMs,
+      messageId: `<${randomUUID()}@${this.parts.mailDomain}>`,
+      at: now,
     });
   }
 
   private async eachRoom(
     tx: Tx,
     alertIds: readonly string[],
-    now: number,
-    tell: (alerts: AlertOfRoom[], roomId: string, setting: AlertMailSetting) => Promise<void>,
+    tell: (alerts: AlertOfRoom[], room: RoomOfMail) => Promise<void>,
   ): Promise<void> {
-    const alerts = await this.alerts.byIds(tx, alertIds);
-    for (const roomId of new Set(alerts.map((alert) => alert.roomId))) {
-      const room = await this.mails.room(tx, roomId);
+    const alerts = await this.parts.alerts.byIds(tx, alertIds);
+    // Always in the same order, so that two transactions never wait for each other's rooms.
+    for (const roomId of [...new Set(alerts.map((alert) => alert.roomId))].sort()) {
+      await this.parts.tellings.holdRoom(tx, roomId);
+      const room = await this.parts.tellings.room(tx, roomId);
       if (room === null) continue;
-      const setting = {
-        roomName: room.name,
-        timeZone: room.timeZone,
-        publicUrl: this.publicUrl(),
-        mailDomain: this.mailDomain,
-        now,
-      };
       await tell(
         alerts.filter((alert) => alert.roomId === roomId),
-        roomId,
-        setting,
+        room,
       );
     }
   }
+}
+
+function toldTo(told: readonly Told[], alert: AlertOfRoom, recipient: Recipient): Told[] {
+  return told.filter(({ alertId, personId }) => alertId === alert.id && personId === recipient.personId);
 }

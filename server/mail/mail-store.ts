@@ -1,130 +1,192 @@
-import type { Alert } from '@shared/contracts/alerts';
-import type { TemperatureUnit } from '@shared/contracts/people';
 import type { Tx } from '../database/transactions';
+import type { MailKind, MailPicture } from './mail-entity';
 
-/** A mail to be put into the outbox. */
-export interface NewMail {
-  readonly personId: string;
-  readonly messageId: string;
-  readonly inReplyTo: string | null;
-  readonly toAddress: string;
+/** What a mail says. */
+export interface MailContent {
   readonly subject: string;
   readonly textBody: string;
   readonly htmlBody: string;
+  readonly pictures: readonly MailPicture[];
+  /** Of the link that stops mails of this kind. */
+  readonly unsubscribeToken: string;
 }
 
 /** A mail that is due. */
-export interface DueMail extends Omit<NewMail, 'personId'> {
+export interface DueMail {
   readonly id: string;
+  readonly personId: string;
+  readonly roomId: string;
+  readonly kind: MailKind;
+  readonly messageId: string;
+  readonly inReplyTo: string | null;
+  readonly toAddress: string;
+  readonly isHeldBack: boolean;
   readonly attempts: number;
+  /** Null until it is composed. */
+  readonly content: MailContent | null;
 }
 
-/** Someone who wants a room's alert mails. */
-export interface Recipient {
+/** A mail that is written whole, such as a letter. */
+export interface WholeMail extends MailContent {
   readonly personId: string;
-  readonly name: string;
-  readonly email: string;
-  readonly temperatureUnit: TemperatureUnit;
+  readonly roomId: string;
+  readonly kind: MailKind;
+  readonly messageId: string;
+  readonly toAddress: string;
+  readonly at: Date;
 }
 
 interface MailRow {
   id: string;
+  person_id: string;
+  room_id: string;
+  kind: MailKind;
   message_id: string;
   in_reply_to: string | null;
   to_address: string;
+  is_held_back: boolean;
+  attempts: number;
+  composed_at: Date | null;
   subject: string;
   text_body: string;
   html_body: string;
-  attempts: number;
+  pictures: MailPicture[];
+  unsubscribe_token: string | null;
 }
 
 /** Queries over the outbox. */
 export class MailStore {
-  /** Puts mails into the outbox; one with the same Message-ID is there already. */
-  async add(tx: Tx, mails: readonly NewMail[]): Promise<void> {
-    if (mails.length === 0) return;
+  /** Puts a mail into the outbox whose content is known. */
+  async addWhole(tx: Tx, mail: WholeMail): Promise<void> {
     await tx.query(
-      `INSERT INTO mail (person_id, message_id, in_reply_to, to_address, subject, text_body, html_body)
-       SELECT * FROM unnest($1::uuid[], $2::text[], $3::text[], $4::text[], $5::text[], $6::text[], $7::text[])
-       ON CONFLICT (message_id) DO NOTHING`,
+      `INSERT INTO mail (person_id, room_id, kind, message_id, to_address, not_before, composed_at, created_at,
+         subject, text_body, html_body, pictures, unsubscribe_token)
+       VALUES ($1, $2, $3, $4, $5, $6, $6, $6, $7, $8, $9, $10::jsonb, $11)`,
       [
-        mails.map((mail) => mail.personId),
-        mails.map((mail) => mail.messageId),
-        mails.map((mail) => mail.inReplyTo),
-        mails.map((mail) => mail.toAddress),
-        mails.map((mail) => mail.subject),
-        mails.map((mail) => mail.textBody),
-        mails.map((mail) => mail.htmlBody),
+        mail.personId,
+        mail.roomId,
+        mail.kind,
+        mail.messageId,
+        mail.toAddress,
+        mail.at,
+        mail.subject,
+        mail.textBody,
+        mail.htmlBody,
+        JSON.stringify(mail.pictures),
+        mail.unsubscribeToken,
       ],
     );
   }
 
-  /** The next due mails, held by this transaction; other workers pass them over. */
-  async takeDue(tx: Tx, limit: number): Promise<DueMail[]> {
+  /**
+   * The mail that has been due the longest, held by this transaction; other workers pass it over. A mail that answers
+   * another one waits until that one has gone.
+   */
+  async takeDue(tx: Tx, now: Date): Promise<DueMail | null> {
     const rows: MailRow[] = await tx.query(
-      `SELECT * FROM mail WHERE sent_at IS NULL AND failed_at IS NULL AND not_before <= now()
-       ORDER BY not_before LIMIT $1 FOR UPDATE SKIP LOCKED`,
-      [limit],
-    );
-    return rows.map((row) => ({
-      id: row.id,
-      messageId: row.message_id,
-      inReplyTo: row.in_reply_to,
-      toAddress: row.to_address,
-      subject: row.subject,
-      textBody: row.text_body,
-      htmlBody: row.html_body,
-      attempts: row.attempts,
-    }));
-  }
-
-  /** Notes that the mail server has taken a mail. */
-  async markSent(tx: Tx, id: string): Promise<void> {
-    await tx.query(
-      'UPDATE mail SET sent_at = now(), attempts = attempts + 1, last_error = NULL WHERE id = $1',
-      [id],
-    );
-  }
-
-  /** Notes a failure; without another try the mail has failed for good. */
-  async markFailed(tx: Tx, id: string, error: string, retryInS: number | null): Promise<void> {
-    await tx.query(
-      `UPDATE mail SET attempts = attempts + 1, last_error = $2,
-         not_before = now() + make_interval(secs => coalesce($3, 0)),
-         failed_at = CASE WHEN $3::float8 IS NULL THEN now() END
-       WHERE id = $1`,
-      [id, error.slice(0, 500), retryInS],
-    );
-  }
-
-  /** Members of a room who want to be told when alerts open, or when they clear. */
-  async recipients(tx: Tx, roomId: string, when: 'opened' | 'cleared'): Promise<Recipient[]> {
-    const column = when === 'opened' ? 'mail_alert_opened' : 'mail_alert_cleared';
-    const rows: { person_id: string; name: string; email: string; temperature_unit: TemperatureUnit }[] =
-      await tx.query(
-        `SELECT m.person_id, p.name, p.email, p.temperature_unit
-         FROM membership m JOIN person p ON p.id = m.person_id
-         WHERE m.room_id = $1 AND m.${column} ORDER BY p.id`,
-        [roomId],
-      );
-    return rows.map((row) => ({
-      personId: row.person_id,
-      name: row.name,
-      email: row.email,
-      temperatureUnit: row.temperature_unit,
-    }));
-  }
-
-  /** What a mail says of the room it is about. */
-  async room(tx: Tx, roomId: string): Promise<{ name: string; timeZone: string } | null> {
-    const rows: { name: string; time_zone: string }[] = await tx.query(
-      'SELECT name, time_zone FROM room WHERE id = $1',
-      [roomId],
+      `SELECT * FROM mail
+       WHERE sent_at IS NULL AND failed_at IS NULL AND not_before <= $1
+         AND NOT EXISTS (
+           SELECT 1 FROM mail AS first
+           WHERE first.message_id = mail.in_reply_to AND first.sent_at IS NULL AND first.failed_at IS NULL
+         )
+       ORDER BY not_before, created_at LIMIT 1 FOR UPDATE SKIP LOCKED`,
+      [now],
     );
     const [row] = rows;
-    return row === undefined ? null : { name: row.name, timeZone: row.time_zone };
+    return row === undefined ? null : dueMailOf(row);
+  }
+
+  /** Keeps what a mail says; from then on it stays the same, and nothing joins it. */
+  async setContent(tx: Tx, id: string, content: MailContent, at: Date): Promise<void> {
+    await tx.query(
+      `UPDATE mail SET composed_at = $2, subject = $3, text_body = $4, html_body = $5, pictures = $6::jsonb,
+         unsubscribe_token = $7 WHERE id = $1`,
+      [
+        id,
+        at,
+        content.subject,
+        content.textBody,
+        content.htmlBody,
+        JSON.stringify(content.pictures),
+        content.unsubscribeToken,
+      ],
+    );
+  }
+
+  /** Takes a mail back that has nothing left to say. */
+  async withdraw(tx: Tx, id: string): Promise<void> {
+    await tx.query('DELETE FROM mail WHERE id = $1', [id]);
+  }
+
+  /** Notes that the mail server has taken a mail, and so that it takes mail to the person. */
+  async markSent(tx: Tx, mail: Pick<DueMail, 'id' | 'personId'>, at: Date): Promise<void> {
+    await tx.query('UPDATE mail SET sent_at = $2, attempts = attempts + 1, last_error = NULL WHERE id = $1', [
+      mail.id,
+      at,
+    ]);
+    await tx.query(
+      `UPDATE person SET mail_refused_at = NULL, mail_refused_reason = NULL
+       WHERE id = $1 AND mail_refused_at IS NOT NULL`,
+      [mail.personId],
+    );
+  }
+
+  /** Notes a try that failed, and when to try again. */
+  async markDelayed(tx: Tx, id: string, error: string, retryAt: Date): Promise<void> {
+    await tx.query(
+      'UPDATE mail SET attempts = attempts + 1, last_error = $2, not_before = $3 WHERE id = $1',
+      [id, shortened(error), retryAt],
+    );
+  }
+
+  /** Notes that a mail is given up, and at the person since when theirs are refused and why. */
+  async markRefused(tx: Tx, mail: Pick<DueMail, 'id' | 'personId'>, error: string, at: Date): Promise<void> {
+    await tx.query('UPDATE mail SET attempts = attempts + 1, last_error = $2, failed_at = $3 WHERE id = $1', [
+      mail.id,
+      shortened(error),
+      at,
+    ]);
+    await tx.query(
+      `UPDATE person SET mail_refused_at = coalesce(mail_refused_at, $3), mail_refused_reason = $2 WHERE id = $1`,
+      [mail.personId, shortened(error), at],
+    );
+  }
+
+  /** Subject of a mail that has been composed; null when it is gone. */
+  async subjectOf(tx: Tx, messageId: string): Promise<string | null> {
+    const rows: { subject: string }[] = await tx.query(
+      'SELECT subject FROM mail WHERE message_id = $1 AND composed_at IS NOT NULL',
+      [messageId],
+    );
+    return rows[0]?.subject ?? null;
   }
 }
 
-/** An alert with its room, as the alert store gives it. */
-export type AlertOfRoom = Alert & { readonly roomId: string };
+function shortened(error: string): string {
+  return error.slice(0, 500);
+}
+
+function dueMailOf(row: MailRow): DueMail {
+  return {
+    id: row.id,
+    personId: row.person_id,
+    roomId: row.room_id,
+    kind: row.kind,
+    messageId: row.message_id,
+    inReplyTo: row.in_reply_to,
+    toAddress: row.to_address,
+    isHeldBack: row.is_held_back,
+    attempts: row.attempts,
+    content:
+      row.composed_at === null
+        ? null
+        : {
+            subject: row.subject,
+            textBody: row.text_body,
+            htmlBody: row.html_body,
+            pictures: row.pictures,
+            unsubscribeToken: row.unsubscribe_token ?? '',
+          },
+  };
+}

@@ -1,10 +1,11 @@
 import type { Account, Member, Membership } from '@shared/contracts/people';
+import { waitsForNoLetter, type MailChoice } from '@shared/mail/mail-choice';
 import type { AuditStore } from '../audit/audit-store';
-import type { Transactions } from '../database/transactions';
+import type { Transactions, Tx } from '../database/transactions';
 import { invalidField, notFound } from '../http/request-problem';
 import type { RoomAccess } from '../http/route';
 import { hashPassword, passwordMatches } from './passwords';
-import type { AccountChange, MailChoice, PeopleStore } from './people-store';
+import type { AccountChange, PeopleStore } from './people-store';
 import type { SignInAttempts } from './sign-in-attempts';
 
 /** An account as it is kept; the token that goes with it belongs to the session. */
@@ -18,6 +19,9 @@ export interface PasswordChange {
   readonly sessionId: string;
   readonly ip: string;
 }
+
+/** What a person changes of their mails; what is left out stays. */
+export type MailChoiceChange = { readonly [K in keyof MailChoice]?: MailChoice[K] | undefined };
 
 /** Accounts and memberships. */
 export class PeopleService {
@@ -45,7 +49,18 @@ export class PeopleService {
     const person = await this.people.withId(tx, personId);
     if (person === null) throw notFound('person');
     const { id, email, name, temperatureUnit, theme } = person;
-    return { id, email, name, temperatureUnit, theme, memberships: await this.people.memberships(tx, id) };
+    return {
+      id,
+      email,
+      name,
+      temperatureUnit,
+      theme,
+      memberships: await this.people.memberships(tx, id),
+      mailRefused:
+        person.mailRefusedAt === null
+          ? null
+          : { since: person.mailRefusedAt.toISOString(), reason: person.mailRefusedReason ?? '' },
+    };
   }
 
   /** Changes name, unit or theme, and returns the account. */
@@ -95,22 +110,45 @@ export class PeopleService {
     });
   }
 
-  /** Chooses which mails a room sends a member, and returns the membership. */
-  changeMailChoice(personId: string, roomId: string, choice: MailChoice): Promise<Membership> {
+  /**
+   * Chooses which mails a room sends a member.
+   *
+   * @param personId - The member.
+   * @param roomId - The room.
+   * @param change - What is to be different.
+   * @returns The membership.
+   * @throws {@link RequestProblem} 422 on `body.letterAt` when alerts would wait for a letter that is never sent.
+   */
+  changeMailChoice(personId: string, roomId: string, change: MailChoiceChange): Promise<Membership> {
     return this.transactions.run(async (tx) => {
-      if (Object.keys(choice).length > 0) {
-        await this.people.changeMailChoice(tx, personId, roomId, choice);
-        await this.audit.note(tx, {
-          roomId,
-          personId,
-          action: 'mail-choice.change',
-          subjectId: personId,
-          detail: { ...choice },
-        });
-      }
+      await this.mergeMailChoice(tx, personId, roomId, change);
       const membership = await this.people.membership(tx, personId, roomId);
       if (membership === null) throw notFound('room');
       return membership;
+    });
+  }
+
+  private async mergeMailChoice(
+    tx: Tx,
+    personId: string,
+    roomId: string,
+    change: MailChoiceChange,
+  ): Promise<void> {
+    const held = await this.people.holdMailChoice(tx, personId, roomId);
+    if (held === null) throw notFound('room');
+    const given = Object.fromEntries(Object.entries(change).filter(([, value]) => value !== undefined));
+    if (Object.keys(given).length === 0) return;
+    const choice: MailChoice = { ...held, ...given };
+    if (waitsForNoLetter(choice)) {
+      throw invalidField('body.letterAt', 'must be a time while alerts are told in the morning letter');
+    }
+    await this.people.setMailChoice(tx, personId, roomId, choice);
+    await this.audit.note(tx, {
+      roomId,
+      personId,
+      action: 'mail-choice.change',
+      subjectId: personId,
+      detail: given,
     });
   }
 

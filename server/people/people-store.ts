@@ -1,4 +1,5 @@
 import type { Member, Membership, TemperatureUnit, Theme } from '@shared/contracts/people';
+import type { MailChoice } from '@shared/mail/mail-choice';
 import type { Tx } from '../database/transactions';
 import type { RoomAccess } from '../http/route';
 import { MembershipEntity } from './membership-entity';
@@ -11,15 +12,17 @@ export interface AccountChange {
   readonly theme?: Theme | undefined;
 }
 
-/** Which mails a room sends. */
-export interface MailChoice {
-  readonly mailAlertOpened?: boolean | undefined;
-  readonly mailAlertCleared?: boolean | undefined;
-}
+/** A membership's choice of mails as one value, for any query over `membership`. */
+export const mailChoiceColumns = `json_build_object(
+    'lookToday', membership.mail_look_today, 'goNow', membership.mail_go_now,
+    'cleared', membership.mail_alert_cleared,
+    'quietHours', CASE WHEN membership.quiet_from IS NOT NULL
+      THEN json_build_object('from', membership.quiet_from, 'to', membership.quiet_to) END,
+    'letterAt', membership.letter_at, 'letterOnlyWithNews', membership.letter_only_with_news)`;
 
 const membershipColumns = `
   membership.room_id AS "roomId", room.name AS "roomName", room.time_zone AS "timeZone", membership.role,
-  membership.mail_alert_opened AS "mailAlertOpened", membership.mail_alert_cleared AS "mailAlertCleared"`;
+  ${mailChoiceColumns} AS mails`;
 
 /** People, their memberships and their sessions. */
 export class PeopleStore {
@@ -79,9 +82,30 @@ export class PeopleStore {
     await tx.update(PersonEntity, { id: personId }, { passwordHash });
   }
 
-  /** Changes what is given of the mails that a room sends a member. */
-  async changeMailChoice(tx: Tx, personId: string, roomId: string, choice: MailChoice): Promise<void> {
-    await tx.update(MembershipEntity, { personId, roomId }, choice);
+  /** Which mails a room sends a member, held until the transaction ends; null for who is no member. */
+  async holdMailChoice(tx: Tx, personId: string, roomId: string): Promise<MailChoice | null> {
+    const rows: { mails: MailChoice }[] = await tx.query(
+      `SELECT ${mailChoiceColumns} AS mails FROM membership WHERE person_id = $1 AND room_id = $2 FOR UPDATE`,
+      [personId, roomId],
+    );
+    return rows[0]?.mails ?? null;
+  }
+
+  /** Keeps which mails a room sends a member. */
+  async setMailChoice(tx: Tx, personId: string, roomId: string, choice: MailChoice): Promise<void> {
+    await tx.update(
+      MembershipEntity,
+      { personId, roomId },
+      {
+        mailLookToday: choice.lookToday,
+        mailGoNow: choice.goNow,
+        mailAlertCleared: choice.cleared,
+        quietFrom: choice.quietHours?.from ?? null,
+        quietTo: choice.quietHours?.to ?? null,
+        letterAt: choice.letterAt,
+        letterOnlyWithNews: choice.letterOnlyWithNews,
+      },
+    );
   }
 
   /** Ends every session of a person but one. */

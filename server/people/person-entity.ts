@@ -12,5 +12,8 @@ export class PersonEntity {
   @Column('text', { name: 'password_hash' }) passwordHash!: string;
   @Column('text', { name: 'temperature_unit', default: 'celsius' }) temperatureUnit!: TemperatureUnit;
   @Column('text', { default: 'system' }) theme!: Theme;
+  /** Since when the mail server has refused mail to the person for good; null while it takes it. */
+  @Column('timestamptz', { name: 'mail_refused_at', nullable: true }) mailRefusedAt!: Date | null;
+  @Column('text', { name: 'mail_refused_reason', nullable: true }) mailRefusedReason!: string | null;
   @CreateDateColumn({ type: 'timestamptz', name: 'created_at' }) createdAt!: Date;
 }

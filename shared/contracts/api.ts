@@ -4,6 +4,7 @@ import * as board from './board';
 import * as care from './care';
 import * as devices from './devices';
 import * as loggerFiles from './logger-files';
+import * as mail from './mail';
 import * as people from './people';
 import * as rooms from './rooms';
 import * as scenarios from './scenarios';
@@ -18,6 +19,10 @@ export const endpoints: readonly Endpoint[] = [
   people.changePassword,
   people.changeMailChoice,
   people.listMembers,
+  mail.getMailLink,
+  mail.followMailLink,
+  mail.getEscalation,
+  mail.setEscalation,
   rooms.getRoom,
   rooms.changeRoom,
   rooms.listRacks,

@@ -1,5 +1,6 @@
 import * as z from 'zod';
 import { endpoint, id, line, roomParams } from './endpoint';
+import { mailChoice, mailRefusal } from './mail';
 
 /** The roles of a member in a room, weakest first; each may all that the one before may. */
 export const roles = ['viewer', 'helper', 'grower', 'keeper'] as const;
@@ -32,8 +33,7 @@ export const membership = z.object({
   roomName: z.string(),
   timeZone: z.string(),
   role: z.enum(roles),
-  mailAlertOpened: z.boolean(),
-  mailAlertCleared: z.boolean(),
+  mails: mailChoice,
 });
 /** A room that the person is a member of. */
 export type Membership = z.infer<typeof membership>;
@@ -46,6 +46,8 @@ export const account = z.object({
   temperatureUnit,
   theme,
   memberships: z.array(membership),
+  /** Null while mail to the person is taken. */
+  mailRefused: mailRefusal.nullable(),
   /** To be sent back as `X-CSRF-Token` with every write. */
   csrfToken: z.string(),
 });
@@ -121,7 +123,7 @@ export const changeMailChoice = endpoint({
   access: 'viewer',
   summary: 'Choose which mails this room sends me',
   params: roomParams,
-  body: z.strictObject({ mailAlertOpened: z.boolean().optional(), mailAlertCleared: z.boolean().optional() }),
+  body: mailChoice.partial(),
   reply: membership,
 });
 

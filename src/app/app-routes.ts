@@ -58,6 +58,11 @@ export const appRoutes: Routes = [
     loadComponent: () => import('./account/account').then((m) => m.AccountPage),
   },
   {
+    path: 'unsubscribe/:token',
+    title: 'Stop these mails',
+    loadComponent: () => import('./unsubscribe/unsubscribe').then((m) => m.Unsubscribe),
+  },
+  {
     path: 'sign-in',
     title: 'Sign in',
     canActivate: [signedOutGuard],

@@ -87,6 +87,11 @@ export const accessTable: Readonly<Record<string, AccessRow>> = {
   changeMailChoice: { outcomes: viewer },
   listMembers: { outcomes: viewer },
 
+  getMailLink: { outcomes: anyone },
+  followMailLink: { outcomes: anyone },
+  getEscalation: { outcomes: viewer },
+  setEscalation: { outcomes: keeper, body: { goNowMinutes: 60, lookTodayMinutes: null } },
+
   getRoom: { outcomes: viewer },
   changeRoom: { outcomes: keeper },
   listRacks: { outcomes: viewer },

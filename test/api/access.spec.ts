@@ -16,7 +16,7 @@ import { startTestApplication, type TestApplication } from './test-application';
 
 /** The parameters of a path that name something stored inside a room. */
 const storedParameters = (endpoint: Endpoint): string[] =>
-  parametersOf(endpoint).filter((name) => !['roomId', 'quantity', 'run'].includes(name));
+  parametersOf(endpoint).filter((name) => !['roomId', 'quantity', 'run', 'token'].includes(name));
 
 function parametersOf({ path }: Endpoint): string[] {
   return [...path.matchAll(/:(\w+)/g)].map(([, name]) => name ?? '');

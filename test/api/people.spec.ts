@@ -1,6 +1,7 @@
 import request from 'supertest';
 import type { Account } from '@shared/contracts/people';
 import type { Problem } from '@shared/contracts/problem';
+import { usualMailChoice } from '@shared/mail/mail-choice';
 import { AuditEntryEntity } from '../../server/audit/audit-entry-entity';
 import { PersonEntity } from '../../server/people/person-entity';
 import type { Tx } from '../../server/database/transactions';
@@ -43,10 +44,10 @@ describe('people', () => {
             roomName: 'Loft',
             timeZone: 'Europe/Dublin',
             role: 'grower',
-            mailAlertOpened: true,
-            mailAlertCleared: false,
+            mails: usualMailChoice,
           },
         ],
+        mailRefused: null,
         csrfToken: expect.stringMatching(/^[\w-]{43}$/) as string,
       } satisfies Account);
     });
@@ -297,12 +298,12 @@ describe('people', () => {
       const caller = await Caller.signedIn(application.express, person);
 
       const reply = await caller
-        .patch(`/rooms/${here.id}/membership`, { mailAlertCleared: true })
+        .patch(`/rooms/${here.id}/membership`, { cleared: true })
         .expect(200);
 
-      expect(reply.body).toMatchObject({ roomId: here.id, mailAlertOpened: true, mailAlertCleared: true });
+      expect(reply.body).toMatchObject({ roomId: here.id, mails: { ...usualMailChoice, cleared: true } });
       const { memberships } = (await caller.get('/account')).body as Account;
-      expect(memberships.find(({ roomId }) => roomId === there.id)?.mailAlertCleared).toBe(false);
+      expect(memberships.find(({ roomId }) => roomId === there.id)?.mails).toEqual(usualMailChoice);
     });
 
     it('sees who else is in the room, those who may most first, and nobody of another room', async () => {

@@ -8,7 +8,7 @@ import { readConfig } from '../../server/config';
 import { AlertStore } from '../../server/alerts/alert-store';
 import { Transactions } from '../../server/database/transactions';
 import { MailAlertTeller } from '../../server/mail/alert-teller';
-import { MailStore } from '../../server/mail/mail-store';
+import { TellingStore } from '../../server/mail/telling-store';
 import { intakeParts, type IntakeParts } from '../../server/readings/intake-parts';
 import { ShelfPlansService } from '../../server/rooms/shelf-plans-service';
 import { ShelfPlansStore } from '../../server/rooms/shelf-plans-store';
@@ -35,7 +35,11 @@ export async function startBenchApplication(): Promise<BenchApplication> {
   const app = await buildApp({ dataSource, config, log, now: systemClock, webFolder: null });
   await new Promise<void>((resolve) => app.http.listen(0, '127.0.0.1', resolve));
   const address = `http://127.0.0.1:${(app.http.address() as AddressInfo).port}`;
-  const teller = new MailAlertTeller(new AlertStore(), new MailStore(), () => address, 'localhost');
+  const teller = new MailAlertTeller({
+    alerts: new AlertStore(),
+    tellings: new TellingStore(),
+    mailDomain: 'localhost',
+  });
   return {
     dataSource,
     address,

@@ -8,6 +8,7 @@ import { CreateLoggerFiles1764551400000 } from './1764551400000-create-logger-fi
 import { CreateAuditEntry1764551500000 } from './1764551500000-create-audit-entry';
 import { CreateRequestCounters1764551600000 } from './1764551600000-create-request-counters';
 import { CreateSocketAttachments1764551700000 } from './1764551700000-create-socket-attachments';
+import { TellPeopleByChoice1764551800000 } from './1764551800000-tell-people-by-choice';
 
 /** Every migration in order; a merged one is never edited. */
 export const migrations = [
@@ -21,4 +22,5 @@ export const migrations = [
   CreateAuditEntry1764551500000,
   CreateRequestCounters1764551600000,
   CreateSocketAttachments1764551700000,
+  TellPeopleByChoice1764551800000,
 ];

@@ -2,12 +2,15 @@ import { provideHttpClient } from '@angular/common/http';
 import { HttpTestingController, provideHttpClientTesting } from '@angular/common/http/testing';
 import { TestbedHarnessEnvironment } from '@angular/cdk/testing/testbed';
 import type { HarnessLoader } from '@angular/cdk/testing';
-import { TestBed } from '@angular/core/testing';
+import { TestBed, type ComponentFixture } from '@angular/core/testing';
 import { MatButtonHarness } from '@angular/material/button/testing';
 import { MatCheckboxHarness } from '@angular/material/checkbox/testing';
+import { MatFormFieldHarness } from '@angular/material/form-field/testing';
 import { MatInputHarness } from '@angular/material/input/testing';
 import { MatRadioGroupHarness } from '@angular/material/radio/testing';
+import { MatSelectHarness } from '@angular/material/select/testing';
 import { provideRouter } from '@angular/router';
+import { usualMailChoice } from '@shared/mail/mail-choice';
 import { Session } from '../core/session';
 import { account, membership } from '../core/testing/account-builder';
 import { Notices } from '../core/notices';
@@ -17,6 +20,7 @@ import { AccountPage } from './account';
 describe('the account page', () => {
   let loader: HarnessLoader;
   let server: HttpTestingController;
+  let fixture: ComponentFixture<AccountPage>;
   let page: HTMLElement;
   const notices = { say: jest.fn(), sayFailure: jest.fn() };
 
@@ -34,7 +38,11 @@ describe('the account page', () => {
     server = TestBed.inject(HttpTestingController);
     TestBed.inject(Session).load().subscribe();
     server.expectOne('/api/v1/account').flush(account());
-    const fixture = TestBed.createComponent(AccountPage);
+    fixture = TestBed.createComponent(AccountPage);
+    fixture.detectChanges();
+    server
+      .expectOne(`/api/v1/rooms/${membership().roomId}/escalation`)
+      .flush({ goNowMinutes: 60, lookTodayMinutes: 240 });
     await fixture.whenStable();
     loader = TestbedHarnessEnvironment.loader(fixture);
     page = fixture.nativeElement as HTMLElement;
@@ -86,11 +94,64 @@ describe('the account page', () => {
     const over = await loader.getHarness(MatCheckboxHarness.with({ label: 'When it is over' }));
     await over.check();
     const request = server.expectOne(`/api/v1/rooms/${membership().roomId}/membership`);
-    expect(request.request.body).toEqual({ mailAlertCleared: true });
+    expect(request.request.body).toEqual({ cleared: true });
     expect(await over.isChecked()).toBe(true);
     request.flush(null, { status: 503, statusText: 'x' });
     expect(await over.isChecked()).toBe(false);
     expect(notices.sayFailure).toHaveBeenCalledTimes(1);
+  });
+
+  const choose = async (label: RegExp, text: string): Promise<void> => {
+    const field = await loader.getHarness(MatFormFieldHarness.with({ floatingLabelText: label }));
+    const select = await field.getControl(MatSelectHarness);
+    await select?.open();
+    await select?.clickOptions({ text });
+  };
+  const mailChoice = () => server.expectOne(`/api/v1/rooms/${membership().roomId}/membership`);
+
+  it('turns the morning letter on with the first alerts that are left to it, and these back with it', async () => {
+    await choose(/can wait a day$/, 'In the morning letter');
+    const on = mailChoice();
+    expect(on.request.body).toEqual({ lookToday: 'morningLetter', letterAt: '07:00' });
+    on.flush(membership({ mails: { ...usualMailChoice, lookToday: 'morningLetter', letterAt: '07:00' } }));
+
+    await (await loader.getHarness(MatCheckboxHarness.with({ label: 'Morning letter' }))).uncheck();
+    const off = mailChoice();
+    expect(off.request.body).toEqual({ letterAt: null, lookToday: 'atOnce', goNow: 'atOnce' });
+    off.flush(membership());
+  });
+
+  it('sets quiet hours, and one end of them by itself', async () => {
+    await (await loader.getHarness(MatCheckboxHarness.with({ label: 'Quiet hours' }))).check();
+    mailChoice().flush(
+      membership({ mails: { ...usualMailChoice, quietHours: { from: '22:00', to: '07:00' } } }),
+    );
+    const field = await loader.getHarness(MatFormFieldHarness.with({ floatingLabelText: 'To' }));
+    const input = await field.getControl(MatInputHarness);
+    await input?.setValue('06:15');
+    await (await input?.host())?.dispatchEvent('change');
+    const request = mailChoice();
+    expect(request.request.body).toEqual({ quietHours: { from: '22:00', to: '06:15' } });
+    request.flush(membership());
+  });
+
+  it('lets a keeper say when nobody’s silence is enough', async () => {
+    await choose(/^Urgent, after/, 'Never');
+    const request = server.expectOne(`/api/v1/rooms/${membership().roomId}/escalation`);
+    expect(request.request.method).toBe('PUT');
+    expect(request.request.body).toEqual({ goNowMinutes: null, lookTodayMinutes: 240 });
+    request.flush({ goNowMinutes: null, lookTodayMinutes: 240 });
+  });
+
+  it('says since when and why mail to the person is refused', async () => {
+    expect(page.querySelector('.refused')).toBeNull();
+    TestBed.inject(Session).change({ name: 'Maren' }).subscribe();
+    server
+      .expectOne('/api/v1/account')
+      .flush(account({ mailRefused: { since: '2026-04-15T10:00:00Z', reason: '550 No such mailbox here' } }));
+    await fixture.whenStable();
+    expect(page.querySelector('.refused')?.textContent).toContain('refused since Wed 15 Apr, 11:00');
+    expect(page.querySelector('.refused')?.textContent).toContain('550 No such mailbox here');
   });
 
   it('changes the password and empties its fields', async () => {

@@ -19,7 +19,7 @@ import { AccountView } from './account-view/account-view';
       </header>
       <app-account-name [name]="account.name" />
       <app-account-view [account]="account" />
-      <app-account-mails [memberships]="account.memberships" />
+      <app-account-mails [memberships]="account.memberships" [refused]="account.mailRefused" />
       <app-account-password [email]="account.email" />
       <button matButton="outlined" class="leave" type="button" (click)="signOut()">
         <mat-icon aria-hidden="true">logout</mat-icon>Sign out

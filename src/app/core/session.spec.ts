@@ -116,8 +116,8 @@ describe('the session', () => {
 
   it('takes over a changed membership and leaves the others', () => {
     signedInAs(account({ memberships: [membership(), second] }));
-    session.takeOver({ ...second, mailAlertCleared: true });
-    expect(session.account()?.memberships.map((one) => one.mailAlertCleared)).toEqual([false, true]);
+    session.takeOver({ ...second, mails: { ...second.mails, cleared: true } });
+    expect(session.account()?.memberships.map((one) => one.mails.cleared)).toEqual([false, true]);
   });
 
   it('signs in, and goes to the sign-in page after signing out', async () => {

@@ -1,13 +1,12 @@
 import { ChangeDetectionStrategy, Component, inject, input } from '@angular/core';
-import { MatCheckbox } from '@angular/material/checkbox';
-import { changeMailChoice, type Membership } from '@shared/contracts/people';
-import { ApiClient } from '../../core/api-client';
-import { Notices } from '../../core/notices';
+import type { MailRefusal } from '@shared/contracts/mail';
+import type { Membership } from '@shared/contracts/people';
+import { formatDayAndTime } from '@shared/format/room-time';
 import { Session } from '../../core/session';
+import { RoomEscalation } from '../room-escalation/room-escalation';
+import { RoomMails } from '../room-mails/room-mails';
 
-type MailChoice = Pick<Membership, 'mailAlertOpened' | 'mailAlertCleared'>;
-
-/** Which mails each room sends to the person. */
+/** Which mails each room sends to the person, and whether they arrive. */
 @Component({
   selector: 'app-account-mails',
   template: `
@@ -15,45 +14,41 @@ type MailChoice = Pick<Membership, 'mailAlertOpened' | 'mailAlertCleared'>;
     <p>
       A room writes to you about a shelf that stays out of its wanted range. It never writes about the past.
     </p>
+    @if (refused(); as refusal) {
+      <p class="refused" role="status">
+        <strong>Mail to you is refused since {{ when(refusal.since) }}.</strong>
+        The mail server says: “{{ refusal.reason }}”. Ask a keeper to check your address; the next mail that
+        is taken ends this notice.
+      </p>
+    }
     @for (room of memberships(); track room.roomId) {
-      <div role="group" [attr.aria-label]="room.roomName">
-        <h3>{{ room.roomName }}</h3>
-        <mat-checkbox
-          [checked]="room.mailAlertOpened"
-          (change)="choose(room, { mailAlertOpened: $event.checked })"
-        >
-          When something needs a look
-        </mat-checkbox>
-        <mat-checkbox
-          [checked]="room.mailAlertCleared"
-          (change)="choose(room, { mailAlertCleared: $event.checked })"
-        >
-          When it is over
-        </mat-checkbox>
-      </div>
+      <app-room-mails [room]="room" />
+      @if (room.role === 'keeper') {
+        <app-room-escalation [roomId]="room.roomId" />
+      }
     } @empty {
       <p>You are not a member of a room yet. A keeper can add you.</p>
     }
   `,
   styleUrl: '../setting.scss',
-  imports: [MatCheckbox],
+  styles: `
+    .refused {
+      padding: 12px 14px;
+      border-left: 4px solid var(--ember);
+      background: var(--ember-tint);
+      color: var(--ink);
+    }
+  `,
+  imports: [RoomEscalation, RoomMails],
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class AccountMails {
   readonly memberships = input.required<readonly Membership[]>();
+  readonly refused = input.required<MailRefusal | null>();
 
-  private readonly api = inject(ApiClient);
   private readonly session = inject(Session);
-  private readonly notices = inject(Notices);
 
-  protected choose(room: Membership, choice: Partial<MailChoice>): void {
-    this.session.takeOver({ ...room, ...choice });
-    this.api.call(changeMailChoice, { params: { roomId: room.roomId }, body: choice }).subscribe({
-      next: (changed) => this.session.takeOver(changed),
-      error: (error: unknown) => {
-        this.session.takeOver(room);
-        this.notices.sayFailure(error);
-      },
-    });
+  protected when(at: string): string {
+    return formatDayAndTime(at, this.session.timeZone());
   }
 }

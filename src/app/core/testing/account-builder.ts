@@ -1,4 +1,5 @@
 import type { Account, Membership } from '@shared/contracts/people';
+import { usualMailChoice } from '@shared/mail/mail-choice';
 
 /** An invented membership for specs. */
 export function membership(changes: Partial<Membership> = {}): Membership {
@@ -7,8 +8,7 @@ export function membership(changes: Partial<Membership> = {}): Membership {
     roomName: 'Kestrel Lane growing room',
     timeZone: 'Europe/Dublin',
     role: 'keeper',
-    mailAlertOpened: true,
-    mailAlertCleared: false,
+    mails: usualMailChoice,
     ...changes,
   };
 }
@@ -22,6 +22,7 @@ export function account(changes: Partial<Account> = {}): Account {
     temperatureUnit: 'celsius',
     theme: 'system',
     memberships: [membership()],
+    mailRefused: null,
     csrfToken: 'token-1',
     ...changes,
   };
