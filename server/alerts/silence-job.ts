@@ -9,6 +9,9 @@ interface SilentRow {
   id: string;
   expected_interval_s: number;
   latest_at: Date;
+  device_seen_at: Date;
+  /** Newest reading of any sensor of the device. */
+  device_latest_at: Date;
 }
 
 /** Lets the clock find sensors that have fallen silent. */
@@ -40,7 +43,9 @@ export class SilenceJob {
   /** Sensors in use whose last reading is too old, and whose silence is not known or not yet urgent. */
   private async quietSensors(tx: Tx, now: number): Promise<string[]> {
     const rows: SilentRow[] = await tx.query(
-      `SELECT s.id, s.expected_interval_s, st.latest_at
+      `SELECT s.id, s.expected_interval_s, st.latest_at, d.last_seen_at AS device_seen_at,
+         (SELECT max(other.latest_at) FROM sensor beside JOIN sensor_state other ON other.sensor_id = beside.id
+          WHERE beside.device_id = d.id) AS device_latest_at
        FROM sensor s
        JOIN sensor_state st ON st.sensor_id = s.id
        JOIN device d ON d.id = s.device_id AND d.revoked_at IS NULL AND d.last_seen_at IS NOT NULL
@@ -52,8 +57,17 @@ export class SilenceJob {
          )`,
       [new Date(now - silentAfterMs(1))],
     );
-    return rows
-      .filter((row) => now - row.latest_at.getTime() > silentAfterMs(row.expected_interval_s))
-      .map((row) => row.id);
+    return rows.filter((row) => isSilent(row, now)).map((row) => row.id);
   }
+}
+
+/**
+ * A device that reports but sends old readings is catching up: its sensors are not silent, only late, unless one of
+ * them lags behind the others.
+ */
+function isSilent(row: SilentRow, now: number): boolean {
+  const limitMs = silentAfterMs(row.expected_interval_s);
+  const latestAt = row.latest_at.getTime();
+  const isDeviceQuiet = now - row.device_seen_at.getTime() > limitMs;
+  return now - latestAt > limitMs && (isDeviceQuiet || row.device_latest_at.getTime() - latestAt > limitMs);
 }

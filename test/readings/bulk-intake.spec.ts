@@ -74,14 +74,22 @@ describe('readings of a file', () => {
     );
   });
 
-  it('older than what is held are judged by the lamps of their own time', async () => {
-    const sensors = await sensorsOnAShelf(database.dataSource.manager);
+  it('older than the sensor’s time on the shelf leave what was judged there as it was', async () => {
+    const tx = database.dataSource.manager;
+    const sensors = await sensorsOnAShelf(tx);
+    await tx.query('UPDATE placement SET from_at = $2 WHERE sensor_id = $1', [
+      sensors.temperature,
+      new Date(firstDay + 5 * 86_400_000),
+    ]);
     const days = (from: number, to: number): Sent[] =>
-      Array.from({ length: ((to - from) * 86_400_000) / step }, (_, index) => {
+      Array.from({ length: ((to - from) * 86_400_000) / step }, (_, index): Sent[] => {
         const at = firstDay + from * 86_400_000 + index * step;
-        return { of: 'temperature', at, value: isLit(at) ? 24 : 17 };
-      });
-    await send(roadOver(database.dataSource, litByDay), sensors, [days(8, 10)], firstDay + 10 * 86_400_000);
+        return [
+          { of: 'temperature', at, value: isLit(at) ? 24 : 17 },
+          { of: 'humidity', at, value: 60 },
+        ];
+      }).flat();
+    await send(roadOver(database.dataSource, litByDay), sensors, [days(8, 16)], firstDay + 16 * 86_400_000);
     await bringIn(database.dataSource, sensors, days(0, 4), 1_000, litByDay);
     const kept = (await keptOf(database.dataSource.manager, sensors)) as {
       temperature: { alerts: unknown[] };
