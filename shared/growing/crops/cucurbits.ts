@@ -23,7 +23,7 @@ function raised(row: PublishedRow, airOfCrop: StageAir = warmAir): Pick<CropDraf
   return {
     seed,
     climate: {
-      ...raisedClimate(seed, airOfCrop),
+      ...raisedClimate(seed, airOfCrop, practised(range(24, 32))),
       fruiting: fruitClimate({ ...warmAir, ...vpdKPa }),
     },
   };

@@ -2,7 +2,7 @@ import { defineCrop, type Crop, type CropDraft } from './crop';
 import { cited, practised, remembered, span } from './figure';
 import { weeksToTransplant } from './published/weeks-to-transplant';
 import { seedFigures, type OwnSeedFigures } from './seed-figures';
-import { air, raisedClimate, range, transplantAir } from './stage-climates';
+import { air, leafClimate, raisedClimate, range, transplantAir } from './stage-climates';
 
 const ARTICLES = 'gardening articles (weak): onion, leek and lettuce go out 2–6 weeks before the last frost';
 
@@ -42,7 +42,13 @@ const lettuce = {
   toxicToPets: harmless,
   seed: lettuceSeed,
   sowing: { weeksToTransplant: weeksToTransplant.lettuce, plantingOutWeeks: cited(span(-6, -2), ARTICLES) },
-  climate: raisedClimate(lettuceSeed, transplantAir('lettuce')),
+  climate: {
+    ...raisedClimate(lettuceSeed, transplantAir('lettuce')),
+    growingOn: leafClimate({
+      ...air(range(14, 24), range(7, 19)),
+      relativeHumidityPct: remembered(range(50, 70)),
+    }),
+  },
   degreeDays: remembered({ baseC: 4, upperC: null }),
 } as const satisfies Partial<CropDraft>;
 

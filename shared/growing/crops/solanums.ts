@@ -21,6 +21,9 @@ const tomatoSeed = seedFigures('tomato', own);
 const pepperSeed = seedFigures('pepper', own);
 const aubergineSeed = seedFigures('aubergine', own);
 
+/** Within the published optimum; Utah State Extension names 86 °F (30 °C) for tomato and pepper. */
+const warmSeedC = { tomato: practised(range(21, 30)), pepper: practised(range(24, 30)) };
+
 const photoperiodH = seedlingHours;
 const toxicLeaves = remembered('toxic' as const);
 const dayNeutral = remembered({ kind: 'indifferent' } as const);
@@ -33,12 +36,12 @@ const hardening = {
 };
 
 const tomatoClimate = {
-  ...raisedClimate(tomatoSeed, { ...transplantAir('tomato'), photoperiodH }),
+  ...raisedClimate(tomatoSeed, { ...transplantAir('tomato'), photoperiodH }, warmSeedC.tomato),
   fruiting: fruitClimate(air(range(20, 27), range(15, 20))),
   hardeningOff: hardening.tomato,
 };
 const pepperClimate = {
-  ...raisedClimate(pepperSeed, { ...transplantAir('pepper'), photoperiodH }),
+  ...raisedClimate(pepperSeed, { ...transplantAir('pepper'), photoperiodH }, warmSeedC.pepper),
   fruiting: fruitClimate(air(range(20, 28), range(16, 21))),
   hardeningOff: hardening.pepper,
 };
@@ -97,7 +100,7 @@ const drafts: readonly CropDraft[] = [
     seed: aubergineSeed,
     sowing: { weeksToTransplant: weeksToTransplant.aubergine, plantingOutWeeks: practised(span(1, 3)) },
     climate: {
-      ...raisedClimate(aubergineSeed, { ...transplantAir('aubergine'), photoperiodH }),
+      ...raisedClimate(aubergineSeed, { ...transplantAir('aubergine'), photoperiodH }, warmSeedC.pepper),
       fruiting: fruitClimate(air(range(22, 29), range(17, 22))),
       hardeningOff: hardening.pepper,
     },

@@ -90,12 +90,15 @@ function spanOf(printedF: readonly (readonly [number, number])[], source: string
  * What seed wants until it is up: the warmth of its germination, moist air, no light.
  *
  * @param seed - Figures of the seed; the first source's optimum is the wanted range of the root zone.
+ * @param warmthC - The part of that optimum that growers heat for, where it is narrower [°C].
  * @returns The climate.
  */
-export function germinatingClimate(seed: SeedFigures): StageClimate {
+export function germinatingClimate(seed: SeedFigures, warmthC?: Figure<ValueRange>): StageClimate {
   const [temperatures] = seed.temperatures;
+  const optimumC =
+    temperatures === undefined ? null : cited(temperatures.value.optimumC, temperatures.source);
   return stageClimate({
-    rootZoneC: temperatures === undefined ? null : cited(temperatures.value.optimumC, temperatures.source),
+    rootZoneC: warmthC ?? optimumC,
     relativeHumidityPct: practised(range(70, null)),
     vpdKPa: remembered(range(null, 0.8)),
   });
@@ -151,15 +154,26 @@ export function fruitClimate(ofCrop: StageAir & Partial<StageClimate>): StageCli
   });
 }
 
-/** What a crop wants from seed to the end of its raising: germinating, seedling and growing on. */
+/**
+ * What a crop wants from seed to the end of its raising.
+ *
+ * @param seed - Figures of the seed.
+ * @param ofCrop - Its air, and what differs from seedlings and leaves in general.
+ * @param warmthC - See {@link germinatingClimate}.
+ * @returns Germinating, seedling and growing on; light a day differs for seedlings alone.
+ */
 export function raisedClimate(
   seed: SeedFigures,
   ofCrop: StageAir & Partial<StageClimate>,
-): { readonly germinating: StageClimate; readonly seedling: StageClimate; readonly growingOn: StageClimate } {
-  const { dliMolM2D: _dli, ...later } = ofCrop;
+  warmthC?: Figure<ValueRange>,
+): {
+  readonly germinating: StageClimate;
+  readonly seedling: StageClimate;
+  readonly growingOn: StageClimate;
+} {
   return {
-    germinating: germinatingClimate(seed),
+    germinating: germinatingClimate(seed, warmthC),
     seedling: seedlingClimate(ofCrop),
-    growingOn: leafClimate(later),
+    growingOn: leafClimate(ofCrop),
   };
 }
