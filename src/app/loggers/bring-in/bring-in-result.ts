@@ -66,10 +66,16 @@ export class BringInResult {
     if (result === null || result.from === null || result.to === null) return [];
     const zone = this.session.timeZone();
     const [from, to] = [result.from, result.to].map((at) => dayBounds(Date.parse(at), zone).date);
-    const matched = new Set(series.map(({ sensorId }) => sensorId));
-    const sensors = this.data.sensors().filter(({ id, shelfId }) => matched.has(id) && shelfId !== null);
-    const byShelf = new Map(sensors.map(({ shelfId, shelfLabel }) => [shelfId, shelfLabel]));
-    return [...byShelf].map(([shelfId, label]) => ({ shelfId, label, days: { from, to } }));
+    const sensorIds = new Set(series.map(({ sensorId }) => sensorId));
+    // A sensor that was made for the file is not among those known before.
+    const shelfIds = new Set([
+      ...series.map(({ newSensor }) => newSensor?.shelfId),
+      ...this.data.sensors().flatMap(({ id, shelfId }) => (sensorIds.has(id) ? [shelfId] : [])),
+    ]);
+    return this.data
+      .shelves()
+      .filter(({ id }) => shelfIds.has(id))
+      .map(({ id, label }) => ({ shelfId: id, label, days: { from, to } }));
   });
 
   protected takeOut(): void {
