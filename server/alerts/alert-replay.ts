@@ -23,9 +23,9 @@ export interface ReplayedSeries {
 
 /** Readings in order, in columns. */
 export interface ReplayColumns {
-  readonly ats: readonly number[];
-  readonly values: readonly number[];
-  readonly flags: readonly number[];
+  readonly ats: Float64Array;
+  readonly values: Float64Array;
+  readonly flags: Int16Array;
 }
 
 interface Running {
@@ -189,13 +189,15 @@ export class AlertReplay {
   }
 
   private fold({ ats, values, flags }: ReplayColumns): void {
-    const qualities = flags.map(qualityLevel);
+    const qualities = Array.from(flags, qualityLevel);
     for (const one of this.running) {
       const from = Math.max(one.restartedAt ?? firstOf(this.series), one.judgesFrom);
       const skip = ats[0] === undefined || ats[0] >= from ? 0 : ats.findIndex((at) => at >= from);
       if (skip === -1) continue;
       const [times, numbers, levels] =
-        skip === 0 ? [ats, values, qualities] : [ats.slice(skip), values.slice(skip), qualities.slice(skip)];
+        skip === 0
+          ? [ats, values, qualities]
+          : [ats.subarray(skip), values.subarray(skip), qualities.slice(skip)];
       keepStep(one, advanceSeries(one.rule, this.context, one.state, times, numbers, levels));
     }
   }
@@ -212,9 +214,9 @@ function standing(found: ReadonlyMap<number, EpisodeChange>): EpisodeChange[] {
 
 function columnsOf(samples: readonly FlaggedSample[]): ReplayColumns {
   return {
-    ats: samples.map(({ at }) => at),
-    values: samples.map(({ value }) => value),
-    flags: samples.map(({ flags }) => flags),
+    ats: Float64Array.from(samples, ({ at }) => at),
+    values: Float64Array.from(samples, ({ value }) => value),
+    flags: Int16Array.from(samples, ({ flags }) => flags),
   };
 }
 

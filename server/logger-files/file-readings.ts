@@ -1,7 +1,7 @@
 import { createLoggerFileReader, type LoggerFileReader } from '@shared/logger-files/logger-file-reader';
 import type { LoggerFileShape } from '@shared/logger-files/logger-file-shape';
 import type { ReadingRejection } from '@shared/logger-files/reading-rejection';
-import type { BulkBatch } from '../readings/bulk-intake';
+import { BulkBatch } from '../readings/bulk-columns';
 import { FileStatistics } from './file-statistics';
 
 /** Of very many unusable lines only the first are kept; all are counted. */
@@ -26,7 +26,7 @@ export class FileReadings {
   rejected = 0;
   missing = 0;
   private readonly reader: LoggerFileReader;
-  private batch = emptyBatch();
+  private readonly batch = new BulkBatch();
   /** By the index of the series; -1 for one that is not brought in. */
   private readonly placeOf: number[] = [];
 
@@ -43,10 +43,7 @@ export class FileReadings {
           }
           if (place === -1) return;
           statistics.take(place, at);
-          const { sensors, ats, values } = this.batch;
-          sensors.push(place);
-          ats.push(at);
-          values.push(value);
+          this.batch.push(place, at, value);
         },
         onRejected: (rejection) => this.reject(rejection),
       },
@@ -54,22 +51,18 @@ export class FileReadings {
     );
   }
 
-  /** Readings of the next piece, in the order of the file. */
+  /** Readings of the next piece, in the order of the file; they are good until the next call. */
   read(piece: Buffer): BulkBatch {
+    this.batch.clear();
     this.reader.write(piece);
-    return this.takeBatch();
+    return this.batch;
   }
 
   /** What is left at the end of the file. */
   end(): BulkBatch {
+    this.batch.clear();
     this.missing = this.reader.end().missing;
-    return this.takeBatch();
-  }
-
-  private takeBatch(): BulkBatch {
-    const { batch } = this;
-    this.batch = emptyBatch();
-    return batch;
+    return this.batch;
   }
 
   private reject(rejection: ReadingRejection): void {
@@ -77,10 +70,6 @@ export class FileReadings {
     this.rejectedByCode.set(rejection.code, (this.rejectedByCode.get(rejection.code) ?? 0) + 1);
     if (this.rejections.length < MOST_REJECTIONS) this.rejections.push(rejection);
   }
-}
-
-function emptyBatch(): BulkBatch {
-  return { sensors: [], ats: [], values: [] };
 }
 
 /** In a file with a column a quantity, what goes nowhere need not be read. */

@@ -1,6 +1,7 @@
 import type { LoggerFileResult } from '@shared/contracts/logger-files';
 import type { Tx } from '../database/transactions';
-import { OutOfOrder, type BulkBatch, type BulkCounts } from '../readings/bulk-intake';
+import type { BulkBatch } from '../readings/bulk-columns';
+import { OutOfOrder, type BulkCounts } from '../readings/bulk-intake';
 import type { OpenBulkIntake } from '../readings/bulk-intake-service';
 import { FileReadings, type FileReading } from './file-readings';
 import { contentOf } from './logger-file-content';

@@ -6,7 +6,7 @@ import { LoggerFilePartEntity } from './logger-file-part-entity';
 
 const PART_BYTES = 1_048_576;
 /** Pieces in which a file is read again; larger ones keep more cells alive at once than is good for speed. */
-const PIECE_BYTES = 131_072;
+const PIECE_BYTES = 65_536;
 /** Kept aside for the preview of the last rows. */
 const TAIL_BYTES = 16_384;
 

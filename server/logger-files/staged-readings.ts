@@ -1,8 +1,8 @@
 import type { Tx } from '../database/transactions';
 import { BulkCopy } from '../readings/bulk-copy';
-import type { BulkBatch } from '../readings/bulk-intake';
+import { BulkBatch } from '../readings/bulk-columns';
 
-const PAGE_ROWS = 20_000;
+const PAGE_ROWS = 5_000;
 
 /** Readings of a file that is not in order of time, put in order by PostgreSQL, which sorts on disk what is too much for memory. */
 export class StagedReadings {
@@ -29,8 +29,8 @@ export class StagedReadings {
   }
 
   /** Takes readings in whatever order. */
-  async take({ sensors, ats, values }: BulkBatch): Promise<void> {
-    for (let index = 0; index < ats.length; index += 1) {
+  async take({ length, sensors, ats, values }: BulkBatch): Promise<void> {
+    for (let index = 0; index < length; index += 1) {
       this.copy.row(4);
       this.copy.integer(sensors[index] ?? 0);
       this.copy.instant(ats[index] ?? 0);
@@ -41,22 +41,21 @@ export class StagedReadings {
     await this.copy.drained();
   }
 
-  /** All readings in order of time; those of one instant in the order of the file. */
+  /** All readings in order of time, those of one instant in the order of the file; a batch is good until the next. */
   async *inOrder(): AsyncGenerator<BulkBatch> {
     await this.copy.end();
     await this.tx.query(
       'DECLARE staged CURSOR FOR SELECT place, at, value FROM staged_reading ORDER BY at, ordinal',
     );
+    const batch = new BulkBatch();
     for (;;) {
       const rows: { place: number; at: Date; value: number }[] = await this.tx.query(
         `FETCH ${PAGE_ROWS} FROM staged`,
       );
       if (rows.length === 0) return;
-      yield {
-        sensors: rows.map(({ place }) => place),
-        ats: rows.map(({ at }) => at.getTime()),
-        values: rows.map(({ value }) => value),
-      };
+      batch.clear();
+      for (const { place, at, value } of rows) batch.push(place, at.getTime(), value);
+      yield batch;
     }
   }
 }

@@ -6,6 +6,7 @@ import { createPeriodFold, type PeriodFold, type PeriodSums } from '@shared/seri
 import { FIRST_FAILED_FLAGS } from '@shared/series/quality-tests';
 import { utcHourBounds } from '@shared/series/room-days';
 import type { Sample } from '@shared/series/series';
+import { BulkColumns } from './bulk-columns';
 import { BulkSpans } from './bulk-spans';
 import { within, type BulkSums, type BulkTrack } from './bulk-track';
 import { withinMs } from './computed-quantities';
@@ -43,7 +44,7 @@ export interface ComputedBulkSums extends BulkSums {
 /** The computed quantities of one hygrometer, paired and summed as its readings pass. */
 export class BulkComputed {
   /** Deficits [kPa] since the last {@link BulkComputed.clearDeficits}, for the alerts. */
-  readonly deficits: Sample[] = [];
+  readonly deficits = new BulkColumns();
   /** Up to where points are in the sums [ms]. */
   settledTo = -Infinity;
   private readonly withinMs: number;
@@ -114,7 +115,7 @@ export class BulkComputed {
 
   /** Forgets the deficits once the alerts have read them. */
   clearDeficits(): void {
-    this.deficits.length = 0;
+    this.deficits.clear();
   }
 
   /** As {@link BulkTrack.completeSums}. */
@@ -176,7 +177,7 @@ export class BulkComputed {
         if (value === null) continue;
         const point = { at, value };
         fold.add(point);
-        if (quantity === 'vapourPressureDeficit') this.deficits.push(point);
+        if (quantity === 'vapourPressureDeficit') this.deficits.push(at, value, 0);
       }
     }
   }
@@ -196,10 +197,11 @@ export class BulkComputed {
 function temperaturesOf(thermometers: readonly ThermometerStay[]): Sample[] {
   const lists = thermometers.map(({ track: { columns }, from, to }) => {
     const samples: Sample[] = [];
-    for (let index = 0; index < columns.ats.length; index += 1) {
-      const at = columns.ats[index] ?? 0;
-      const isGood = (columns.flags[index] ?? 0) < FIRST_FAILED_FLAGS;
-      if (isGood && at >= from && at <= to) samples.push({ at, value: columns.values[index] ?? 0 });
+    const { ats, values, flags } = columns;
+    for (let index = 0; index < ats.length; index += 1) {
+      const at = ats[index] ?? 0;
+      const isGood = (flags[index] ?? 0) < FIRST_FAILED_FLAGS;
+      if (isGood && at >= from && at <= to) samples.push({ at, value: values[index] ?? 0 });
     }
     return samples;
   });

@@ -1,18 +1,10 @@
 import type { AlertReplay } from '../alerts/alert-replay';
 import type { Tx } from '../database/transactions';
 import type { BulkComputed } from './bulk-computed';
+import type { BulkBatch } from './bulk-columns';
 import { BulkHeld, type HeldPage } from './bulk-held';
 import type { BulkTrack } from './bulk-track';
 import type { BulkWriter } from './bulk-writer';
-
-/** Readings of some sensors in order of time, in columns. */
-export interface BulkBatch {
-  /** Which sensor, by its place in their list. */
-  readonly sensors: number[];
-  /** [ms since 1970]. */
-  readonly ats: number[];
-  readonly values: number[];
-}
 
 /** What became of the readings of a file so far. */
 export interface BulkCounts {
@@ -50,7 +42,7 @@ export class OutOfOrder extends Error {
 }
 
 /** Rows that are kept in columns before sums and alerts read them. */
-const COLUMN_ROWS = 12_000;
+const COLUMN_ROWS = 6_000;
 
 /**
  * Takes any number of readings in order of time, merges them with what is held, and keeps sums, computed quantities and
@@ -73,15 +65,15 @@ export class BulkIntake {
   /**
    * Takes the next readings.
    *
-   * @param batch - Not before those taken already.
+   * @param batch - In order of time, and not before those taken already.
    * @throws {@link OutOfOrder} for a reading before another one.
    */
   async take(batch: BulkBatch): Promise<void> {
-    const { sensors, ats, values } = batch;
-    if (ats.length === 0) return;
-    await this.parts.writer?.prepare(ats);
+    const { length, sensors, ats, values } = batch;
+    if (length === 0) return;
+    await this.parts.writer?.prepare(ats.subarray(0, length));
     this.held ??= this.openHeld(ats[0] ?? 0);
-    for (let index = 0; index < ats.length; index += 1) {
+    for (let index = 0; index < length; index += 1) {
       const at = ats[index] ?? 0;
       if (at !== this.clock) {
         if (at < this.clock) throw new OutOfOrder(`Reading ${index} goes back in time.`);
@@ -206,12 +198,7 @@ export class BulkIntake {
       await replays[index]?.take(reader, track.columns, track.spans.firstAt);
     }
     for (const [index, one] of computed.entries()) {
-      const deficits = {
-        ats: one.deficits.map(({ at }) => at),
-        values: one.deficits.map(({ value }) => value),
-        flags: one.deficits.map(() => 0),
-      };
-      await deficitReplays[index]?.take(reader, deficits, one.changedFrom);
+      await deficitReplays[index]?.take(reader, one.deficits, one.changedFrom);
       one.clearDeficits();
     }
     for (const track of tracks) track.clearColumns();

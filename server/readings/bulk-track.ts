@@ -2,17 +2,11 @@ import { maxGapMs } from '@shared/series/expected-interval';
 import type { PeriodSums } from '@shared/series/period-summary';
 import { qualityHistoryMs, qualityLimits } from '@shared/series/quality-tests';
 import { roomDayBoundsAt, utcHourBounds } from '@shared/series/room-days';
+import { BulkColumns } from './bulk-columns';
 import { BulkSpans } from './bulk-spans';
 import type { TouchedSpan } from './late-readings';
 import type { FlaggedSample, SensorOnRoad } from './reading-store';
 import { SensorStream, positionFromStored } from './sensor-stream';
-
-/** Readings in order of time, in columns. */
-export interface BulkColumns {
-  readonly ats: number[];
-  readonly values: number[];
-  readonly flags: number[];
-}
 
 /** Sums to be written in place of all that start in some stretches. */
 export interface BulkSums {
@@ -27,7 +21,7 @@ export interface BulkSums {
 export class BulkTrack {
   readonly spans: BulkSpans;
   /** Readings since the last {@link BulkTrack.clearColumns}. */
-  readonly columns: BulkColumns = { ats: [], values: [], flags: [] };
+  readonly columns = new BulkColumns();
   /** Held readings that are judged anew. */
   flagChanges: FlaggedSample[] = [];
   /** Held readings whose value the file replaces. */
@@ -85,9 +79,7 @@ export class BulkTrack {
 
   /** Forgets the columns once everybody has read them. */
   clearColumns(): void {
-    this.columns.ats.length = 0;
-    this.columns.values.length = 0;
-    this.columns.flags.length = 0;
+    this.columns.clear();
   }
 
   /**
@@ -122,9 +114,7 @@ export class BulkTrack {
   private take(at: number, value: number): FlaggedSample {
     const judged = this.stream.take({ at, value });
     this.latest = judged;
-    this.columns.ats.push(at);
-    this.columns.values.push(value);
-    this.columns.flags.push(judged.flags);
+    this.columns.push(at, value, judged.flags);
     return judged;
   }
 }

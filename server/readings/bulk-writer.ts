@@ -27,7 +27,7 @@ export interface BulkWriterParts {
 }
 
 /** Rows after which sums are written, so that they don't pile up. */
-const ROWS_A_STRETCH = 1_000_000;
+const ROWS_A_STRETCH = 250_000;
 const MONTHS_AHEAD_MS = 330 * 86_400_000;
 /** Never written: without a file nothing is fresh. */
 const NO_FILE = '00000000-0000-0000-0000-000000000000';
@@ -53,7 +53,7 @@ export class BulkWriter {
    *
    * @param ats - Their instants [ms].
    */
-  async prepare(ats: readonly number[]): Promise<void> {
+  async prepare(ats: Float64Array): Promise<void> {
     const missing = await this.missingMonth(ats);
     if (missing !== null) {
       // A COPY under way does not see partitions that are made after it began.
@@ -148,7 +148,7 @@ export class BulkWriter {
     this.copy = null;
   }
 
-  private async missingMonth(ats: readonly number[]): Promise<number | null> {
+  private async missingMonth(ats: Float64Array): Promise<number | null> {
     let month = { from: Infinity, to: -Infinity };
     for (const at of ats) {
       if (at >= month.from && at < month.to) continue;

@@ -1,8 +1,17 @@
 import type { Benchmark } from './benchmark';
+import { bringInFresh } from './bring-in-fresh';
+import { bringInHalfHeld } from './bring-in-half-held';
+import { bringInMemory } from './bring-in-memory';
 import { chartYearVsWeek } from './chart-year-vs-week';
 import { storeLive } from './store-live';
 
-const benchmarks: readonly Benchmark[] = [storeLive, chartYearVsWeek];
+const benchmarks: readonly Benchmark[] = [
+  storeLive,
+  chartYearVsWeek,
+  bringInFresh,
+  bringInHalfHeld,
+  bringInMemory,
+];
 
 /** Runs all benchmarks, or those named on the command line, and prints a line for each. */
 async function main(names: readonly string[]): Promise<void> {

@@ -1,6 +1,7 @@
 import fc from 'fast-check';
 import type { DataSource } from 'typeorm';
 import { AlertStore } from '../../server/alerts/alert-store';
+import { BulkBatch } from '../../server/readings/bulk-columns';
 import { BulkIntakeService } from '../../server/readings/bulk-intake-service';
 import { BulkStore } from '../../server/readings/bulk-store';
 import { createTestDatabase, type TestDatabase } from '../database/test-database';
@@ -185,13 +186,13 @@ async function bringIn(
         replacesDiffering: false,
         now,
       });
+      const batch = new BulkBatch();
       for (let from = 0; from < file.length; from += size) {
-        const piece = file.slice(from, from + size);
-        await intake.take({
-          sensors: piece.map(({ of }) => sensorIds.indexOf(sensors[of])),
-          ats: piece.map(({ at }) => at),
-          values: piece.map(({ value }) => value),
-        });
+        batch.clear();
+        for (const { of, at, value } of file.slice(from, from + size)) {
+          batch.push(sensorIds.indexOf(sensors[of]), at, value);
+        }
+        await intake.take(batch);
       }
       await intake.finish();
       return intake.counts;
