@@ -64,6 +64,14 @@ describe('forecastEmergence', () => {
     expect(days(forecast.latest?.at)).toBeGreaterThanOrEqual(trialDays - 1e-6);
   });
 
+  it('takes rates between the trial’s temperatures from a straight line', () => {
+    const forecast = forecastEmergence(sowing('onion-long-day', 2, 12.5));
+    const byTrial = forecast.published.find(({ source }) => source.includes('Harrington & Minges'));
+
+    // Halfway between one in 13 days at 10 °C and one in 7 at 15 °C.
+    expect(days(byTrial?.at)).toBeCloseTo(2 / (1 / 13 + 1 / 7), 6);
+  });
+
   it('of onion at 15 °C reaches from Brewster’s paper to Bierhuizen & Wagenvoort’s soil, and names both', () => {
     const { earliest, latest } = forecastEmergence(sowing('onion-long-day', 2, 15));
 

@@ -38,6 +38,10 @@ describe('germinationOf', () => {
     expect(germinationOf(20, daily(0, 2, 0, 1, 2, 4, 1)).t50Days).toBe(5);
   });
 
+  it('answers the last look where only that found as many as Coolbear’s half', () => {
+    expect(germinationOf(4, daily(0, 0, 1), 'coolbear').t50Days).toBe(3);
+  });
+
   it('leaves T50 open when the first look already found more than half', () => {
     const found = germinationOf(10, [
       { day: 6, up: 7 },
@@ -100,9 +104,10 @@ describe('germinationOf', () => {
       { day: 5, up: 4 },
       { day: 6, up: 3 },
       { day: 7, up: 6 },
+      { day: 8, up: 5 },
     ];
 
-    expect(germinationOf(10, counts)).toMatchObject({ up: 6, percent: 60, lastDay: 7 });
+    expect(germinationOf(10, counts)).toMatchObject({ up: 6, percent: 60, lastDay: 7, meanTimeDays: 34 / 6 });
   });
 
   it('keeps T50 and mean time between first and last day', () => {

@@ -95,6 +95,9 @@ describe('lampDueOn', () => {
   it('of an LED is when its stated hours are over', () => {
     // 160 h left at 16 h a day.
     expect(lampDueOn({ ...led, hoursRun: 49_840 }, 16, '2025-06-01')?.value).toBe('2025-06-11');
+    expect(lampDueOn({ ...led, hoursRun: 49_840, l90Hours: 20_000 }, 16, '2025-06-01')?.value).toBe(
+      '2025-06-11',
+    );
     expect(lampDueOn({ ...led, hoursRun: 51_000 }, 16, '2025-06-01')?.value).toBe('2025-06-01');
   });
 

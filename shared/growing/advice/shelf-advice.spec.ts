@@ -214,6 +214,8 @@ const decisions: readonly Row[] = [
     ['photoperiod: tomato + citrus, 2'],
     [],
   ],
+  // Twelve hours are the most for one and the least for the other.
+  ['citrus:growingOn basil:growingOn', { lampHours: 12 }, ['on', 12, null], matOff, [], []],
   ['spinach:growingOn', { lampHours: 14 }, ['on', 10, 'shorten'], matOff, [], ['spinach bolts']],
   [
     'strawberry:fruiting',
@@ -423,11 +425,14 @@ describe('moves', () => {
 
   it('are not suggested to a shelf where they make a conflict or a warning', () => {
     const resting = shelf('citrus:resting', { label: 'B2', hasHeatMat: false });
-    const long = shelf('tomato:fruiting', { label: 'B3', lampHours: 16, unheatedC: 22 });
-    const onions = adviseShelf(shelf('onion-long-day:seedling citrus:resting'), [long]);
+    // Nothing here minds an onion, but the onion minds the sixteen hours.
+    const long = shelf('lemongrass:growingOn', { label: 'B3', lampHours: 16 });
+    const shorter = { ...long, lampHours: 13 };
+    const onions = shelf('onion-long-day:seedling citrus:resting');
 
     expect(adviseShelf(conflict, [resting]).moves).toEqual([]);
-    expect(onions.moves).toEqual([]);
+    expect(adviseShelf(onions, [long]).moves).toEqual([]);
+    expect(adviseShelf(onions, [shorter]).moves[0]?.plantingIds).toEqual(['onion-long-day']);
   });
 
   it('are not suggested where nothing is in conflict', () => {
