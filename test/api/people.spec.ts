@@ -297,9 +297,7 @@ describe('people', () => {
       await aMember(tx, { personId: person.id, roomId: there.id });
       const caller = await Caller.signedIn(application.express, person);
 
-      const reply = await caller
-        .patch(`/rooms/${here.id}/membership`, { cleared: true })
-        .expect(200);
+      const reply = await caller.patch(`/rooms/${here.id}/membership`, { cleared: true }).expect(200);
 
       expect(reply.body).toMatchObject({ roomId: here.id, mails: { ...usualMailChoice, cleared: true } });
       const { memberships } = (await caller.get('/account')).body as Account;
