@@ -28,7 +28,7 @@ export const chartWidth = 1040;
 export const chartHeight = 300;
 
 // Middle tones that stand out on paper as on a dark page: the picture has no ground of its own.
-const line: Ink = { red: 138, green: 122, blue: 104, alpha: 1 };
+const line: Ink = { red: 146, green: 130, blue: 112, alpha: 1 };
 const rule: Ink = { ...line, alpha: 0.45 };
 const band: Ink = { red: 92, green: 158, blue: 130, alpha: 0.3 };
 const span: Ink = { red: 235, green: 169, blue: 33, alpha: 0.16 };
@@ -70,7 +70,7 @@ export function drawAlertChart(data: AlertChartData): Buffer | null {
   }
   canvas.fill(0, bottom, chartWidth, bottom + 2, rule);
   const drawn = segments(data.points, data.wanted, x, y);
-  canvas.stroke(drawn.inside, 4, line);
+  canvas.stroke(drawn.inside, 6, line);
   canvas.stroke(drawn.above, 8, ember);
   canvas.stroke(drawn.below, 8, frost);
   return canvas.toPng();

@@ -2,6 +2,7 @@ import { describeEpisode, type EpisodeDescription } from '@shared/alerts/describ
 import { episodeOf } from '@shared/contracts/alerts';
 import type { Series } from '@shared/contracts/series';
 import { episodeFormatters } from '@shared/format/episode-formatters';
+import { formatQuantityRange } from '@shared/format/quantities';
 import { formatDuration, sayWhen } from '@shared/format/room-time';
 import { drawAlertChart, type AlertChartData } from './alert-chart';
 import type { MailKind, MailPicture } from './mail-entity';
@@ -52,20 +53,37 @@ export function chartSpan(alert: AlertOfRoom, now: number): { readonly from: num
 export function alertSection(alert: AlertOfRoom, setting: MailSetting, series: Series | null): AlertSection {
   const words = wordsFor(alert, setting);
   const isOver = alert.clearedAt !== null;
-  const png = series === null ? null : drawAlertChart(chartData(alert, setting.now, series));
+  const data = series === null ? null : chartData(alert, setting.now, series);
+  const png = data === null ? null : drawAlertChart(data);
   const cid = `chart-${alert.id}@lampmeadow`;
   return {
     section: {
       heading: words.title,
       lines: isOver ? [words.sentence, overLine(alert, setting)] : [words.sentence, words.tryThis],
       caution: isOver ? null : words.caution,
-      picture: png === null ? null : captionOf(cid, words, alert, setting),
+      picture: data === null || png === null ? null : captionOf(cid, words, alert, setting, data),
       links: [
         { text: 'See the alert', url: `${setting.publicUrl}/alerts/${alert.id}` },
         { text: `See shelf ${alert.shelfLabel}`, url: `${setting.publicUrl}/shelf/${alert.shelfId}` },
       ],
     },
     picture: png === null ? null : { cid, png: png.toString('base64') },
+  };
+}
+
+/**
+ * What a mail says of alerts that it has no room to tell at length.
+ *
+ * @param alerts - At least one.
+ * @param setting - For whom and when.
+ * @returns A section with a line each.
+ */
+export function othersSection(alerts: readonly AlertOfRoom[], setting: MailSetting): MailSection {
+  return {
+    heading: `And ${alerts.length} more`,
+    lines: [],
+    items: alerts.map((alert) => alertLine(alert, setting)),
+    links: [{ text: 'See all alerts', url: `${setting.publicUrl}/alerts` }],
   };
 }
 
@@ -109,17 +127,28 @@ export function alertOpening(kind: MailKind, count: number): string | null {
   }
 }
 
+/** An alert in one line of a list. */
+export function alertLine(alert: AlertOfRoom, setting: MailSetting): string {
+  const { title, sentence } = wordsFor(alert, setting);
+  return `${title}. ${sentence}`;
+}
+
 /** What an alert is, in the recipient's units and the room's time. */
-export function wordsFor(alert: AlertOfRoom, { recipient, room, now }: MailSetting): EpisodeDescription {
-  const unit = recipient.temperatureUnit === 'fahrenheit' ? '°F' : '°C';
+export function wordsFor(alert: AlertOfRoom, setting: MailSetting): EpisodeDescription {
+  const { room, now } = setting;
   return describeEpisode({
     episode: episodeOf(alert),
     kind: alert.kind,
     quantity: alert.quantity,
     shelfLabel: alert.shelfLabel,
-    formatters: episodeFormatters(unit, room.timeZone, now),
+    formatters: episodeFormatters(unitOf(setting), room.timeZone, now),
     now,
   });
+}
+
+/** The unit in which a mail's reader has temperatures. */
+export function unitOf({ recipient }: MailSetting): '°C' | '°F' {
+  return recipient.temperatureUnit === 'fahrenheit' ? '°F' : '°C';
 }
 
 function placesOf(alerts: readonly AlertOfRoom[]): string {
@@ -137,14 +166,27 @@ function captionOf(
   cid: string,
   words: EpisodeDescription,
   alert: AlertOfRoom,
-  { room, now }: MailSetting,
+  setting: MailSetting,
+  { points, wanted }: AlertChartData,
 ): SectionPicture {
+  const { room, now } = setting;
   const { from, to } = chartSpan(alert, now);
   const [start, end] = [sayWhen(from, now, room.timeZone), sayWhen(to, now, room.timeZone)];
+  const values = points.flatMap(([, value]) => (value === null ? [] : [value]));
+  const range = (low: number | null, high: number | null): string =>
+    formatQuantityRange(alert.quantity, { low, high }, unitOf(setting));
+  const last = wanted.at(-1);
+  const note = [
+    `Measured ${range(Math.min(...values), Math.max(...values))}.`,
+    ...(last === undefined
+      ? []
+      : [`Green is what is wanted${wanted.length > 1 ? ' now' : ''}: ${range(last.low, last.high)}.`]),
+  ].join(' ');
   return {
     cid,
-    alt: `Chart from ${start} to ${end}. ${words.sentence} The green band is what was wanted.`,
-    ends: [start, to === now ? `now, ${end}` : end],
+    alt: `Chart from ${start} to ${end}. ${words.sentence}`,
+    ends: [start, alert.clearedAt === null ? `now, ${end}` : end],
+    note,
   };
 }
 

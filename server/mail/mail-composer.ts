@@ -7,6 +7,7 @@ import {
   alertSection,
   alertSubject,
   chartSpan,
+  othersSection,
   wordsFor,
   type AlertSection,
   type MailSetting,
@@ -33,8 +34,8 @@ export interface ComposerParts {
   ) => Promise<Series>;
 }
 
-/** Charts of more alerts would make a mail too long to read; the alerts' pages have them. */
-const MOST_CHARTS = 4;
+/** More alerts told at length would make a mail too long to read; the others get a line each. */
+const MOST_AT_LENGTH = 4;
 
 /** Decides once a mail about alerts is due whether there is still something to say, and says it. */
 export class MailComposer {
@@ -55,7 +56,7 @@ export class MailComposer {
     if (room === null || recipient === null) return null;
     const found = await alerts.byIds(tx, await tellings.alertsOf(tx, mail.messageId));
     const wanted = found.filter(({ urgency }) => recipient.mails[urgency] !== 'never');
-    const told = await this.worthTelling(tx, mail, wanted);
+    const told = (await this.worthTelling(tx, mail, wanted)).sort(byUrgency);
     if (told.length === 0) return null;
     await tellings.keepOnly(
       tx,
@@ -64,15 +65,18 @@ export class MailComposer {
     );
     const setting: MailSetting = { recipient, room, publicUrl: this.parts.publicUrl(), now };
     const sections: AlertSection[] = [];
-    for (const [index, alert] of told.entries()) {
-      const series = index < MOST_CHARTS ? await this.seriesOf(alert, now) : null;
-      sections.push(alertSection(alert, setting, series));
+    for (const alert of told.slice(0, MOST_AT_LENGTH)) {
+      sections.push(alertSection(alert, setting, await this.seriesOf(alert, now)));
     }
+    const others = told.slice(MOST_AT_LENGTH);
     const stops = stopsOf(mail, told);
     const plan: MailPlan = {
       preview: told.map((alert) => wordsFor(alert, setting).sentence).join(' '),
       opening: alertOpening(mail.kind, told.length),
-      sections: sections.map(({ section }) => section),
+      sections: [
+        ...sections.map(({ section }) => section),
+        ...(others.length === 0 ? [] : [othersSection(others, setting)]),
+      ],
       footer: this.footer(setting, stops),
     };
     return {
@@ -146,4 +150,9 @@ const stopTexts: Readonly<Record<MailStop, string>> = {
 function stopsOf(mail: DueMail, alerts: readonly AlertOfRoom[]): MailStop {
   if (mail.kind === 'cleared') return 'cleared';
   return alerts.some(({ urgency }) => urgency === 'goNow') ? 'alerts' : 'lookToday';
+}
+
+/** Urgent ones first, then as they opened. */
+function byUrgency(a: AlertOfRoom, b: AlertOfRoom): number {
+  return Number(b.urgency === 'goNow') - Number(a.urgency === 'goNow');
 }

@@ -7,6 +7,8 @@ export interface SectionPicture {
   readonly alt: string;
   /** Under it: what its left and right ends are. */
   readonly ends: readonly [left: string, right: string];
+  /** Its numbers and colours. */
+  readonly note: string;
 }
 
 /** One thing that a mail tells. */
@@ -82,7 +84,7 @@ const style = `
 .page { margin: 0; padding: 24px 16px; background: #f6f0e4; color: #231c15; font: 16px/1.5 system-ui, -apple-system, "Segoe UI", sans-serif; }
 .preview { display: none; max-height: 0; overflow: hidden; }
 main { max-width: 560px; margin: 0 auto; }
-section { margin: 0 0 16px; padding: 20px; border: 1px solid #dacfbb; border-radius: 12px; background: #fffbf3; }
+section { margin: 0 0 16px; padding: 20px 20px 10px; border: 1px solid #dacfbb; border-radius: 12px; background: #fffbf3; }
 h1 { margin: 0 0 8px; font: 600 21px/1.25 Georgia, "Times New Roman", serif; }
 p, ul { margin: 0 0 10px; }
 ul { padding-left: 20px; }
@@ -92,8 +94,8 @@ ul { padding-left: 20px; }
 .chart { display: block; width: 100%; height: auto; margin: 14px 0 2px; }
 .ends { width: 100%; margin: 0 0 14px; border-collapse: collapse; font-size: 13px; }
 .ends td { padding: 0; }
-.ends td + td { text-align: right; }
-.links { margin: 14px 0 0; }
+tr td + td { text-align: right; }
+.links { margin: 6px 0 0; }
 .links a { display: inline-block; margin: 0 16px 0 0; padding: 11px 0; font-weight: 600; }
 a { color: #2b5d49; }
 footer { padding: 4px 4px 0; font-size: 14px; }
@@ -124,9 +126,9 @@ ${links.length === 0 ? '' : `<p class="links">${links.map(({ text, url }) => `<a
 </section>`;
 }
 
-function pictureHtml({ cid, alt, ends: [left, right] }: SectionPicture): string {
+function pictureHtml({ cid, alt, ends: [left, right], note }: SectionPicture): string {
   return `<img class="chart" src="cid:${escapeHtml(cid)}" width="520" height="150" alt="${escapeHtml(alt)}">
-<table class="ends" role="presentation"><tr><td>${escapeHtml(left)}</td><td>${escapeHtml(right)}</td></tr></table>`;
+<table class="ends" role="presentation"><tr><td>${escapeHtml(left)}</td><td>${escapeHtml(right)}</td></tr><tr><td colspan="2">${escapeHtml(note)}</td></tr></table>`;
 }
 
 function paragraphs(parts: readonly (string | null)[]): string {

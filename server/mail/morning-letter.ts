@@ -2,7 +2,7 @@ import type { Task } from '@shared/contracts/care';
 import type { QuantityStatistics } from '@shared/contracts/series';
 import { formatQuantityRange, quantityName } from '@shared/format/quantities';
 import { formatDuration, formatShortDay } from '@shared/format/room-time';
-import { wordsFor, type MailSetting } from './alert-mail';
+import { alertLine, unitOf, type MailSetting } from './alert-mail';
 import type { MailSection } from './mail-layout';
 import type { AlertOfRoom } from './telling-store';
 
@@ -42,8 +42,7 @@ export function letterSections(news: MorningNews, setting: MailSetting): MailSec
   const mine = tasksOf(news.tasks, setting);
   const due = mine.filter(({ dueOn }) => dueOn <= news.day);
   const later = mine.filter(({ dueOn }) => dueOn > news.day);
-  const told = ({ shelfLabel, ...alert }: AlertOfRoom): string =>
-    `${shelfLabel}: ${wordsFor({ shelfLabel, ...alert }, setting).sentence}`;
+  const told = (alert: AlertOfRoom): string => alertLine(alert, setting);
   const sections: MailSection[] = [
     {
       heading: open.length === 1 ? 'One alert is open' : `${open.length} alerts are open`,
@@ -91,8 +90,8 @@ function taskLine({ title, shelfLabel, dueOn, personId }: Task, today: string): 
   return `${title}${where}${when}${whose}`;
 }
 
-function nightLine({ label, statistics }: ShelfNight, nightMs: number, { recipient }: MailSetting): string {
-  const unit = recipient.temperatureUnit === 'fahrenheit' ? '°F' : '°C';
+function nightLine({ label, statistics }: ShelfNight, nightMs: number, setting: MailSetting): string {
+  const unit = unitOf(setting);
   const shown = statistics.filter(
     ({ quantity }) => quantity === 'airTemperature' || quantity === 'relativeHumidity',
   );

@@ -8,8 +8,9 @@ export interface SendVerdict {
 const RETRY_AFTER_MS = [10_000, 60_000, 300_000, 900_000, 3_600_000] as const;
 /** After this many tries, a week or so of hours, a mail is given up. */
 const MOST_ATTEMPTS = 180;
-/** Set by nodemailer where no conversation about a mail came about. */
-const outageCodes = new Set(['EAUTH', 'EDNS', 'ETLS', 'ECONFIG', 'EPROXY']);
+/** Set by nodemailer or the system where no conversation about a mail came about. */
+const outageCodes = new Set(['EAUTH', 'EDNS', 'ETLS', 'ECONNREFUSED']);
+const outageCalls = new Set(['connect', 'getaddrinfo']);
 
 /**
  * How long to wait before the next try.
@@ -29,14 +30,14 @@ export function retryAfterMs(attempts: number): number {
  * @returns An outage when the mail server was not reached or knows us not; refused for its 5xx or after a week.
  */
 export function judgeSendError(error: unknown, attempts: number): SendVerdict {
-  const { message, responseCode, code, command } = (error ?? {}) as {
+  const { message, responseCode, code, syscall } = (error ?? {}) as {
     message?: string;
     responseCode?: number;
     code?: string;
-    command?: string;
+    syscall?: string;
   };
   const reason = message ?? String(error);
-  if (command === 'CONN' || outageCodes.has(code ?? '')) return { kind: 'outage', reason };
+  if (outageCalls.has(syscall ?? '') || outageCodes.has(code ?? '')) return { kind: 'outage', reason };
   const isPermanent = responseCode !== undefined && responseCode >= 500;
   return { kind: isPermanent || attempts + 1 >= MOST_ATTEMPTS ? 'refused' : 'delayed', reason };
 }
