@@ -15,6 +15,8 @@ const views: readonly View[] = [1440, 390].flatMap((width) => [
 /** Where pictures of every screen are kept, for people to look at; without it none are taken. */
 const pictureFolder = process.env['SCREENSHOT_FOLDER'];
 
+const HOUR_MS = 3_600_000;
+
 const file = ['time,air °C', '2026-11-20T10:00:00Z,21.4', '2026-11-20T10:05:00Z,mist', ''].join('\n');
 
 describe('every screen', () => {
@@ -27,7 +29,8 @@ describe('every screen', () => {
     const { application } = journey;
     const tx = application.database.dataSource.manager;
     shelfId = (await tx.findOneByOrFail(ShelfEntity, { label: 'A1' })).id;
-    await anAlert(tx, { shelfId });
+    const ago = (hours: number): Date => new Date(Date.now() - hours * HOUR_MS);
+    await anAlert(tx, { shelfId, beganAt: ago(3), openedAt: ago(2.5), peakAt: ago(2) });
     await application.startSimulator();
   });
   afterEach(() => journey.browser.close(page));
@@ -84,7 +87,7 @@ describe('every screen', () => {
       .waitFor();
     await inspect('alerts');
     await page.getByRole('main').getByRole('link', { name: /^A1 / }).first().click();
-    await page.getByRole('heading', { name: 'What happened' }).waitFor();
+    await page.getByRole('img', { name: /VPD/ }).waitFor();
     await inspect('alert');
 
     await bringInFile();

@@ -1,4 +1,5 @@
 import { simulatedRoom } from '@shared/contracts/simulation';
+import { seriousViolations } from './harness/accessibility';
 import { eventually } from './harness/eventually';
 import { prepareJourney } from './harness/journey';
 import { signIn } from './harness/test-browser';
@@ -52,8 +53,10 @@ describe('a lamp that stays dark', () => {
       await mailbox.goto(application.mailboxAddress);
       expect(await mail.count()).toBe(1);
     }, MAIL_WITHIN_MS);
+    expect(await seriousViolations(mailbox)).toEqual([]);
     await mail.click();
     await mailbox.getByRole('link', { name: 'Plain text' }).click();
+    expect(await seriousViolations(mailbox)).toEqual([]);
     const link = mailbox.getByRole('link', { name: `${application.address}/alerts/` }).first();
     await page.goto(await link.innerText());
     await page.getByRole('button', { name: /^Acknowledge/ }).click();
