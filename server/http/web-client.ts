@@ -1,9 +1,13 @@
-import { existsSync } from 'node:fs';
+import { existsSync, readdirSync } from 'node:fs';
 import { join } from 'node:path';
-import express, { type Express } from 'express';
+import express, { type Express, type RequestHandler } from 'express';
 
 const YEAR_MS = 365 * 86_400_000;
-const hashedName = /-[A-Z0-9]{8}\.(js|css|woff2)$/;
+const hashedName = /-[A-Z0-9]{8}\.(js|css|woff2)(\.br)?$/;
+const mediaTypes: Readonly<Record<string, string>> = {
+  js: 'text/javascript; charset=utf-8',
+  css: 'text/css; charset=utf-8',
+};
 
 /**
  * Serves the Angular application: files with a hash in their name for good, everything else checked each time, and every
@@ -15,6 +19,7 @@ const hashedName = /-[A-Z0-9]{8}\.(js|css|woff2)$/;
 export function serveWebClient(app: Express, folder: string): void {
   const index = join(folder, 'index.html');
   if (!existsSync(index)) return; // An API without pages, as in tests of the API.
+  app.use(precompressed(folder));
   app.use(
     express.static(folder, {
       index: false,
@@ -34,4 +39,20 @@ export function serveWebClient(app: Express, folder: string): void {
     res.setHeader('Cache-Control', 'no-cache');
     res.sendFile(index);
   });
+}
+
+/** Leads to the Brotli copy that the build made of a script or style, for browsers that read it. */
+function precompressed(folder: string): RequestHandler {
+  const copies = new Set(readdirSync(folder).filter((name) => name.endsWith('.br')));
+  return (req, res, next) => {
+    const name = req.path.slice(1);
+    const mediaType = mediaTypes[name.split('.').at(-1) ?? ''];
+    if (mediaType !== undefined && copies.has(`${name}.br`) && req.acceptsEncodings('br') === 'br') {
+      res.setHeader('Content-Type', mediaType);
+      res.setHeader('Content-Encoding', 'br');
+      res.vary('Accept-Encoding');
+      req.url = `/${name}.br`;
+    }
+    next();
+  };
 }
