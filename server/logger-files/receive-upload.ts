@@ -100,7 +100,6 @@ function problemOf(error: unknown, maxBytes: number): unknown {
 /** A name as text: without folders and control characters, of a bearable length. */
 function plainName(name: string): string {
   const base = name.slice(Math.max(name.lastIndexOf('/'), name.lastIndexOf('\\')) + 1);
-
   const text = base.replace(/[\u0000-\u001f\u007f-\u009f\u2028\u2029\u202a-\u202e\u2066-\u2069]/g, '').trim();
   return text === '' ? 'unnamed' : text.slice(0, 200);
 }

@@ -65,6 +65,18 @@ export class BulkColumns {
     this.length = length + 1;
   }
 
+  /** Forgets the readings up to an instant [ms], that one included. */
+  dropUpTo(at: number): void {
+    const { ats, length } = this;
+    let count = 0;
+    while (count < length && (ats[count] ?? Infinity) <= at) count += 1;
+    if (count === 0) return;
+    this.allAts.copyWithin(0, count, length);
+    this.allValues.copyWithin(0, count, length);
+    this.allFlags.copyWithin(0, count, length);
+    this.length = length - count;
+  }
+
   /** Forgets its readings. */
   clear(): void {
     this.length = 0;

@@ -1,12 +1,10 @@
 import { computedValue } from '@shared/climate/computed-quantities';
 import { computedQuantities, type ComputedQuantity } from '@shared/climate/quantity';
 import { maxGapMs } from '@shared/series/expected-interval';
-import { pairNearest } from '@shared/series/pair-nearest';
 import { createPeriodFold, type PeriodFold, type PeriodSums } from '@shared/series/period-summary';
-import { FIRST_FAILED_FLAGS } from '@shared/series/quality-tests';
 import { utcHourBounds } from '@shared/series/room-days';
-import type { Sample } from '@shared/series/series';
 import { BulkColumns } from './bulk-columns';
+import { addGood, pairColumns } from './bulk-pairing';
 import { BulkSpans } from './bulk-spans';
 import { within, type BulkSums, type BulkTrack } from './bulk-track';
 import { withinMs } from './computed-quantities';
@@ -49,8 +47,8 @@ export class BulkComputed {
   settledTo = -Infinity;
   private readonly withinMs: number;
   private readonly reachMs: number;
-  private humidity: Sample[] = [];
-  private readonly temperatures: Sample[][];
+  private readonly humidity = new BulkColumns();
+  private readonly temperatures: BulkColumns[];
   private readonly running: Running[];
   private readonly newPoints: BulkSpans;
 
@@ -66,7 +64,7 @@ export class BulkComputed {
   ) {
     this.withinMs = withinMs(track.sensor);
     this.reachMs = this.withinMs + maxGapMs(track.sensor.expectedIntervalS);
-    this.temperatures = stays.map(() => []);
+    this.temperatures = stays.map(() => new BulkColumns());
     this.newPoints = new BulkSpans(this.reachMs);
     this.running = computedQuantities.map((quantity) => ({
       quantity,
@@ -86,15 +84,11 @@ export class BulkComputed {
 
   /** Takes what the tracks have in their columns. */
   take(): void {
-    const { ats, values, flags } = this.track.columns;
-    for (let index = 0; index < ats.length; index += 1) {
-      if ((flags[index] ?? 0) >= FIRST_FAILED_FLAGS) continue;
-      this.humidity.push({ at: ats[index] ?? 0, value: values[index] ?? 0 });
-    }
+    addGood(this.humidity, [{ columns: this.track.columns, from: -Infinity, to: Infinity }]);
     this.stays.forEach(({ thermometers }, stay) => {
-      const fresh = temperaturesOf(thermometers);
+      const there = thermometers.map(({ track: { columns }, from, to }) => ({ columns, from, to }));
       const known = this.temperatures[stay];
-      if (fresh.length > 0) this.temperatures[stay] = known === undefined ? fresh : known.concat(fresh);
+      if (known !== undefined) addGood(known, there);
     });
   }
 
@@ -153,32 +147,25 @@ export class BulkComputed {
   private settleUpTo(bound: number): void {
     if (bound <= this.settledTo) return;
     this.settledTo = bound;
-    const end = countUpTo(this.humidity, bound);
-    const ripe = this.humidity.slice(0, end);
-    this.humidity = this.humidity.slice(end);
-    this.stays.forEach((stay, index) => {
-      const there = ripe.filter(({ at }) => at >= stay.from && at < stay.to);
-      const temperatures = this.temperatures[index] ?? [];
-      if (there.length > 0 && temperatures.length > 0) this.sum(there, temperatures, stay.leafOffsetC);
-      this.temperatures[index] = temperatures.slice(countUpTo(temperatures, bound - this.withinMs - 1));
+    this.stays.forEach(({ from, to, leafOffsetC }, stay) => {
+      const temperature = this.temperatures[stay];
+      if (temperature === undefined) return;
+      const humidity = { columns: this.humidity, from, to: Math.min(to - 1, bound) };
+      pairColumns(humidity, temperature, this.withinMs, (at, humidityPct, temperatureC) =>
+        this.sum(at, humidityPct, temperatureC, leafOffsetC),
+      );
+      temperature.dropUpTo(bound - this.withinMs - 1);
     });
+    this.humidity.dropUpTo(bound);
   }
 
-  private sum(humidity: readonly Sample[], temperatures: readonly Sample[], leafOffsetC: number): void {
-    const before = this.track.sensor.computedTo ?? -Infinity;
-    for (const { at, value: humidityPct, other: temperatureC } of pairNearest(
-      humidity,
-      temperatures,
-      this.withinMs,
-    )) {
-      if (at > before) this.newPoints.add(at);
-      for (const { quantity, fold } of this.running) {
-        const value = computedValue(quantity, temperatureC, humidityPct, leafOffsetC);
-        if (value === null) continue;
-        const point = { at, value };
-        fold.add(point);
-        if (quantity === 'vapourPressureDeficit') this.deficits.push(at, value, 0);
-      }
+  private sum(at: number, humidityPct: number, temperatureC: number, leafOffsetC: number): void {
+    if (at > (this.track.sensor.computedTo ?? -Infinity)) this.newPoints.add(at);
+    for (const { quantity, fold } of this.running) {
+      const value = computedValue(quantity, temperatureC, humidityPct, leafOffsetC);
+      if (value === null) continue;
+      fold.add({ at, value });
+      if (quantity === 'vapourPressureDeficit') this.deficits.push(at, value, 0);
     }
   }
 
@@ -191,35 +178,6 @@ export class BulkComputed {
       load: (start) => (newest?.start === start ? newest : undefined),
     });
   }
-}
-
-/** Good temperatures of a shelf in order of time; of two at one instant that of the sensor named first. */
-function temperaturesOf(thermometers: readonly ThermometerStay[]): Sample[] {
-  const lists = thermometers.map(({ track: { columns }, from, to }) => {
-    const samples: Sample[] = [];
-    const { ats, values, flags } = columns;
-    for (let index = 0; index < ats.length; index += 1) {
-      const at = ats[index] ?? 0;
-      const isGood = (flags[index] ?? 0) < FIRST_FAILED_FLAGS;
-      if (isGood && at >= from && at <= to) samples.push({ at, value: values[index] ?? 0 });
-    }
-    return samples;
-  });
-  const filled = lists.filter(({ length }) => length > 0);
-  if (filled.length <= 1) return filled[0] ?? [];
-  const together = filled.flat().sort((a, b) => a.at - b.at); // Stable: the first named stays first.
-  return together.filter(({ at }, index) => at !== together[index - 1]?.at);
-}
-
-function countUpTo(samples: readonly Sample[], at: number): number {
-  let low = 0;
-  let high = samples.length;
-  while (low < high) {
-    const middle = (low + high) >>> 1;
-    if ((samples[middle]?.at ?? Infinity) <= at) low = middle + 1;
-    else high = middle;
-  }
-  return low;
 }
 
 function merged(stretches: TouchedSpan[]): TouchedSpan[] {

@@ -42,7 +42,7 @@ export class OutOfOrder extends Error {
 }
 
 /** Rows that are kept in columns before sums and alerts read them. */
-const COLUMN_ROWS = 6_000;
+const COLUMN_ROWS = 1_500;
 
 /**
  * Takes any number of readings in order of time, merges them with what is held, and keeps sums, computed quantities and

@@ -1,3 +1,4 @@
+import { setTimeout as sleep } from 'node:timers/promises';
 import type { LoggerFile, LoggerFileDetail } from '@shared/contracts/logger-files';
 import type { Problem } from '@shared/contracts/problem';
 import { aDevice, aPlacement, aSensor } from '../builders/devices';
@@ -298,6 +299,35 @@ describe('logger files over HTTP', () => {
       failure: { code: 'UNCLOSED_QUOTE', line: 9_002 },
     });
     expect(await readingsOf(sensors.temperature)).toEqual([]);
+  });
+
+  it('stop when somebody wants that, and are given up when nobody is at work any more', async () => {
+    const sensors = await shelfSensors();
+    const [file, abandoned] = [await uploaded(fileOf(3_000)), await uploaded(fileOf(3))];
+    await matched(file, [sensors.temperature, sensors.humidity]);
+    const path = `${staff.path}/logger-files/${file.id}`;
+    const { loggerFiles } = application.app.services;
+    await application.database.transactions.run(async (tx) => {
+      // Whoever brings in has to wait here, so there is time to stop it.
+      await tx.query('SELECT FROM sensor WHERE id = $1 FOR UPDATE', [sensors.temperature]);
+      await staff.grower.post(`${path}/bring-in`).expect(202);
+      expect(problemOf(await staff.grower.post(`${path}/bring-in`).expect(409)).code).toBe('AT_WORK');
+      expect(problemOf(await staff.grower.delete(path).expect(409)).code).toBe('AT_WORK');
+
+      // As a process that was killed leaves it.
+      await application.tx.query("UPDATE logger_file SET status = 'checking' WHERE id = $1", [abandoned.id]);
+      await loggerFiles.failAbandoned();
+      const { body } = await staff.viewer.get(`${staff.path}/logger-files/${abandoned.id}`).expect(200);
+      expect(body).toMatchObject({ status: 'failed', failure: { code: 'SERVER_STOPPED' } });
+      expect((await staff.viewer.get(path)).body).toMatchObject({ status: 'bringingIn' });
+
+      await staff.grower.post(`${path}/cancel`).expect(200);
+      await sleep(300); // Progress, and with it the wish to stop, is looked at four times a second.
+    });
+    await loggerFiles.settled();
+    expect((await staff.viewer.get(path)).body).toMatchObject({ status: 'cancelled', result: null });
+    expect(await readingsOf(sensors.temperature)).toEqual([]);
+    expect(problemOf(await staff.grower.post(`${path}/cancel`).expect(409)).code).toBe('NOT_AT_WORK');
   });
 
   it('are given back byte for byte, under a name that is only text', async () => {
