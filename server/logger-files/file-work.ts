@@ -1,4 +1,4 @@
-import type { LoggerFileResult } from '@shared/contracts/logger-files';
+import type { LoggerFileResult } from '@shared/contracts/logger-file-result';
 import type { Tx } from '../database/transactions';
 import type { BulkBatch } from '../readings/bulk-columns';
 import { OutOfOrder, type BulkCounts } from '../readings/bulk-intake';

@@ -1,10 +1,6 @@
 import { Column, Entity, Index, JoinColumn, ManyToOne, PrimaryGeneratedColumn, type Relation } from 'typeorm';
-import type {
-  DifferingChoice,
-  FileFailure,
-  LoggerFileResult,
-  LoggerFileStatus,
-} from '@shared/contracts/logger-files';
+import type { LoggerFileResult } from '@shared/contracts/logger-file-result';
+import type { DifferingChoice, FileFailure, LoggerFileStatus } from '@shared/contracts/logger-files';
 import type { LoggerFileShape } from '@shared/logger-files/logger-file-shape';
 import { DeviceEntity } from '../devices/device-entity';
 import { PersonEntity } from '../people/person-entity';

@@ -1,5 +1,6 @@
 import { Readable } from 'node:stream';
 import { pipeline } from 'node:stream/promises';
+import * as profileContract from '@shared/contracts/logger-file-profiles';
 import * as contract from '@shared/contracts/logger-files';
 import { authorOf } from '../audit/room-author';
 import { decodeCursor, encodeCursor } from '../http/cursor';
@@ -79,10 +80,14 @@ export function loggerFileRoutes(files: LoggerFileService, maxBytes: number): Ro
       return '';
     }),
     route(contract.removeLoggerFile, (context) => files.remove(authorOf(context), context.params.fileId)),
-    route(contract.listFileProfiles, async ({ room }) => ({ profiles: await files.profiles(room.id) })),
-    route(contract.renameFileProfile, ({ room, params, body }) =>
+    route(profileContract.listFileProfiles, async ({ room }) => ({
+      profiles: await files.profiles(room.id),
+    })),
+    route(profileContract.renameFileProfile, ({ room, params, body }) =>
       files.renameProfile(room.id, params.profileId, body.name),
     ),
-    route(contract.removeFileProfile, ({ room, params }) => files.removeProfile(room.id, params.profileId)),
+    route(profileContract.removeFileProfile, ({ room, params }) =>
+      files.removeProfile(room.id, params.profileId),
+    ),
   ];
 }

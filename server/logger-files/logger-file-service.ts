@@ -1,7 +1,7 @@
 import type { Readable } from 'node:stream';
+import type { FileProfile } from '@shared/contracts/logger-file-profiles';
 import type {
   DifferingChoice,
-  FileProfile,
   LoggerFile,
   LoggerFileDetail,
   Rejection,

@@ -1,9 +1,5 @@
-import type {
-  FileFailure,
-  LoggerFile,
-  LoggerFileResult,
-  LoggerFileStatus,
-} from '@shared/contracts/logger-files';
+import type { LoggerFileResult } from '@shared/contracts/logger-file-result';
+import type { FileFailure, LoggerFile, LoggerFileStatus } from '@shared/contracts/logger-files';
 import type { ReadingRejection } from '@shared/logger-files/reading-rejection';
 import type { Tx } from '../database/transactions';
 import type { Cursor } from '../http/cursor';

@@ -1,4 +1,4 @@
-import type { FileProfile } from '@shared/contracts/logger-files';
+import type { FileProfile } from '@shared/contracts/logger-file-profiles';
 import { violatedConstraint } from '../database/violated-constraint';
 import type { Tx } from '../database/transactions';
 import { conflict } from '../http/request-problem';

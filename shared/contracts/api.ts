@@ -3,6 +3,7 @@ import * as alerts from './alerts';
 import * as board from './board';
 import * as care from './care';
 import * as devices from './devices';
+import * as loggerFileProfiles from './logger-file-profiles';
 import * as loggerFiles from './logger-files';
 import * as mail from './mail';
 import * as people from './people';
@@ -62,9 +63,9 @@ export const endpoints: readonly Endpoint[] = [
   loggerFiles.importLoggerFile,
   loggerFiles.downloadLoggerFile,
   loggerFiles.removeLoggerFile,
-  loggerFiles.listFileProfiles,
-  loggerFiles.renameFileProfile,
-  loggerFiles.removeFileProfile,
+  loggerFileProfiles.listFileProfiles,
+  loggerFileProfiles.renameFileProfile,
+  loggerFileProfiles.removeFileProfile,
   alerts.listAlerts,
   alerts.getAlert,
   alerts.acknowledgeAlert,

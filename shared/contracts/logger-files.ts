@@ -1,6 +1,8 @@
 import * as z from 'zod';
 import { quantities } from '../climate/quantity';
 import { endpoint, id, instant, line, roomParams } from './endpoint';
+import { fileProfile } from './logger-file-profiles';
+import { loggerFileResult } from './logger-file-result';
 import { timeZone } from './rooms';
 
 /**
@@ -21,31 +23,6 @@ export const loggerFileStatuses = [
 /** One of {@link loggerFileStatuses}. */
 export type LoggerFileStatus = (typeof loggerFileStatuses)[number];
 
-/** What reading the whole file found; read = fresh + alreadyHeld + different + rejected. */
-export const loggerFileResult = z.object({
-  read: z.number().int(),
-  fresh: z.number().int(),
-  alreadyHeld: z.number().int(),
-  /** Held with another value. */
-  different: z.number().int(),
-  rejected: z.number().int(),
-  /** Cells that say themselves that they hold no value. */
-  missing: z.number().int(),
-  /** Of `alreadyHeld` and `different`, those for which a device had brought a reading. */
-  heldLive: z.number().int(),
-  /** Fresh or replacing, but doubted by a quality test. */
-  flagged: z.number().int(),
-  from: instant.nullable(),
-  to: instant.nullable(),
-  /** Most common step between rows. */
-  intervalS: z.number().nullable(),
-  /** Steps longer than two and a half times that. */
-  gaps: z.number().int(),
-  rejectedByCode: z.record(z.string(), z.number().int()),
-});
-/** What reading the whole file found. */
-export type LoggerFileResult = z.infer<typeof loggerFileResult>;
-
 /** What to do where another value is already held for a sensor and an instant. */
 export const differingChoice = z.enum(['keep', 'replace']);
 /** Keep what is held, or replace it by what the file says. */
@@ -55,7 +32,9 @@ export type DifferingChoice = z.infer<typeof differingChoice>;
 export const fileFailure = z.object({
   code: z.string(),
   message: z.string(),
+  /** From 1. */
   line: z.number().nullable(),
+  /** From 1. */
   column: z.number().nullable(),
 });
 /** Why nothing of a file was stored. */
@@ -84,6 +63,7 @@ export type LoggerFile = z.infer<typeof loggerFile>;
 
 /** A column of a file and what it was taken for. */
 export const fileColumn = z.object({
+  /** From 0. */
   index: z.number().int(),
   name: z.string(),
   role: z.string(),
@@ -115,11 +95,6 @@ export const fileSeries = z.object({
 /** A series of a file and where its readings will go. */
 export type FileSeries = z.infer<typeof fileSeries>;
 
-/** How files of one layout are read and matched, kept under a name. */
-export const fileProfile = z.object({ id, name: z.string(), usedAt: instant });
-/** How files of one layout are read and matched. */
-export type FileProfile = z.infer<typeof fileProfile>;
-
 /** One line of the file as a person sees it before deciding. */
 export const previewRow = z.object({
   line: z.number().int(),
@@ -127,9 +102,17 @@ export const previewRow = z.object({
   part: z.enum(['first', 'odd', 'last']),
   cells: z.array(z.string()),
   at: instant.nullable(),
-  /** By column: the value in the stored unit. */
-  values: z.record(z.string(), z.number().nullable()),
-  problem: z.object({ column: z.number().nullable(), message: z.string() }).nullable(),
+  /** By column, counted from 0 as `columns[].index`: the value in the stored unit. */
+  values: z
+    .record(z.string(), z.number().nullable())
+    .describe('Values in the stored unit by column, counted from 0 as columns[].index'),
+  /** Its column is told as a person counts, from 1, as everywhere that a place in the file is told. */
+  problem: z
+    .object({
+      column: z.number().nullable().describe('Counted from 1, as a person counts'),
+      message: z.string(),
+    })
+    .nullable(),
 });
 /** One line of the file as a person sees it before deciding. */
 export type PreviewRow = z.infer<typeof previewRow>;
@@ -317,7 +300,10 @@ export const importLoggerFile = endpoint({
   access: 'grower',
   summary: 'Upload a logger file (field `file`) and bring it in by a profile, all or nothing',
   params: roomParams,
-  query: z.object({ profile: line(80), differing: differingChoice.default('keep') }),
+  query: z.object({
+    profile: line(80),
+    differing: differingChoice.default('keep'),
+  }),
   reply: loggerFile,
   status: 201,
   media: { request: 'multipart/form-data' },
@@ -337,7 +323,9 @@ export const downloadLoggerFile = endpoint({
 
 /** A line that can't be used. */
 export const rejection = z.object({
+  /** From 1. */
   line: z.number().int(),
+  /** From 1; null where it is the line as a whole. */
   column: z.number().int().nullable(),
   code: z.string(),
   message: z.string(),
@@ -373,41 +361,6 @@ export const downloadRejections = endpoint({
   params: fileParams,
   reply: z.string(),
   media: { reply: 'text/csv' },
-});
-
-/** The room's profiles. */
-export const listFileProfiles = endpoint({
-  name: 'listFileProfiles',
-  method: 'get',
-  path: '/rooms/:roomId/logger-file-profiles',
-  access: 'viewer',
-  summary: 'How logger files of known layouts are read, by name',
-  params: roomParams,
-  reply: z.object({ profiles: z.array(fileProfile) }),
-});
-
-const profileParams = roomParams.extend({ profileId: id });
-
-/** Gives a profile another name. */
-export const renameFileProfile = endpoint({
-  name: 'renameFileProfile',
-  method: 'patch',
-  path: '/rooms/:roomId/logger-file-profiles/:profileId',
-  access: 'grower',
-  summary: 'Rename a profile',
-  params: profileParams,
-  body: z.strictObject({ name: line(80) }),
-  reply: fileProfile,
-});
-
-/** Forgets a profile; files that were read by it stay. */
-export const removeFileProfile = endpoint({
-  name: 'removeFileProfile',
-  method: 'delete',
-  path: '/rooms/:roomId/logger-file-profiles/:profileId',
-  access: 'grower',
-  summary: 'Forget a profile',
-  params: profileParams,
 });
 
 /** Removes a file and, if it was brought in, its readings. */

@@ -1,4 +1,5 @@
-import type { DifferingChoice, LoggerFileResult } from '@shared/contracts/logger-files';
+import type { LoggerFileResult } from '@shared/contracts/logger-file-result';
+import type { DifferingChoice } from '@shared/contracts/logger-files';
 import { formatNumber } from '@shared/format/numbers';
 import { formatDuration } from '@shared/format/room-time';
 import { rejectionMessages, type ReadingRejectionCode } from '@shared/logger-files/reading-rejection';

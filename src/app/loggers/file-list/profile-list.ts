@@ -9,7 +9,7 @@ import {
   removeFileProfile,
   renameFileProfile,
   type FileProfile,
-} from '@shared/contracts/logger-files';
+} from '@shared/contracts/logger-file-profiles';
 import { filter, switchMap } from 'rxjs';
 import { ApiClient } from '../../core/api-client';
 import { Notices } from '../../core/notices';

@@ -1,9 +1,9 @@
+import type { LoggerFileResult } from '@shared/contracts/logger-file-result';
 import type {
   FileColumn,
   FileSeries,
   LoggerFile,
   LoggerFileDetail,
-  LoggerFileResult,
   PreviewRow,
 } from '@shared/contracts/logger-files';
 import { inventedId } from '../../core/testing/board-builder';
