@@ -6,7 +6,7 @@ import { utcHourBounds } from '@shared/series/room-days';
 import { BulkColumns } from './bulk-columns';
 import { addGood, pairColumns } from './bulk-pairing';
 import { BulkSpans } from './bulk-spans';
-import { within, type BulkSums, type BulkTrack } from './bulk-track';
+import { within, withOpen, type BulkSums, type BulkTrack } from './bulk-track';
 import { withinMs } from './computed-quantities';
 import type { TouchedSpan } from './late-readings';
 import { lastReadingIn } from './sensor-stream';
@@ -115,11 +115,11 @@ export class BulkComputed {
   /** As {@link BulkTrack.completeSums}. */
   completeSums(isLast: boolean): ComputedBulkSums[] {
     return this.running.map((one) => {
-      const touched = one.fold.touched();
+      const touched = withOpen(one.newest, one.fold.touched());
       const to = isLast ? Infinity : (touched.at(-1)?.start ?? one.savedTo);
       const stretches = this.touched({ from: one.savedTo, to });
       one.savedTo = to;
-      one.newest = touched.at(-1) ?? one.newest;
+      one.newest = touched.at(-1);
       one.fold = this.newFold(one.newest);
       return { quantity: one.quantity, stretches, sums: within(stretches, touched) };
     });

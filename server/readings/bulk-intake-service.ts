@@ -5,10 +5,10 @@ import { AlertReplay, type ReplayedSeries, type ReplaySources } from '../alerts/
 import type { AlertStore } from '../alerts/alert-store';
 import type { Transactions, Tx } from '../database/transactions';
 import { BulkComputed, type HygrometerStay } from './bulk-computed';
-import { BulkIntake } from './bulk-intake';
+import { BulkIntake, type BulkIntakeParts } from './bulk-intake';
 import type { BulkStore, StayRow } from './bulk-store';
 import { BulkTrack } from './bulk-track';
-import { BulkWriter } from './bulk-writer';
+import { BulkWriter, type BulkWriterParts } from './bulk-writer';
 import { withinMs, type ComputedQuantities } from './computed-quantities';
 import type { TouchedSpan } from './late-readings';
 import type { FlaggedSample, ReadingStore, SensorOnRoad } from './reading-store';
@@ -39,6 +39,11 @@ export interface OpenBulkIntake {
   readonly tracks: readonly BulkTrack[];
 }
 
+/** How much is gathered before it is worked on; what comes of it is the same. */
+export type BulkPace = Pick<BulkIntakeParts, 'columnRows'> & Pick<BulkWriterParts, 'stretchRows'>;
+
+const usualPace: BulkPace = { columnRows: 1_500, stretchRows: 250_000 };
+
 /** A room's day, twice. */
 const TWO_DAYS_MS = 2 * 86_400_000;
 
@@ -53,6 +58,7 @@ export class BulkIntakeService {
     private readonly computed: ComputedQuantities,
     private readonly alerts: AlertStore,
     plans: Pick<ReplaySources, 'wantedRangesOf' | 'plannedLamps'>,
+    private readonly pace: BulkPace = usualPace,
   ) {
     this.sources = {
       wantedRangesOf: (...of) => plans.wantedRangesOf(...of),
@@ -92,6 +98,7 @@ export class BulkIntakeService {
       writer: null,
       replacesDiffering: false,
       heldFrom: (firstAt) => firstAt - reachMs(sensors),
+      columnRows: this.pace.columnRows,
     });
     return { intake, writer: null, tracks };
   }
@@ -154,6 +161,7 @@ export class BulkIntakeService {
       readings: this.readings,
       fileId: order.fileId,
       now: order.now,
+      stretchRows: this.pace.stretchRows,
       ...shared,
     });
     const intake = new BulkIntake({
@@ -161,6 +169,7 @@ export class BulkIntakeService {
       writer,
       replacesDiffering: order.replacesDiffering,
       heldFrom: (firstAt) => firstAt - reachMs(sensors),
+      columnRows: this.pace.columnRows,
       ...shared,
     });
     return { intake, writer, tracks };

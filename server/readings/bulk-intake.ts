@@ -34,15 +34,14 @@ export interface BulkIntakeParts {
   readonly replacesDiffering: boolean;
   /** From where what is held has to be read [ms]. */
   readonly heldFrom: (firstAt: number) => number;
+  /** Rows that are kept in columns before sums and alerts read them. */
+  readonly columnRows: number;
 }
 
 /** Readings that are not in order of time have to be sorted first. */
 export class OutOfOrder extends Error {
   override readonly name = 'OutOfOrder';
 }
-
-/** Rows that are kept in columns before sums and alerts read them. */
-const COLUMN_ROWS = 1_500;
 
 /**
  * Takes any number of readings in order of time, merges them with what is held, and keeps sums, computed quantities and
@@ -181,7 +180,7 @@ export class BulkIntake {
   }
 
   private async settle(): Promise<void> {
-    if (this.rowsInColumns >= COLUMN_ROWS) await this.settleColumns(false);
+    if (this.rowsInColumns >= this.parts.columnRows) await this.settleColumns(false);
     await this.parts.writer?.drained();
   }
 

@@ -36,6 +36,9 @@ export class BulkTrack {
   private readonly reachMs: number;
   private hoursSavedTo = -Infinity;
   private daysSavedTo = -Infinity;
+  /** Periods that were not complete at the last {@link BulkTrack.completeSums}. */
+  private openHour: PeriodSums | undefined;
+  private openDay: PeriodSums | undefined;
   private readonly dayBoundsAt: (at: number) => { start: number; end: number };
 
   /**
@@ -88,8 +91,8 @@ export class BulkTrack {
    * @param isLast - No more readings follow, so the last periods are as complete as they get.
    */
   completeSums(isLast: boolean): { hours: BulkSums; days: BulkSums } {
-    const hours = this.stream.touchedHours();
-    const days = this.stream.touchedDays();
+    const hours = withOpen(this.openHour, this.stream.touchedHours());
+    const days = withOpen(this.openDay, this.stream.touchedDays());
     const hoursTo = isLast ? Infinity : (hours.at(-1)?.start ?? this.hoursSavedTo);
     const daysTo = isLast ? Infinity : (days.at(-1)?.start ?? this.daysSavedTo);
     const complete = {
@@ -98,6 +101,8 @@ export class BulkTrack {
     };
     this.hoursSavedTo = hoursTo;
     this.daysSavedTo = daysTo;
+    this.openHour = hours.at(-1);
+    this.openDay = days.at(-1);
     this.stream = new SensorStream(this.sensor, this.stream.positionNow());
     return complete;
   }
@@ -117,6 +122,19 @@ export class BulkTrack {
     this.columns.push(at, value, judged.flags);
     return judged;
   }
+}
+
+/**
+ * The periods to go on with: one that was open belongs to them, even when nothing was added to it since.
+ *
+ * @param open - The last period of the stretch before.
+ * @param touched - The periods of this stretch, in order.
+ */
+export function withOpen(
+  open: PeriodSums | undefined,
+  touched: readonly PeriodSums[],
+): readonly PeriodSums[] {
+  return open === undefined || touched[0]?.start === open.start ? touched : [open, ...touched];
 }
 
 /**

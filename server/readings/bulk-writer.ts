@@ -24,10 +24,10 @@ export interface BulkWriterParts {
   readonly deficitReplays: readonly (AlertReplay | null)[];
   /** The present [ms]. */
   readonly now: number;
+  /** Rows after which sums are written, so that they don't pile up. */
+  readonly stretchRows: number;
 }
 
-/** Rows after which sums are written, so that they don't pile up. */
-const ROWS_A_STRETCH = 250_000;
 const MONTHS_AHEAD_MS = 330 * 86_400_000;
 /** Never written: without a file nothing is fresh. */
 const NO_FILE = '00000000-0000-0000-0000-000000000000';
@@ -62,7 +62,7 @@ export class BulkWriter {
       await this.prepare(ats);
       return;
     }
-    this.copy ??= await BulkCopy.into(this.parts.tx, 'reading', readingColumns);
+    this.copy ??= await this.openCopy();
   }
 
   /** Writes a reading that is not held yet. */
@@ -90,7 +90,11 @@ export class BulkWriter {
    */
   async settled(rows: number): Promise<void> {
     this.rows += rows;
-    if (this.rows >= ROWS_A_STRETCH) await this.writeStretch(false);
+    if (this.rows < this.parts.stretchRows) return;
+    const isCopying = this.copy !== null;
+    await this.writeStretch(false);
+    // Held readings may have filled the stretch in the middle of a batch, the rest of which can be new.
+    if (isCopying) this.copy = await this.openCopy();
   }
 
   /** Writes everything that is left: sums, states of the sensors, alerts. */
@@ -141,6 +145,10 @@ export class BulkWriter {
     for (const one of computed) {
       await store.replaceComputed(tx, one.track.sensor.id, one.completeSums(isLast));
     }
+  }
+
+  private openCopy(): Promise<BulkCopy> {
+    return BulkCopy.into(this.parts.tx, 'reading', readingColumns);
   }
 
   private async endCopy(): Promise<void> {

@@ -2,7 +2,7 @@ import fc from 'fast-check';
 import type { DataSource } from 'typeorm';
 import { AlertStore } from '../../server/alerts/alert-store';
 import { BulkBatch } from '../../server/readings/bulk-columns';
-import { BulkIntakeService } from '../../server/readings/bulk-intake-service';
+import { BulkIntakeService, type BulkPace } from '../../server/readings/bulk-intake-service';
 import { BulkStore } from '../../server/readings/bulk-store';
 import { createTestDatabase, type TestDatabase } from '../database/test-database';
 import {
@@ -54,9 +54,14 @@ describe('readings of a file', () => {
       after: fc.constantFrom('none', 'last', 'middle', 'temperature'),
       isWhole: fc.boolean(),
       size: fc.constantFrom(1, 9, 1_000),
+      // Held readings fill columns and stretches too, also in the middle of a batch.
+      pace: fc.record({
+        columnRows: fc.constantFrom(1, 7, 1_500),
+        stretchRows: fc.constantFrom(1, 20, 250_000),
+      }),
     });
     await fc.assert(
-      fc.asyncProperty(ways, async ({ before, after, isWhole, size }) => {
+      fc.asyncProperty(ways, async ({ before, after, isWhole, size, pace }) => {
         const sensors = await sensorsOnAShelf(database.dataSource.manager);
         const road = roadOver(database.dataSource);
         const early = pick(before);
@@ -65,7 +70,7 @@ describe('readings of a file', () => {
         const file = readings.filter(
           (reading) => !late.includes(reading) && (isWhole || !early.includes(reading)),
         );
-        const counts = await bringIn(database.dataSource, sensors, file, size);
+        const counts = await bringIn(database.dataSource, sensors, file, { size, pace });
         expect(counts.fresh).toBe(readings.length - early.length - late.length);
         expect(counts.fresh + counts.alreadyHeld).toBe(file.length);
         await send(road, sensors, [late], now);
@@ -91,7 +96,7 @@ describe('readings of a file', () => {
         ];
       }).flat();
     await send(roadOver(database.dataSource, litByDay), sensors, [days(8, 16)], firstDay + 16 * 86_400_000);
-    await bringIn(database.dataSource, sensors, days(0, 4), 1_000, litByDay);
+    await bringIn(database.dataSource, sensors, days(0, 4), { size: 1_000, plans: litByDay });
     const kept = (await keptOf(database.dataSource.manager, sensors)) as {
       temperature: { alerts: unknown[] };
     };
@@ -161,8 +166,7 @@ async function bringIn(
   dataSource: DataSource,
   sensors: ShelfSensors,
   file: readonly Sent[],
-  size: number,
-  plans: Plans = unlitAndTight,
+  { size, plans = unlitAndTight, pace }: { size: number; plans?: Plans; pace?: BulkPace },
 ): Promise<{ fresh: number; alreadyHeld: number }> {
   const road = roadOver(dataSource, plans);
   const { transactions, readings: store, computed } = road;
@@ -173,6 +177,7 @@ async function bringIn(
     computed,
     new AlertStore(),
     plans,
+    pace,
   );
   const sensorIds = [sensors.temperature, sensors.humidity];
   const reader = dataSource.createQueryRunner();
