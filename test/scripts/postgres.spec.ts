@@ -64,6 +64,11 @@ describe('the local PostgreSQL', () => {
     expect(roles).toEqual([{ rolsuper: false }]);
   });
 
+  it('lets its owner ask for a checkpoint, as benchmarks do', async () => {
+    const postgres = await start();
+    await expect(query(postgres, 'CHECKPOINT')).resolves.toEqual([]);
+  });
+
   it('refuses a wrong password', async () => {
     const postgres = await start();
     const wrong = new URL(postgres.url('lampmeadow'));
