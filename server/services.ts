@@ -1,5 +1,8 @@
 import type passport from 'passport';
 import type { Logger } from 'pino';
+import { AlertAnswerService } from './alerts/alert-answer-service';
+import { AlertAnswerStore } from './alerts/alert-answer-store';
+import { AlertHistoryStore } from './alerts/alert-history-store';
 import { AlertService } from './alerts/alert-service';
 import { alertRoutes } from './alerts/alert-routes';
 import { AlertStore } from './alerts/alert-store';
@@ -142,7 +145,20 @@ export function composeServices(foundation: Foundation): Services {
     now,
   });
   const care = new CareService({ transactions, care: new CareStore(), rooms, people, feed: relay, now });
-  const alerts = new AlertService(transactions, alertStore, relay);
+  const alerts = new AlertService({
+    transactions,
+    alerts: alertStore,
+    history: new AlertHistoryStore(),
+    feed: relay,
+  });
+  const answering = new AlertAnswerService({
+    transactions,
+    answers: new AlertAnswerStore(),
+    alerts,
+    people,
+    audit,
+    now,
+  });
 
   const loggerFiles = loggerFileParts({
     transactions,
@@ -215,7 +231,7 @@ export function composeServices(foundation: Foundation): Services {
     racksOf: (roomId) => rooms.racksOf(roomId),
     reportOf: (...of) => reports.report(...of),
     openAlertsOf: (roomId) => alerts.open(roomId),
-    newestAlertsOf: async (roomId) => (await alerts.list(roomId, { limit: 200 })).alerts,
+    newestAlertsOf: (roomId) => alerts.newest(roomId),
     tasksOf: (roomId, from, to) => care.listTasks(roomId, { from, to }),
   });
 
@@ -234,7 +250,7 @@ export function composeServices(foundation: Foundation): Services {
       ...deviceIntakeRoutes(deviceIntake),
       ...boardRoutes(boards),
       ...seriesRoutes(pages, series, reports),
-      ...alertRoutes(alerts),
+      ...alertRoutes(alerts, answering),
       ...loggerFileRoutes(loggerFiles.files, config.uploadMaxBytes),
       ...careRoutes(care),
       ...scenariosRoutes(scenarios),

@@ -1,19 +1,38 @@
-import { acknowledgeAlert, getAlert, listAlerts } from '@shared/contracts/alerts';
-import { route, type Route } from '../http/route';
+import * as answers from '@shared/contracts/alert-answers';
+import { countAlerts, getAlert, getAlertTimeLine, listAlerts } from '@shared/contracts/alerts';
+import { route, type Route, type RouteContext } from '../http/route';
+import type { AlertAnswer, AlertAnswerService } from './alert-answer-service';
 import type { AlertService } from './alert-service';
 
 /**
  * Alerts over HTTP.
  *
- * @param alerts - The service.
- * @returns Its routes.
+ * @param alerts - Lists, counts and tells them.
+ * @param answering - Takes what people do about them.
+ * @returns The routes.
  */
-export function alertRoutes(alerts: AlertService): Route[] {
+export function alertRoutes(alerts: AlertService, answering: AlertAnswerService): Route[] {
   return [
-    route(listAlerts, ({ room, query }) => alerts.list(room.id, query)),
+    route(listAlerts, ({ room, query }) => alerts.list(room, query)),
+    route(countAlerts, ({ room, query }) => alerts.counts(room, query)),
     route(getAlert, ({ room, params }) => alerts.one(room.id, params.alertId)),
-    route(acknowledgeAlert, ({ room, params, person, body }) =>
-      alerts.acknowledge(room.id, params.alertId, person, body.note),
+    route(getAlertTimeLine, ({ room, params }) => alerts.timeLine(room.id, params.alertId)),
+    route(answers.acknowledgeAlert, (context) => answering.acknowledge(answerOf(context), context.body.note)),
+    route(answers.takeBackAcknowledgement, (context) => answering.takeBackAcknowledgement(answerOf(context))),
+    route(answers.quietAlert, (context) => answering.quiet(answerOf(context), new Date(context.body.until))),
+    route(answers.endQuiet, (context) => answering.endQuiet(answerOf(context))),
+    route(answers.noteAlertDeed, (context) => answering.noteDeed(answerOf(context), context.body.text)),
+    route(answers.removeAlertDeed, (context) =>
+      answering.removeDeed(answerOf(context), context.params.deedId),
     ),
+    route(answers.assignAlert, (context) => answering.assign(answerOf(context), context.body.personId)),
   ];
+}
+
+function answerOf({
+  room,
+  person,
+  params,
+}: Pick<RouteContext<{ alertId: string }, unknown, unknown>, 'room' | 'person' | 'params'>): AlertAnswer {
+  return { room, person, alertId: params.alertId };
 }

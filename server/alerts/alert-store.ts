@@ -5,6 +5,7 @@ import type { Quantity } from '@shared/climate/quantity';
 import type { Alert } from '@shared/contracts/alerts';
 import type { Tx } from '../database/transactions';
 import type { SensorOnRoad } from '../readings/reading-store';
+import { alertOf, shownAlerts, type AlertRow, type EpisodeRow } from './alert-row';
 
 /** A rule's standing over one series. */
 export interface Watch {
@@ -30,32 +31,6 @@ interface WatchRow {
   kind: AlertKind;
   state: AlertState;
 }
-
-interface AlertRow {
-  id: string;
-  shelf_id: string;
-  shelf_label: string;
-  sensor_id: string | null;
-  quantity: Quantity;
-  kind: AlertKind;
-  urgency: Episode['urgency'];
-  began_at: Date;
-  opened_at: Date;
-  peak_at: Date;
-  peak_value: number;
-  peak_excess: number;
-  peak_limit: number;
-  ended_at: Date | null;
-  cleared_at: Date | null;
-  found_later: boolean;
-  told_at: Date | null;
-  acknowledged_at: Date | null;
-  acknowledged_by_name: string | null;
-  acknowledge_note: string;
-}
-
-const alertColumns = `a.*, sh.label AS shelf_label, p.name AS acknowledged_by_name
-  FROM alert a JOIN shelf sh ON sh.id = a.shelf_id LEFT JOIN person p ON p.id = a.acknowledged_by`;
 
 /** Queries over watches and episodes. */
 export class AlertStore {
@@ -203,7 +178,7 @@ export class AlertStore {
 
   /** Episodes of a watch that began before an instant, the last one only, and all from then on. */
   async episodesAround(tx: Tx, watchId: string, at: number): Promise<Episode[]> {
-    const rows: AlertRow[] = await tx.query(
+    const rows: EpisodeRow[] = await tx.query(
       `(SELECT * FROM alert WHERE watch_id = $1 AND began_at < $2 ORDER BY began_at DESC LIMIT 1)
        UNION ALL
        (SELECT * FROM alert WHERE watch_id = $1 AND began_at >= $2)
@@ -244,93 +219,28 @@ export class AlertStore {
   /** Alerts as people see them. */
   async byIds(tx: Tx, alertIds: readonly string[]): Promise<(Alert & { roomId: string })[]> {
     if (alertIds.length === 0) return [];
-    const rows: (AlertRow & { room_id: string })[] = await tx.query(
-      `SELECT ${alertColumns} WHERE a.id = ANY($1) ORDER BY a.opened_at`,
-      [alertIds],
-    );
+    const rows: AlertRow[] = await tx.query(`${shownAlerts} WHERE a.id = ANY($1) ORDER BY a.opened_at`, [
+      alertIds,
+    ]);
     return rows.map((row) => ({ ...alertOf(row), roomId: row.room_id }));
   }
 
-  /** A page of a room's alerts, newest first. */
-  async page(
-    tx: Tx,
-    roomId: string,
-    filter: {
-      isOpen: boolean | null;
-      shelfId: string | null;
-      before: { openedAt: Date; id: string } | null;
-      limit: number;
-    },
-  ): Promise<Alert[]> {
-    const rows: AlertRow[] = await tx.query(
-      `SELECT ${alertColumns}
-       WHERE a.room_id = $1
-         AND ($2::bool IS NULL OR (a.cleared_at IS NULL) = $2)
-         AND ($3::uuid IS NULL OR a.shelf_id = $3)
-         AND ($4::timestamptz IS NULL OR (a.opened_at, a.id) < ($4, $5::uuid))
-       ORDER BY a.opened_at DESC, a.id DESC LIMIT $6`,
-      [
-        roomId,
-        filter.isOpen,
-        filter.shelfId,
-        filter.before?.openedAt ?? null,
-        filter.before?.id ?? null,
-        filter.limit,
-      ],
-    );
-    return rows.map(alertOf);
-  }
-
-  /**
-   * Notes who has seen an alert; the first one stays.
-   *
-   * @returns Whether the room has such an alert.
-   */
-  async acknowledge(
-    tx: Tx,
-    roomId: string,
-    alertId: string,
-    personId: string,
-    note: string,
-  ): Promise<boolean> {
+  /** Which of some alerts nobody is to be written to about now. */
+  async quietAmong(tx: Tx, alertIds: readonly string[], now: number): Promise<ReadonlySet<string>> {
+    if (alertIds.length === 0) return new Set();
     const rows: { id: string }[] = await tx.query(
-      `WITH held AS (SELECT id FROM alert WHERE id = $1 AND room_id = $2 FOR UPDATE),
-       noted AS (
-         UPDATE alert SET acknowledged_at = now(), acknowledged_by = $3, acknowledge_note = $4
-         FROM held WHERE alert.id = held.id AND acknowledged_at IS NULL RETURNING alert.id
-       )
-       SELECT id FROM held`,
-      [alertId, roomId, personId, note],
+      `SELECT a.id FROM alert a
+       WHERE a.id = ANY($1) AND EXISTS (
+         SELECT 1 FROM alert_quiet AS q
+         WHERE q.shelf_id = a.shelf_id AND q.quantity = a.quantity AND q.kind = a.kind
+           AND q.ended_at IS NULL AND q.set_at <= $2 AND q.until > $2
+       )`,
+      [alertIds, new Date(now)],
     );
-    return rows.length > 0;
+    return new Set(rows.map(({ id }) => id));
   }
 }
 
 function keyOf({ sensor_id: sensorId, quantity, kind }: Omit<WatchRow, 'id' | 'state'>): string {
   return `${sensorId} ${quantity} ${kind}`;
-}
-
-function alertOf(row: AlertRow): Alert {
-  return {
-    id: row.id,
-    shelfId: row.shelf_id,
-    shelfLabel: row.shelf_label,
-    sensorId: row.sensor_id,
-    quantity: row.quantity,
-    kind: row.kind,
-    urgency: row.urgency,
-    beganAt: row.began_at.toISOString(),
-    openedAt: row.opened_at.toISOString(),
-    peakAt: row.peak_at.toISOString(),
-    peakValue: row.peak_value,
-    peakExcess: row.peak_excess,
-    peakLimit: row.peak_limit,
-    endedAt: row.ended_at?.toISOString() ?? null,
-    clearedAt: row.cleared_at?.toISOString() ?? null,
-    foundLater: row.found_later,
-    toldAt: row.told_at?.toISOString() ?? null,
-    acknowledgedAt: row.acknowledged_at?.toISOString() ?? null,
-    acknowledgedByName: row.acknowledged_by_name,
-    acknowledgeNote: row.acknowledge_note,
-  };
 }

@@ -1,6 +1,9 @@
 import 'reflect-metadata';
 import { DataSource } from 'typeorm';
+import { AlertAssignmentEntity } from '../alerts/alert-assignment-entity';
+import { AlertDeedEntity } from '../alerts/alert-deed-entity';
 import { AlertEntity } from '../alerts/alert-entity';
+import { AlertQuietEntity } from '../alerts/alert-quiet-entity';
 import { AlertWatchEntity } from '../alerts/alert-watch-entity';
 import { AuditEntryEntity } from '../audit/audit-entry-entity';
 import { RoutineEntity } from '../care/routine-entity';
@@ -37,7 +40,10 @@ import { migrations } from './migrations/all-migrations';
 
 /** Every table that TypeORM maps. */
 const entities = [
+  AlertAssignmentEntity,
+  AlertDeedEntity,
   AlertEntity,
+  AlertQuietEntity,
   AlertWatchEntity,
   AuditEntryEntity,
   DailySummaryEntity,

@@ -4,7 +4,8 @@ import type { Episode } from '../alerts/episode';
 import { quantities } from '../climate/quantity';
 import { endpoint, id, instant, roomParams } from './endpoint';
 
-const alertKind = z.enum([
+/** What an alert can be about. */
+export const alertKind = z.enum([
   'aboveRange',
   'belowRange',
   'fastRise',
@@ -23,6 +24,18 @@ const alertKind = z.enum([
   'dangerLow',
 ] as const satisfies readonly AlertKind[]);
 const urgency = z.enum(['lookToday', 'goNow'] as const satisfies readonly Urgency[]);
+
+/** Something that was done about an alert, in a person's words. */
+export const alertDeed = z.object({
+  id,
+  at: instant,
+  /** Null once the person has left. */
+  personId: id.nullable(),
+  personName: z.string().nullable(),
+  text: z.string(),
+});
+/** Something that was done about an alert. */
+export type AlertDeed = z.infer<typeof alertDeed>;
 
 /** An episode as people see it. Values are in the stored unit of the quantity. */
 export const alert = z.object({
@@ -48,10 +61,27 @@ export const alert = z.object({
   toldAt: instant.nullable(),
   acknowledgedAt: instant.nullable(),
   acknowledgedByName: z.string().nullable(),
+  acknowledgedById: id.nullable(),
   acknowledgeNote: z.string(),
+  /** Nobody is written to until then about this kind of alert on the shelf; null where nobody said so or ended it. */
+  quiet: z.object({ until: instant, setAt: instant, setByName: z.string().nullable() }).nullable(),
+  /** Who looks after it. */
+  assignee: z.object({ personId: id, name: z.string() }).nullable(),
+  /** What was done about it, in order. */
+  deeds: z.array(alertDeed),
 });
 /** An episode as people see it. */
 export type Alert = z.infer<typeof alert>;
+
+const alertFilter = z.object({
+  shelfId: id.optional(),
+  kind: alertKind.optional(),
+  /** A month of the room's calendar, `YYYY-MM`, in which they opened. */
+  month: z
+    .string()
+    .regex(/^\d{4}-(0[1-9]|1[0-2])$/, { error: 'must be a month such as 2026-04' })
+    .optional(),
+});
 
 /** Open alerts, or the newest of all, newest first. */
 export const listAlerts = endpoint({
@@ -61,9 +91,8 @@ export const listAlerts = endpoint({
   access: 'viewer',
   summary: 'Alerts of the room, newest first; a page at a time',
   params: roomParams,
-  query: z.object({
+  query: alertFilter.extend({
     open: z.enum(['true', 'false']).optional(),
-    shelfId: id.optional(),
     limit: z.coerce.number().int().min(1).max(200).default(50),
     cursor: z.string().max(200).optional(),
   }),
@@ -81,16 +110,79 @@ export const getAlert = endpoint({
   reply: alert,
 });
 
-/** Says "I have seen it". */
-export const acknowledgeAlert = endpoint({
-  name: 'acknowledgeAlert',
-  method: 'post',
-  path: '/rooms/:roomId/alerts/:alertId/acknowledgement',
-  access: 'helper',
-  summary: 'Acknowledge an alert; the first acknowledgement stays',
+/** How many alerts there were. */
+export const alertCounts = z.object({
+  /** Of all that the filter lets through. */
+  total: z.number().int(),
+  /** Each list counts with the other filters, but not its own, so that one sees what else there is to choose. */
+  byShelf: z.array(z.object({ shelfId: id, shelfLabel: z.string(), count: z.number().int() })),
+  /** The most frequent first. */
+  byKind: z.array(z.object({ kind: alertKind, count: z.number().int() })),
+  /** The newest first. */
+  byMonth: z.array(z.object({ month: z.string(), count: z.number().int() })),
+});
+/** How many alerts there were. */
+export type AlertCounts = z.infer<typeof alertCounts>;
+
+/** Counts the alerts of a room. */
+export const countAlerts = endpoint({
+  name: 'countAlerts',
+  method: 'get',
+  path: '/rooms/:roomId/alert-counts',
+  access: 'viewer',
+  summary: 'How many alerts there were by shelf, kind and month of the room’s calendar',
+  params: roomParams,
+  query: alertFilter,
+  reply: alertCounts,
+});
+
+/** What happened to an alert beside the readings: who was written to, when it was quiet, who looked after it. */
+export const alertTimeLine = z.object({
+  mails: z.array(
+    z.object({
+      personName: z.string(),
+      reason: z.enum(['opened', 'urgent', 'escalated', 'cleared']),
+      writtenAt: instant,
+      sentAt: instant.nullable(),
+      /** When the mail server refused it for good. */
+      refusedAt: instant.nullable(),
+      /** When it is sent, or tried again; null once it is sent or refused. */
+      dueAt: instant.nullable(),
+      attempts: z.number().int(),
+    }),
+  ),
+  /** Of its kind on its shelf, while it was open. */
+  quiets: z.array(
+    z.object({
+      setAt: instant,
+      until: instant,
+      setByName: z.string().nullable(),
+      /** Before its time; null when it ran to its end or still runs. */
+      endedAt: instant.nullable(),
+      endedByName: z.string().nullable(),
+    }),
+  ),
+  assignments: z.array(
+    z.object({
+      at: instant,
+      /** Null when it was taken from whoever had it. */
+      personName: z.string().nullable(),
+      assignedByName: z.string().nullable(),
+    }),
+  ),
+});
+/** What happened to an alert beside the readings. */
+export type AlertTimeLine = z.infer<typeof alertTimeLine>;
+
+/** What happened to one alert. */
+export const getAlertTimeLine = endpoint({
+  name: 'getAlertTimeLine',
+  method: 'get',
+  path: '/rooms/:roomId/alerts/:alertId/time-line',
+  access: 'viewer',
+  summary: 'Who was written to about an alert, when it was quiet, and who looked after it',
   params: roomParams.extend({ alertId: id }),
-  body: z.strictObject({ note: z.string().trim().max(500).default('') }),
-  reply: alert,
+  reply: alertTimeLine,
 });
 
 /**

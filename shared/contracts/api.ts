@@ -1,4 +1,5 @@
 import type { Endpoint } from './endpoint';
+import * as alertAnswers from './alert-answers';
 import * as alerts from './alerts';
 import * as board from './board';
 import * as care from './care';
@@ -68,7 +69,15 @@ export const endpoints: readonly Endpoint[] = [
   loggerFileProfiles.removeFileProfile,
   alerts.listAlerts,
   alerts.getAlert,
-  alerts.acknowledgeAlert,
+  alerts.countAlerts,
+  alerts.getAlertTimeLine,
+  alertAnswers.acknowledgeAlert,
+  alertAnswers.takeBackAcknowledgement,
+  alertAnswers.quietAlert,
+  alertAnswers.endQuiet,
+  alertAnswers.noteAlertDeed,
+  alertAnswers.removeAlertDeed,
+  alertAnswers.assignAlert,
   care.listTasks,
   care.completeTask,
   care.reopenTask,

@@ -146,7 +146,15 @@ export const accessTable: Readonly<Record<string, AccessRow>> = {
 
   listAlerts: { outcomes: viewer },
   getAlert: { outcomes: viewer },
+  countAlerts: { outcomes: viewer },
+  getAlertTimeLine: { outcomes: viewer },
   acknowledgeAlert: { outcomes: helper },
+  takeBackAcknowledgement: { outcomes: helper },
+  quietAlert: { outcomes: helper, body: { until: '2026-04-15T12:00:00Z' } },
+  endQuiet: { outcomes: helper },
+  noteAlertDeed: { outcomes: helper, body: { text: 'vent opened' } },
+  removeAlertDeed: { outcomes: helper },
+  assignAlert: { outcomes: helper, body: { personId: null } },
 
   listTasks: { outcomes: viewer, query: 'from=2026-04-01&to=2026-04-08' },
   completeTask: { outcomes: helper },

@@ -3,8 +3,9 @@ import type { Response } from 'supertest';
 import { endpoints } from '@shared/contracts/api';
 import type { Endpoint } from '@shared/contracts/endpoint';
 import type { Problem } from '@shared/contracts/problem';
-import { anAlert } from '../builders/alerts';
+import { anAlert, anAlertDeed } from '../builders/alerts';
 import { aTask } from '../builders/care';
+import { aRoomCrop, aVariety } from '../builders/crops';
 import { aDevice, aSensor } from '../builders/devices';
 import { aFileProfile, aLoggerFile } from '../builders/logger-files';
 import { aMember, aPerson } from '../builders/people';
@@ -101,6 +102,7 @@ describe('access', () => {
       const shelf = await aShelf(tx, { roomId });
       await aWantedRange(tx, { shelfId: shelf.id });
       const sensor = await aSensor(tx, { roomId });
+      const alert = await anAlert(tx, { shelfId: shelf.id });
       return {
         roomId,
         quantity: 'airTemperature',
@@ -108,9 +110,12 @@ describe('access', () => {
         rackId: shelf.rackId,
         sensorId: sensor.id,
         deviceId: sensor.deviceId,
-        alertId: (await anAlert(tx, { shelfId: shelf.id })).id,
+        alertId: alert.id,
+        deedId: (await anAlertDeed(tx, { alertId: alert.id })).id,
         taskId: (await aTask(tx, { roomId })).id,
         fileId: (await aLoggerFile(tx, { roomId })).id,
+        cropId: (await aRoomCrop(tx, { roomId })).id,
+        varietyId: (await aVariety(tx, { roomId })).id,
         profileId: (await aFileProfile(tx, { roomId })).id,
       };
     }

@@ -9,6 +9,7 @@ import { CreateAuditEntry1764551500000 } from './1764551500000-create-audit-entr
 import { CreateRequestCounters1764551600000 } from './1764551600000-create-request-counters';
 import { CreateSocketAttachments1764551700000 } from './1764551700000-create-socket-attachments';
 import { TellPeopleByChoice1764551800000 } from './1764551800000-tell-people-by-choice';
+import { AnswerAlerts1764552100000 } from './1764552100000-answer-alerts';
 
 /** Every migration in order; a merged one is never edited. */
 export const migrations = [
@@ -23,4 +24,5 @@ export const migrations = [
   CreateRequestCounters1764551600000,
   CreateSocketAttachments1764551700000,
   TellPeopleByChoice1764551800000,
+  AnswerAlerts1764552100000,
 ];

@@ -1,6 +1,7 @@
 import { inject, Injectable, signal } from '@angular/core';
 import { takeUntilDestroyed, toObservable } from '@angular/core/rxjs-interop';
-import { acknowledgeAlert, listAlerts, type Alert } from '@shared/contracts/alerts';
+import { acknowledgeAlert } from '@shared/contracts/alert-answers';
+import { listAlerts, type Alert } from '@shared/contracts/alerts';
 import { catchError, EMPTY, map, merge, switchMap, tap, type Observable } from 'rxjs';
 import { AlertInbox } from './alert-inbox';
 import { ApiClient } from './api-client';

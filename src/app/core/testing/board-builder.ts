@@ -96,7 +96,11 @@ export function alert(changes: Partial<Alert> = {}): Alert {
     toldAt: '2026-12-01T14:06:00Z',
     acknowledgedAt: null,
     acknowledgedByName: null,
+    acknowledgedById: null,
     acknowledgeNote: '',
+    quiet: null,
+    assignee: null,
+    deeds: [],
     ...changes,
   };
 }

@@ -1,6 +1,7 @@
 import { computed, DestroyRef, inject, Injectable, signal } from '@angular/core';
 import { takeUntilDestroyed, toObservable } from '@angular/core/rxjs-interop';
-import { acknowledgeAlert, type Alert } from '@shared/contracts/alerts';
+import { acknowledgeAlert } from '@shared/contracts/alert-answers';
+import type { Alert } from '@shared/contracts/alerts';
 import { getBoard, type Board } from '@shared/contracts/board';
 import { completeTask, reopenTask, type Task } from '@shared/contracts/care';
 import { catchError, EMPTY, filter, merge, Subject, switchMap, tap, type Observable } from 'rxjs';
