@@ -126,7 +126,7 @@ export const standingRules = {
   condensation: { kind: 'condensation', limit: 0, ...fixed, holdMs: 30 * minute, clearMargin: 0.5 },
   wetHours: { kind: 'wetHours', limit: 8, ...fixed, holdMs: 0, urgentBy: 4 },
   sensorsDisagree: { kind: 'sensorsDisagree', limit: 2, ...fixed, holdMs: hour, clearMargin: 0.5 },
-  sensorFailed: { kind: 'sensorFailed', limit: 0.5, ...fixed },
+  sensorFailed: { kind: 'sensorFailed', limit: 0.5, ...fixed, holdMs: 0 },
   sensorSilent: { kind: 'sensorSilent', silentAfterMs: 30 * minute, urgentAfterMs: 6 * hour },
   deviceSilent: { kind: 'deviceSilent', silentAfterMs: 15 * minute, urgentAfterMs: 2 * hour },
 } as const satisfies Readonly<Record<string, StandingRule>>;

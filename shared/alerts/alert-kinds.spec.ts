@@ -9,7 +9,7 @@ import {
   changePerHour,
   dewPointSurplus,
   disagreement,
-  failures,
+  failedShare,
   lightDays,
   unaskedWarmth,
   wetHours,
@@ -121,7 +121,8 @@ describe('each kind, with its default patience', () => {
   it('condensation opens half an hour after a surface falls below the dew point', () => {
     // 20 °C and 60 %: dew point 12.0 °C (FAO-56 eq. 11 inverted).
     const room = { temperature: steps([20, 180]), humidity: steps([60, 180]) };
-    const surplus = dewPointSurplus(room, steps([13, 60], [11, 60], [13, 60]), 10 * minute);
+    const rootZone = steps([13, 60], [11, 60], [13, 60]);
+    const surplus = dewPointSurplus(room, { leafOffsetC: 0, rootZone }, 10 * minute, () => false);
     expect(told(standingRules.condensation, surplus)).toEqual([
       ['opened', 90, 'lookToday'],
       ['cleared', 130, 'lookToday'],
@@ -140,18 +141,27 @@ describe('each kind, with its default patience', () => {
   });
 
   it('sensorsDisagree opens after an hour apart', () => {
-    const apart = disagreement(steps([20, 180]), steps([20, 30], [23, 90], [20, 60]), 10 * minute);
+    const apart = disagreement([steps([20, 180]), steps([20, 30], [23, 90], [20, 60])], 10 * minute);
     expect(told(standingRules.sensorsDisagree, apart)).toEqual([
       ['opened', 90, 'lookToday'],
       ['cleared', 130, 'lookToday'],
     ]);
   });
 
-  it('sensorFailed opens on a quarter of an hour of failed readings and not on a single one', () => {
-    const readings = steps([20, 30], [-40, 5, 'fail'], [20, 30], [-40, 30, 'fail'], [20, 30]);
-    expect(told(standingRules.sensorFailed, failures(readings))).toEqual([
+  it('sensorFailed opens once most readings of half an hour failed, one after another or not', () => {
+    const half = { windowMs: 30 * minute, fewest: 6 };
+    const dead = steps([20, 30], [-40, 5, 'fail'], [20, 30], [-40, 30, 'fail'], [20, 60]);
+    // By hand: minute 80 is the fourth of six; from minute 105 on at most three of six, for ten minutes.
+    expect(told(standingRules.sensorFailed, failedShare(dead, half))).toEqual([
       ['opened', 80, 'lookToday'],
-      ['cleared', 105, 'lookToday'],
+      ['cleared', 115, 'lookToday'],
+    ]);
+    const loose = Array.from({ length: 8 }).flatMap(() => [
+      [-40, 10, 'fail'] as const,
+      [20, 5, 'pass'] as const,
+    ]);
+    expect(told(standingRules.sensorFailed, failedShare(steps(...loose), half))).toEqual([
+      ['opened', 20, 'lookToday'],
     ]);
   });
 

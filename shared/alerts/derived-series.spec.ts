@@ -5,15 +5,18 @@ import {
   changePerHour,
   dewPointSurplus,
   disagreement,
-  failures,
+  failedShare,
   joinAsOf,
   lightDays,
+  mergedReadings,
   unaskedWarmth,
   wetHours,
 } from './derived-series';
 
 const minute = 60_000;
 const hour = 60 * minute;
+
+const never = (): boolean => false;
 
 type Row = readonly [atMin: number, value: number, quality?: Quality];
 
@@ -58,8 +61,27 @@ describe('series joined as of their latest readings', () => {
 
 describe('series of single kinds', () => {
   it('disagreement is the distance, whichever sensor is higher', () => {
-    const apart = disagreement(series([0, 20], [10, 25]), series([0, 22], [10, 22]), minute);
+    const apart = disagreement([series([0, 20], [10, 25]), series([0, 22], [10, 22])], minute);
     expect(apart.values).toEqual([2, 3]);
+  });
+
+  it('disagreement of three sensors is the widest, of those that still speak, and none of one alone', () => {
+    const sensors = [series([0, 20], [60, 20]), series([0, 21], [60, 24]), series([0, 26])];
+    expect(rowsOf(disagreement(sensors, 30 * minute))).toEqual([
+      [0, 6, 'pass'],
+      [60, 4, 'pass'],
+    ]);
+    expect(disagreement([series([0, 20], [10, 25]), series()], minute).values).toEqual([]);
+  });
+
+  it('readings of two thermometers merge in order, the first named counting where they coincide', () => {
+    expect(
+      rowsOf(mergedReadings([series([0, 1], [20, 3, 'suspect']), series([0, 9], [10, 2, 'fail'])])),
+    ).toEqual([
+      [0, 1, 'pass'],
+      [10, 2, 'fail'],
+      [20, 3, 'suspect'],
+    ]);
   });
 
   it('unasked warmth is the root zone above the air, and nothing while seed waits for it', () => {
@@ -81,12 +103,32 @@ describe('series of single kinds', () => {
     (temperature, humidity, dewPoint) => {
       const surplus = dewPointSurplus(
         { temperature: series([0, temperature]), humidity: series([0, humidity]) },
-        series([0, dewPoint]),
+        { leafOffsetC: 0, rootZone: series([0, dewPoint]) },
         minute,
+        never,
       );
       expect(Math.abs(surplus.values[0] ?? NaN)).toBeLessThan(0.05);
     },
   );
+
+  it('dew point surplus takes the colder of leaves and root zone, and the leaves alone without a probe', () => {
+    const air = { temperature: series([0, 22]), humidity: series([0, 65]) };
+    const surplus = (leafOffsetC: number, rootZone: ObservationColumns): number =>
+      dewPointSurplus(air, { leafOffsetC, rootZone }, minute, never).values[0] ?? NaN;
+    // Dew point 15.1 °C; leaves at 14 °C, or at 22 °C beside a root zone of 13 °C.
+    expect(surplus(-8, series([0, 20]))).toBeCloseTo(1.1, 1);
+    expect(surplus(-8, series())).toBeCloseTo(1.1, 1);
+    expect(surplus(0, series([0, 13]))).toBeCloseTo(2.1, 1);
+    expect(surplus(0, series())).toBeCloseTo(-6.9, 1);
+  });
+
+  it('dew point surplus is well inside the limit while a covered tray is meant to sweat', () => {
+    const air = { temperature: series([0, 22], [10, 22]), humidity: series([0, 65], [10, 65]) };
+    const rootZone = series([0, 10], [10, 10]);
+    const surplus = dewPointSurplus(air, { leafOffsetC: 0, rootZone }, minute, (at) => at === 0);
+    expect(surplus.values[0]).toBeLessThanOrEqual(-0.5);
+    expect(surplus.values[1]).toBeGreaterThan(5);
+  });
 
   it('change per hour compares with the reading a window ago, across uneven intervals but not across gaps', () => {
     const rates = changePerHour(series([0, 20], [10, 20.5], [16, 22], [25, 23], [120, 30]), 15 * minute);
@@ -97,11 +139,15 @@ describe('series of single kinds', () => {
     ]);
   });
 
-  it('failures are 1 where a reading failed', () => {
-    expect(rowsOf(failures(series([0, 5, 'fail'], [1, 5, 'suspect'], [2, 5])))).toEqual([
-      [0, 1, 'pass'],
-      [1, 0, 'pass'],
-      [2, 0, 'pass'],
+  it('failed share counts the window that ends with each reading, and takes few readings for good ones', () => {
+    const readings = series([0, 5, 'fail'], [1, 5, 'suspect'], [2, 5, 'fail'], [3, 5, 'fail'], [6, 5]);
+    // By hand: of at least four readings; the window of 5 min before minute 6 begins after minute 1.
+    expect(rowsOf(failedShare(readings, { windowMs: 5 * minute, fewest: 4 }))).toEqual([
+      [0, 0.25, 'pass'],
+      [1, 0.25, 'pass'],
+      [2, 0.5, 'pass'],
+      [3, 0.75, 'pass'],
+      [6, 0.5, 'pass'],
     ]);
   });
 
@@ -134,6 +180,12 @@ describe('hours of wet leaves', () => {
     expect(wetHours(humidity, every30([24, 12, 14]), { ...botrytisWindow, betweenC: null }).values).toEqual([
       0, 0.5, 1,
     ]);
+  });
+
+  it('do not count on a tray whose seed is still under its cover', () => {
+    const humidity = every30([95, 95, 95]);
+    const values = wetHours(humidity, every30([20, 20, 20]), botrytisWindow, (at) => at < 30 * minute).values;
+    expect(values).toEqual([0, 0, 0.5]);
   });
 
   it('do not grow across a gap', () => {
@@ -172,7 +224,12 @@ describe('look-back', () => {
   };
 
   it.each([
-    ['joinAsOf', 3, (a: ObservationColumns) => disagreement(a, a, 3)],
+    [
+      'joinAsOf',
+      3,
+      (a: ObservationColumns) => joinAsOf([a, a], 3, ([one = NaN, other = NaN]) => one + other),
+    ],
+    ['failedShare', 6, (a: ObservationColumns) => failedShare(a, { windowMs: 6, fewest: 2 })],
     ['changePerHour', 10, (a: ObservationColumns) => changePerHour(a, 5)],
     ['wetHours', 15, (a: ObservationColumns) => wetHours(a, a, small)],
   ])('of %s suffices: from there on the series is that of all readings', (_, lookBackMs, derive) => {

@@ -11,7 +11,7 @@ interface Columns extends ObservationColumns {
 }
 
 /**
- * Joins series as a clock would see them: at every reading of any of them, the latest of each.
+ * Joins series as a clock would see them: at every reading of any of them, the latest of each that is young enough.
  *
  * @remarks
  * Nothing looks ahead, so a value never changes through readings taken after it, and a reading that comes late
@@ -19,13 +19,14 @@ interface Columns extends ObservationColumns {
  *
  * @param sources - The series to join, in order of time.
  * @param withinMs - Longest age at which a reading still speaks for now [ms].
- * @param combine - Makes the value from one value of each series and the instant; null for none.
+ * @param combine - Makes the value from one value of each series, null where none is young enough, and the instant;
+ * null for no value.
  * @returns The joined series, as doubtful as the most doubtful reading in each value. Failed readings are left out.
  */
-export function joinAsOf(
+export function joinLatest(
   sources: readonly ObservationColumns[],
   withinMs: number,
-  combine: (values: readonly number[], at: number) => number | null,
+  combine: (values: readonly (number | null)[], at: number) => number | null,
 ): ObservationColumns {
   const joined = emptyColumns();
   const passed = sources.map(() => 0);
@@ -38,14 +39,58 @@ export function joinAsOf(
       if (source.qualities[i] === 'fail') return;
       latest[s] = { at, value: source.values[i] ?? NaN, isPass: source.qualities[i] === 'pass' };
     });
-    if (latest.some((reading) => at - reading.at > withinMs)) continue;
+    const isYoung = (reading: { readonly at: number }): boolean => at - reading.at <= withinMs;
     const value = combine(
-      latest.map((reading) => reading.value),
+      latest.map((reading) => (isYoung(reading) ? reading.value : null)),
       at,
     );
-    if (value !== null) append(joined, at, value, latest.every(({ isPass }) => isPass) ? 'pass' : 'suspect');
+    if (value === null) continue;
+    const isPass = latest.every((reading) => reading.isPass || !isYoung(reading));
+    append(joined, at, value, isPass ? 'pass' : 'suspect');
   }
   return joined;
+}
+
+/**
+ * As {@link joinLatest}, with a value only where every series has a reading that is young enough.
+ *
+ * @param sources - As there.
+ * @param withinMs - As there.
+ * @param combine - Makes the value from one value of each series and the instant; null for none.
+ * @returns As there.
+ */
+export function joinAsOf(
+  sources: readonly ObservationColumns[],
+  withinMs: number,
+  combine: (values: readonly number[], at: number) => number | null,
+): ObservationColumns {
+  return joinLatest(sources, withinMs, (values, at) => {
+    const known = values.filter((value) => value !== null);
+    return known.length < values.length ? null : combine(known, at);
+  });
+}
+
+/**
+ * Readings of sensors that measure the same thing as one series, such as two thermometers of a shelf.
+ *
+ * @param sources - In order of time; of two readings at one instant that of the source named first counts.
+ * @returns All of them in order.
+ */
+export function mergedReadings(sources: readonly ObservationColumns[]): ObservationColumns {
+  const [only] = sources;
+  if (sources.length === 1 && only !== undefined) return only;
+  const merged = emptyColumns();
+  const passed = sources.map(() => 0);
+  for (let at = nextTime(sources, passed); at < Infinity; at = nextTime(sources, passed)) {
+    const isThere = (source: ObservationColumns, s: number): boolean => source.times[passed[s] ?? 0] === at;
+    const first = sources.findIndex(isThere);
+    const i = passed[first] ?? 0;
+    append(merged, at, sources[first]?.values[i] ?? NaN, sources[first]?.qualities[i] ?? 'fail');
+    sources.forEach((source, s) => {
+      if (isThere(source, s)) passed[s] = (passed[s] ?? 0) + 1;
+    });
+  }
+  return merged;
 }
 
 function nextTime(sources: readonly ObservationColumns[], passed: readonly number[]): number {
@@ -53,19 +98,17 @@ function nextTime(sources: readonly ObservationColumns[], passed: readonly numbe
 }
 
 /**
- * How far two sensors of one quantity on one shelf are apart; for `sensorsDisagree`.
+ * How far sensors of one quantity on one shelf are apart; for `sensorsDisagree`.
  *
- * @param one - Readings of one sensor.
- * @param other - Readings of the other.
- * @param withinMs - Longest age of a reading [ms]; see {@link joinAsOf}.
- * @returns The absolute difference in their unit.
+ * @param sensors - Readings of each.
+ * @param withinMs - Longest age of a reading [ms]; see {@link joinLatest}.
+ * @returns The highest less the lowest, in their unit, wherever at least two sensors speak.
  */
-export function disagreement(
-  one: ObservationColumns,
-  other: ObservationColumns,
-  withinMs: number,
-): ObservationColumns {
-  return joinAsOf([one, other], withinMs, ([a = NaN, b = NaN]) => Math.abs(a - b));
+export function disagreement(sensors: readonly ObservationColumns[], withinMs: number): ObservationColumns {
+  return joinLatest(sensors, withinMs, (values) => {
+    const known = values.filter((value) => value !== null);
+    return known.length < 2 ? null : Math.max(...known) - Math.min(...known);
+  });
 }
 
 /**
@@ -88,26 +131,46 @@ export function unaskedWarmth(
   );
 }
 
+/** Surfaces of a shelf on which water may condense. */
+export interface ShelfSurfaces {
+  /** How much warmer than the air its leaves are [°C], negative in dry air. */
+  readonly leafOffsetC: number;
+  /** Root-zone temperature [°C]; empty where nothing measures it. */
+  readonly rootZone: ObservationColumns;
+}
+
+/** What {@link dewPointSurplus} is on a shelf whose seed is still under its cover [°C]: well inside the limit. */
+const SWEATING_AS_MEANT_C = -1;
+
 /**
- * How far the dew point of the air lies above the temperature of a surface; for `condensation`.
+ * How far the dew point of the air lies above the temperature of the coldest surface that is known; for `condensation`.
+ *
+ * @remarks
+ * Leaves are taken at air temperature plus the shelf's leaf offset, and pots and mix at that of the root zone, where it
+ * is measured: those are what a grower's sensors know of. Walls and panes may be colder.
  *
  * @param air - Air temperature [°C] and relative humidity [%].
- * @param surface - Temperature of the surface [°C].
- * @param withinMs - Longest age of a reading [ms]; see {@link joinAsOf}.
+ * @param surfaces - What is known of the shelf's surfaces.
+ * @param withinMs - Longest age of a reading [ms]; see {@link joinLatest}.
+ * @param isGerminating - Whether something waits to germinate at an instant, under a cover that is meant to sweat.
  * @returns The difference [°C], positive where water condenses; no value where the readings say nothing about air.
  */
 export function dewPointSurplus(
   air: { readonly temperature: ObservationColumns; readonly humidity: ObservationColumns },
-  surface: ObservationColumns,
+  surfaces: ShelfSurfaces,
   withinMs: number,
+  isGerminating: (at: number) => boolean,
 ): ObservationColumns {
-  return joinAsOf(
-    [air.temperature, air.humidity, surface],
+  return joinLatest(
+    [air.temperature, air.humidity, surfaces.rootZone],
     withinMs,
-    ([temperatureC = NaN, relativeHumidityPct = NaN, surfaceC = NaN]) => {
-      const air = airFromReadings(temperatureC, relativeHumidityPct);
-      const dewPoint = air && dewPointC(air);
-      return dewPoint === null ? null : dewPoint - surfaceC;
+    ([temperatureC, relativeHumidityPct, rootZoneC], at) => {
+      if (typeof temperatureC !== 'number' || typeof relativeHumidityPct !== 'number') return null;
+      if (isGerminating(at)) return SWEATING_AS_MEANT_C;
+      const known = airFromReadings(temperatureC, relativeHumidityPct);
+      const dewPoint = known && dewPointC(known);
+      const leafC = temperatureC + surfaces.leafOffsetC;
+      return dewPoint === null ? null : dewPoint - Math.min(leafC, rootZoneC ?? leafC);
     },
   );
 }
@@ -177,18 +240,22 @@ export const botrytisWindow: WetLeaves = {
  * @param humidity - Relative humidity [%].
  * @param temperature - Air temperature [°C]; read only where the window has temperatures.
  * @param wet - When leaves count as wet.
+ * @param isGerminating - Whether something waits to germinate at an instant: a covered tray is meant to be damp, and
+ * has no leaves yet.
  * @returns Wet time in this spell and window [h].
  */
 export function wetHours(
   humidity: ObservationColumns,
   temperature: ObservationColumns,
   wet: WetLeaves,
+  isGerminating: (at: number) => boolean = () => false,
 ): ObservationColumns {
   const [lowC, highC] = wet.betweenC ?? [-Infinity, Infinity];
   const sources = wet.betweenC === null ? [humidity] : [humidity, temperature];
-  const wetness = joinAsOf(sources, wet.maxGapMs, ([humidityPct = NaN, temperatureC = 0]) =>
-    Number(humidityPct >= wet.wetFromPct && temperatureC >= lowC && temperatureC <= highC),
-  );
+  const wetness = joinAsOf(sources, wet.maxGapMs, ([humidityPct = NaN, temperatureC = 0], at) => {
+    const isWet = humidityPct >= wet.wetFromPct && temperatureC >= lowC && temperatureC <= highC;
+    return Number(isWet && !isGerminating(at));
+  });
   return accumulateWetTime(wetness, wet);
 }
 
@@ -222,18 +289,40 @@ function accumulateWetTime({ times, values, qualities }: ObservationColumns, wet
   return spells;
 }
 
+/** How many of a sensor's readings must fail before the sensor counts as failed; see {@link failedShare}. */
+export interface FailureWindow {
+  /** Only readings within this long before now count [ms]. */
+  readonly windowMs: number;
+  /** With fewer readings than this in the window, the missing ones count as good. */
+  readonly fewest: number;
+}
+
 /**
- * Whether each reading failed its quality tests; for `sensorFailed`.
+ * Share of a sensor's recent readings that failed their quality tests; for `sensorFailed`.
+ *
+ * @remarks
+ * Look-back is `windowMs`.
  *
  * @param readings - Readings of one sensor.
- * @returns 1 where one failed, else 0; every value passes, because the verdict itself is not in doubt.
+ * @param window - What counts as recent.
+ * @returns 0 to 1 at every reading; every value passes, because the verdict itself is not in doubt.
  */
-export function failures({ times, qualities }: ObservationColumns): ObservationColumns {
-  const failed = emptyColumns();
+export function failedShare(
+  { times, qualities }: ObservationColumns,
+  { windowMs, fewest }: FailureWindow,
+): ObservationColumns {
+  const shares = emptyColumns();
+  let oldest = 0;
+  let failed = 0;
   for (let i = 0; i < times.length; i += 1) {
-    append(failed, times[i] ?? NaN, Number(qualities[i] === 'fail'), 'pass');
+    const at = times[i] ?? NaN;
+    if (qualities[i] === 'fail') failed += 1;
+    for (; (times[oldest] ?? NaN) <= at - windowMs; oldest += 1) {
+      if (qualities[oldest] === 'fail') failed -= 1;
+    }
+    append(shares, at, failed / Math.max(fewest, i + 1 - oldest), 'pass');
   }
-  return failed;
+  return shares;
 }
 
 /** A finished day's light. */

@@ -107,6 +107,12 @@ describe('an episode in words', () => {
       'Too short since 13:54: 28.3 units, wanted at least 26.',
     ],
     [
+      'lightShort',
+      'ppfd',
+      'A1 day is 2.3 units too short',
+      'Too short since 13:54: 28.3 units, wanted at least 26.',
+    ],
+    [
       'wetHours',
       'relativeHumidity',
       'A1 leaves have been wet for 28 h',

@@ -47,8 +47,15 @@ export interface EpisodeDescription {
  * @returns Title, sentence, advice and caution; in the past tense once it has ended.
  */
 export function describeEpisode(facts: EpisodeFacts): EpisodeDescription {
-  const { title, sentence } = wordsOf(facts);
-  return { title: `${facts.shelfLabel} ${title}`, sentence, ...adviceFor(facts.kind, facts.quantity) };
+  const quantity = toldQuantity(facts);
+  const { title, sentence } = wordsOf({ ...facts, quantity });
+  return { title: `${facts.shelfLabel} ${title}`, sentence, ...adviceFor(facts.kind, quantity) };
+}
+
+/** A light sensor's short day is told in hours, not in what the sensor measures. */
+function toldQuantity({ kind, quantity }: EpisodeFacts): AlertQuantity {
+  const isOfSensor = quantity === 'ppfd' || quantity === 'illuminance';
+  return kind === 'lightShort' && isOfSensor ? 'lightHours' : quantity;
 }
 
 interface Words {
