@@ -27,7 +27,7 @@ export function elapsedMs(text: string, unit: ElapsedUnit, parseNumber: NumberPa
 
 /** The unit of elapsed time that a header states, or null. */
 export function elapsedUnitOfHeader(header: string): Exclude<ElapsedUnit, 'clock'> | null {
-  const text = header.toLowerCase();
+  const text = header.trim().toLowerCase();
   const stated =
     /[([,_/\s-]\s*(s|sec|secs|seconds?|sek(?:unden)?|min|mins|minutes?|minuten|h|hrs?|hours?|stunden|d|days?|tage)\s*[)\]]?$/;
   const word = stated.exec(text)?.[1];

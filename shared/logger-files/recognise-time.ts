@@ -164,6 +164,14 @@ function recogniseCounted(
   return null;
 }
 
+const countedWords: Readonly<Record<ElapsedUnit, string>> = {
+  clock: 'time',
+  s: 'seconds',
+  min: 'minutes',
+  h: 'hours',
+  d: 'days',
+};
+
 function recogniseElapsed(
   table: SampleTable,
   header: readonly HeaderCell[],
@@ -183,8 +191,7 @@ function recogniseElapsed(
   const question: RecognitionQuestion = {
     code: 'ELAPSED_NEEDS_START',
     column: index,
-    message:
-      'The file counts time from a start that it does not state. When did the logger start (time zero)?',
+    message: `The file counts ${countedWords[unit]} from a start that it does not state. When did the logger start (time zero)?`,
     evidence: { first, last: table.rows.at(-1)?.cells[index] ?? '', unit },
   };
   return {
@@ -192,7 +199,7 @@ function recogniseElapsed(
     format: numericFormat('elapsed', context.zone, unit),
     order: 'ascending',
     questions: [question],
-    reason: 'The times count from the start of the logger.',
+    reason: `The times count ${countedWords[unit]} from the start of the logger.`,
   };
 }
 
