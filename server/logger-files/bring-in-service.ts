@@ -96,7 +96,11 @@ export class BringInService {
     return transactions.run(async (tx) => {
       await withoutTimeLimit(tx);
       const alertIds = await this.remove(tx, file);
-      await this.end(tx, file.id, 'takingOut', { status: 'takenOut', broughtInAt: null, deviceId: null });
+      await this.complete(tx, file.id, 'takingOut', {
+        status: 'takenOut',
+        broughtInAt: null,
+        deviceId: null,
+      });
       await this.note(tx, file, personId, 'logger-file.take-out');
       return alertIds;
     });
@@ -210,19 +214,19 @@ export class BringInService {
     fileId: string,
     from: RunningStatus,
     { result, readings }: FileOutcome,
-    change: Parameters<LoggerFileStore['end']>[3],
+    change: Parameters<LoggerFileStore['complete']>[3],
   ): Promise<void> {
     await this.parts.store.keepRejections(tx, fileId, readings.rejections);
-    await this.end(tx, fileId, from, { ...change, result });
+    await this.complete(tx, fileId, from, { ...change, result });
   }
 
-  private async end(
+  private async complete(
     tx: Tx,
     fileId: string,
     from: RunningStatus,
-    change: Parameters<LoggerFileStore['end']>[3],
+    change: Parameters<LoggerFileStore['complete']>[3],
   ): Promise<void> {
-    if (!(await this.parts.store.end(tx, fileId, from, change))) throw new WorkCancelled();
+    if (!(await this.parts.store.complete(tx, fileId, from, change))) throw new WorkCancelled();
   }
 
   private note(

@@ -1,5 +1,6 @@
 import type { FileFailure } from '@shared/contracts/logger-files';
-import { conflict, RequestProblem } from '../http/request-problem';
+import type { LoggerFileShape } from '@shared/logger-files/logger-file-shape';
+import { conflict, invalidField, RequestProblem } from '../http/request-problem';
 import type { LoggerFileEntity } from './logger-file-entity';
 import { runningStatuses } from './logger-file-store';
 
@@ -44,11 +45,32 @@ export function requireMatched({
   if (Object.keys(matches).length === 0) {
     throw new RequestProblem(422, 'NOTHING_MATCHED', 'Say first which sensor the file’s readings belong to.');
   }
-  if (shape.timeFormat.kind === 'elapsed' && startsAt === null) {
-    throw new RequestProblem(
-      422,
-      'START_REQUIRED',
-      'The file counts time from its start: say when that was.',
-    );
-  }
+  requireStart(shape, startsAt);
+}
+
+/**
+ * Refuses a start for a file that has instants of its own: one of the two would be wrong.
+ *
+ * @param path - Of the field.
+ * @throws RequestProblem 422.
+ */
+export function refuseNeedlessStart({ timeFormat }: LoggerFileShape, path: string): void {
+  if (timeFormat.kind === 'elapsed') return;
+  throw invalidField(path, 'is only for files that count time from a start; this one tells its own times');
+}
+
+/**
+ * Refuses to read a file whose time has no beginning.
+ *
+ * @param path - Of the field that may say it in this request, where there is one.
+ * @throws RequestProblem 422.
+ */
+export function requireStart({ timeFormat }: LoggerFileShape, startsAt: Date | null, path?: string): void {
+  if (timeFormat.kind !== 'elapsed' || startsAt !== null) return;
+  throw new RequestProblem(
+    422,
+    'START_REQUIRED',
+    'The file counts time from its start: say when that was.',
+    path === undefined ? [] : [{ path, message: 'is needed for this file' }],
+  );
 }

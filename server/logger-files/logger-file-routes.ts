@@ -31,8 +31,9 @@ export function loggerFileRoutes(files: LoggerFileService, maxBytes: number): Ro
     route(contract.importLoggerFile, async (context) => {
       const { room, query } = context;
       const by = authorOf(context);
+      const startsAt = query.startsAt === undefined ? null : new Date(query.startsAt);
       const fileId = await receive(context, (name, bytes) =>
-        files.upload(by, { name, bytes, zone: room.timeZone }, query.profile),
+        files.upload(by, { name, bytes, zone: room.timeZone }, { profileName: query.profile, startsAt }),
       );
       return files.bringInNow(by, fileId, query.differing);
     }),

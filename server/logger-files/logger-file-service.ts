@@ -21,7 +21,13 @@ import type { Transactions, Tx } from '../database/transactions';
 import type { Cursor } from '../http/cursor';
 import { conflict, notFound, RequestProblem } from '../http/request-problem';
 import { fileDetail } from './file-detail';
-import { fileProblem, requireAtRest, requireMatched } from './file-problems';
+import {
+  fileProblem,
+  refuseNeedlessStart,
+  requireAtRest,
+  requireMatched,
+  requireStart,
+} from './file-problems';
 import { changedMatches, correctedShape, shapeByProfile, type MatchRequest } from './file-matching';
 import type { FileSensors } from './file-sensors';
 import { contentOf, headOf, keepContent } from './logger-file-content';
@@ -50,6 +56,13 @@ export interface Upload {
   readonly zone: string;
 }
 
+/** How a script wants its file to be read. */
+export interface ScriptedReading {
+  readonly profileName: string;
+  /** When elapsed time began; null for a file with instants. */
+  readonly startsAt: Date | null;
+}
+
 const REJECTIONS_PAGE = 200;
 
 /** Logger files from upload to removal; the work on whole files is the runner's. */
@@ -59,10 +72,17 @@ export class LoggerFileService {
   /**
    * Receives a file: recognises it by its first part and keeps it. If one like it was read before, it is matched alike.
    *
+   * @param by - Who, in which room.
+   * @param upload - The file.
+   * @param scripted - How it is to be read, where nobody can be asked.
    * @returns The file's id.
    * @throws RequestProblem 422 where the file can't be brought in; nothing of it is kept.
    */
-  async upload(by: RoomAuthor, { name, bytes, zone }: Upload, profileName?: string): Promise<string> {
+  async upload(
+    by: RoomAuthor,
+    { name, bytes, zone }: Upload,
+    scripted: ScriptedReading | null = null,
+  ): Promise<string> {
     const { transactions, store, profiles } = this.parts;
     return transactions.run(async (tx) => {
       await tx.query('SET LOCAL statement_timeout = 0');
@@ -70,13 +90,18 @@ export class LoggerFileService {
       const { shape } = this.recognise(head, zone);
       const fingerprint = shapeFingerprint(shape);
       const known = await profiles.list(tx, by.roomId, fingerprint);
-      const profile = known.find(({ name: its }) => profileName === undefined || its === profileName);
-      if (profile === undefined && profileName !== undefined) throw misfit();
+      const profile = known.find(({ name: its }) => scripted === null || its === scripted.profileName);
+      if (scripted !== null) {
+        if (profile === undefined) throw misfit();
+        if (scripted.startsAt !== null) refuseNeedlessStart(shape, 'query.startsAt');
+        requireStart(shape, scripted.startsAt, 'query.startsAt');
+      }
       const fileId = await store.add(tx, {
         roomId: by.roomId,
         personId: by.personId,
         name,
         shape: profile === undefined ? shape : shapeByProfile(profile.shape, shape),
+        startsAt: scripted?.startsAt ?? null,
         fingerprint,
         matches: profile === undefined ? {} : await this.standingMatches(tx, by.roomId, profile),
         profileId: profile?.id ?? null,
@@ -152,6 +177,7 @@ export class LoggerFileService {
           shelfIds: await sensors.shelvesOf(tx, by.roomId, shelfIds),
         },
       );
+      if (request.startsAt !== undefined) refuseNeedlessStart(shape, 'body.startsAt');
       const startsAt = request.startsAt === undefined ? file.startsAt : new Date(request.startsAt);
       // A file that goes elsewhere than its profile says is to have one of its own.
       const keptProfile =

@@ -15,10 +15,10 @@ export type RunningStatus = (typeof runningStatuses)[number];
 /** A new row needs no more than this; the rest has defaults. */
 export type NewLoggerFile = Pick<
   LoggerFileEntity,
-  'roomId' | 'personId' | 'name' | 'shape' | 'fingerprint' | 'matches' | 'profileId'
+  'roomId' | 'personId' | 'name' | 'shape' | 'startsAt' | 'fingerprint' | 'matches' | 'profileId'
 >;
 
-const listColumns = `f.id, f.room_id, f.name, f.byte_size, f.uploaded_at, f.status, f.bytes_done, f.failure, f.result, f.differing,
+const listColumns = `f.id, f.room_id, f.name, f.byte_size, f.uploaded_at, f.status, f.bytes_done, f.is_cancelled, f.failure, f.result, f.differing,
   f.brought_in_at, uploader.name AS uploaded_by_name, bringer.name AS brought_in_by_name, profile.name AS profile_name`;
 const listTables = `logger_file f
   LEFT JOIN person uploader ON uploader.id = f.person_id
@@ -33,6 +33,7 @@ interface ListRow {
   uploaded_at: Date;
   status: LoggerFileStatus;
   bytes_done: string;
+  is_cancelled: boolean;
   failure: FileFailure | null;
   result: LoggerFileResult | null;
   differing: LoggerFile['differing'];
@@ -131,7 +132,23 @@ export class LoggerFileStore {
   }
 
   /**
-   * Ends work on a file.
+   * Ends work that came to its end.
+   *
+   * @returns Whether that counts; false when somebody wanted it to stop, or when others have declared it dead.
+   */
+  async complete(
+    tx: Tx,
+    fileId: string,
+    from: RunningStatus,
+    change: Partial<LoggerFileEntity> & { readonly status: LoggerFileStatus },
+  ): Promise<boolean> {
+    const stillWanted = { id: fileId, status: from, isCancelled: false };
+    const { affected } = await tx.update(LoggerFileEntity, stillWanted, change);
+    return affected === 1;
+  }
+
+  /**
+   * Ends work that was given up.
    *
    * @returns Whether it was still in that state; false when others have declared it dead.
    */
@@ -248,6 +265,7 @@ function listedFile(row: ListRow): LoggerFile {
     uploadedByName: row.uploaded_by_name,
     status: row.status,
     progress: isRunning ? { done: Number(row.bytes_done), total: Number(row.byte_size) } : null,
+    isStopping: isRunning && row.is_cancelled,
     failure: row.failure,
     result: row.result,
     differing: row.differing,

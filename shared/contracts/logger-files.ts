@@ -50,6 +50,8 @@ export const loggerFile = z.object({
   status: z.enum(loggerFileStatuses),
   /** Bytes read of bytes in all, while checking or bringing in. */
   progress: z.object({ done: z.number(), total: z.number() }).nullable(),
+  /** Somebody wants the work in hand to stop; it does at its next step. */
+  isStopping: z.boolean(),
   failure: fileFailure.nullable(),
   result: loggerFileResult.nullable(),
   /** What was done where another value was held. */
@@ -303,6 +305,9 @@ export const importLoggerFile = endpoint({
   query: z.object({
     profile: line(80),
     differing: differingChoice.default('keep'),
+    startsAt: instant
+      .optional()
+      .describe('When the logger was started; for files that count time from there, and only for those'),
   }),
   reply: loggerFile,
   status: 201,

@@ -1,25 +1,9 @@
-import { setTimeout as sleep } from 'node:timers/promises';
-import type { LoggerFile, LoggerFileDetail } from '@shared/contracts/logger-files';
 import type { Problem } from '@shared/contracts/problem';
 import { aDevice, aPlacement, aSensor } from '../builders/devices';
 import { aShelf } from '../builders/rooms';
+import { fileOf, fileRoad, fileStart, fileStep, type FileRoad } from './file-road';
 import { aStaffedRoom, type StaffedRoom } from './room-callers';
 import { startTestApplication, type TestApplication } from './test-application';
-
-const start = Date.UTC(2026, 3, 1);
-const step = 300_000;
-
-/** An invented file of a thermometer and hygrometer, five minutes apart. */
-function fileOf(
-  rows: number,
-  change: (row: number) => Partial<{ t: string; rh: string }> = () => ({}),
-): string {
-  const lines = Array.from({ length: rows }, (_, row) => {
-    const { t = (21 + (row % 7) / 10).toFixed(1), rh = String(60 + (row % 5)) } = change(row);
-    return `${new Date(start + row * step).toISOString()},${t},${rh}`;
-  });
-  return ['time,temperature (°C),humidity (%)', ...lines, ''].join('\n');
-}
 
 describe('logger files over HTTP', () => {
   let application: TestApplication;
@@ -44,27 +28,9 @@ describe('logger files over HTTP', () => {
     return { temperature: temperature.id, humidity: humidity.id, shelfId: shelf.id };
   }
 
-  async function uploaded(content: string | Buffer, name = 'shelf.csv'): Promise<LoggerFileDetail> {
-    const reply = await staff.grower
-      .call('post', `${staff.path}/logger-files`)
-      .attach('file', Buffer.from(content), name)
-      .expect(201);
-    return reply.body as LoggerFileDetail;
-  }
-
-  async function matched(file: LoggerFileDetail, sensorIds: readonly string[]): Promise<LoggerFileDetail> {
-    const series = file.series.map(({ key }, index) => ({ key, sensorId: sensorIds[index] ?? null }));
-    const reply = await staff.grower
-      .put(`${staff.path}/logger-files/${file.id}/matches`, { series })
-      .expect(200);
-    return reply.body as LoggerFileDetail;
-  }
-
-  async function done(fileId: string, deed: string, body: object = {}): Promise<LoggerFile> {
-    await staff.grower.post(`${staff.path}/logger-files/${fileId}/${deed}`, body).expect(202);
-    await application.app.services.loggerFiles.settled();
-    return (await staff.viewer.get(`${staff.path}/logger-files/${fileId}`).expect(200)).body as LoggerFile;
-  }
+  const uploaded: FileRoad['uploaded'] = (...of) => fileRoad(application, staff).uploaded(...of);
+  const matched: FileRoad['matched'] = (...of) => fileRoad(application, staff).matched(...of);
+  const done: FileRoad['done'] = (...of) => fileRoad(application, staff).done(...of);
 
   async function readingsOf(sensorId: string): Promise<{ at: Date; value: number; flags: number }[]> {
     return application.tx.query('SELECT at, value, flags FROM reading WHERE sensor_id = $1 ORDER BY at', [
@@ -99,7 +65,7 @@ describe('logger files over HTTP', () => {
       ...[498, 499, 500, 501].map((line) => `last ${line}`),
     ]);
     expect(file.preview[0]).toMatchObject({ at: '2026-04-01T00:00:00.000Z', values: { 1: 21, 2: 60 } });
-    expect(file.preview.at(-1)).toMatchObject({ at: new Date(start + 499 * step).toISOString() });
+    expect(file.preview.at(-1)).toMatchObject({ at: new Date(fileStart + 499 * fileStep).toISOString() });
 
     await matched(file, [sensors.temperature, sensors.humidity]);
     const checked = await done(file.id, 'check');
@@ -264,6 +230,41 @@ describe('logger files over HTTP', () => {
     await staff.grower.delete(`${staff.path}/logger-file-profiles/${own?.id}`).expect(204);
   });
 
+  it('that count time from a start come in by one request that says when that was', async () => {
+    const sensors = await shelfSensors();
+    const counting = 'Elapsed (min),Temperature (°C)\n0,20.5\n5,20.6\n10,20.7\n';
+    const file = await uploaded(counting, 'counting.csv');
+    expect(file.questions.map(({ code }) => code)).toContain('ELAPSED_NEEDS_START');
+    const matches = `${staff.path}/logger-files/${file.id}/matches`;
+    const series = [{ key: file.series[0]?.key, sensorId: sensors.temperature }];
+    await staff.grower.put(matches, { series, saveAs: 'Counting logger' }).expect(200);
+    const send = (startsAt: string | undefined, content = counting, profile = 'Counting logger') =>
+      staff.grower
+        .call('post', `${staff.path}/logger-files/bring-in`)
+        .query({ profile, startsAt })
+        .attach('file', Buffer.from(content), 'script.csv');
+
+    const missing = problemOf(await send(undefined).expect(422));
+    expect(missing).toMatchObject({ code: 'START_REQUIRED', errors: [{ path: 'query.startsAt' }] });
+    expect(problemOf(await send('this morning').expect(422)).errors).toMatchObject([
+      { path: 'query.startsAt' },
+    ]);
+
+    await send('2026-04-02T09:00:00+01:00').expect(201);
+    const ats = (await readingsOf(sensors.temperature)).map(({ at }) => at.toISOString());
+    expect(ats).toEqual(['2026-04-02T08:00:00.000Z', '2026-04-02T08:05:00.000Z', '2026-04-02T08:10:00.000Z']);
+
+    // Where the file tells its own times, a start can only be a mistake.
+    const dated = await uploaded(fileOf(3), 'dated.csv');
+    const own = `${staff.path}/logger-files/${dated.id}/matches`;
+    const only = [{ key: dated.series[0]?.key, sensorId: sensors.temperature }];
+    await staff.grower.put(own, { series: only, saveAs: 'Dated logger' }).expect(200);
+    const needless = await send('2026-04-02T09:00:00Z', fileOf(3), 'Dated logger').expect(422);
+    expect(problemOf(needless).errors).toMatchObject([{ path: 'query.startsAt' }]);
+    const said = await staff.grower.put(own, { startsAt: '2026-04-02T09:00:00Z' }).expect(422);
+    expect(problemOf(said).errors).toMatchObject([{ path: 'body.startsAt' }]);
+  });
+
   it('are refused with a reason and a place, and nothing of them is kept', async () => {
     const count = async (): Promise<number> => {
       const rows: { count: string }[] = await application.tx.query('SELECT count(*) FROM logger_file_part');
@@ -321,8 +322,8 @@ describe('logger files over HTTP', () => {
       expect(body).toMatchObject({ status: 'failed', failure: { code: 'SERVER_STOPPED' } });
       expect((await staff.viewer.get(path)).body).toMatchObject({ status: 'bringingIn' });
 
-      await staff.grower.post(`${path}/cancel`).expect(200);
-      await sleep(300); // Progress, and with it the wish to stop, is looked at four times a second.
+      const { body: stopping } = await staff.grower.post(`${path}/cancel`).expect(200);
+      expect(stopping).toMatchObject({ status: 'bringingIn', isStopping: true });
     });
     await loggerFiles.settled();
     expect((await staff.viewer.get(path)).body).toMatchObject({ status: 'cancelled', result: null });

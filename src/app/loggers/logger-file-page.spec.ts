@@ -175,7 +175,12 @@ describe('a logger file on its way in', () => {
     await harness.fixture.whenStable();
     expect(step()).toBe('Bring in');
     await press('Stop');
-    server.expectOne(`${file}/cancel`).flush(loggerFile({ status: 'cancelled' }));
+    const working = { status: 'bringingIn', result, isStopping: true } as const;
+    server.expectOne(`${file}/cancel`).flush(loggerFile(working));
+    await harness.fixture.whenStable();
+    expect(page.querySelector('app-file-progress [role=status]')?.textContent).toContain('Stopping');
+    expect(page.querySelector<HTMLButtonElement>('app-file-progress button')?.disabled).toBe(true);
+    socket.tell('loggerFile:changed', loggerFile({ status: 'cancelled' }));
     await harness.fixture.whenStable();
     expect(page.textContent).toContain('Nothing was stored');
     expect(step()).toBe('Match columns');

@@ -16,7 +16,9 @@ import { sizeWords } from '../file-words';
       />
       <p class="read" role="status">{{ words() }}</p>
       @if (mayCancel()) {
-        <button matButton="outlined" type="button" (click)="cancelChosen.emit()">Stop</button>
+        <button matButton="outlined" type="button" [disabled]="isStopping()" (click)="cancelChosen.emit()">
+          Stop
+        </button>
       }
     </section>
   `,
@@ -53,6 +55,8 @@ export class FileProgress {
   /** Bytes done of bytes in all; null before the first is told. */
   readonly progress = input.required<{ readonly done: number; readonly total: number } | null>();
   readonly mayCancel = input.required<boolean>();
+  /** Whether somebody has said that it should stop. */
+  readonly isStopping = input(false);
   readonly cancelChosen = output();
 
   protected readonly percent = computed(() => {
@@ -61,6 +65,7 @@ export class FileProgress {
     return Math.floor((100 * progress.done) / progress.total);
   });
   protected readonly words = computed(() => {
+    if (this.isStopping()) return 'Stopping. Nothing is stored.';
     const [progress, percent] = [this.progress(), this.percent()];
     if (progress === null || percent === null) return 'About to begin';
     return `${percent} % of ${sizeWords(progress.total)}`;

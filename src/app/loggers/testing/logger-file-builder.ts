@@ -18,6 +18,7 @@ export function loggerFile(changes: Partial<LoggerFile> = {}): LoggerFile {
     uploadedByName: 'Maren Oxley',
     status: 'uploaded',
     progress: null,
+    isStopping: false,
     failure: null,
     result: null,
     differing: null,
