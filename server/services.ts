@@ -28,6 +28,7 @@ import { DeviceIntakeStore } from './devices/device-intake-store';
 import { devicesRoutes } from './devices/devices-routes';
 import { DevicesService } from './devices/devices-service';
 import { DevicesStore } from './devices/devices-store';
+import { growingServices } from './growing-services';
 import type { AccessLookup } from './http/access';
 import type { Route } from './http/route';
 import type { LiveRelay } from './live/live-relay';
@@ -112,6 +113,8 @@ export function composeServices(foundation: Foundation): Services {
   const peopleStore = new PeopleStore();
   const attempts = new SignInAttempts(transactions);
   const people = new PeopleService(transactions, peopleStore, attempts, audit);
+
+  const growing = growingServices({ transactions, changes, now });
 
   const plansStore = new ShelfPlansStore();
   const plans = new ShelfPlansService(plansStore);
@@ -253,6 +256,7 @@ export function composeServices(foundation: Foundation): Services {
       ...alertRoutes(alerts, answering),
       ...loggerFileRoutes(loggerFiles.files, config.uploadMaxBytes),
       ...careRoutes(care),
+      ...growing.routes,
       ...scenariosRoutes(scenarios),
     ],
     accessLookup: {

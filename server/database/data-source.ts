@@ -9,6 +9,8 @@ import { AuditEntryEntity } from '../audit/audit-entry-entity';
 import { RoutineEntity } from '../care/routine-entity';
 import { ShelfEventEntity } from '../care/shelf-event-entity';
 import { TaskEntity } from '../care/task-entity';
+import { RoomCropEntity } from '../crops/room-crop-entity';
+import { VarietyEntity } from '../crops/variety-entity';
 import { DeviceEntity } from '../devices/device-entity';
 import { PlacementEntity } from '../devices/placement-entity';
 import { SensorEntity } from '../devices/sensor-entity';
@@ -65,6 +67,7 @@ const entities = [
   PlantingEntity,
   RackEntity,
   ReadingEntity,
+  RoomCropEntity,
   RoomEntity,
   RoomEscalationEntity,
   RoutineEntity,
@@ -75,6 +78,7 @@ const entities = [
   ComputedHourlySummaryEntity,
   TaskEntity,
   ToldAlertEntity,
+  VarietyEntity,
   WantedRangeEntity,
 ];
 

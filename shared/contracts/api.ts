@@ -3,6 +3,7 @@ import * as alertAnswers from './alert-answers';
 import * as alerts from './alerts';
 import * as board from './board';
 import * as care from './care';
+import * as crops from './crops';
 import * as devices from './devices';
 import * as loggerFileProfiles from './logger-file-profiles';
 import * as loggerFiles from './logger-files';
@@ -84,6 +85,15 @@ export const endpoints: readonly Endpoint[] = [
   care.listRoutines,
   care.addRoutine,
   care.addShelfEvent,
+  crops.listCrops,
+  crops.getCrop,
+  crops.copyCrop,
+  crops.changeCrop,
+  crops.retireCrop,
+  crops.listVarieties,
+  crops.addVariety,
+  crops.changeVariety,
+  crops.removeVariety,
   scenarios.listScenarios,
   scenarios.startScenario,
   scenarios.stopScenario,

@@ -6,6 +6,7 @@ import type { Problem } from '@shared/contracts/problem';
 import { anAlert, anAlertDeed } from '../builders/alerts';
 import { aTask } from '../builders/care';
 import { aRoomCrop, aVariety } from '../builders/crops';
+import { aRoomCrop, aVariety } from '../builders/crops';
 import { aDevice, aSensor } from '../builders/devices';
 import { aFileProfile, aLoggerFile } from '../builders/logger-files';
 import { aMember, aPerson } from '../builders/people';
@@ -114,6 +115,8 @@ describe('access', () => {
         deedId: (await anAlertDeed(tx, { alertId: alert.id })).id,
         taskId: (await aTask(tx, { roomId })).id,
         fileId: (await aLoggerFile(tx, { roomId })).id,
+        cropId: (await aRoomCrop(tx, { roomId })).id,
+        varietyId: (await aVariety(tx, { roomId })).id,
         cropId: (await aRoomCrop(tx, { roomId })).id,
         varietyId: (await aVariety(tx, { roomId })).id,
         profileId: (await aFileProfile(tx, { roomId })).id,

@@ -10,6 +10,7 @@ import { CreateRequestCounters1764551600000 } from './1764551600000-create-reque
 import { CreateSocketAttachments1764551700000 } from './1764551700000-create-socket-attachments';
 import { TellPeopleByChoice1764551800000 } from './1764551800000-tell-people-by-choice';
 import { AnswerAlerts1764552100000 } from './1764552100000-answer-alerts';
+import { CreateCrops1764552400000 } from './1764552400000-create-crops';
 
 /** Every migration in order; a merged one is never edited. */
 export const migrations = [
@@ -25,4 +26,5 @@ export const migrations = [
   CreateSocketAttachments1764551700000,
   TellPeopleByChoice1764551800000,
   AnswerAlerts1764552100000,
+  CreateCrops1764552400000,
 ];
