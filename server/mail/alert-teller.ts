@@ -7,6 +7,8 @@ import type { AlertOfRoom, Recipient, RoomOfMail, Telling, TellingStore, Told } 
 /** Finds the alerts by id, for whoever tells of them. */
 export interface AlertFinder {
   byIds(tx: Tx, alertIds: readonly string[]): Promise<AlertOfRoom[]>;
+  /** Which of some nobody is to be written to about, because somebody said so. */
+  quietAmong(tx: Tx, alertIds: readonly string[], now: number): Promise<ReadonlySet<string>>;
 }
 
 /** What telling of alerts needs. */
@@ -21,7 +23,10 @@ export interface TellerParts {
 
 const COLLECT_MS = 60_000;
 
-/** Writes mails about alerts into the outbox, in the transaction that changes the alerts. */
+/**
+ * Writes mails about alerts into the outbox, in the transaction that changes the alerts. About those that are quiet it
+ * writes nothing; who follows them up finds what is still open afterwards.
+ */
 export class MailAlertTeller implements AlertTeller {
   private readonly collectMs: number;
 
@@ -42,7 +47,7 @@ export class MailAlertTeller implements AlertTeller {
   }
 
   async tellOpened(tx: Tx, alertIds: readonly string[], now: number): Promise<void> {
-    await this.eachRoom(tx, alertIds, async (alerts, room) => {
+    await this.eachRoom(tx, alertIds, now, async (alerts, room) => {
       for (const recipient of await this.onDuty(tx, room.id, now)) {
         const due = alerts.flatMap((alert) => {
           const at = mailDueAt(recipient.mails, alert.urgency, now, room.timeZone);
@@ -63,7 +68,7 @@ export class MailAlertTeller implements AlertTeller {
   }
 
   async tellCleared(tx: Tx, alertIds: readonly string[], now: number): Promise<void> {
-    await this.eachRoom(tx, alertIds, async (alerts, room) => {
+    await this.eachRoom(tx, alertIds, now, async (alerts, room) => {
       const cleared = alerts.filter(({ clearedAt, toldAt }) => clearedAt !== null && toldAt !== null);
       if (cleared.length === 0) return;
       const told = await this.parts.tellings.told(
@@ -85,7 +90,7 @@ export class MailAlertTeller implements AlertTeller {
 
   /** Tells of alerts that have become urgent since they were told, through quiet hours that held them back. */
   async tellUrgent(tx: Tx, alertIds: readonly string[], now: number): Promise<void> {
-    await this.eachRoom(tx, alertIds, async (alerts, room) => {
+    await this.eachRoom(tx, alertIds, now, async (alerts, room) => {
       const told = await this.parts.tellings.told(tx, alertIds);
       for (const recipient of await this.onDuty(tx, room.id, now)) {
         if (recipient.mails.goNow !== 'atOnce') continue;
@@ -111,7 +116,7 @@ export class MailAlertTeller implements AlertTeller {
 
   /** Tells keepers of alerts that nobody has acknowledged: those who have had no mail about it, else all again. */
   async tellUnseen(tx: Tx, alertIds: readonly string[], now: number): Promise<void> {
-    await this.eachRoom(tx, alertIds, async (alerts, room) => {
+    await this.eachRoom(tx, alertIds, now, async (alerts, room) => {
       const told = await this.parts.tellings.told(tx, alertIds);
       const recipients = await this.parts.tellings.recipients(tx, room.id);
       const keepers = recipients.filter(({ role }) => role === 'keeper');
@@ -152,9 +157,14 @@ export class MailAlertTeller implements AlertTeller {
   private async eachRoom(
     tx: Tx,
     alertIds: readonly string[],
+    now: number,
     tell: (alerts: AlertOfRoom[], room: RoomOfMail) => Promise<void>,
   ): Promise<void> {
-    const alerts = await this.parts.alerts.byIds(tx, alertIds);
+    const quiet = await this.parts.alerts.quietAmong(tx, alertIds, now);
+    const alerts = await this.parts.alerts.byIds(
+      tx,
+      alertIds.filter((id) => !quiet.has(id)),
+    );
     // Always in the same order, so that two transactions never wait for each other's rooms.
     for (const roomId of [...new Set(alerts.map((alert) => alert.roomId))].sort()) {
       await this.parts.tellings.holdRoom(tx, roomId);

@@ -7,12 +7,12 @@ import type { TellingStore } from './telling-store';
 /** After how many minutes without acknowledgement keepers are written to, in rooms that set nothing else. */
 export const usualEscalationMinutes: Readonly<Record<Urgency, number>> = { goNow: 60, lookToday: 240 };
 
-/** Lets the clock find alerts that nobody has seen to, and those that have become urgent. */
+/** Lets the clock find alerts that nobody has seen to, those that have become urgent, and those that are quiet no more. */
 export class EscalationJob {
   constructor(
     private readonly transactions: Transactions,
     private readonly tellings: TellingStore,
-    private readonly teller: Pick<MailAlertTeller, 'tellUrgent' | 'tellUnseen'>,
+    private readonly teller: Pick<MailAlertTeller, 'tellOpened' | 'tellUrgent' | 'tellUnseen'>,
     private readonly now: Clock,
   ) {}
 
@@ -20,6 +20,7 @@ export class EscalationJob {
   async run(): Promise<void> {
     const now = this.now();
     await this.transactions.run(async (tx) => {
+      await this.teller.tellOpened(tx, await this.tellings.unheardAfterQuiet(tx, now), now.getTime());
       await this.teller.tellUrgent(tx, await this.tellings.becameUrgent(tx), now.getTime());
       const unseen = await this.tellings.unseen(tx, now, usualEscalationMinutes);
       await this.teller.tellUnseen(tx, unseen, now.getTime());

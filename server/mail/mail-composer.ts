@@ -55,7 +55,12 @@ export class MailComposer {
     const recipient = await tellings.recipient(tx, mail.roomId, mail.personId);
     if (room === null || recipient === null) return null;
     const found = await alerts.byIds(tx, await tellings.alertsOf(tx, mail.messageId));
-    const wanted = found.filter(({ urgency }) => recipient.mails[urgency] !== 'never');
+    const quiet = await alerts.quietAmong(
+      tx,
+      found.map(({ id }) => id),
+      now,
+    );
+    const wanted = found.filter(({ id, urgency }) => recipient.mails[urgency] !== 'never' && !quiet.has(id));
     const told = (await this.worthTelling(tx, mail, wanted)).sort(byUrgency);
     if (told.length === 0) return null;
     await tellings.keepOnly(

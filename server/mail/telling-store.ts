@@ -63,6 +63,12 @@ const recipientColumns = `membership.person_id AS "personId", person.name, perso
   person.temperature_unit AS "temperatureUnit", membership.role, ${mailChoiceColumns} AS mails
   FROM membership JOIN person ON person.id = membership.person_id`;
 
+/** When the last quiet about an `alert` ends, or was ended; null when there was none. */
+const quietAboutAlert = `
+  SELECT max(coalesce(ended_at, until)) AS ends_at FROM alert_quiet
+  WHERE alert_quiet.shelf_id = alert.shelf_id AND alert_quiet.quantity = alert.quantity
+    AND alert_quiet.kind = alert.kind`;
+
 /** Queries over who is to be told, and who was told of what. */
 export class TellingStore {
   /** Lets one transaction at a time write mails about a room, so that what belongs together finds together. */
@@ -233,9 +239,24 @@ export class TellingStore {
     return rows.map(({ id }) => id);
   }
 
+  /** Open alerts that a quiet kept everybody from being told of, and that are quiet no more. */
+  async unheardAfterQuiet(tx: Tx, now: Date): Promise<string[]> {
+    const rows: { id: string }[] = await tx.query(
+      `SELECT alert.id
+       FROM alert
+       CROSS JOIN LATERAL (${quietAboutAlert}) AS quiet
+       WHERE alert.cleared_at IS NULL AND alert.told_at IS NOT NULL AND alert.acknowledged_at IS NULL
+         AND quiet.ends_at > alert.told_at AND quiet.ends_at <= $1
+         AND NOT EXISTS (SELECT 1 FROM told_alert AS told WHERE told.alert_id = alert.id)
+       ORDER BY alert.opened_at`,
+      [now],
+    );
+    return rows.map(({ id }) => id);
+  }
+
   /**
    * Open alerts that nobody has acknowledged in the time that their room sets, counted from the first mail about them
-   * that was sent or refused, or from when the letter took them; and not escalated yet.
+   * that was sent or refused, or from when the letter took them, but not while they are quiet; and not escalated yet.
    *
    * @param usual - Minutes by urgency for rooms that set none.
    */
@@ -256,8 +277,10 @@ export class TellingStore {
                 coalesce(bool_or(told.reason = 'escalated'), false) AS is_escalated
          FROM told_alert AS told JOIN mail ON mail.message_id = told.message_id WHERE told.alert_id = alert.id
        ) AS telling
+       CROSS JOIN LATERAL (${quietAboutAlert}) AS quiet
        WHERE alert.cleared_at IS NULL AND alert.told_at IS NOT NULL AND alert.acknowledged_at IS NULL
-         AND NOT telling.is_escalated AND telling.since + make_interval(mins => waiting.minutes) <= $1
+         AND NOT telling.is_escalated AND telling.since IS NOT NULL
+         AND greatest(telling.since, quiet.ends_at) + make_interval(mins => waiting.minutes) <= $1
        ORDER BY alert.opened_at`,
       [now, usual.goNow, usual.lookToday],
     );
