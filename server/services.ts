@@ -126,7 +126,7 @@ export function composeServices(foundation: Foundation): Services {
   const mailDomain = domainOf(config.mailFrom);
   const teller = new MailAlertTeller({ alerts: alertStore, tellings, mailDomain });
   const road = intakeParts(transactions, plans, teller);
-  const hooks = new HistoryUpkeepService(road.readings, road.lateReadings, road.computed, alertStore, now);
+  const hooks = new HistoryUpkeepService({ ...road, alerts: alertStore, now });
 
   const roomsStore = new RoomsStore();
   const rooms = new RoomsService({ transactions, rooms: roomsStore, changes, hooks, now });
@@ -166,8 +166,6 @@ export function composeServices(foundation: Foundation): Services {
   const loggerFiles = loggerFileParts({
     transactions,
     road,
-    alertStore,
-    plans,
     audit,
     feed: relay,
     publishAlerts: (alertIds) => alerts.publishChanged(alertIds),

@@ -24,5 +24,9 @@ export function devicesRoutes(devices: DevicesService): Route[] {
       const { shelfId, from } = context.body;
       return devices.place(authorOf(context), context.params.sensorId, { shelfId, from: new Date(from) });
     }),
+    route(contract.placeSensorEarlier, (context) => {
+      const since = new Date(context.body.since);
+      return devices.placeEarlier(authorOf(context), context.params.sensorId, since);
+    }),
   ];
 }

@@ -14,6 +14,8 @@ import type { DevicesStore, NewSensor } from './devices-store';
 export interface DeviceHooks {
   /** From an instant on the sensor is on another shelf, or on none; called in the transaction of the change. */
   onPlacementsChanged(tx: Tx, sensorId: string, from: Date): Promise<void>;
+  /** The sensor was on its first shelf over this span [ms] already; called in the transaction of the change. */
+  onPlacedEarlier(tx: Tx, sensorId: string, span: { from: number; to: number }): Promise<void>;
 }
 
 /** What {@link DevicesService} works with. */
@@ -137,6 +139,35 @@ export class DevicesService {
       const result = await devices.sensor(tx, by.roomId, sensorId);
       const detail = { shelfId, from: from.toISOString() };
       return { result, action: 'sensor.place', subjectId: sensorId, detail };
+    });
+  }
+
+  /**
+   * Says that a sensor was on its first shelf earlier than was known. Only time in which it was on no shelf changes hands,
+   * so nothing that any shelf shows is taken away; where it was in between, nobody has said, and nobody guesses.
+   *
+   * @param by - Who says so.
+   * @param sensorId - Which sensor.
+   * @param since - Since when; what is known already changes nothing.
+   * @returns The sensor as it is placed now.
+   * @throws {@link RequestProblem} 404 for a sensor of another room, 409 `NEVER_PLACED` for one without a shelf, 422 for
+   *   an instant after its first.
+   */
+  async placeEarlier(by: RoomAuthor, sensorId: string, since: Date): Promise<Sensor> {
+    const { devices, hooks } = this.parts;
+    return this.parts.changes.make(by, async (tx) => {
+      await devices.lockSensor(tx, by.roomId, sensorId);
+      const first = await devices.firstPlacement(tx, sensorId);
+      if (first === null) throw conflict('NEVER_PLACED', 'The sensor was never put on a shelf.');
+      if (since > first.fromAt)
+        throw invalidField('body.since', 'is after the sensor was put on its first shelf');
+      if (since < first.fromAt) {
+        await devices.beginPlacement(tx, first.id, since);
+        await hooks.onPlacedEarlier(tx, sensorId, { from: since.getTime(), to: first.fromAt.getTime() - 1 });
+      }
+      const result = await devices.sensor(tx, by.roomId, sensorId);
+      const detail = { shelfId: first.shelfId, since: since.toISOString(), was: first.fromAt.toISOString() };
+      return { result, action: 'sensor.place-earlier', subjectId: sensorId, detail };
     });
   }
 

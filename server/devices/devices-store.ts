@@ -124,9 +124,19 @@ export class DevicesStore {
     return tx.findOne(PlacementEntity, { where: { sensorId }, order: { fromAt: 'DESC' } });
   }
 
+  /** The first placement of a sensor, or null. */
+  firstPlacement(tx: Tx, sensorId: string): Promise<PlacementEntity | null> {
+    return tx.findOne(PlacementEntity, { where: { sensorId }, order: { fromAt: 'ASC' } });
+  }
+
   /** Moves a placement to another shelf, for all of its time. */
   async correctPlacement(tx: Tx, placementId: string, shelfId: string): Promise<void> {
     await tx.update(PlacementEntity, { id: placementId }, { shelfId });
+  }
+
+  /** Has a placement begin at another time. */
+  async beginPlacement(tx: Tx, placementId: string, at: Date): Promise<void> {
+    await tx.update(PlacementEntity, { id: placementId }, { fromAt: at });
   }
 
   /** Ends a placement. */

@@ -19,7 +19,7 @@ import type { LoggerFileStore, RunningStatus } from './logger-file-store';
 import type { ProfileStore } from './profile-store';
 import { profileNameOf } from './profile-name';
 import { seriesOfFile } from './series-of-file';
-import type { SeriesMatches } from './series-matches';
+import type { SeriesMatch, SeriesMatches } from './series-matches';
 
 /** What {@link BringInService} works with. */
 export interface BringInParts {
@@ -58,10 +58,11 @@ export class BringInService {
     const { transactions, bulk } = this.parts;
     const { keys, sensorIds } = matchedSeries(file.matches);
     const sensors = await this.sensorsAsTheyAre(file, keys, sensorIds);
+    const toRead = await this.toRead(transactions.plain, file, keys, sensorIds);
     const outcome = await inWhateverOrder(file.shape.order === 'descending', (isSorted) =>
       transactions.run(async (reader) => {
         await withoutTimeLimit(reader);
-        return passReadings(this.toRead(file, keys), {
+        return passReadings(toRead, {
           plain: transactions.plain,
           sorter: isSorted ? reader : null,
           open: () => Promise.resolve(bulk.look(reader, sensors)),
@@ -126,7 +127,9 @@ export class BringInService {
       replacesDiffering: differing === 'replace',
       now: now().getTime(),
     };
-    const outcome = await passReadings(this.toRead(file, keys), {
+    // A sensor that was made for the file is where the person wanted it, be that on no shelf.
+    const asMatched = keys.map((key) => sensorIdOf(file.matches[key]));
+    const outcome = await passReadings(await this.toRead(tx, file, keys, asMatched), {
       plain: transactions.plain,
       sorter,
       open: () => bulk.open(tx, reader, sensors, order),
@@ -199,13 +202,19 @@ export class BringInService {
     });
   }
 
-  private toRead(file: LoggerFileEntity, keys: readonly string[]): FileToRead {
+  private async toRead(
+    tx: Tx,
+    file: LoggerFileEntity,
+    keys: readonly string[],
+    sensorIds: readonly (string | null)[],
+  ): Promise<FileToRead> {
     return {
       id: file.id,
       shape: file.shape,
       startsAt: file.startsAt?.getTime() ?? null,
       now: this.parts.now().getTime(),
       places: new Map(keys.map((key, place) => [key, place])),
+      sensors: await this.parts.sensors.placed(tx, sensorIds),
     };
   }
 
@@ -254,8 +263,12 @@ function matchedSeries(matches: SeriesMatches): { keys: string[]; sensorIds: (st
   const entries = Object.entries(matches);
   return {
     keys: entries.map(([key]) => key),
-    sensorIds: entries.map(([, match]) => ('sensorId' in match ? match.sensorId : null)),
+    sensorIds: entries.map(([, match]) => sensorIdOf(match)),
   };
+}
+
+function sensorIdOf(match: SeriesMatch | undefined): string | null {
+  return match !== undefined && 'sensorId' in match ? match.sensorId : null;
 }
 
 function wishOf(matches: SeriesMatches, { key, name, quantity }: LoggerSeries): SensorWish[] {

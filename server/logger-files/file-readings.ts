@@ -3,6 +3,7 @@ import type { LoggerFileShape } from '@shared/logger-files/logger-file-shape';
 import type { ReadingRejection } from '@shared/logger-files/reading-rejection';
 import { BulkBatch } from '../readings/bulk-columns';
 import { FileStatistics } from './file-statistics';
+import { OffShelfCount, type PlacedSensor } from './off-shelf-count';
 
 /** Of very many unusable lines only the first are kept; all are counted. */
 const MOST_REJECTIONS = 10_000;
@@ -16,6 +17,8 @@ export interface FileReading {
   readonly now: number;
   /** Sensors by the key of their series, as places in their list. */
   readonly places: ReadonlyMap<string, number>;
+  /** The sensors by their place, with where they were; null for one that is made for the file. */
+  readonly sensors: readonly (PlacedSensor | null)[];
 }
 
 /** Turns the bytes of a file into batches of readings, and notes what can't be used. */
@@ -23,6 +26,7 @@ export class FileReadings {
   readonly rejections: ReadingRejection[] = [];
   readonly rejectedByCode = new Map<string, number>();
   readonly statistics = new FileStatistics();
+  readonly offShelf: OffShelfCount;
   rejected = 0;
   missing = 0;
   private readonly reader: LoggerFileReader;
@@ -30,8 +34,10 @@ export class FileReadings {
   /** By the index of the series; -1 for one that is not brought in. */
   private readonly placeOf: number[] = [];
 
-  constructor({ shape, startsAt, now, places }: FileReading) {
+  constructor({ shape, startsAt, now, places, sensors }: FileReading) {
     const { placeOf, statistics } = this;
+    const offShelf = new OffShelfCount(sensors);
+    this.offShelf = offShelf;
     this.reader = createLoggerFileReader(
       onlyMatched(shape, places),
       {
@@ -43,6 +49,7 @@ export class FileReadings {
           }
           if (place === -1) return;
           statistics.take(place, at);
+          offShelf.take(place, at);
           this.batch.push(place, at, value);
         },
         onRejected: (rejection) => this.reject(rejection),

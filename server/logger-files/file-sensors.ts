@@ -3,6 +3,7 @@ import type { MatchableSensor } from '@shared/logger-files/propose-matches';
 import type { Tx } from '../database/transactions';
 import { deviceTokenHash, newDeviceToken } from '../devices/device-tokens';
 import type { DevicesStore } from '../devices/devices-store';
+import type { PlacedSensor } from './off-shelf-count';
 
 /** A series that gets a sensor of its own. */
 export interface SensorWish {
@@ -42,6 +43,27 @@ export class FileSensors {
        WHERE sensor.room_id = $1 AND sensor.retired_at IS NULL ORDER BY sensor.id`,
       [roomId],
     );
+  }
+
+  /** Where these sensors were; null for null. */
+  async placed(tx: Tx, sensorIds: readonly (string | null)[]): Promise<(PlacedSensor | null)[]> {
+    const rows: { sensor_id: string; label: string; from_at: Date; to_at: Date | null }[] = await tx.query(
+      `SELECT placement.sensor_id, shelf.label, placement.from_at, placement.to_at
+       FROM placement JOIN shelf ON shelf.id = placement.shelf_id
+       WHERE placement.sensor_id = ANY($1) ORDER BY placement.from_at`,
+      [sensorIds.filter((id) => id !== null)],
+    );
+    return sensorIds.map((sensorId) => {
+      if (sensorId === null) return null;
+      const stays = rows
+        .filter((row) => row.sensor_id === sensorId)
+        .map((row) => ({
+          shelfLabel: row.label,
+          from: row.from_at.getTime(),
+          to: row.to_at?.getTime() ?? Infinity,
+        }));
+      return { sensorId, stays };
+    });
   }
 
   /** Which of these shelves the room has. */

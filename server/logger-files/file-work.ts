@@ -91,7 +91,7 @@ export async function inWhateverOrder<T>(
 
 function resultOf(readings: FileReadings, counts: BulkCounts): LoggerFileResult {
   const { fresh, alreadyHeld, different, heldLive, flagged } = counts;
-  const { rejected, missing, statistics } = readings;
+  const { rejected, missing, statistics, offShelf } = readings;
   return {
     read: fresh + alreadyHeld + different + rejected,
     fresh,
@@ -105,5 +105,6 @@ function resultOf(readings: FileReadings, counts: BulkCounts): LoggerFileResult 
     to: statistics.span === null ? null : new Date(statistics.span.to).toISOString(),
     ...statistics.rhythm(),
     rejectedByCode: Object.fromEntries(readings.rejectedByCode),
+    offShelf: offShelf.found(),
   };
 }

@@ -1,11 +1,8 @@
-import type { AlertStore } from '../alerts/alert-store';
 import type { AuditStore } from '../audit/audit-store';
 import type { Clock } from '../clock';
 import type { Transactions } from '../database/transactions';
 import { DevicesStore } from '../devices/devices-store';
 import type { LiveFeed } from '../live/live-feed';
-import { BulkIntakeService } from '../readings/bulk-intake-service';
-import { BulkStore } from '../readings/bulk-store';
 import type { IntakeParts } from '../readings/intake-parts';
 import { BringInService } from './bring-in-service';
 import { FileLocks } from './file-locks';
@@ -18,10 +15,7 @@ import { ProfileStore } from './profile-store';
 /** What logger files stand on. */
 export interface LoggerFileFoundation {
   readonly transactions: Transactions;
-  /** The live road, whose stores the bulk road shares. */
-  readonly road: Pick<IntakeParts, 'readings' | 'computed'>;
-  readonly alertStore: AlertStore;
-  readonly plans: ConstructorParameters<typeof BulkIntakeService>[5];
+  readonly road: Pick<IntakeParts, 'readings' | 'bulk'>;
   readonly audit: AuditStore;
   readonly feed: LiveFeed;
   readonly publishAlerts: (alertIds: readonly string[]) => Promise<void>;
@@ -40,12 +34,11 @@ export function loggerFileParts(foundation: LoggerFileFoundation): {
   files: LoggerFileService;
   runner: LoggerFileRunner;
 } {
-  const { transactions, road, alertStore, plans, audit, feed, publishAlerts, now, onError } = foundation;
+  const { transactions, road, audit, feed, publishAlerts, now, onError } = foundation;
   const store = new LoggerFileStore();
   const profiles = new ProfileStore();
   const sensors = new FileSensors(new DevicesStore());
-  const { readings, computed } = road;
-  const bulk = new BulkIntakeService(transactions, new BulkStore(), readings, computed, alertStore, plans);
+  const { readings, bulk } = road;
   const work = new BringInService({ transactions, store, profiles, sensors, readings, bulk, audit, now });
   const locks = new FileLocks(transactions);
   const runner = new LoggerFileRunner({ transactions, store, work, locks, feed, publishAlerts, onError });

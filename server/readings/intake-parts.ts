@@ -5,6 +5,8 @@ import {
 } from '../alerts/alert-evaluation-service';
 import { AlertStore } from '../alerts/alert-store';
 import type { Transactions } from '../database/transactions';
+import { BulkIntakeService } from './bulk-intake-service';
+import { BulkStore } from './bulk-store';
 import { ComputedQuantities } from './computed-quantities';
 import { ComputedStore } from './computed-store';
 import { LateReadings } from './late-readings';
@@ -16,6 +18,8 @@ import { SummaryStore } from './summary-store';
 /** The road of a reading with the parts that others use too. */
 export interface IntakeParts {
   readonly intake: ReadingIntakeService;
+  /** The same road for a million readings at a time. */
+  readonly bulk: BulkIntakeService;
   readonly readings: ReadingStore;
   readonly summaries: SummaryStore;
   readonly lateReadings: LateReadings;
@@ -40,8 +44,9 @@ export function intakeParts(
   const summaries = new SummaryStore();
   const lateReadings = new LateReadings(readings, summaries);
   const computed = new ComputedQuantities(new ComputedStore(), summaries);
+  const alerts = new AlertStore();
   const evaluation: AlertEvaluationService = new AlertEvaluationService(
-    new AlertStore(),
+    alerts,
     {
       wantedRangesOf: (...of) => plans.wantedRangesOf(...of),
       plannedLamps: (...of) => plans.plannedLamps(...of),
@@ -58,5 +63,6 @@ export function intakeParts(
     evaluation,
     new StreamMemory(),
   );
-  return { intake, readings, summaries, lateReadings, computed, evaluation };
+  const bulk = new BulkIntakeService(transactions, new BulkStore(), readings, computed, alerts, plans);
+  return { intake, bulk, readings, summaries, lateReadings, computed, evaluation };
 }

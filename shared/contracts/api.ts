@@ -47,6 +47,7 @@ export const endpoints: readonly Endpoint[] = [
   devices.revokeDevice,
   devices.addSensor,
   devices.placeSensor,
+  devices.placeSensorEarlier,
   board.getBoard,
   series.getShelf,
   series.getSeries,

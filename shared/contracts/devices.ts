@@ -189,3 +189,18 @@ export const placeSensor = endpoint({
   reply: sensor,
   status: 201,
 });
+
+/**
+ * Says that a sensor was on its first shelf earlier than was known. A grower may: a logger's file often is what shows it,
+ * and only time in which the sensor was on no shelf is given to that shelf.
+ */
+export const placeSensorEarlier = endpoint({
+  name: 'placeSensorEarlier',
+  method: 'patch',
+  path: '/rooms/:roomId/sensors/:sensorId/placements/first',
+  access: 'grower',
+  summary: 'Say that a sensor was on its first shelf earlier than was known',
+  params: roomParams.extend({ sensorId: id }),
+  body: z.strictObject({ since: instant }),
+  reply: sensor,
+});

@@ -1,5 +1,21 @@
 import * as z from 'zod';
-import { instant } from './endpoint';
+import { id, instant } from './endpoint';
+
+/** Readings of one sensor that were taken while it was on no shelf, so no shelf's charts, sums or alerts hold them. */
+export const offShelfReadings = z.object({
+  sensorId: id,
+  /** Before the sensor's first shelf, after or between two shelves, or of a sensor that never was on any. */
+  when: z.enum(['beforeFirstShelf', 'betweenShelves', 'neverOnShelf']),
+  count: z.number().int(),
+  /** The first of them. */
+  from: instant,
+  /** The last of them. */
+  to: instant,
+  /** Where the sensor was first, and since when; null where it never was on a shelf. */
+  firstShelf: z.object({ label: z.string(), since: instant }).nullable(),
+});
+/** Readings of one sensor that were taken while it was on no shelf. */
+export type OffShelfReadings = z.infer<typeof offShelfReadings>;
 
 /** What reading the whole file found; read = fresh + alreadyHeld + different + rejected. */
 export const loggerFileResult = z.object({
@@ -22,6 +38,8 @@ export const loggerFileResult = z.object({
   /** Steps longer than two and a half times that. */
   gaps: z.number().int(),
   rejectedByCode: z.record(z.string(), z.number().int()),
+  /** Usable readings, held ones included, that no shelf will show; those of sensors made for the file never are. */
+  offShelf: z.array(offShelfReadings),
 });
 /** What reading the whole file found. */
 export type LoggerFileResult = z.infer<typeof loggerFileResult>;

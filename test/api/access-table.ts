@@ -120,6 +120,7 @@ export const accessTable: Readonly<Record<string, AccessRow>> = {
     body: { key: 'new', quantity: 'airTemperature', expectedIntervalS: 60 },
   },
   placeSensor: { outcomes: keeper, body: { from: '2026-04-01T00:00:00Z' } },
+  placeSensorEarlier: { outcomes: grower, body: { since: '2026-01-01T00:00:00Z' } },
 
   getBoard: { outcomes: viewer },
   getShelf: { outcomes: viewer },

@@ -11,6 +11,7 @@ import { CreateSocketAttachments1764551700000 } from './1764551700000-create-soc
 import { TellPeopleByChoice1764551800000 } from './1764551800000-tell-people-by-choice';
 import { AnswerAlerts1764552100000 } from './1764552100000-answer-alerts';
 import { CreateCrops1764552400000 } from './1764552400000-create-crops';
+import { TellOffShelfReadings1764552300000 } from './1764552300000-tell-off-shelf-readings';
 
 /** Every migration in order; a merged one is never edited. */
 export const migrations = [
@@ -27,4 +28,5 @@ export const migrations = [
   TellPeopleByChoice1764551800000,
   AnswerAlerts1764552100000,
   CreateCrops1764552400000,
+  TellOffShelfReadings1764552300000,
 ];

@@ -1,5 +1,5 @@
-import { loggerFile, loggerFileResult } from './testing/logger-file-builder';
-import { readingWords, removalWords, sizeWords, spanWords, unitWords } from './file-words';
+import { loggerFile, loggerFileDetail, loggerFileResult } from './testing/logger-file-builder';
+import { readingWords, removalWords, shapeWords, sizeWords, spanWords, unitWords } from './file-words';
 
 describe('the words about a logger file', () => {
   it.each([
@@ -32,6 +32,16 @@ describe('the words about a logger file', () => {
     expect(removalWords({ ...kept, status: 'checked' })).toBe(
       'Only the file goes. None of its readings is stored.',
     );
+  });
+
+  it('say how the file was read, without jargon', () => {
+    const file = loggerFileDetail({ timeFormat: 'iso', encoding: 'utf-8', delimiter: ';', decimalMark: ',' });
+    expect(shapeWords(file).map(([, value]) => value)).toEqual([
+      'UTF-8, semicolon',
+      'line 14',
+      'comma',
+      'year first',
+    ]);
   });
 
   it('say what becomes of a unit', () => {

@@ -5,6 +5,7 @@ import type {
   LoggerFileDetail,
   LoggerFileStatus,
 } from '@shared/contracts/logger-files';
+import type { TimeKind } from '@shared/logger-files/logger-file-shape';
 import { formatNumber, formatValue } from '@shared/format/numbers';
 import { quantityName } from '@shared/format/quantities';
 import { formatDayAndYear } from '@shared/format/room-time';
@@ -74,14 +75,16 @@ const delimiterNames: Readonly<Record<string, string>> = {
   spaces: 'spaces',
 };
 const timeFormatNames: Readonly<Record<string, string>> = {
+  iso: 'year first',
+  yearFirst: 'year first',
   dayFirst: 'day first',
   monthFirst: 'month first',
-  yearFirst: 'year first',
+  monthName: 'month by its name',
   unixSeconds: 'Unix seconds',
   unixMilliseconds: 'Unix milliseconds',
   spreadsheetDays: 'spreadsheet days',
   elapsed: 'time since the start',
-};
+} satisfies Record<TimeKind, string>;
 
 /** How the file was read, line by line. */
 export function shapeWords(file: LoggerFileDetail): readonly (readonly [name: string, value: string])[] {

@@ -1,6 +1,6 @@
 import { computed, inject, Injectable, signal } from '@angular/core';
 import { rxResource, takeUntilDestroyed } from '@angular/core/rxjs-interop';
-import { listDevices, type Device } from '@shared/contracts/devices';
+import { listDevices, placeSensorEarlier, type Device } from '@shared/contracts/devices';
 import { getBoard } from '@shared/contracts/board';
 import type { MeasuredQuantity } from '@shared/climate/quantity';
 import {
@@ -16,15 +16,18 @@ import {
 } from '@shared/contracts/logger-files';
 import {
   catchError,
+  concat,
   concatMap,
   EMPTY,
   filter,
   finalize,
   forkJoin,
   interval,
+  last,
   map,
   merge,
   Subject,
+  switchMap,
   tap,
   type Observable,
 } from 'rxjs';
@@ -144,6 +147,17 @@ export class LoggerFileData {
   bringIn(differing: DifferingChoice): void {
     const params = this.params();
     if (params !== undefined) this.run(this.api.call(bringInLoggerFile, { params, body: { differing } }));
+  }
+
+  /** Says since when sensors were on their first shelves, and has the file read again. */
+  placeEarlier(first: readonly { readonly sensorId: string; readonly since: string }[]): void {
+    const params = this.params();
+    if (params === undefined) return;
+    const placed = first.map(({ sensorId, since }) =>
+      this.api.call(placeSensorEarlier, { params: { ...params, sensorId }, body: { since } }),
+    );
+    const checked = switchMap(() => this.api.call(checkLoggerFile, { params }));
+    this.run(concat(...placed).pipe(last(), checked));
   }
 
   /** Stops what the server does with the file; nothing is stored. */

@@ -2,6 +2,9 @@ import { provideHttpClient } from '@angular/common/http';
 import { HttpTestingController, provideHttpClientTesting } from '@angular/common/http/testing';
 import { TestbedHarnessEnvironment } from '@angular/cdk/testing/testbed';
 import { TestBed } from '@angular/core/testing';
+import { MatButtonHarness } from '@angular/material/button/testing';
+import { MATERIAL_ANIMATIONS } from '@angular/material/core';
+import { MatDialogHarness } from '@angular/material/dialog/testing';
 import { MatRadioButtonHarness } from '@angular/material/radio/testing';
 import { MatSelectHarness } from '@angular/material/select/testing';
 import { provideRouter, withComponentInputBinding } from '@angular/router';
@@ -55,6 +58,7 @@ describe('a logger file on its way in', () => {
         provideHttpClientTesting(),
         provideRouter([{ path: 'loggers/:fileId', component: LoggerFilePage }], withComponentInputBinding()),
         { provide: liveSocket, useValue: socket },
+        { provide: MATERIAL_ANIMATIONS, useValue: { animationsDisabled: true } },
       ],
     });
     server = TestBed.inject(HttpTestingController);
@@ -161,6 +165,51 @@ describe('a logger file on its way in', () => {
     socket.tell('loggerFile:changed', loggerFile({ status: 'checked', result }));
     await harness.fixture.whenStable();
     expect(page.textContent).toContain('Bring in 120\u202f214 readings');
+  });
+
+  it('says what no shelf would show, and reads again once the sensor is known to have been there', async () => {
+    const off = {
+      sensorId: inventedId(702),
+      when: 'beforeFirstShelf',
+      count: 1440,
+      from: '2026-11-01T00:00:00Z',
+      to: '2026-11-01T23:59:00Z',
+      firstShelf: { label: 'A3', since: '2026-11-02T00:00:00Z' },
+    } as const;
+    const result = loggerFileResult({ rejected: 0, rejectedByCode: {}, offShelf: [off] });
+    await open(loggerFileDetail({ status: 'checked', result }));
+    expect(page.textContent).toContain(
+      '1\u202f440 readings of A3 root zone (Sun 1 Nov, 00:00 to Sun 1 Nov, 23:59) will show on no shelf: the sensor is on A3 only since Mon 2 Nov, 00:00.',
+    );
+    await press('It was there already');
+    const loader = TestbedHarnessEnvironment.documentRootLoader(harness.fixture);
+    const dialog = await loader.getHarness(MatDialogHarness);
+    expect(await dialog.getText()).toContain(
+      'A3 root zone then counts as on shelf A3 since Sun 1 Nov, 00:00.',
+    );
+    await (await dialog.getHarness(MatButtonHarness.with({ text: 'It was there' }))).click();
+    const placed = server.expectOne(`${room}/sensors/${inventedId(702)}/placements/first`);
+    expect(placed.request.body).toEqual({ since: '2026-11-01T00:00:00Z' });
+    server.expectNone(`${file}/check`);
+    placed.flush(sensor(702));
+    server.expectOne(`${file}/check`).flush(loggerFile({ status: 'checking' }));
+    await harness.fixture.whenStable();
+    expect(step()).toBe('Check');
+  });
+
+  it('leaves a sensor where it is when only a keeper can say where it was', async () => {
+    const off = {
+      sensorId: inventedId(702),
+      when: 'neverOnShelf',
+      count: 1,
+      from: '2026-11-01T00:00:00Z',
+      to: '2026-11-01T00:00:00Z',
+      firstShelf: null,
+    } as const;
+    const result = loggerFileResult({ rejected: 0, rejectedByCode: {}, offShelf: [off] });
+    await open(loggerFileDetail({ status: 'checked', result }));
+    expect(page.textContent).toContain('1 reading of A3 root zone (Sun 1 Nov, 00:00) will show on no shelf');
+    expect(page.textContent).not.toContain('there already');
   });
 
   it('brings in what was chosen for differing values', async () => {

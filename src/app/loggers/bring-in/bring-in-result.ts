@@ -3,7 +3,6 @@ import { MatButton } from '@angular/material/button';
 import { MatIcon } from '@angular/material/icon';
 import { RouterLink } from '@angular/router';
 import { downloadLoggerFile, type LoggerFileDetail } from '@shared/contracts/logger-files';
-import { formatNumber } from '@shared/format/numbers';
 import { dayBounds } from '@shared/series/room-days';
 import { filter } from 'rxjs';
 import { apiPath } from '../../core/api-client';
@@ -14,6 +13,7 @@ import { storedCount } from '../check-file/result-rows';
 import { UnusableLines } from '../check-file/unusable-lines';
 import { readingWords, removalWords, spanWords } from '../file-words';
 import { LoggerFileData } from '../logger-file-data';
+import { restWords } from './rest-words';
 
 /** The file is in: what was stored, and the way to see it. */
 @Component({
@@ -47,18 +47,7 @@ export class BringInResult {
     return [at, span].filter((part) => part !== null).join(' · ');
   });
   protected readonly rejected = computed(() => this.file().result?.rejected ?? 0);
-  /** What was left as it was: "690 were already held. 38 can’t be used and were left out." */
-  protected readonly rest = computed(() => {
-    const { alreadyHeld = 0, different = 0 } = this.file().result ?? {};
-    const differed = this.file().differing === 'replace' ? 'were replaced' : 'were kept';
-    const parts: string[] = [];
-    if (alreadyHeld > 0) parts.push(`${formatNumber(alreadyHeld, 0)} were already held.`);
-    if (different > 0)
-      parts.push(`${formatNumber(different, 0)} that were held with another value ${differed}.`);
-    if (this.rejected() > 0)
-      parts.push(`${formatNumber(this.rejected(), 0)} can’t be used and were left out.`);
-    return parts.join(' ');
-  });
+  protected readonly rest = computed(() => restWords(this.file()));
 
   /** The shelves whose charts now show the file, at its own days. */
   protected readonly shelves = computed(() => {

@@ -6,6 +6,7 @@ import { formatNumber } from '@shared/format/numbers';
 import { Session } from '../../core/session';
 import { NoteLine } from '../../ui/note-line/note-line';
 import { readingWords } from '../file-words';
+import { OffShelfReadings } from './off-shelf-readings';
 import { resultRows, storedCount } from './result-rows';
 import { UnusableLines } from './unusable-lines';
 
@@ -14,7 +15,7 @@ import { UnusableLines } from './unusable-lines';
   selector: 'app-check-result',
   templateUrl: './check-result.html',
   styleUrl: './check-result.scss',
-  imports: [MatButton, MatRadioModule, NoteLine, UnusableLines],
+  imports: [MatButton, MatRadioModule, NoteLine, OffShelfReadings, UnusableLines],
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class CheckResult {

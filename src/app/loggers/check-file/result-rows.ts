@@ -25,6 +25,7 @@ export function storedCount(
 export function resultRows(result: LoggerFileResult, zone: string): readonly ResultRow[] {
   const count = (value: number): string => formatNumber(value, 0);
   const row = (name: string, value: string, note: string | null = null): ResultRow => ({ name, value, note });
+  const offShelf = result.offShelf.reduce((sum, one) => sum + one.count, 0);
   const span = spanWords(result.from, result.to, zone);
   return [
     row('New readings', count(result.fresh)),
@@ -38,6 +39,7 @@ export function resultRows(result: LoggerFileResult, zone: string): readonly Res
     ...(result.missing === 0
       ? []
       : [row('Cells without a value', count(result.missing), 'the logger says so itself')]),
+    ...(offShelf === 0 ? [] : [row('On no shelf', count(offShelf), 'brought in, but no shelf shows them')]),
     row('Doubted', count(result.flagged), 'brought in, marked, and left out of alerts'),
     ...(span === null ? [] : [row('From', span)]),
     ...(result.intervalS === null ? [] : [row('A reading every', formatDuration(result.intervalS * 1000))]),

@@ -45,6 +45,7 @@ export function loggerFileResult(changes: Partial<LoggerFileResult> = {}): Logge
     intervalS: 60,
     gaps: 2,
     rejectedByCode: { VALUE_OUT_OF_RANGE: 30, TIME_UNREADABLE: 8 },
+    offShelf: [],
     ...changes,
   };
 }
