@@ -7,6 +7,11 @@ import { VarietiesService } from './crops/varieties-service';
 import { VarietiesStore } from './crops/varieties-store';
 import type { Transactions } from './database/transactions';
 import type { Route } from './http/route';
+import { GerminationTestsService } from './seed/germination-tests-service';
+import { GerminationTestsStore } from './seed/germination-tests-store';
+import { seedRoutes } from './seed/seed-routes';
+import { SeedService } from './seed/seed-service';
+import { SeedStore } from './seed/seed-store';
 
 /** What the growing side stands on. */
 export interface GrowingFoundation {
@@ -37,5 +42,17 @@ export function growingServices({ transactions, changes, now }: GrowingFoundatio
   });
   const varieties = new VarietiesService({ transactions, varieties: varietiesStore, crops, changes });
 
-  return { routes: [...cropsRoutes(crops, varieties)] };
+  const testsStore = new GerminationTestsStore();
+  const seed = new SeedService({
+    transactions,
+    seed: new SeedStore(),
+    tests: testsStore,
+    crops,
+    varieties,
+    changes,
+    now,
+  });
+  const tests = new GerminationTestsService(testsStore, seed, now);
+
+  return { routes: [...cropsRoutes(crops, varieties), ...seedRoutes(seed, tests)] };
 }

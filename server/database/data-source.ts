@@ -38,6 +38,10 @@ import { RackEntity } from '../rooms/rack-entity';
 import { RoomEntity } from '../rooms/room-entity';
 import { ShelfEntity } from '../rooms/shelf-entity';
 import { WantedRangeEntity } from '../rooms/wanted-range-entity';
+import { GerminationCountEntity } from '../seed/germination-count-entity';
+import { GerminationTestEntity } from '../seed/germination-test-entity';
+import { SeedLotEntity } from '../seed/seed-lot-entity';
+import { SeedUseEntity } from '../seed/seed-use-entity';
 import { migrations } from './migrations/all-migrations';
 
 /** Every table that TypeORM maps. */
@@ -50,6 +54,8 @@ const entities = [
   AuditEntryEntity,
   DailySummaryEntity,
   DeviceEntity,
+  GerminationCountEntity,
+  GerminationTestEntity,
   HeatMatEntity,
   HourlySummaryEntity,
   LampEntity,
@@ -71,6 +77,8 @@ const entities = [
   RoomEntity,
   RoomEscalationEntity,
   RoutineEntity,
+  SeedLotEntity,
+  SeedUseEntity,
   SensorEntity,
   SensorStateEntity,
   ShelfEntity,

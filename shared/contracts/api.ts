@@ -11,6 +11,7 @@ import * as mail from './mail';
 import * as people from './people';
 import * as rooms from './rooms';
 import * as scenarios from './scenarios';
+import * as seed from './seed';
 import * as series from './series';
 
 /** Every route of `/api/v1`: the table that authorisation, OpenAPI and the tests walk. */
@@ -95,6 +96,16 @@ export const endpoints: readonly Endpoint[] = [
   crops.addVariety,
   crops.changeVariety,
   crops.removeVariety,
+  seed.listSeedLots,
+  seed.addSeedLot,
+  seed.getSeedLot,
+  seed.changeSeedLot,
+  seed.recountSeedLot,
+  seed.removeSeedLot,
+  seed.getSeedsNeeded,
+  seed.addGerminationTest,
+  seed.countGerminationTest,
+  seed.removeGerminationTest,
   scenarios.listScenarios,
   scenarios.startScenario,
   scenarios.stopScenario,

@@ -190,6 +190,17 @@ export const accessTable: Readonly<Record<string, AccessRow>> = {
   changeVariety: { outcomes: grower, body: { note: 'early' } },
   removeVariety: { outcomes: grower },
 
+  listSeedLots: { outcomes: viewer },
+  addSeedLot: { outcomes: grower, body: { cropId: 'leek', unit: 'seeds', amount: 50 } },
+  getSeedLot: { outcomes: viewer },
+  changeSeedLot: { outcomes: grower, body: { note: 'dry' } },
+  recountSeedLot: { outcomes: grower, body: { left: 12 } },
+  removeSeedLot: { outcomes: grower },
+  getSeedsNeeded: { outcomes: viewer, query: 'plants=5' },
+  addGerminationTest: { outcomes: grower, body: { startedOn: '2026-04-10', seeds: 10 } },
+  countGerminationTest: { outcomes: helper, body: { on: '2026-04-10', up: 3 } },
+  removeGerminationTest: { outcomes: grower },
+
   listScenarios: { outcomes: keeper },
   startScenario: { outcomes: keeper },
   stopScenario: { outcomes: keeper },

@@ -6,11 +6,11 @@ import type { Problem } from '@shared/contracts/problem';
 import { anAlert, anAlertDeed } from '../builders/alerts';
 import { aTask } from '../builders/care';
 import { aRoomCrop, aVariety } from '../builders/crops';
-import { aRoomCrop, aVariety } from '../builders/crops';
 import { aDevice, aSensor } from '../builders/devices';
 import { aFileProfile, aLoggerFile } from '../builders/logger-files';
 import { aMember, aPerson } from '../builders/people';
 import { aShelf, aWantedRange } from '../builders/rooms';
+import { aGerminationTest, aSeedLot } from '../builders/seed';
 import { accessTable, callers, type CallerName, type Outcome } from './access-table';
 import { Caller } from './caller';
 import { aStaffedRoom, type StaffedRoom } from './room-callers';
@@ -103,6 +103,7 @@ describe('access', () => {
       const shelf = await aShelf(tx, { roomId });
       await aWantedRange(tx, { shelfId: shelf.id });
       const sensor = await aSensor(tx, { roomId });
+      const lot = await aSeedLot(tx, { roomId });
       const alert = await anAlert(tx, { shelfId: shelf.id });
       return {
         roomId,
@@ -115,8 +116,8 @@ describe('access', () => {
         deedId: (await anAlertDeed(tx, { alertId: alert.id })).id,
         taskId: (await aTask(tx, { roomId })).id,
         fileId: (await aLoggerFile(tx, { roomId })).id,
-        cropId: (await aRoomCrop(tx, { roomId })).id,
-        varietyId: (await aVariety(tx, { roomId })).id,
+        lotId: lot.id,
+        testId: (await aGerminationTest(tx, { lotId: lot.id })).id,
         cropId: (await aRoomCrop(tx, { roomId })).id,
         varietyId: (await aVariety(tx, { roomId })).id,
         profileId: (await aFileProfile(tx, { roomId })).id,

@@ -12,6 +12,7 @@ import { TellPeopleByChoice1764551800000 } from './1764551800000-tell-people-by-
 import { AnswerAlerts1764552100000 } from './1764552100000-answer-alerts';
 import { CreateCrops1764552400000 } from './1764552400000-create-crops';
 import { TellOffShelfReadings1764552300000 } from './1764552300000-tell-off-shelf-readings';
+import { CreateSeed1764552500000 } from './1764552500000-create-seed';
 
 /** Every migration in order; a merged one is never edited. */
 export const migrations = [
@@ -29,4 +30,5 @@ export const migrations = [
   AnswerAlerts1764552100000,
   CreateCrops1764552400000,
   TellOffShelfReadings1764552300000,
+  CreateSeed1764552500000,
 ];
