@@ -34,6 +34,30 @@ export const appRoutes: Routes = [
     loadComponent: () => import('./alerts/alert-page/alert-page').then((m) => m.AlertPage),
   },
   {
+    path: 'seed',
+    title: 'Seed',
+    ...signedIn,
+    loadComponent: () => import('./seed/seed-page').then((m) => m.SeedPage),
+  },
+  {
+    path: 'seed/new',
+    title: 'Add a packet of seed',
+    ...signedIn,
+    loadComponent: () => import('./seed/lot-form/lot-form-page').then((m) => m.LotFormPage),
+  },
+  {
+    path: 'seed/:lotId',
+    title: 'Seed lot',
+    ...signedIn,
+    loadComponent: () => import('./seed/lot/lot-page').then((m) => m.LotPage),
+  },
+  {
+    path: 'seed/:lotId/change',
+    title: 'Change a seed lot',
+    ...signedIn,
+    loadComponent: () => import('./seed/lot-form/lot-form-page').then((m) => m.LotFormPage),
+  },
+  {
     path: 'loggers',
     title: 'Logger files',
     ...signedIn,

@@ -72,15 +72,16 @@ export class ApiClient {
    * Uploads a form and says how far it has come.
    *
    * @param endpoint - One that takes `multipart/form-data`.
-   * @param given - Parameters of the path and the form.
+   * @param given - Parameters of the path, query and the form.
    */
   upload<P extends z.ZodType, Q extends z.ZodType, B extends z.ZodType, R extends z.ZodType>(
     endpoint: Endpoint<P, Q, B, R>,
-    given: Part<'params', P> & { readonly form: FormData },
+    given: Part<'params', P> & Part<'query', Q> & { readonly form: FormData },
   ): Observable<UploadStep<z.output<R>>> {
-    const { params, form }: LooseInput & { form: FormData } = given;
+    const { params, query, form }: LooseInput & { form: FormData } = given;
     return this.http
       .request<unknown>(endpoint.method.toUpperCase(), apiPath(endpoint.path, params), {
+        params: queryParams(query),
         body: form,
         headers: this.headers(endpoint.method),
         observe: 'events',

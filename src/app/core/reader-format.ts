@@ -4,7 +4,8 @@ import type { Quantity } from '@shared/climate/quantity';
 import type { Alert } from '@shared/contracts/alerts';
 import { episodeFormatters } from '@shared/format/episode-formatters';
 import { formatQuantity } from '@shared/format/quantities';
-import { formatTime, sayWhen, type Instant } from '@shared/format/room-time';
+import { formatDayAndYear, formatTime, sayWhen, type Instant } from '@shared/format/room-time';
+import { dayBounds } from '@shared/series/room-days';
 import { describeAlert } from './describe-alert';
 import { RoomClock } from './room-clock';
 import { Session } from './session';
@@ -17,6 +18,14 @@ export class ReaderFormat {
   private readonly episodes = computed(() =>
     episodeFormatters(this.session.temperatureUnit(), this.session.timeZone(), this.clock.calmNow()),
   );
+
+  /** The room's day now, `YYYY-MM-DD`. */
+  readonly today = computed(() => dayBounds(this.clock.calmNow(), this.session.timeZone()).date);
+
+  /** A day of the calendar, `YYYY-MM-DD`, as a person writes it: "1 Dec 2026"; "today" for the room's own. */
+  day(day: string): string {
+    return day === this.today() ? 'today' : formatDayAndYear(`${day}T00:00:00Z`, 'UTC');
+  }
 
   /** A stored value with its unit: "28.3 °C"; a dash for null. */
   value(quantity: Quantity, value: number | null): string {
