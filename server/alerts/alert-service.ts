@@ -9,6 +9,9 @@ import { alertCounts, type AlertFacets } from './alert-counts';
 import type { AlertHistoryStore } from './alert-history-store';
 import type { AlertStore } from './alert-store';
 
+/** A file of years may change thousands of alerts; screens that show history ask for it when they are opened. */
+const MOST_PUBLISHED = 200;
+
 /** Which alerts of a room to list. */
 export interface AlertFilter extends AlertFacets {
   readonly open?: 'true' | 'false' | undefined;
@@ -92,10 +95,11 @@ export class AlertService {
     };
   }
 
-  /** Tells dashboards about alerts that changed; to be called after the commit. */
+  /** Tells dashboards about alerts that changed, of very many about the foremost; to be called after the commit. */
   async publishChanged(alertIds: readonly string[]): Promise<void> {
     const { alerts, feed, transactions } = this.parts;
-    for (const { roomId, ...alert } of await alerts.byIds(transactions.plain, alertIds)) {
+    const told = await alerts.foremostAmong(transactions.plain, alertIds, MOST_PUBLISHED);
+    for (const { roomId, ...alert } of await alerts.byIds(transactions.plain, told)) {
       feed.publish(roomId, 'alert:changed', alert);
     }
   }

@@ -1,4 +1,4 @@
-import type { AlertKind } from '@shared/alerts/alert-rule';
+import { joinedKinds, type AlertKind } from '@shared/alerts/alert-rule';
 import { idleState, type AlertState } from '@shared/alerts/alert-state';
 import type { Episode } from '@shared/alerts/episode';
 import type { Quantity } from '@shared/climate/quantity';
@@ -161,19 +161,37 @@ export class AlertStore {
     );
   }
 
-  /** Ends the open alerts of a sensor and has its watches begin anew on the shelf where it is now. */
+  /**
+   * Ends the open alerts of a sensor, and those that rest on other sensors beside it where it was and is now; has their
+   * watches begin anew, its own on the shelf where it is now.
+   */
   async restartWatches(tx: Tx, sensorId: string, at: Date): Promise<void> {
+    const concerned = `(sensor_id = $1 OR kind = ANY($3)
+      AND shelf_id IN (SELECT shelf_id FROM placement WHERE sensor_id = $1))`;
     await tx.query(
       `UPDATE alert SET ended_at = coalesce(ended_at, $2), cleared_at = $2
-       WHERE sensor_id = $1 AND cleared_at IS NULL`,
-      [sensorId, at],
+       WHERE cleared_at IS NULL AND ${concerned}`,
+      [sensorId, at, joinedKinds],
     );
+    await tx.query(`UPDATE alert_watch SET state = $2::jsonb WHERE ${concerned}`, [
+      sensorId,
+      JSON.stringify(idleState),
+      joinedKinds,
+    ]);
     await tx.query(
-      `UPDATE alert_watch w SET state = $2::jsonb, shelf_id = coalesce(p.shelf_id, w.shelf_id)
-       FROM sensor s LEFT JOIN placement p ON p.sensor_id = s.id AND p.to_at IS NULL
-       WHERE w.sensor_id = $1 AND s.id = $1`,
-      [sensorId, JSON.stringify(idleState)],
+      `UPDATE alert_watch SET shelf_id = placement.shelf_id FROM placement
+       WHERE alert_watch.sensor_id = $1 AND placement.sensor_id = $1 AND placement.to_at IS NULL`,
+      [sensorId],
     );
+  }
+
+  /** Removes what was found of sensors that have no reading left. */
+  async forget(tx: Tx, sensorIds: readonly string[]): Promise<void> {
+    await tx.query('DELETE FROM alert WHERE sensor_id = ANY($1)', [sensorIds]);
+    await tx.query('UPDATE alert_watch SET state = $2::jsonb WHERE sensor_id = ANY($1)', [
+      sensorIds,
+      JSON.stringify(idleState),
+    ]);
   }
 
   /** Episodes of a watch that began before an instant, the last one only, and all from then on. */
@@ -223,6 +241,16 @@ export class AlertStore {
       alertIds,
     ]);
     return rows.map((row) => ({ ...alertOf(row), roomId: row.room_id }));
+  }
+
+  /** The ones of some alerts that people look at: open ones first, then the newest, so many at most. */
+  async foremostAmong(tx: Tx, alertIds: readonly string[], most: number): Promise<string[]> {
+    if (alertIds.length <= most) return [...alertIds];
+    const rows: { id: string }[] = await tx.query(
+      `SELECT id FROM alert WHERE id = ANY($1) ORDER BY cleared_at IS NOT NULL, opened_at DESC LIMIT $2`,
+      [alertIds, most],
+    );
+    return rows.map(({ id }) => id);
   }
 
   /** Which of some alerts nobody is to be written to about now. */
