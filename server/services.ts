@@ -6,7 +6,8 @@ import { AlertHistoryStore } from './alerts/alert-history-store';
 import { AlertService } from './alerts/alert-service';
 import { alertRoutes } from './alerts/alert-routes';
 import { AlertStore } from './alerts/alert-store';
-import { SilenceJob } from './alerts/silence-job';
+import type { SecondLookJob } from './alerts/second-look-job';
+import { secondLookJob } from './alerts/second-look-parts';
 import { AuditStore } from './audit/audit-store';
 import { RoomChanges } from './audit/room-changes';
 import { BoardPublisher } from './board/board-publisher';
@@ -50,6 +51,7 @@ import { PeopleService } from './people/people-service';
 import { PeopleStore } from './people/people-store';
 import { SignIn } from './people/sign-in';
 import { SignInAttempts } from './people/sign-in-attempts';
+import { GerminationStore } from './plantings/germination-store';
 import { PlantingsService } from './plantings/plantings-service';
 import { PlantingsStore } from './plantings/plantings-store';
 import { HistoryUpkeepService } from './readings/history-upkeep-service';
@@ -92,7 +94,7 @@ export interface Services {
   readonly morningLetterJob: MorningLetterJob;
   readonly deviceIntake: DeviceIntakeService;
   readonly boardPublisher: BoardPublisher;
-  readonly silenceJob: SilenceJob;
+  readonly secondLookJob: SecondLookJob;
   readonly care: CareService;
   readonly loggerFiles: LoggerFileRunner;
   /** Tells the scenarios which room is the demonstration. */
@@ -119,6 +121,7 @@ export function composeServices(foundation: Foundation): Services {
   const plansStore = new ShelfPlansStore();
   const plans = new ShelfPlansService(plansStore);
   const plantings = new PlantingsService(new PlantingsStore());
+  const germination = new GerminationStore();
 
   const alertStore = new AlertStore();
   const mailStore = new MailStore();
@@ -268,7 +271,15 @@ export function composeServices(foundation: Foundation): Services {
     morningLetterJob,
     deviceIntake,
     boardPublisher,
-    silenceJob: new SilenceJob(transactions, road.readings, road.evaluation, alerts, now),
+    secondLookJob: secondLookJob({
+      transactions,
+      readings: road.readings,
+      teller,
+      plannedLamps: (...of) => plans.plannedLamps(...of),
+      germinatingOn: (...of) => germination.germinatingOn(...of),
+      alerts,
+      now,
+    }),
     care,
     loggerFiles: loggerFiles.runner,
     setDemonstrationRoom: (roomId) => {

@@ -1,7 +1,6 @@
-import { advanceSeries, tick } from '@shared/alerts/alert-machine';
-import { isSilenceRule, type AlertRule } from '@shared/alerts/alert-rule';
-import { idleState, type AlertState } from '@shared/alerts/alert-state';
-import type { Episode, EpisodeChange } from '@shared/alerts/episode';
+import { advanceSeries } from '@shared/alerts/alert-machine';
+import type { AlertRule } from '@shared/alerts/alert-rule';
+import { idleState, type AlertState, type AlertStep } from '@shared/alerts/alert-state';
 import { lampPlan, type AlertContext, type LampInterval } from '@shared/alerts/lamp-plan';
 import { restartFrom } from '@shared/alerts/restart-from';
 import type { Quantity } from '@shared/climate/quantity';
@@ -10,7 +9,8 @@ import { qualityLevel } from '@shared/series/quality-tests';
 import type { Tx } from '../database/transactions';
 import type { FlaggedSample, SensorOnRoad } from '../readings/reading-store';
 import { rulesFor } from './alert-rules';
-import type { AlertStore, EpisodeOfWatch, Watch } from './alert-store';
+import type { AlertStore, Watch } from './alert-store';
+import { outcomeOf, type EpisodeKeeper, type FoldedWatch, type NewsOrigin } from './episode-keeper';
 
 /** What happened to one series of a sensor in a transaction. */
 export interface SeriesNews {
@@ -20,12 +20,6 @@ export interface SeriesNews {
   readonly inOrder: readonly FlaggedSample[];
   /** From where stored readings have changed otherwise [ms]; null when they have not. */
   readonly changedFrom: number | null;
-}
-
-/** Where news come from, and what the clock says. */
-export interface NewsOrigin {
-  readonly isLive: boolean;
-  readonly now: number;
 }
 
 /** What the evaluation needs of others. */
@@ -41,14 +35,6 @@ export interface AlertSources {
   stored(tx: Tx, sensor: SensorOnRoad, quantity: Quantity, from: number): Promise<FlaggedSample[]>;
 }
 
-/** Writes to people in the same transaction. */
-export interface AlertTeller {
-  tellOpened(tx: Tx, alertIds: readonly string[], now: number): Promise<void>;
-  tellCleared(tx: Tx, alertIds: readonly string[], now: number): Promise<void>;
-}
-
-/** A reading older than this says nothing about now, so what it opens is history. */
-const FRESH_MS = 15 * 60_000;
 const LAMP_MARGIN_MS = 2 * 86_400_000;
 
 interface Watched {
@@ -59,23 +45,12 @@ interface Watched {
   readonly news: SeriesNews;
 }
 
-/** What a fold came to. */
-interface Outcome {
-  readonly episodes: readonly Episode[];
-  /** Silences that the clock had seen and readings on their way have disproved, by their beginning. */
-  readonly withdrawn: readonly number[];
-}
-
-interface Folded extends Watched, Outcome {
-  readonly state: AlertState;
-}
-
 /** Folds new readings into alert episodes, in the transaction that stores the readings. */
 export class AlertEvaluationService {
   constructor(
     private readonly store: AlertStore,
     private readonly sources: AlertSources,
-    private readonly teller: AlertTeller,
+    private readonly keeper: EpisodeKeeper,
   ) {}
 
   /**
@@ -94,43 +69,16 @@ export class AlertEvaluationService {
     if (watched.length === 0) return [];
     const starts = await this.starts(tx, watched);
     const contexts = await this.contexts(tx, watched, Math.min(origin.now, ...starts), origin.now);
-    const folded: Folded[] = [];
+    const folded: FoldedWatch[] = [];
     for (const [index, one] of watched.entries()) {
       const context = contexts(one.news.sensor);
       folded.push(
         one.news.changedFrom === null
           ? advanceInOrder(one, context)
-          : await this.refold(tx, one, context, starts[index] ?? one.news.changedFrom, origin.now),
+          : await this.refold(tx, one, context, starts[index] ?? one.news.changedFrom),
       );
     }
-    return this.keep(tx, folded, origin);
-  }
-
-  /**
-   * Lets the clock find sensors that have fallen silent.
-   *
-   * @param tx - Holding the sensors' locks.
-   * @param sensors - Sensors on shelves whose last reading is old.
-   * @param now - The present [ms].
-   * @returns Ids of the alerts that changed.
-   */
-  async tick(tx: Tx, sensors: readonly SensorOnRoad[], now: number): Promise<string[]> {
-    const news = sensors.map((sensor) => ({
-      sensor,
-      quantity: sensor.quantity,
-      inOrder: [],
-      changedFrom: null,
-    }));
-    const watched = (await this.watch(tx, news)).filter(({ rule }) => isSilenceRule(rule));
-    const folded = watched.map((one): Folded => {
-      const step = tick(one.rule, stateBefore(one), now);
-      return { ...one, state: step.state, ...outcomeOf(step.changes) };
-    });
-    return this.keep(
-      tx,
-      folded.filter(({ episodes }) => episodes.length > 0),
-      { isLive: true, now },
-    );
+    return this.keeper.keep(tx, folded, origin);
   }
 
   private async watch(tx: Tx, news: readonly SeriesNews[]): Promise<Watched[]> {
@@ -188,86 +136,35 @@ export class AlertEvaluationService {
   }
 
   /** Folds again from an instant at which the rule was idle; episodes that began alike keep what people did with them. */
-  private async refold(
-    tx: Tx,
-    one: Watched,
-    context: AlertContext,
-    from: number,
-    now: number,
-  ): Promise<Folded> {
+  private async refold(tx: Tx, one: Watched, context: AlertContext, from: number): Promise<FoldedWatch> {
     const { sensor, quantity } = one.news;
     const samples = await this.sources.stored(tx, sensor, quantity, from);
     const step = fold(one.rule, context, idleState, samples);
-    const ticked = tick(one.rule, step.state, now);
-    const outcome = outcomeOf([...step.changes, ...ticked.changes]);
-    await this.store.removeEpisodes(
-      tx,
-      one.watch.id,
-      from,
-      outcome.episodes.map(({ beganAt }) => beganAt),
-    );
-    return { ...one, state: ticked.state, ...outcome };
-  }
-
-  private async keep(tx: Tx, folded: readonly Folded[], origin: NewsOrigin): Promise<string[]> {
-    const episodes = folded.flatMap(({ watch, news, episodes: found }) =>
-      found.map((episode): EpisodeOfWatch => {
-        const isOver = episode.clearedAt !== null;
-        return {
-          watch,
-          sensor: news.sensor,
-          episode,
-          foundLater: !origin.isLive || (isOver && !wasOpen(watch, episode)),
-        };
-      }),
-    );
-    for (const { watch, withdrawn } of folded) await this.store.removeBegunAt(tx, watch.id, withdrawn);
-    const changed = await this.store.saveEpisodes(tx, episodes);
-    await this.store.saveStates(
-      tx,
-      folded.map(({ watch, state }) => ({ watchId: watch.id, state })),
-    );
-    if (origin.isLive) await this.tell(tx, folded, changed, origin.now);
-    return changed;
-  }
-
-  private async tell(
-    tx: Tx,
-    folded: readonly Folded[],
-    changed: readonly string[],
-    now: number,
-  ): Promise<void> {
-    const fresh = folded.filter(({ state, rule, news }) => {
-      if (state.open === null) return false;
-      const newest = isSilenceRule(rule) ? now : (news.inOrder.at(-1)?.at ?? state.lastAt ?? 0);
-      return now - newest <= FRESH_MS;
-    });
-    const untold = await this.store.untold(
-      tx,
-      fresh.map(({ watch }) => watch.id),
-    );
-    if (untold.length > 0) {
-      await this.teller.tellOpened(tx, untold, now);
-      await this.store.markTold(tx, untold, now);
-    }
-    const hasCleared = folded.some(({ episodes }) => episodes.some(({ clearedAt }) => clearedAt !== null));
-    if (hasCleared) await this.teller.tellCleared(tx, changed, now);
+    const folded = foldedOf(one, step, samples);
+    const found = folded.episodes.map(({ beganAt }) => beganAt);
+    await this.store.removeEpisodes(tx, one.watch.id, from, found);
+    return folded;
   }
 }
 
-function wasOpen(watch: Watch, episode: Episode): boolean {
-  return watch.state.open?.beganAt === episode.beganAt;
-}
-
-function advanceInOrder(one: Watched, context: AlertContext): Folded {
+function advanceInOrder(one: Watched, context: AlertContext): FoldedWatch {
   const samples = one.news.inOrder.filter(({ at }) => at >= one.judgesFrom);
-  const step = fold(one.rule, context, stateBefore(one), samples);
-  return { ...one, state: step.state, ...outcomeOf(step.changes) };
+  return foldedOf(one, fold(one.rule, context, one.watch.state, samples), samples);
 }
 
-/** A silence hangs on the newest reading alone, which the sensor's own state keeps. */
-function stateBefore({ watch, rule, news }: Watched): AlertState {
-  return isSilenceRule(rule) ? { ...watch.state, lastAt: news.sensor.latestAt } : watch.state;
+function foldedOf(
+  { watch, news: { sensor } }: Watched,
+  { state, changes }: AlertStep,
+  samples: readonly FlaggedSample[],
+): FoldedWatch {
+  const newestAt = samples.at(-1)?.at ?? state.lastAt ?? -Infinity;
+  // Nearly every step ends as idle as it began, and is not worth writing.
+  const isStill = isIdle(watch.state) && isIdle(state);
+  return { watch, sensor, state: isStill ? watch.state : state, newestAt, ...outcomeOf(changes) };
+}
+
+function isIdle({ run, open }: AlertState): boolean {
+  return run === null && open === null;
 }
 
 function fold(
@@ -275,7 +172,7 @@ function fold(
   context: AlertContext,
   state: AlertState,
   samples: readonly FlaggedSample[],
-): { state: AlertState; changes: readonly EpisodeChange[] } {
+): AlertStep {
   return advanceSeries(
     rule,
     context,
@@ -284,14 +181,4 @@ function fold(
     samples.map(({ value }) => value),
     samples.map(({ flags }) => qualityLevel(flags)),
   );
-}
-
-/** The last word on each episode that a run of changes spoke of. */
-function outcomeOf(changes: readonly EpisodeChange[]): Outcome {
-  const last = new Map(changes.map((change) => [change.episode.beganAt, change]));
-  const isWithdrawn = ({ type }: EpisodeChange): boolean => type === 'withdrawn';
-  return {
-    episodes: [...last.values()].filter((change) => !isWithdrawn(change)).map(({ episode }) => episode),
-    withdrawn: [...last.values()].filter(isWithdrawn).map(({ episode }) => episode.beganAt),
-  };
 }

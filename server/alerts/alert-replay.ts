@@ -1,5 +1,5 @@
-import { advanceSeries, tick } from '@shared/alerts/alert-machine';
-import { isSilenceRule, type AlertRule } from '@shared/alerts/alert-rule';
+import { advanceSeries } from '@shared/alerts/alert-machine';
+import type { AlertRule } from '@shared/alerts/alert-rule';
 import { idleState, type AlertState } from '@shared/alerts/alert-state';
 import type { EpisodeChange } from '@shared/alerts/episode';
 import { lampPlan, type AlertContext } from '@shared/alerts/lamp-plan';
@@ -100,9 +100,7 @@ export class AlertReplay {
             sensorId === one.sensor.id && quantity === one.quantity && kind === rule.kind,
         );
         if (watch === undefined) return [];
-        const lastAt = isSilenceRule(rule) ? one.sensor.latestAt : watch.state.lastAt;
-        const state = { ...watch.state, lastAt };
-        return [{ watch, rule, judgesFrom, state, restartedAt: null, found: new Map() }];
+        return [{ watch, rule, judgesFrom, state: watch.state, restartedAt: null, found: new Map() }];
       });
       const context = plans.get(one.sensor.shelfId ?? '') ?? lampPlan([]);
       return new AlertReplay(one, store, sources, running, context, now);
@@ -136,13 +134,10 @@ export class AlertReplay {
     const isPast = changedFrom !== null && changedFrom <= (this.series.seenTo ?? -Infinity);
     if (isPast && !this.hasRestarted) await this.restart(reader, changedFrom, Infinity);
     if (changedFrom === null) return [];
-    for (const one of this.running) {
-      if (one.restartedAt !== null) keepStep(one, tick(one.rule, one.state, this.now));
-    }
     const changed = await this.store.saveEpisodes(
       tx,
       this.running.flatMap(({ watch, found }) =>
-        standing(found).map(({ episode }) => ({
+        [...found.values()].map(({ episode }) => ({
           watch,
           sensor: this.series.sensor,
           episode,
@@ -151,15 +146,7 @@ export class AlertReplay {
       ),
     );
     for (const { watch, found, restartedAt } of this.running) {
-      const withdrawn = [...found.values()].filter(({ type }) => type === 'withdrawn');
-      await this.store.removeBegunAt(
-        tx,
-        watch.id,
-        withdrawn.map(({ episode }) => episode.beganAt),
-      );
-      if (restartedAt === null) continue;
-      const kept = standing(found).map(({ episode }) => episode.beganAt);
-      await this.store.removeEpisodes(tx, watch.id, restartedAt, kept);
+      if (restartedAt !== null) await this.store.removeEpisodes(tx, watch.id, restartedAt, [...found.keys()]);
     }
     await this.store.saveStates(
       tx,
@@ -206,10 +193,6 @@ export class AlertReplay {
 function keepStep(one: Running, step: { state: AlertState; changes: readonly EpisodeChange[] }): void {
   one.state = step.state;
   for (const change of step.changes) one.found.set(change.episode.beganAt, change);
-}
-
-function standing(found: ReadonlyMap<number, EpisodeChange>): EpisodeChange[] {
-  return [...found.values()].filter(({ type }) => type !== 'withdrawn');
 }
 
 function columnsOf(samples: readonly FlaggedSample[]): ReplayColumns {

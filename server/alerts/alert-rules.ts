@@ -2,7 +2,7 @@ import type { AlertRule } from '@shared/alerts/alert-rule';
 import { patienceDefaults, rangeRules, standingRules } from '@shared/alerts/alert-defaults';
 import type { Quantity } from '@shared/climate/quantity';
 import type { WantedRange } from '@shared/contracts/rooms';
-import { maxGapMs, silentAfterMs } from '@shared/series/expected-interval';
+import { maxGapMs } from '@shared/series/expected-interval';
 import type { SensorOnRoad } from '../readings/reading-store';
 
 /** A rule with the instant from which it judges readings [ms]. */
@@ -17,7 +17,8 @@ export interface WatchingRule {
  * @param sensor - The sensor, on a shelf.
  * @param quantity - Its own quantity, or a computed one for a humidity sensor.
  * @param wanted - The shelf's wanted range of the quantity, if it has one.
- * @returns The rules with the instant from which each judges; a humidity sensor's computed quantities have no rule about silence, since the sensor has it.
+ * @returns The rules with the instant from which each judges. What needs more than the reading itself has a second look, and silence
+ *   the clock.
  */
 export function rulesFor(
   sensor: SensorOnRoad,
@@ -27,7 +28,7 @@ export function rulesFor(
   const gap = { maxGapMs: Math.max(patienceDefaults[quantity].maxGapMs, maxGapMs(sensor.expectedIntervalS)) };
   const placedAt = sensor.placedAt ?? 0;
   const standing: AlertRule[] = [];
-  if (quantity === 'airTemperature') {
+  if (quantity === 'airTemperature' || quantity === 'rootZoneTemperature') {
     standing.push({ ...standingRules.dangerLow, ...gap }, { ...standingRules.dangerHigh, ...gap });
   }
   if ((quantity === 'ppfd' || quantity === 'illuminance') && sensor.luxPerUmol !== null) {
@@ -35,9 +36,6 @@ export function rulesFor(
     for (const rule of [standingRules.lampDark, standingRules.lampLit]) {
       standing.push({ ...rule, limit: rule.limit * unit, ...gap });
     }
-  }
-  if (quantity === sensor.quantity) {
-    standing.push({ ...standingRules.sensorSilent, silentAfterMs: silentAfterMs(sensor.expectedIntervalS) });
   }
   return [
     ...rangeRulesOf(quantity, wanted, gap).map(({ rule, since }) => ({

@@ -18,11 +18,11 @@ const AHEAD_MS = 62 * 24 * HOUR_MS;
  * @returns Stops them all, after the work in hand.
  */
 export function startJobs(app: App, transactions: Transactions, log: Logger): () => Promise<void> {
-  const { silenceJob, escalationJob, morningLetterJob, care, loggerFiles } = app.services;
+  const { secondLookJob, escalationJob, morningLetterJob, care, loggerFiles } = app.services;
   const alone = (name: string, everyMs: number, work: () => Promise<void>): RepeatingJob =>
     new RepeatingJob(name, everyMs, async () => void (await whenAlone(transactions, name, work)), log);
   const jobs = [
-    alone('silence', MINUTE_MS / 4, () => silenceJob.run()),
+    alone('second look', MINUTE_MS / 4, () => secondLookJob.run()),
     alone('logger files left behind', MINUTE_MS / 4, () => loggerFiles.failAbandoned()),
     alone('escalation', MINUTE_MS / 2, () => escalationJob.run()),
     alone('morning letters', MINUTE_MS, () => morningLetterJob.run()),

@@ -293,5 +293,6 @@ function sensorToCome(roomId: string, quantity: SensorOnRoad['quantity'], place:
     latestFlags: 0,
     revision: 0,
     computedTo: null,
+    unjudgedFrom: null,
   };
 }

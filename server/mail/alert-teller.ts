@@ -1,6 +1,6 @@
 import { randomUUID } from 'node:crypto';
 import { mailDueAt, pastQuietHours } from '@shared/mail/mail-choice';
-import type { AlertTeller } from '../alerts/alert-evaluation-service';
+import type { AlertTeller } from '../alerts/episode-keeper';
 import type { Tx } from '../database/transactions';
 import type { AlertOfRoom, Recipient, RoomOfMail, Telling, TellingStore, Told } from './telling-store';
 

@@ -136,9 +136,15 @@ export class BulkIntakeService {
       const span = removal.spans.get(sensor.id);
       if (span !== undefined) spans.addSpan(span);
     }
-    await intake.recompute(Math.min(...[...removal.spans.values()].map(({ from }) => from)));
+    const removedFrom = Math.min(...[...removal.spans.values()].map(({ from }) => from));
+    await intake.recompute(removedFrom);
     await intake.finish();
-    await this.store.saveStanding(tx, sensors);
+    await this.store.saveStanding(tx, sensors, removedFrom);
+    const empty = sensors.filter(({ latestAt }) => latestAt === null);
+    await this.alerts.forget(
+      tx,
+      empty.map(({ id }) => id),
+    );
     return writer?.alertIds ?? [];
   }
 

@@ -113,10 +113,18 @@ export class BulkStore {
   }
 
   /** Writes how sensors stand after a removal; one without any reading left has no state. */
-  async saveStanding(tx: Tx, sensors: readonly SensorOnRoad[]): Promise<void> {
+  async saveStanding(tx: Tx, sensors: readonly SensorOnRoad[], removedFrom: number): Promise<void> {
     const held = sensors.filter(({ latestAt }) => latestAt !== null);
     const empty = sensors.filter(({ latestAt }) => latestAt === null);
-    await tx.query('DELETE FROM sensor_state WHERE sensor_id = ANY($1)', [empty.map(({ id }) => id)]);
+    const emptyIds = empty.map(({ id }) => id);
+    // What rests on them and on others beside them has to be judged without them.
+    await tx.query(
+      `UPDATE sensor_state SET unjudged_from = least(unjudged_from, $2)
+       FROM placement own JOIN placement beside ON beside.shelf_id = own.shelf_id AND beside.to_at IS NULL
+       WHERE own.sensor_id = ANY($1) AND own.to_at IS NULL AND sensor_state.sensor_id = beside.sensor_id`,
+      [emptyIds, new Date(removedFrom)],
+    );
+    await tx.query('DELETE FROM sensor_state WHERE sensor_id = ANY($1)', [emptyIds]);
     await tx.query(
       `UPDATE sensor_state AS held SET latest_at = new.at, latest_value = new.value, latest_flags = new.flags,
          computed_to = new.computed_to, revision = held.revision + 1

@@ -108,11 +108,12 @@ export class BulkWriter {
     );
     await readings.saveStates(
       tx,
-      changed.flatMap(({ sensor, latest }) => {
+      changed.flatMap(({ sensor, latest, spans }) => {
         const own = computed.find(({ track }) => track.sensor === sensor);
         const settledTo = Math.max(own?.settledTo ?? -Infinity, sensor.computedTo ?? -Infinity);
         const computedTo = Number.isFinite(settledTo) ? settledTo : null;
-        return latest === null ? [] : [{ sensorId: sensor.id, latest, computedTo }];
+        const changedFrom = spans.firstAt;
+        return latest === null ? [] : [{ sensorId: sensor.id, latest, computedTo, changedFrom }];
       }),
     );
     for (const [index, track] of tracks.entries()) {

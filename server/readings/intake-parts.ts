@@ -1,9 +1,6 @@
-import {
-  AlertEvaluationService,
-  type AlertSources,
-  type AlertTeller,
-} from '../alerts/alert-evaluation-service';
+import { AlertEvaluationService, type AlertSources } from '../alerts/alert-evaluation-service';
 import { AlertStore } from '../alerts/alert-store';
+import { EpisodeKeeper, type AlertTeller } from '../alerts/episode-keeper';
 import type { Transactions } from '../database/transactions';
 import { BulkIntakeService } from './bulk-intake-service';
 import { BulkStore } from './bulk-store';
@@ -24,7 +21,6 @@ export interface IntakeParts {
   readonly summaries: SummaryStore;
   readonly lateReadings: LateReadings;
   readonly computed: ComputedQuantities;
-  readonly evaluation: AlertEvaluationService;
 }
 
 /**
@@ -45,14 +41,14 @@ export function intakeParts(
   const lateReadings = new LateReadings(readings, summaries);
   const computed = new ComputedQuantities(new ComputedStore(), summaries);
   const alerts = new AlertStore();
-  const evaluation: AlertEvaluationService = new AlertEvaluationService(
+  const evaluation = new AlertEvaluationService(
     alerts,
     {
       wantedRangesOf: (...of) => plans.wantedRangesOf(...of),
       plannedLamps: (...of) => plans.plannedLamps(...of),
       stored: (...series) => intake.stored(...series),
     },
-    teller,
+    new EpisodeKeeper(alerts, teller),
   );
   const intake: ReadingIntakeService = new ReadingIntakeService(
     transactions,
@@ -64,5 +60,5 @@ export function intakeParts(
     new StreamMemory(),
   );
   const bulk = new BulkIntakeService(transactions, new BulkStore(), readings, computed, alerts, plans);
-  return { intake, bulk, readings, summaries, lateReadings, computed, evaluation };
+  return { intake, bulk, readings, summaries, lateReadings, computed };
 }

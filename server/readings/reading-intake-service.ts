@@ -1,7 +1,8 @@
 import { isMeasured, type Quantity } from '@shared/climate/quantity';
 import { qualityHistoryMs, qualityLimits } from '@shared/series/quality-tests';
 import type { Sample } from '@shared/series/series';
-import type { AlertEvaluationService, NewsOrigin, SeriesNews } from '../alerts/alert-evaluation-service';
+import type { AlertEvaluationService, SeriesNews } from '../alerts/alert-evaluation-service';
+import type { NewsOrigin } from '../alerts/episode-keeper';
 import type { Transactions, Tx } from '../database/transactions';
 import type { ComputedQuantities, Settling } from './computed-quantities';
 import type { LateReadings, TouchedSpan } from './late-readings';
@@ -249,7 +250,14 @@ export class ReadingIntakeService {
       const latest = latestAfter(sensor, own?.fresh ?? []);
       const isTouched = own !== undefined || computedTo.has(sensor.id);
       if (latest === null || !isTouched) return [];
-      return [{ sensorId: sensor.id, latest, computedTo: computedTo.get(sensor.id) ?? sensor.computedTo }];
+      return [
+        {
+          sensorId: sensor.id,
+          latest,
+          computedTo: computedTo.get(sensor.id) ?? sensor.computedTo,
+          changedFrom: own?.fresh[0]?.at ?? null,
+        },
+      ];
     });
     await this.readings.saveStates(tx, changed);
   }

@@ -22,11 +22,22 @@ export interface SensorOnRoad {
   readonly latestFlags: number;
   readonly revision: number;
   readonly computedTo: number | null;
+  /** From where its readings wait for their second look [ms]; null when none do. */
+  readonly unjudgedFrom: number | null;
 }
 
 /** A reading with its quality flags. */
 export interface FlaggedSample extends Sample {
   readonly flags: number;
+}
+
+/** Where a stream has moved to. */
+export interface MovedState {
+  readonly sensorId: string;
+  readonly latest: FlaggedSample;
+  readonly computedTo: number | null;
+  /** Where the sensor's readings first changed [ms]; null when they did not. */
+  readonly changedFrom: number | null;
 }
 
 /** Readings of one sensor to be written. */
@@ -50,6 +61,7 @@ interface SensorRow {
   latest_flags: number | null;
   revision: number | null;
   computed_to: Date | null;
+  unjudged_from: Date | null;
 }
 
 /** Queries over readings and the state of their sensors. */
@@ -82,7 +94,8 @@ export class ReadingStore {
               p.from_at AS placed_at,
               (SELECT lux_per_umol FROM lamp l WHERE l.shelf_id = p.shelf_id AND l.removed_on IS NULL
                ORDER BY l.fitted_on DESC, l.id LIMIT 1) AS lux_per_umol,
-              st.latest_at, st.latest_value, st.latest_flags, st.revision, st.computed_to
+              st.latest_at, st.latest_value, st.latest_flags, st.revision, st.computed_to,
+              st.unjudged_from
        FROM sensor s
        JOIN room r ON r.id = s.room_id
        LEFT JOIN placement p ON p.sensor_id = s.id AND p.to_at IS NULL
@@ -180,27 +193,30 @@ export class ReadingStore {
     );
   }
 
-  /** Moves the streams on: newest reading, revision, and how far computed quantities are summed. */
-  async saveStates(
-    tx: Tx,
-    states: readonly { sensorId: string; latest: FlaggedSample; computedTo: number | null }[],
-  ): Promise<void> {
+  /**
+   * Moves the streams on: newest reading, revision, how far computed quantities are summed, and what waits for the second
+   * look of the alerts.
+   */
+  async saveStates(tx: Tx, states: readonly MovedState[]): Promise<void> {
     if (states.length === 0) return;
     await tx.query(
-      `INSERT INTO sensor_state AS held (sensor_id, latest_at, latest_value, latest_flags, revision, computed_to)
-       SELECT sensor_id, at, value, flags, 1, computed_to
-       FROM unnest($1::uuid[], $2::timestamptz[], $3::float8[], $4::smallint[], $5::timestamptz[])
-         AS new (sensor_id, at, value, flags, computed_to)
+      `INSERT INTO sensor_state AS held
+         (sensor_id, latest_at, latest_value, latest_flags, revision, computed_to, unjudged_from)
+       SELECT sensor_id, at, value, flags, 1, computed_to, unjudged_from
+       FROM unnest($1::uuid[], $2::timestamptz[], $3::float8[], $4::smallint[], $5::timestamptz[], $6::timestamptz[])
+         AS new (sensor_id, at, value, flags, computed_to, unjudged_from)
        ON CONFLICT (sensor_id) DO UPDATE SET
          latest_at = excluded.latest_at, latest_value = excluded.latest_value,
          latest_flags = excluded.latest_flags, computed_to = excluded.computed_to,
+         unjudged_from = least(held.unjudged_from, excluded.unjudged_from),
          revision = held.revision + 1`,
       [
         states.map(({ sensorId }) => sensorId),
         states.map(({ latest }) => new Date(latest.at)),
         states.map(({ latest }) => latest.value),
         states.map(({ latest }) => latest.flags),
-        states.map(({ computedTo }) => (computedTo === null ? null : new Date(computedTo))),
+        states.map(({ computedTo }) => dateOrNull(computedTo)),
+        states.map(({ changedFrom }) => dateOrNull(changedFrom)),
       ],
     );
   }
@@ -231,6 +247,10 @@ export class ReadingStore {
   }
 }
 
+function dateOrNull(at: number | null): Date | null {
+  return at === null ? null : new Date(at);
+}
+
 function instantOrInfinity(at: number): Date | string {
   return Number.isFinite(at) ? new Date(at) : 'infinity';
 }
@@ -251,5 +271,6 @@ function sensorOnRoad(row: SensorRow): SensorOnRoad {
     latestFlags: row.latest_flags ?? 0,
     revision: row.revision ?? 0,
     computedTo: row.computed_to?.getTime() ?? null,
+    unjudgedFrom: row.unjudged_from?.getTime() ?? null,
   };
 }

@@ -13,6 +13,8 @@ export class SensorStateEntity {
   @Column('integer') revision!: number;
   /** Humidity sensors: the last reading with its computed quantities in the sums; a later one may still find a nearer temperature. */
   @Column('timestamptz', { name: 'computed_to', nullable: true }) computedTo!: Date | null;
+  /** From where readings wait for the second look of the alerts. */
+  @Column('timestamptz', { name: 'unjudged_from', nullable: true }) unjudgedFrom!: Date | null;
 
   @OneToOne(() => SensorEntity, { onDelete: 'CASCADE' })
   @JoinColumn({ name: 'sensor_id', foreignKeyConstraintName: 'sensor_state_sensor_fk' })

@@ -14,6 +14,13 @@ export const aboveKinds = [
 export const belowKinds = ['belowRange', 'fastFall', 'lampDark', 'lightShort', 'dangerLow'] as const;
 /** Kinds that watch for readings that don't come. */
 export const silenceKinds = ['sensorSilent', 'deviceSilent'] as const;
+/** Kinds that rest on several sensors of a shelf. */
+export const joinedKinds = [
+  'sensorsDisagree',
+  'matStuckOn',
+  'condensation',
+  'wetHours',
+] as const satisfies readonly AlertKind[];
 /** Everything an alert can be about. */
 export const alertKinds = [...aboveKinds, ...belowKinds, ...silenceKinds] as const;
 /** How soon someone should go to the shelf, the calmer first. */

@@ -95,6 +95,17 @@ export function objectingTests(flags: number): QualityTest[] {
   return tests.filter((test) => (flags & TEST_BITS[test]) !== 0);
 }
 
+/**
+ * Whether a reading speaks against its sensor: beyond what it can measure or what happens in a room, or jumping. A level
+ * line alone does not, since saturated air under a propagator's lid is level.
+ *
+ * @param flags - Flags of a reading.
+ * @returns True for such a reading.
+ */
+export function isFaulty(flags: number): boolean {
+  return flags >= FIRST_FAILED_FLAGS || (flags & (TEST_BITS.grossRange | TEST_BITS.rateOfChange)) !== 0;
+}
+
 /** Puts readings of one sensor, in order of time, to the tests. */
 export interface QualityCheck {
   /**

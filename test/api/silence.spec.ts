@@ -41,26 +41,26 @@ describe('a sensor that falls silent', () => {
     return { post, roomId: shelf.roomId };
   }
 
-  async function silences(roomId: string): Promise<{ quantity: string; open: boolean; told: boolean }[]> {
-    await application.app.services.silenceJob.run();
+  async function silences(roomId: string): Promise<unknown[]> {
+    await application.app.services.secondLookJob.run();
     return application.tx.query(
-      `SELECT quantity, cleared_at IS NULL AS open, told_at IS NOT NULL AS told
-       FROM alert WHERE room_id = $1 AND kind = 'sensorSilent' ORDER BY quantity`,
+      `SELECT kind, urgency, cleared_at IS NULL AS open, told_at IS NOT NULL AS told
+       FROM alert WHERE room_id = $1 AND kind IN ('sensorSilent', 'deviceSilent') ORDER BY kind, began_at`,
       [roomId],
     );
   }
 
-  it('with its whole device opens an alert that people are told of, and clears with the next reading', async () => {
+  it('with its whole device is one alert about the device, which clears with the next reading', async () => {
     const { post, roomId } = await aWatchedDevice();
     await post({ air: 1, root: 1 });
     expect(await silences(roomId)).toEqual([]);
+    const silent = { kind: 'deviceSilent', open: true, told: true };
     application.now = new Date(application.now.getTime() + 40 * minute);
-    expect(await silences(roomId)).toEqual([
-      { quantity: 'airTemperature', open: true, told: true },
-      { quantity: 'rootZoneTemperature', open: true, told: true },
-    ]);
+    expect(await silences(roomId)).toEqual([{ ...silent, urgency: 'lookToday' }]);
+    application.now = new Date(application.now.getTime() + 2 * 60 * minute);
+    expect(await silences(roomId)).toEqual([{ ...silent, urgency: 'goNow' }]);
     await post({ air: 0, root: 0 });
-    expect((await silences(roomId)).map(({ open }) => open)).toEqual([false, false]);
+    expect(await silences(roomId)).toEqual([{ ...silent, urgency: 'goNow', open: false }]);
   });
 
   it('alone, while its device goes on, is named alone', async () => {
@@ -69,7 +69,26 @@ describe('a sensor that falls silent', () => {
     application.now = new Date(application.now.getTime() + 40 * minute);
     await post({ air: 20 });
     await post({ air: 0 });
-    expect(await silences(roomId)).toEqual([{ quantity: 'rootZoneTemperature', open: true, told: true }]);
+    const silent = { kind: 'sensorSilent', urgency: 'lookToday', open: true, told: true };
+    expect(await silences(roomId)).toEqual([silent]);
+    await post({ root: 0 });
+    expect(await silences(roomId)).toEqual([{ ...silent, open: false }]);
+  });
+
+  it('longer than its device is named alone once the device is back', async () => {
+    const { post, roomId } = await aWatchedDevice();
+    await post({ air: 1, root: 1 });
+    application.now = new Date(application.now.getTime() + 60 * minute);
+    await post({ air: 0 });
+    const ofDevice = { kind: 'deviceSilent', urgency: 'lookToday', open: false, told: false };
+    expect(await silences(roomId)).toEqual([ofDevice]);
+    application.now = new Date(application.now.getTime() + 20 * minute);
+    await post({ air: 0 });
+    expect(await silences(roomId)).toEqual([ofDevice]);
+    application.now = new Date(application.now.getTime() + 20 * minute);
+    await post({ air: 0 });
+    const alone = { kind: 'sensorSilent', urgency: 'lookToday', open: true, told: true };
+    expect(await silences(roomId)).toEqual([ofDevice, alone]);
   });
 
   it('is not made out of a device that catches up with old readings', async () => {

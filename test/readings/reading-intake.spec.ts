@@ -1,7 +1,7 @@
 import fc from 'fast-check';
 import type { DataSource } from 'typeorm';
 import { createTestDatabase, type TestDatabase } from '../database/test-database';
-import { keptOf, roadOver, send, sensorsOnAShelf, type Sent } from './intake-harness';
+import { arranged, keptOf, roadOver, send, sensorsOnAShelf, type Sent } from './intake-harness';
 
 const start = Date.UTC(2026, 2, 28, 20); // The night in which Dublin's clocks go forward.
 const step = 5 * 60_000;
@@ -67,8 +67,8 @@ describe('readings on their road', () => {
     });
     await fc.assert(
       fc.asyncProperty(inAnyOrder, async ({ order, size, isRepeated, seed }) => {
-        const arranged = arrange(readings, order, seed);
-        const sent = isRepeated ? [...arranged, ...arranged.slice(0, 50)] : arranged;
+        const ordered = arranged(readings, order, seed);
+        const sent = isRepeated ? [...ordered, ...ordered.slice(0, 50)] : ordered;
         const batches = Array.from({ length: Math.ceil(sent.length / size) }, (_, index) =>
           sent.slice(index * size, (index + 1) * size),
         );
@@ -78,18 +78,3 @@ describe('readings on their road', () => {
     );
   });
 });
-
-/** Orders readings: as they are, at random, or each at most a few places off, as retries and slow radios do. */
-function arrange(sent: readonly Sent[], order: string, seed: number): Sent[] {
-  if (order === 'kept') return [...sent];
-  let state = seed >>> 0;
-  const random = (): number => {
-    state = (Math.imul(state, 1_664_525) + 1_013_904_223) >>> 0;
-    return state / 2 ** 32;
-  };
-  const reach = order === 'nearly' ? 5 : sent.length;
-  return sent
-    .map((reading, index) => ({ reading, key: index + random() * reach }))
-    .sort((a, b) => a.key - b.key)
-    .map(({ reading }) => reading);
-}

@@ -13,6 +13,7 @@ import { AnswerAlerts1764552100000 } from './1764552100000-answer-alerts';
 import { CreateCrops1764552400000 } from './1764552400000-create-crops';
 import { TellOffShelfReadings1764552300000 } from './1764552300000-tell-off-shelf-readings';
 import { CreateSeed1764552500000 } from './1764552500000-create-seed';
+import { WaitForSecondLook1764552550000 } from './1764552550000-wait-for-second-look';
 
 /** Every migration in order; a merged one is never edited. */
 export const migrations = [
@@ -31,4 +32,5 @@ export const migrations = [
   CreateCrops1764552400000,
   TellOffShelfReadings1764552300000,
   CreateSeed1764552500000,
+  WaitForSecondLook1764552550000,
 ];
