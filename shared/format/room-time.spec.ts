@@ -1,4 +1,13 @@
-import { formatAge, formatDay, formatDayAndTime, formatDuration, formatTime, sayWhen } from './room-time';
+import {
+  formatAge,
+  formatDay,
+  formatDayAndTime,
+  formatDuration,
+  formatMonth,
+  formatTime,
+  sayMonth,
+  sayWhen,
+} from './room-time';
 
 const dublin = 'Europe/Dublin';
 const plain = (text: string): string => text.replaceAll('\u00a0', ' ');
@@ -31,10 +40,21 @@ describe('saying when', () => {
   it.each([
     ['2026-12-01T13:54:00Z', '13:54'],
     ['2026-11-30T23:59:00Z', 'yesterday 23:59'],
+    ['2026-12-01T20:00:00Z', '20:00'],
+    ['2026-12-02T08:00:00Z', 'tomorrow 08:00'],
+    ['2026-12-03T08:00:00Z', 'Thu 3 Dec, 08:00'],
     ['2026-11-21T08:00:00Z', 'Sat 21 Nov, 08:00'],
     ['2025-11-21T08:00:00Z', '21 Nov 2025, 08:00'],
   ])('%s reads %s', (at, text) => {
     expect(sayWhen(at, now, dublin)).toBe(text);
+  });
+});
+
+describe('a month', () => {
+  it('is the room’s, and is said in full', () => {
+    expect(formatMonth('2026-11-30T23:30:00Z', dublin)).toBe('2026-11');
+    expect(formatMonth('2026-11-30T23:30:00Z', 'Asia/Kathmandu')).toBe('2026-12');
+    expect(sayMonth('2026-12')).toBe('December 2026');
   });
 });
 

@@ -8,6 +8,8 @@ const styles = {
   time: { hour: '2-digit', minute: '2-digit', hourCycle: 'h23' },
   day: { weekday: 'long', day: 'numeric', month: 'long' },
   shortDay: { weekday: 'short', day: 'numeric', month: 'short' },
+  month: { month: 'long', year: 'numeric' },
+  numericDay: { day: '2-digit', month: '2-digit', year: 'numeric' },
   dayAndYear: { day: 'numeric', month: 'short', year: 'numeric' },
 } satisfies Record<string, Style>;
 
@@ -47,19 +49,32 @@ export function formatDayAndTime(at: Instant, zone: string): string {
   return `${formatShortDay(at, zone)}, ${formatTime(at, zone)}`;
 }
 
+/** The month in a room as addresses name it: "2026-12". @param zone - IANA name. */
+export function formatMonth(at: Instant, zone: string): string {
+  const [, month, year] = format(at, zone, 'numericDay').split('/');
+  return `${year}-${month}`;
+}
+
+/** A month in words: "December 2026". @param month - `YYYY-MM`. */
+export function sayMonth(month: string): string {
+  return format(`${month}-01T00:00:00Z`, 'UTC', 'month');
+}
+
 const dayMs = 24 * 3600_000;
 
 /**
- * When something was, no longer than it need be: today only the time, else the day too, another year with its year.
+ * When something was or will be, no longer than it need be: today only the time, else the day too, another year with
+ * its year.
  *
  * @param zone - IANA name of the room's time zone, which says what "today" is.
  */
 export function sayWhen(at: Instant, now: Instant, zone: string): string {
   const [day, today] = [formatDayAndYear(at, zone), formatDayAndYear(now, zone)];
   if (day === today) return formatTime(at, zone);
-  // A day back by the clock, near enough even when the clocks change: only the date is compared.
-  const yesterday = formatDayAndYear(new Date(now).getTime() - dayMs, zone);
-  if (day === yesterday) return `yesterday ${formatTime(at, zone)}`;
+  // A day by the clock, near enough even when the clocks change: only the date is compared.
+  const inDays = (days: number): string => formatDayAndYear(new Date(now).getTime() + days * dayMs, zone);
+  if (day === inDays(-1)) return `yesterday ${formatTime(at, zone)}`;
+  if (day === inDays(1)) return `tomorrow ${formatTime(at, zone)}`;
   const isThisYear = day.slice(-4) === today.slice(-4);
   return isThisYear ? formatDayAndTime(at, zone) : `${day}, ${formatTime(at, zone)}`;
 }

@@ -10,6 +10,20 @@ class StillResizeObserver implements ResizeObserver {
 }
 globalThis.ResizeObserver ??= StillResizeObserver;
 
+class StillIntersectionObserver implements IntersectionObserver {
+  readonly root = null;
+  readonly rootMargin = '';
+  readonly scrollMargin = '';
+  readonly thresholds = [];
+  observe(): void {}
+  unobserve(): void {}
+  disconnect(): void {}
+  takeRecords(): [] {
+    return [];
+  }
+}
+globalThis.IntersectionObserver ??= StillIntersectionObserver;
+
 globalThis.matchMedia ??= (media: string): MediaQueryList =>
   Object.assign(new EventTarget(), {
     media,

@@ -59,8 +59,8 @@ describe('a lamp that stays dark', () => {
     expect(await seriousViolations(mailbox)).toEqual([]);
     const link = mailbox.getByRole('link', { name: `${application.address}/alerts/` }).first();
     await page.goto(await link.innerText());
-    await page.getByRole('button', { name: /^Acknowledge/ }).click();
-    await page.getByLabel('What you found or did').fill('Timer had no power');
+    await page.getByRole('button', { name: 'Acknowledge with a note' }).click();
+    await page.getByLabel('What you found').fill('Timer had no power');
     await page.getByRole('button', { name: 'I have seen it' }).click();
     await page.getByText(/^Seen by Maren Oduya, .*“Timer had no power”/).waitFor();
     await page.getByRole('link', { name: 'Room', exact: true }).click();

@@ -76,13 +76,4 @@ describe('the inbox of open alerts', () => {
     expect(inbox.open()).toHaveLength(1);
     expect(feed.failure()).not.toBeNull();
   });
-
-  it('takes over an acknowledgement with its note', () => {
-    answer([alert()]);
-    feed.acknowledge(alert(), 'Vent opened').subscribe();
-    const request = server.expectOne(`${address}/${alert().id}/acknowledgement`);
-    expect(request.request.body).toEqual({ note: 'Vent opened' });
-    request.flush(alert({ acknowledgedAt: '2026-12-01T14:20:00Z', acknowledgedByName: 'Maren Oxley' }));
-    expect(inbox.unseenCount()).toBe(0);
-  });
 });

@@ -1,7 +1,6 @@
 import { inject, Injectable, signal } from '@angular/core';
 import { takeUntilDestroyed, toObservable } from '@angular/core/rxjs-interop';
-import { acknowledgeAlert } from '@shared/contracts/alert-answers';
-import { listAlerts, type Alert } from '@shared/contracts/alerts';
+import { listAlerts } from '@shared/contracts/alerts';
 import { catchError, EMPTY, map, merge, switchMap, tap, type Observable } from 'rxjs';
 import { AlertInbox } from './alert-inbox';
 import { ApiClient } from './api-client';
@@ -39,14 +38,6 @@ export class AlertFeed {
   /** Fetches the open alerts again. */
   refresh(): void {
     this.fetch().subscribe();
-  }
-
-  /** Says that somebody has seen an alert. */
-  acknowledge(alert: Alert, note: string): Observable<Alert> {
-    const params = { roomId: this.session.roomId() ?? '', alertId: alert.id };
-    return this.api
-      .call(acknowledgeAlert, { params, body: { note } })
-      .pipe(tap((seen) => this.inbox.takeOver(seen)));
   }
 
   private fetch(): Observable<unknown> {

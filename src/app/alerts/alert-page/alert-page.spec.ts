@@ -49,8 +49,36 @@ describe('the page of an alert', () => {
       .forEach((one) => one.flush({ alerts: [], nextCursor: null }));
   });
 
+  const told = (): void =>
+    server.expectOne(`${address}/time-line`).flush({
+      mails: [
+        {
+          personName: 'Jo Ashdown',
+          reason: 'opened',
+          writtenAt: '2025-12-01T14:10:00Z',
+          sentAt: '2025-12-01T14:11:00Z',
+          refusedAt: null,
+          dueAt: null,
+          attempts: 1,
+        },
+      ],
+      quiets: [],
+      assignments: [],
+    });
+
+  /** Answers the chart with no readings, and waits. */
+  const drawn = async (): Promise<void> => {
+    await Promise.resolve();
+    TestBed.tick();
+    server
+      .match(({ url }) => url.includes('/series/'))
+      .forEach((one) => one.flush({ quantity: 'airTemperature', lines: [], wanted: [] }));
+    await harness.fixture.whenStable();
+  };
+
   it('draws the quantity around a past alert, and leads to the shelf on those days', async () => {
     server.expectOne(address).flush(over);
+    told();
     await Promise.resolve();
     TestBed.tick();
     const request = server.expectOne(
@@ -74,7 +102,7 @@ describe('the page of an alert', () => {
     expect(steps).toEqual([
       'Began',
       'Alert opened',
-      'Mail sent',
+      'Mail that it opened, to Jo Ashdown',
       'Farthest off: 28.3\u00a0°C',
       'Back where it should be',
       'Over',
@@ -86,17 +114,14 @@ describe('the page of an alert', () => {
 
   it('is fetched again when the alert changes', async () => {
     server.expectOne(address).flush(over);
-    await Promise.resolve();
-    TestBed.tick();
-    server
-      .match(({ url }) => url.includes('/series/'))
-      .forEach((one) => one.flush({ quantity: 'airTemperature', lines: [], wanted: [] }));
-    await harness.fixture.whenStable();
+    told();
+    await drawn();
     socket.tell('alert:changed', alert({ id: inventedId(999) }));
     TestBed.tick();
     server.expectNone(address);
     socket.tell('alert:changed', over);
     TestBed.tick();
+    told();
     server
       .expectOne(address)
       .flush({ ...over, acknowledgedAt: '2025-12-01T15:00:00Z', acknowledgedByName: 'Jo Ashdown' });
@@ -104,8 +129,23 @@ describe('the page of an alert', () => {
     expect(page.textContent).toContain('Seen by Jo Ashdown');
   });
 
+  it('tells what it knows when the mails can’t be fetched, and tries again', async () => {
+    server.expectOne(address).flush(over);
+    server.expectOne(`${address}/time-line`).flush(null, { status: 503, statusText: 'x' });
+    await drawn();
+    expect(page.querySelectorAll('ol li')).toHaveLength(5);
+    [...page.querySelectorAll('button')]
+      .find(({ textContent }) => textContent?.trim() === 'Try again')
+      ?.click();
+    TestBed.tick();
+    told();
+    await harness.fixture.whenStable();
+    expect(page.querySelectorAll('ol li')).toHaveLength(6);
+  });
+
   it('of another room says that it is not there', async () => {
     server.expectOne(address).flush(null, { status: 404, statusText: 'x' });
+    server.expectOne(`${address}/time-line`).flush(null, { status: 404, statusText: 'x' });
     await harness.fixture.whenStable();
     expect(page.textContent).toContain('no longer there, or you are not a member of its room');
   });

@@ -31,6 +31,12 @@ export interface ChartMark {
   readonly text: string;
 }
 
+/** A limit that was passed from one instant to another, in the unit of the first line. */
+export interface ChartLimit extends ChartSpan {
+  readonly value: number;
+  readonly isUpper: boolean;
+}
+
 /** From the first to the last point of all lines; null when there is none. */
 export function spanOfLines(lines: readonly ChartLine[]): ChartSpan | null {
   const ends = lines.flatMap(({ points }) => {

@@ -4,7 +4,7 @@ import type {
   CustomSeriesRenderItemParams,
   CustomSeriesRenderItemReturn,
 } from 'echarts';
-import type { ChartMark, ChartPoint, ChartSpan, WantedSpan } from './chart-data';
+import type { ChartLimit, ChartMark, ChartPoint, ChartSpan, WantedSpan } from './chart-data';
 
 interface Plot {
   readonly x: number;
@@ -153,6 +153,27 @@ export function markLines(marks: readonly ChartMark[], stroke: string, fill: str
             style: { stroke, fill, lineWidth: 1.6 },
           },
         ],
+      };
+    },
+  };
+}
+
+/** A dashed level where a limit was passed; the plot reaches as far as it does. */
+export function limitLevel(limit: ChartLimit, stroke: string): CustomSeriesOption {
+  return {
+    ...behind,
+    id: 'limit',
+    z: 4,
+    encode: { x: [0, 1], y: [2] },
+    data: [[limit.from, limit.to, limit.value]],
+    renderItem: (params, api) => {
+      const across = within(plotOf(params), horizontal(api, 0), horizontal(api, 1));
+      if (across === null) return null;
+      const y = api.coord([api.value(0), api.value(2)])[1] ?? 0;
+      return {
+        type: 'line',
+        shape: { x1: across.x, x2: across.x + across.width, y1: y, y2: y },
+        style: { stroke, lineWidth: 1.6, lineDash: [6, 4] },
       };
     },
   };

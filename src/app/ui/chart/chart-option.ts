@@ -8,8 +8,8 @@ import type {
 import { formatNumber, formatValue } from '@shared/format/numbers';
 import { formatDayAndTime } from '@shared/format/room-time';
 import type { ChartColours } from './chart-colours';
-import type { ChartLine, ChartMark, ChartSpan, WantedSpan } from './chart-data';
-import { envelope, lampLine, markLines, nightShade, wantedBand } from './chart-layers';
+import type { ChartLimit, ChartLine, ChartMark, ChartSpan, WantedSpan } from './chart-data';
+import { envelope, lampLine, limitLevel, markLines, nightShade, wantedBand } from './chart-layers';
 import { outsideSegments, type PenPoint } from './outside-segments';
 import { roomTicks, tickLabel } from './room-ticks';
 
@@ -20,6 +20,8 @@ export interface ChartContent {
   readonly lamps: readonly ChartSpan[];
   readonly nights: readonly ChartSpan[];
   readonly marks: readonly ChartMark[];
+  /** A limit that was passed; null where there is none to show. */
+  readonly limit: ChartLimit | null;
   /** The whole span that can be shown. */
   readonly span: ChartSpan;
   /** IANA name of the room's time zone. */
@@ -79,6 +81,7 @@ export function chartOption(content: ChartContent, shown: ChartSpan, manner: Cha
       wantedBand(content.wanted, colours.leekTint),
       lampLine(content.lamps, colours.lamp),
       markLines(content.marks, colours.frost, colours.sheet),
+      ...limitSeries(content.limit, colours),
       ...content.lines.flatMap((line, index) => lineSeries(line, index, units.indexOf(line.unit), colours)),
       ...outsideSeries(content, colours),
     ],
@@ -178,6 +181,10 @@ function outsideSeries({ lines, wanted }: ChartContent, colours: ChartColours): 
     { ...pen('above', above), lineStyle: { width: 3, color: colours.ember } },
     { ...pen('below', below), lineStyle: { width: 3, color: colours.frost } },
   ];
+}
+
+function limitSeries(limit: ChartLimit | null, { ember, frost }: ChartColours): CustomSeriesOption[] {
+  return limit === null ? [] : [limitLevel(limit, limit.isUpper ? ember : frost)];
 }
 
 function pen(id: string, data: readonly PenPoint[]): LineSeriesOption {

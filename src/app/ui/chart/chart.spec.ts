@@ -53,6 +53,13 @@ describe('a chart', () => {
     expect(texts).toContain('Tue 1 Dec');
   });
 
+  it('reaches as far as a limit that is shown', async () => {
+    const limit = { value: 60, isUpper: true, from: start, to: start + 4 * hour };
+    await show({ limit });
+    const texts = [...(await drawn()).querySelectorAll('text')].map((text) => Number(text.textContent));
+    expect(Math.max(...texts.filter((value) => !Number.isNaN(value)))).toBeGreaterThanOrEqual(60);
+  });
+
   it('without readings says so and draws nothing', async () => {
     await show({ lines: [{ name: 'Air', unit: '°C', decimals: 1, points: [] }] });
     expect(host().textContent).toContain('No readings in this span.');

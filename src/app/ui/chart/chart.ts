@@ -21,7 +21,14 @@ import { NgxEchartsDirective, provideEchartsCore } from 'ngx-echarts';
 import { sayWhen } from '@shared/format/room-time';
 import { ThemeChoice } from '../theme/theme-choice';
 import { readChartColours } from './chart-colours';
-import { spanOfLines, type ChartLine, type ChartMark, type ChartSpan, type WantedSpan } from './chart-data';
+import {
+  spanOfLines,
+  type ChartLimit,
+  type ChartLine,
+  type ChartMark,
+  type ChartSpan,
+  type WantedSpan,
+} from './chart-data';
 import { chartOption, zoomOption } from './chart-option';
 import { chartSummary } from './chart-summary';
 import { chartCsv, chartTable } from './chart-table';
@@ -63,6 +70,8 @@ export class Chart {
   /** Spans to shade. */
   readonly nights = input<readonly ChartSpan[]>([]);
   readonly marks = input<readonly ChartMark[]>([]);
+  /** A limit that was passed, dashed. */
+  readonly limit = input<ChartLimit | null>(null);
   /** The span to show; null for as far as the lines reach. */
   readonly span = input<ChartSpan | null>(null);
   /** The part of the span that is zoomed to; null for all of it. Charts bound to one signal zoom together. */
@@ -100,6 +109,7 @@ export class Chart {
         lamps: this.lamps(),
         nights: this.nights(),
         marks: this.marks(),
+        limit: this.limit(),
         span: this.fullSpan(),
         zone: this.zone(),
       },
