@@ -7,22 +7,33 @@ import { VarietiesService } from './crops/varieties-service';
 import { VarietiesStore } from './crops/varieties-store';
 import type { Transactions } from './database/transactions';
 import type { Route } from './http/route';
+import { PlantingEventsService } from './plantings/planting-events-service';
+import { PlantingEventsStore } from './plantings/planting-events-store';
+import { PlantingRecords } from './plantings/planting-records';
+import { PlantingStartService } from './plantings/planting-start-service';
+import { plantingsRoutes } from './plantings/plantings-routes';
+import { PlantingsService } from './plantings/plantings-service';
+import { PlantingsStore } from './plantings/plantings-store';
+import type { RoomsService } from './rooms/rooms-service';
 import { GerminationTestsService } from './seed/germination-tests-service';
 import { GerminationTestsStore } from './seed/germination-tests-store';
 import { seedRoutes } from './seed/seed-routes';
 import { SeedService } from './seed/seed-service';
 import { SeedStore } from './seed/seed-store';
+import { lotWords } from './seed/seed-views';
 
 /** What the growing side stands on. */
 export interface GrowingFoundation {
   readonly transactions: Transactions;
   readonly changes: RoomChanges;
+  readonly rooms: RoomsService;
   readonly now: Clock;
 }
 
 /** What other areas hold on to of the growing side. */
 export interface GrowingServices {
   readonly routes: readonly Route[];
+  readonly plantings: PlantingsService;
 }
 
 /**
@@ -31,7 +42,8 @@ export interface GrowingServices {
  * @param foundation - What they stand on.
  * @returns The services and their routes.
  */
-export function growingServices({ transactions, changes, now }: GrowingFoundation): GrowingServices {
+export function growingServices(foundation: GrowingFoundation): GrowingServices {
+  const { transactions, changes, rooms, now } = foundation;
   const varietiesStore = new VarietiesStore();
   const crops = new CropsService({
     transactions,
@@ -42,6 +54,7 @@ export function growingServices({ transactions, changes, now }: GrowingFoundatio
   });
   const varieties = new VarietiesService({ transactions, varieties: varietiesStore, crops, changes });
 
+  const plantingsStore = new PlantingsStore();
   const testsStore = new GerminationTestsStore();
   const seed = new SeedService({
     transactions,
@@ -49,10 +62,38 @@ export function growingServices({ transactions, changes, now }: GrowingFoundatio
     tests: testsStore,
     crops,
     varieties,
+    sowingsOf: (tx, lotId) => plantingsStore.trialsOf(tx, lotId),
     changes,
     now,
   });
   const tests = new GerminationTestsService(testsStore, seed, now);
 
-  return { routes: [...cropsRoutes(crops, varieties), ...seedRoutes(seed, tests)] };
+  const eventsStore = new PlantingEventsStore();
+  const records = new PlantingRecords(plantingsStore, eventsStore);
+  const plantings = new PlantingsService({
+    transactions,
+    plantings: plantingsStore,
+    events: eventsStore,
+    lotName: async (tx, roomId, lotId) => lotWords(await seed.lot(tx, roomId, lotId)),
+  });
+  const parts = {
+    plantings: plantingsStore,
+    events: eventsStore,
+    records,
+    reader: plantings,
+    rooms,
+    changes,
+    now,
+  };
+  const start = new PlantingStartService({ ...parts, crops, varieties, seed });
+  const happening = new PlantingEventsService(parts);
+
+  return {
+    routes: [
+      ...cropsRoutes(crops, varieties),
+      ...seedRoutes(seed, tests),
+      ...plantingsRoutes(plantings, start, happening),
+    ],
+    plantings,
+  };
 }

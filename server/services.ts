@@ -52,8 +52,6 @@ import { PeopleStore } from './people/people-store';
 import { SignIn } from './people/sign-in';
 import { SignInAttempts } from './people/sign-in-attempts';
 import { GerminationStore } from './plantings/germination-store';
-import { PlantingsService } from './plantings/plantings-service';
-import { PlantingsStore } from './plantings/plantings-store';
 import { HistoryUpkeepService } from './readings/history-upkeep-service';
 import { intakeParts } from './readings/intake-parts';
 import { roomsRoutes } from './rooms/rooms-routes';
@@ -116,11 +114,8 @@ export function composeServices(foundation: Foundation): Services {
   const attempts = new SignInAttempts(transactions);
   const people = new PeopleService(transactions, peopleStore, attempts, audit);
 
-  const growing = growingServices({ transactions, changes, now });
-
   const plansStore = new ShelfPlansStore();
   const plans = new ShelfPlansService(plansStore);
-  const plantings = new PlantingsService(new PlantingsStore());
   const germination = new GerminationStore();
 
   const alertStore = new AlertStore();
@@ -133,6 +128,8 @@ export function composeServices(foundation: Foundation): Services {
 
   const roomsStore = new RoomsStore();
   const rooms = new RoomsService({ transactions, rooms: roomsStore, changes, hooks, now });
+  const growing = growingServices({ transactions, changes, rooms, now });
+  const { plantings } = growing;
   const rules = new ShelfRulesService({
     transactions,
     rooms: roomsStore,

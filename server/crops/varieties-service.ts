@@ -2,6 +2,7 @@ import type { Variety } from '@shared/contracts/crops';
 import type { RoomAuthor } from '../audit/room-author';
 import type { RoomChanges } from '../audit/room-changes';
 import type { Transactions, Tx } from '../database/transactions';
+import { conflict } from '../http/request-problem';
 import type { CropsService } from './crops-service';
 import type { StoredVariety, VarietiesStore } from './varieties-store';
 
@@ -38,7 +39,7 @@ export class VarietiesService {
     });
   }
 
-  /** Renames a variety, or changes its note. */
+  /** Renames a variety, on its lots and plantings too, or changes its note. */
   change(
     by: RoomAuthor,
     varietyId: string,
@@ -49,16 +50,24 @@ export class VarietiesService {
       const before = await varieties.lock(tx, by.roomId, varietyId);
       const after = { ...before, name: change.name ?? before.name, note: change.note ?? before.note };
       await varieties.change(tx, varietyId, { name: after.name, note: after.note });
+      if (after.name !== before.name) await varieties.rename(tx, by.roomId, before, after.name);
       const result = await this.view(tx, by.roomId, after);
       return { result, action: 'variety.change', subjectId: varietyId, detail: { ...change } };
     });
   }
 
-  /** Removes a variety. */
+  /** Removes a variety; 409 while a lot or a planting names it. */
   remove(by: RoomAuthor, varietyId: string): Promise<void> {
     const { changes, varieties } = this.parts;
     return changes.make(by, async (tx) => {
-      const { cropId, name } = await varieties.lock(tx, by.roomId, varietyId);
+      const variety = await varieties.lock(tx, by.roomId, varietyId);
+      const { cropId, name } = variety;
+      if (await varieties.isNamed(tx, by.roomId, variety)) {
+        throw conflict(
+          'VARIETY_USED',
+          `${name} is named by seed or plantings of this room. Rename it instead.`,
+        );
+      }
       await varieties.remove(tx, varietyId);
       return { result: undefined, action: 'variety.remove', subjectId: varietyId, detail: { cropId, name } };
     });

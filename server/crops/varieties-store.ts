@@ -42,6 +42,26 @@ export class VarietiesStore {
     await withFreeName(() => tx.update(VarietyEntity, { id }, change));
   }
 
+  /** Gives lots and plantings of a variety its new name. */
+  async rename(tx: Tx, roomId: string, { cropId, name }: StoredVariety, to: string): Promise<void> {
+    for (const table of ['seed_lot', 'planting']) {
+      await tx.query(
+        `UPDATE ${table} SET variety = $4 WHERE room_id = $1 AND crop_id = $2 AND variety = $3`,
+        [roomId, cropId, name, to],
+      );
+    }
+  }
+
+  /** Whether a lot or a planting names a variety. */
+  async isNamed(tx: Tx, roomId: string, { cropId, name }: StoredVariety): Promise<boolean> {
+    const rows: unknown[] = await tx.query(
+      `SELECT FROM seed_lot WHERE room_id = $1 AND crop_id = $2 AND variety = $3
+       UNION ALL SELECT FROM planting WHERE room_id = $1 AND crop_id = $2 AND variety = $3 LIMIT 1`,
+      [roomId, cropId, name],
+    );
+    return rows.length > 0;
+  }
+
   /** Removes a variety. */
   async remove(tx: Tx, id: string): Promise<void> {
     await tx.delete(VarietyEntity, { id });

@@ -26,6 +26,8 @@ import { ToldAlertEntity } from '../mail/told-alert-entity';
 import { MembershipEntity } from '../people/membership-entity';
 import { PersonEntity } from '../people/person-entity';
 import { PlantingEntity } from '../plantings/planting-entity';
+import { PlantingEventEntity } from '../plantings/planting-event-entity';
+import { PlantingPlaceEntity } from '../plantings/planting-place-entity';
 import { DailySummaryEntity } from '../readings/daily-summary-entity';
 import { HourlySummaryEntity } from '../readings/hourly-summary-entity';
 import { ReadingEntity } from '../readings/reading-entity';
@@ -71,6 +73,8 @@ const entities = [
   PersonEntity,
   PlacementEntity,
   PlantingEntity,
+  PlantingEventEntity,
+  PlantingPlaceEntity,
   RackEntity,
   ReadingEntity,
   RoomCropEntity,

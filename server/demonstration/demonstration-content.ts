@@ -3,7 +3,6 @@ import type { Role } from '@shared/contracts/people';
 import type { Quantity } from '@shared/climate/quantity';
 import type { CareKind } from '@shared/care/care-kind';
 import type { ShelfEventKind } from '@shared/care/shelf-event';
-import type { PlantHabit, PlantingStage } from '@shared/growing/planting-stage';
 import { STORY_DAYS_BEFORE } from '@shared/demonstration/kestrel-lane';
 
 // Everything here is invented: people, addresses, varieties and amounts.
@@ -29,49 +28,7 @@ export const demonstrationRacks = [
   { name: 'Rack B', note: 'back wall', shelves: ['B1', 'B2', 'B3', 'B4'] },
 ] as const;
 
-/** A planting of the demonstration, with days counted back from today. */
-export interface DemonstrationPlanting {
-  readonly shelf: string;
-  readonly crop: string;
-  readonly variety: string | null;
-  readonly habit: PlantHabit;
-  readonly count: number;
-  readonly stage: PlantingStage;
-  readonly startedDaysAgo: number;
-  readonly stageDaysAgo: number;
-}
-
 const { leekAndOnionSown, peppersSown } = STORY_DAYS_BEFORE;
-
-/** What grows. */
-export const demonstrationPlantings: readonly DemonstrationPlanting[] = [
-  planting('A1', 'Dwarf tomato', 'Amberbell', 'fruiting', 4, 'fruiting', 274, 190),
-  planting('A1', 'Dwarf tomato', 'Thimble Red', 'fruiting', 2, 'growingOn', 61, 30),
-  planting('A2', 'Basil', 'Broadleaf', 'bush', 3, 'growingOn', 84, 60),
-  planting('A2', 'Chives', null, 'blades', 5, 'growingOn', 420, 380),
-  planting('A2', 'Lemongrass', null, 'leafy', 3, 'growingOn', 210, 160),
-  planting('A3', 'Leek', 'Grey Heron', 'blades', 7, 'emerging', leekAndOnionSown, 0),
-  planting('A3', 'Onion, long-day', 'Harvest Moon', 'blades', 9, 'sown', leekAndOnionSown, leekAndOnionSown),
-  planting('A4', 'Sweet pepper', 'Lantern Yellow', 'fruiting', 6, 'sown', peppersSown, peppersSown),
-  planting('A4', 'Hot pepper', 'Little Ember', 'fruiting', 6, 'sown', peppersSown, peppersSown),
-  planting('B1', 'Strawberry', 'Evenfall', 'berry', 7, 'fruiting', 190, 95),
-  planting('B2', 'Potted citrus', 'Window Lemon', 'tree', 4, 'fruiting', 1290, 200),
-  planting('B2', 'Bay', null, 'bush', 2, 'growingOn', 2050, 1900),
-  planting('B3', 'Lettuce, cut-and-come', 'Small Hours', 'rosette', 12, 'growingOn', 44, 24),
-];
-
-function planting(
-  shelf: string,
-  crop: string,
-  variety: string | null,
-  habit: PlantHabit,
-  count: number,
-  stage: PlantingStage,
-  startedDaysAgo: number,
-  stageDaysAgo: number,
-): DemonstrationPlanting {
-  return { shelf, crop, variety, habit, count, stage, startedDaysAgo, stageDaysAgo };
-}
 
 /** What a shelf wants of a quantity, lamps on and lamps off. */
 export interface DemonstrationRange {

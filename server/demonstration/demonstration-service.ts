@@ -12,11 +12,11 @@ import {
   demonstrationEvents,
   demonstrationPassword,
   demonstrationPeople,
-  demonstrationPlantings,
   demonstrationRacks,
   demonstrationRanges,
   demonstrationRoutines,
 } from './demonstration-content';
+import { DemonstrationGrowing } from './demonstration-growing';
 import type { DemonstrationStore } from './demonstration-store';
 
 const DAY_MS = 86_400_000;
@@ -67,7 +67,10 @@ export class DemonstrationService {
     const shelves = await this.addShelves(tx, roomId, plan);
     await this.addRanges(tx, now, plan.timeZone, shelves);
     const devices = await this.addDevices(tx, roomId, plan, shelves);
-    await this.addGrowing(tx, roomId, plan.timeZone, now, shelves);
+    const personId = people.get('maren@example.org') ?? null;
+    const zone = plan.timeZone;
+    await new DemonstrationGrowing().fill(tx, { roomId, zone, now, shelves, personId });
+    await this.addMarks(tx, zone, now, shelves);
     await this.addCare(tx, roomId, plan.timeZone, now, shelves, people);
     return simulatedRoom.parse({ ...plan, roomId, devices });
   }
@@ -176,22 +179,12 @@ export class DemonstrationService {
     return devices;
   }
 
-  private async addGrowing(
+  private async addMarks(
     tx: Tx,
-    roomId: string,
     zone: string,
     now: number,
     shelves: ReadonlyMap<string, string>,
   ): Promise<void> {
-    for (const { shelf, startedDaysAgo, stageDaysAgo, ...planting } of demonstrationPlantings) {
-      await this.store.addPlanting(tx, {
-        ...planting,
-        roomId,
-        shelfId: idOf(shelves, shelf),
-        startedOn: dayBefore(now, startedDaysAgo, zone),
-        stageSince: dayBefore(now, stageDaysAgo, zone),
-      });
-    }
     for (const { shelf, daysAgo, at, kind, text } of demonstrationEvents) {
       const { start } = dayBounds(dayBefore(now, daysAgo, zone), zone);
       const [hours = 0, minutes = 0] = at.split(':').map(Number);

@@ -8,7 +8,6 @@ import { PlacementEntity } from '../devices/placement-entity';
 import { SensorEntity } from '../devices/sensor-entity';
 import { MembershipEntity } from '../people/membership-entity';
 import { PersonEntity } from '../people/person-entity';
-import { PlantingEntity } from '../plantings/planting-entity';
 import { HeatMatEntity } from '../rooms/heat-mat-entity';
 import { LampEntity } from '../rooms/lamp-entity';
 import { LampPlanEntity } from '../rooms/lamp-plan-entity';
@@ -43,8 +42,6 @@ export class DemonstrationStore {
   addHeatMat = adder(HeatMatEntity);
   /** Adds a device. */
   addDevice = adder(DeviceEntity);
-  /** Adds a planting. */
-  addPlanting = adder(PlantingEntity);
   /** Adds a routine. */
   addRoutine = adder(RoutineEntity);
   /** Adds a task. */

@@ -1,6 +1,6 @@
 import type { SeedLot, SeedLotDetail, SeedsNeeded } from '@shared/contracts/seed';
 import { expectedSeedlings, seedsNeeded } from '@shared/growing/seed-expectations';
-import { compareUrgency } from '@shared/growing/seed-stock';
+import { compareUrgency, type SeedTrial } from '@shared/growing/seed-stock';
 import { dayBounds } from '@shared/series/room-days';
 import type { RoomAuthor } from '../audit/room-author';
 import type { RoomChanges } from '../audit/room-changes';
@@ -20,6 +20,8 @@ export interface SeedParts {
   readonly tests: GerminationTestsStore;
   readonly crops: CropsService;
   readonly varieties: VarietiesService;
+  /** What came of the finished sowings of a lot. */
+  readonly sowingsOf: (tx: Tx, lotId: string) => Promise<SeedTrial[]>;
   readonly changes: RoomChanges;
   readonly now: Clock;
 }
@@ -62,9 +64,14 @@ export class SeedService {
     return {
       ...lotView(lot, around),
       tests: around.tests.map(testView),
-      uses: uses.map(({ at, ...use }) => ({ ...use, at: at.toISOString(), plantingId: null })),
+      uses: uses.map(({ at, ...use }) => ({ ...use, at: at.toISOString() })),
       photos: [],
     };
+  }
+
+  /** A lot as it is stored; 404 when the room has none such. */
+  lot(tx: Tx, roomId: string, lotId: string): Promise<StoredLot> {
+    return this.parts.seed.lot(tx, roomId, lotId);
   }
 
   /** Adds a lot, and its variety when it is new. */
@@ -175,6 +182,7 @@ export class SeedService {
       readonly reason: 'sown' | 'tested';
       readonly at: Date;
       readonly testId?: string;
+      readonly plantingId?: string;
       readonly field: string;
     },
   ): Promise<StoredLot> {
@@ -192,7 +200,7 @@ export class SeedService {
         `is more than is left of the lot: ${lot.left} ${unit}. Recount it if there is more`,
       );
     }
-    const { reason, at, testId } = take;
+    const { reason, at, testId, plantingId } = take;
     await seed.addUse(tx, {
       lotId,
       at,
@@ -200,6 +208,7 @@ export class SeedService {
       amount,
       personId: by.personId,
       ...(testId === undefined ? {} : { testId }),
+      ...(plantingId === undefined ? {} : { plantingId }),
     });
     return lot;
   }
@@ -230,6 +239,7 @@ export class SeedService {
     return {
       crop: await crops.crop(tx, room.id, lot.cropId),
       tests: await tests.ofLots(tx, [lot.id]),
+      sowings: await this.parts.sowingsOf(tx, lot.id),
       today: dayBounds(now().getTime(), room.timeZone).date,
     };
   }

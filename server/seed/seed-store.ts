@@ -38,6 +38,7 @@ export interface StoredUse {
   readonly reason: SeedUseReason;
   readonly amount: number;
   readonly note: string;
+  readonly plantingId: string | null;
   readonly personName: string | null;
 }
 
@@ -92,7 +93,8 @@ export class SeedStore {
   /** What was used of a lot, newest first. */
   uses(tx: Tx, lotId: string): Promise<StoredUse[]> {
     return tx.query(
-      `SELECT seed_use.id, seed_use.at, seed_use.reason, seed_use.amount, seed_use.note, person.name AS "personName"
+      `SELECT seed_use.id, seed_use.at, seed_use.reason, seed_use.amount, seed_use.note,
+         seed_use.planting_id AS "plantingId", person.name AS "personName"
        FROM seed_use LEFT JOIN person ON person.id = seed_use.person_id
        WHERE seed_use.lot_id = $1 ORDER BY seed_use.at DESC, seed_use.id`,
       [lotId],
@@ -103,7 +105,7 @@ export class SeedStore {
   async addUse(
     tx: Tx,
     use: Pick<SeedUseEntity, 'lotId' | 'at' | 'reason' | 'amount' | 'personId'> &
-      Partial<Pick<SeedUseEntity, 'testId' | 'note'>>,
+      Partial<Pick<SeedUseEntity, 'testId' | 'plantingId' | 'note'>>,
   ): Promise<void> {
     await tx.insert(SeedUseEntity, use);
   }

@@ -9,13 +9,15 @@ import {
   type Relation,
 } from 'typeorm';
 import { PersonEntity } from '../people/person-entity';
+import { PlantingEntity } from '../plantings/planting-entity';
 import { GerminationTestEntity } from './germination-test-entity';
 import { SeedLotEntity } from './seed-lot-entity';
 
 /** Why there is less of a lot, or after a recount more. */
 export type SeedUseReason = 'sown' | 'tested' | 'recounted';
 
-/** Something that changed what is left of a lot. It goes with the test that took it, so that its seed is back. */
+/** Something that changed what is left of a lot. It goes with the test or the planting that took it, so that
+ * its seed is back. */
 @Entity('seed_use')
 @Check('seed_use_reason_known', `reason IN ('sown', 'tested', 'recounted')`)
 @Index('seed_use_lot_idx', ['lotId', 'at'])
@@ -27,6 +29,7 @@ export class SeedUseEntity {
   /** In the lot's unit; negative where a recount found more. */
   @Column('double precision') amount!: number;
   @Column('uuid', { name: 'test_id', nullable: true }) testId!: string | null;
+  @Column('uuid', { name: 'planting_id', nullable: true }) plantingId!: string | null;
   @Column('text', { default: '' }) note!: string;
   @Column('uuid', { name: 'person_id', nullable: true }) personId!: string | null;
 
@@ -36,6 +39,9 @@ export class SeedUseEntity {
   @ManyToOne(() => GerminationTestEntity, { onDelete: 'CASCADE' })
   @JoinColumn({ name: 'test_id', foreignKeyConstraintName: 'seed_use_test_fk' })
   test?: Relation<GerminationTestEntity>;
+  @ManyToOne(() => PlantingEntity, { onDelete: 'CASCADE' })
+  @JoinColumn({ name: 'planting_id', foreignKeyConstraintName: 'seed_use_planting_fk' })
+  planting?: Relation<PlantingEntity>;
   @ManyToOne(() => PersonEntity, { onDelete: 'SET NULL' })
   @JoinColumn({ name: 'person_id', foreignKeyConstraintName: 'seed_use_person_fk' })
   person?: Relation<PersonEntity>;

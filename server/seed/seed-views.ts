@@ -18,6 +18,8 @@ export interface LotSurroundings {
   readonly crop: Crop | null;
   /** Newest first. */
   readonly tests: readonly StoredTest[];
+  /** What came of its finished sowings. */
+  readonly sowings: readonly SeedTrial[];
   readonly today: string;
 }
 
@@ -41,6 +43,21 @@ export function lotView(lot: StoredLot, around: LotSurroundings): SeedLot {
   };
 }
 
+/**
+ * A lot in words, for a planting's page.
+ *
+ * @param lot - Which.
+ * @returns Such as “packed 2025, lot 17/4, swap at the village hall”.
+ */
+export function lotWords({ packedYear, lotNumber, source }: StoredLot): string {
+  const words = [
+    packedYear === null ? null : `packed ${packedYear}`,
+    lotNumber === '' ? null : `lot ${lotNumber}`,
+    source === '' ? null : source,
+  ].filter((word) => word !== null);
+  return words.length === 0 ? 'a lot of no year or number' : words.join(', ');
+}
+
 /** The age of a lot. */
 export function ageOf(
   { packedYear }: StoredLot,
@@ -50,8 +67,8 @@ export function ageOf(
 }
 
 /** What germination may be expected of a lot. */
-export function lotExpectation({ crop, tests }: LotSurroundings): LotExpectation | null {
-  return expectationOfLot({ test: newestTrial(tests), sowings: [], seed: crop?.seed ?? null });
+export function lotExpectation({ crop, tests, sowings }: LotSurroundings): LotExpectation | null {
+  return expectationOfLot({ test: newestTrial(tests), sowings, seed: crop?.seed ?? null });
 }
 
 /**

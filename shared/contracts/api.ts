@@ -9,6 +9,8 @@ import * as loggerFileProfiles from './logger-file-profiles';
 import * as loggerFiles from './logger-files';
 import * as mail from './mail';
 import * as people from './people';
+import * as plantingEvents from './planting-events';
+import * as plantings from './plantings';
 import * as rooms from './rooms';
 import * as scenarios from './scenarios';
 import * as seed from './seed';
@@ -106,6 +108,16 @@ export const endpoints: readonly Endpoint[] = [
   seed.addGerminationTest,
   seed.countGerminationTest,
   seed.removeGerminationTest,
+  plantings.listPlantings,
+  plantings.getPlanting,
+  plantings.startPlanting,
+  plantings.changePlanting,
+  plantings.removePlanting,
+  plantings.splitPlanting,
+  plantings.mergePlanting,
+  plantingEvents.observePlanting,
+  plantingEvents.stepPlanting,
+  plantingEvents.undoPlantingEvent,
   scenarios.listScenarios,
   scenarios.startScenario,
   scenarios.stopScenario,

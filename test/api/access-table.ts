@@ -201,6 +201,20 @@ export const accessTable: Readonly<Record<string, AccessRow>> = {
   countGerminationTest: { outcomes: helper, body: { on: '2026-04-10', up: 3 } },
   removeGerminationTest: { outcomes: grower },
 
+  listPlantings: { outcomes: viewer },
+  getPlanting: { outcomes: viewer },
+  startPlanting: {
+    outcomes: grower,
+    body: { how: 'sown', cropId: 'leek', count: 20, shelfId: null },
+  },
+  changePlanting: { outcomes: grower, body: { source: 'a neighbour' } },
+  removePlanting: { outcomes: grower },
+  splitPlanting: { outcomes: grower, body: { count: 5 } },
+  mergePlanting: { outcomes: grower, body: { otherId: '0b6f6c0e-0000-4000-8000-000000000001' } },
+  observePlanting: { outcomes: helper, body: { kind: 'noted', note: 'curled leaves' } },
+  stepPlanting: { outcomes: grower, body: { kind: 'pottedOn', container: '1 L' } },
+  undoPlantingEvent: { outcomes: helper },
+
   listScenarios: { outcomes: keeper },
   startScenario: { outcomes: keeper },
   stopScenario: { outcomes: keeper },

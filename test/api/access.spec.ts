@@ -9,6 +9,7 @@ import { aRoomCrop, aVariety } from '../builders/crops';
 import { aDevice, aSensor } from '../builders/devices';
 import { aFileProfile, aLoggerFile } from '../builders/logger-files';
 import { aMember, aPerson } from '../builders/people';
+import { aPlanting, aPlantingEvent } from '../builders/plantings';
 import { aShelf, aWantedRange } from '../builders/rooms';
 import { aGerminationTest, aSeedLot } from '../builders/seed';
 import { accessTable, callers, type CallerName, type Outcome } from './access-table';
@@ -104,6 +105,7 @@ describe('access', () => {
       await aWantedRange(tx, { shelfId: shelf.id });
       const sensor = await aSensor(tx, { roomId });
       const lot = await aSeedLot(tx, { roomId });
+      const planting = await aPlanting(tx, { shelfId: shelf.id });
       const alert = await anAlert(tx, { shelfId: shelf.id });
       return {
         roomId,
@@ -116,6 +118,8 @@ describe('access', () => {
         deedId: (await anAlertDeed(tx, { alertId: alert.id })).id,
         taskId: (await aTask(tx, { roomId })).id,
         fileId: (await aLoggerFile(tx, { roomId })).id,
+        plantingId: planting.id,
+        eventId: (await aPlantingEvent(tx, { plantingId: planting.id })).id,
         lotId: lot.id,
         testId: (await aGerminationTest(tx, { lotId: lot.id })).id,
         cropId: (await aRoomCrop(tx, { roomId })).id,
@@ -132,12 +136,15 @@ describe('access', () => {
         const there = await everythingIn(
           (await aMember(application.tx, { personId: people.keeper.id, role: 'keeper' })).roomId,
         );
-        const call = (parameters: Record<string, string>): Promise<Response> => {
+        const call = async (parameters: Record<string, string>): Promise<Response> => {
           const request = keeper.call(endpoint.method, pathOf(endpoint, parameters));
-          // A sensor is placed on a shelf that the body names.
+          // A sensor is placed on a shelf that the body names, and a planting takes in one that it names.
           const body = {
             ...accessTable[name]?.body,
             ...(name === 'placeSensor' ? { shelfId: here['shelfId'] } : {}),
+            ...(name === 'mergePlanting'
+              ? { otherId: (await aPlanting(application.tx, { shelfId: here['shelfId'] ?? '' })).id }
+              : {}),
           };
           return endpoint.method === 'get'
             ? request.then((reply) => reply)

@@ -14,6 +14,7 @@ import { CreateCrops1764552400000 } from './1764552400000-create-crops';
 import { TellOffShelfReadings1764552300000 } from './1764552300000-tell-off-shelf-readings';
 import { CreateSeed1764552500000 } from './1764552500000-create-seed';
 import { WaitForSecondLook1764552550000 } from './1764552550000-wait-for-second-look';
+import { KeepPlantingHistory1764552600000 } from './1764552600000-keep-planting-history';
 
 /** Every migration in order; a merged one is never edited. */
 export const migrations = [
@@ -33,4 +34,5 @@ export const migrations = [
   TellOffShelfReadings1764552300000,
   CreateSeed1764552500000,
   WaitForSecondLook1764552550000,
+  KeepPlantingHistory1764552600000,
 ];

@@ -1,0 +1,64 @@
+import { mkdtemp, rm } from 'node:fs/promises';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
+import type { Planting } from '@shared/contracts/plantings';
+import type { SeedLot } from '@shared/contracts/seed';
+import { demonstrationPassword, demonstrationPeople } from '../../server/demonstration/demonstration-content';
+import { DemonstrationService } from '../../server/demonstration/demonstration-service';
+import { DemonstrationStore } from '../../server/demonstration/demonstration-store';
+import { demonstrationLots, demonstrationPlantings } from '../../server/demonstration/growing-content';
+import { Caller } from './caller';
+import { startTestApplication, type TestApplication } from './test-application';
+
+describe('the demonstration', () => {
+  let application: TestApplication;
+  let folder: string;
+
+  beforeEach(async () => {
+    application = await startTestApplication();
+    folder = await mkdtemp(join(tmpdir(), 'demonstration-'));
+  });
+  afterEach(async () => {
+    await rm(folder, { recursive: true });
+    await application.stop();
+  });
+
+  async function filled(at: string): Promise<{ caller: Caller; path: string }> {
+    application.now = new Date(at);
+    const service = new DemonstrationService(
+      application.database.transactions,
+      new DemonstrationStore(),
+      async () => undefined,
+      () => application.now,
+    );
+    const roomId = await service.fill(join(folder, 'devices.json'));
+    const [keeper] = demonstrationPeople;
+    const caller = await Caller.signedIn(
+      application.express,
+      keeper as { email: string },
+      demonstrationPassword,
+    );
+    return { caller, path: `/rooms/${roomId ?? ''}` };
+  }
+
+  it.each([
+    ['at noon', '2026-12-01T12:00:00Z'],
+    ['minutes after midnight', '2026-12-01T00:03:00Z'],
+    ['when the clocks had just changed', '2026-10-25T01:30:00Z'],
+  ])('filled %s grows everything that its story tells', async (_, at) => {
+    const { caller, path } = await filled(at);
+
+    const { plantings } = (await caller.get(`${path}/plantings?state=all`).expect(200)).body as {
+      plantings: Planting[];
+    };
+    const lots = (await caller.get(`${path}/seed-lots`).expect(200)).body as SeedLot[];
+
+    expect(plantings).toHaveLength(demonstrationPlantings.length);
+    const leek = plantings.find(({ cropId }) => cropId === 'leek');
+    expect(leek).toMatchObject({ stage: 'emerging', sown: 24, up: 7, count: 7, shelfLabel: 'A3' });
+    expect(plantings.filter(({ endedOn }) => endedOn !== null)).toHaveLength(2);
+    expect(lots).toHaveLength(demonstrationLots.length);
+    expect(lots.filter(({ left, amount }) => left < 0 || left >= amount)).toEqual([]);
+    expect(lots.filter(({ age }) => age.useFirst).map(({ variety }) => variety)).toContain('Harvest Moon');
+  });
+});
