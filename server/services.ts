@@ -237,7 +237,7 @@ export function composeServices(foundation: Foundation): Services {
   });
 
   let demonstrationRoom: string | null = null;
-  const scenarios = new ScenariosService(config.simulatorControl, () => demonstrationRoom);
+  const scenarios = new ScenariosService(config.simulatorControl, () => demonstrationRoom, now);
 
   return {
     routes: [

@@ -57,6 +57,7 @@ export class BoardService {
       this.sources.openAlerts(roomId),
       this.sources.tasksOf(roomId, day.date, dayBounds(now + AHEAD_MS, room.timeZone).date),
     ]);
+    const live = latest.filter(({ isLive }) => isLive);
     return {
       roomId,
       roomName: room.name,
@@ -65,8 +66,8 @@ export class BoardService {
       today: day.date,
       dayStart: new Date(day.start).toISOString(),
       dayEnd: new Date(day.end).toISOString(),
-      sensorCount: latest.length,
-      sensorsReporting: latest.filter((reading) => isReporting(reading, now)).length,
+      sensorCount: live.length,
+      sensorsReporting: live.filter((reading) => isReporting(reading, now)).length,
       racks: racksOf(rows, states, plantings),
       openAlerts,
       tasks,

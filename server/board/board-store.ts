@@ -22,6 +22,8 @@ export interface LatestReading {
   readonly expectedIntervalS: number;
   readonly lightThreshold: number | null;
   readonly luxPerUmol: number | null;
+  /** Its device reports by itself; sensors that files speak for never do. */
+  readonly isLive: boolean;
   readonly at: number | null;
   readonly value: number;
   readonly flags: number;
@@ -57,10 +59,12 @@ export class BoardStore {
       `SELECT p.shelf_id AS "shelfId", s.id AS "sensorId", s.quantity, s.expected_interval_s AS "expectedIntervalS",
               s.light_threshold AS "lightThreshold", st.latest_at AS at, st.latest_value AS value,
               st.latest_flags AS flags,
+              d.last_seen_at IS NOT NULL AND d.revoked_at IS NULL AS "isLive",
               (SELECT l.lux_per_umol FROM lamp l WHERE l.shelf_id = p.shelf_id AND l.removed_on IS NULL
                ORDER BY l.fitted_on DESC, l.id LIMIT 1) AS "luxPerUmol"
        FROM placement p
        JOIN sensor s ON s.id = p.sensor_id AND s.retired_at IS NULL
+       JOIN device d ON d.id = s.device_id
        LEFT JOIN sensor_state st ON st.sensor_id = s.id
        WHERE p.shelf_id = ANY($1) AND p.to_at IS NULL
        ORDER BY p.shelf_id, st.latest_at DESC NULLS LAST, s.id`,

@@ -6,6 +6,7 @@ import {
   type ScenarioRun,
   type StartScenarioRequest,
 } from '@shared/contracts/simulation';
+import type { Clock } from '../clock';
 import { RequestProblem, notFound } from '../http/request-problem';
 
 /** Where the simulator takes orders. */
@@ -19,10 +20,12 @@ export class ScenariosService {
   constructor(
     private readonly control: SimulatorControl | null,
     private readonly demonstrationRoom: () => string | null,
+    private readonly now: Clock,
   ) {}
 
-  /** What can be played and what is playing. */
+  /** What can be played and what is playing: nothing in a room that nobody simulates. */
   async list(roomId: string): Promise<ScenarioListResponse> {
+    if (!this.isSimulated(roomId)) return { roomTime: this.now().toISOString(), scenarios: [], running: [] };
     return scenarioListResponse.parse(await this.ask(roomId, 'GET', '/scenarios'));
   }
 
@@ -36,8 +39,12 @@ export class ScenariosService {
     await this.ask(roomId, 'DELETE', `/scenarios/${encodeURIComponent(run)}`);
   }
 
+  private isSimulated(roomId: string): boolean {
+    return this.control !== null && roomId === this.demonstrationRoom();
+  }
+
   private async ask(roomId: string, method: string, path: string, body?: unknown): Promise<unknown> {
-    if (this.control === null || roomId !== this.demonstrationRoom()) throw notFound('simulator');
+    if (this.control === null || !this.isSimulated(roomId)) throw notFound('simulator');
     const answer = await this.send(this.control, method, path, body);
     const content: unknown = answer.status === 204 ? null : await answer.json().catch(() => null);
     if (answer.ok) return content;

@@ -85,6 +85,7 @@ export const board = z.object({
   today: day,
   dayStart: instant,
   dayEnd: instant,
+  /** Sensors whose devices report by themselves. */
   sensorCount: z.number().int(),
   sensorsReporting: z.number().int(),
   racks: z.array(boardRack),

@@ -50,8 +50,14 @@ describe('the scenarios of the demonstration', () => {
   });
   afterEach(() => server.verify());
 
-  it.each([404, 503])('are not shown where the answer is %d, nor complained about', async (status) => {
-    server.expectOne(path).flush(null, { status, statusText: 'x' });
+  it('are not shown in a room that nobody simulates', async () => {
+    server.expectOne(path).flush(list({ scenarios: [] }));
+    await fixture.whenStable();
+    expect(page().textContent.trim()).toBe('');
+  });
+
+  it('are not shown while the simulator is away, nor complained about', async () => {
+    server.expectOne(path).flush(null, { status: 503, statusText: 'x' });
     await fixture.whenStable();
     expect(page().textContent.trim()).toBe('');
     expect(sayFailure).not.toHaveBeenCalled();
