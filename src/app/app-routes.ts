@@ -34,6 +34,30 @@ export const appRoutes: Routes = [
     loadComponent: () => import('./alerts/alert-page/alert-page').then((m) => m.AlertPage),
   },
   {
+    path: 'plantings',
+    title: 'Plantings',
+    ...signedIn,
+    loadComponent: () => import('./plantings/list/plantings-page').then((m) => m.PlantingsPage),
+  },
+  {
+    path: 'plantings/new',
+    title: 'Add a planting',
+    ...signedIn,
+    loadComponent: () => import('./plantings/start/start-page').then((m) => m.StartPage),
+  },
+  {
+    path: 'plantings/labels',
+    title: 'Plant labels',
+    ...signedIn,
+    loadComponent: () => import('./plantings/labels/labels-page').then((m) => m.LabelsPage),
+  },
+  {
+    path: 'plantings/:plantingId',
+    title: 'Planting',
+    ...signedIn,
+    loadComponent: () => import('./plantings/planting/planting-page').then((m) => m.PlantingPage),
+  },
+  {
     path: 'seed',
     title: 'Seed',
     ...signedIn,

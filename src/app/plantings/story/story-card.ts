@@ -1,0 +1,43 @@
+import { ChangeDetectionStrategy, Component, computed, inject } from '@angular/core';
+import { MatButton } from '@angular/material/button';
+import { MatIcon } from '@angular/material/icon';
+import { RouterLink } from '@angular/router';
+import { ReaderFormat } from '../../core/reader-format';
+import { Session } from '../../core/session';
+import { shownPhoto } from '../../core/shown-photo';
+import { PlantingData } from '../planting/planting-data';
+import { plantingTitle } from '../words/planting-facts';
+import { storyOf } from './story';
+import { StoryClimate } from './story-climate';
+
+/** What happened to the planting, over the climate of where it stood. */
+@Component({
+  selector: 'app-story-card',
+  templateUrl: './story-card.html',
+  styleUrl: './story-card.scss',
+  imports: [MatButton, MatIcon, RouterLink, StoryClimate],
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class StoryCard {
+  private readonly format = inject(ReaderFormat);
+  private readonly session = inject(Session);
+  protected readonly data = inject(PlantingData);
+
+  protected readonly lines = computed(() => {
+    const [planting, roomId] = [this.data.planting(), this.session.roomId()];
+    if (planting === null || roomId === null) return [];
+    const about = plantingTitle(planting);
+    const photos = new Map(
+      planting.photos.map((photo) => [
+        photo.id,
+        shownPhoto(photo, roomId, about, this.format.when(photo.at)),
+      ]),
+    );
+    return storyOf(planting).map((line) => ({
+      ...line,
+      origin: [this.format.when(line.at), line.personName].filter((part) => part !== null).join(' · '),
+      photo: line.photoId === null ? null : (photos.get(line.photoId) ?? null),
+    }));
+  });
+  protected readonly mayUndo = computed(() => this.session.may('helper'));
+}
