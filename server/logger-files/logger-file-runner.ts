@@ -36,7 +36,7 @@ const PROGRESS_EVERY_MS = 250;
 
 const stopped: FileFailure = {
   code: 'SERVER_STOPPED',
-  message: 'The server stopped while it was at work on this file. Nothing was changed; try again.',
+  message: 'The server stopped while it was at work on this file. Try again.',
   line: null,
   column: null,
 };
@@ -187,14 +187,13 @@ function failureOf(error: unknown): FileFailure {
   }
   const place = { line: null, column: null };
   if (error instanceof SensorGone) {
-    const message =
-      'A sensor that this file was matched to is not there any more. Nothing was stored; match it again.';
+    const message = 'A sensor that this file was matched to is not there any more. Match it again.';
     return { code: 'SENSOR_GONE', message, ...place };
   }
   if (isDatabaseAway(error)) {
-    const message = 'The database went away. Nothing was stored; try again.';
+    const message = 'The database went away. Try again.';
     return { code: 'DATABASE_AWAY', message, ...place };
   }
-  const message = 'Something went wrong on our side. Nothing was stored; try again.';
+  const message = 'Something went wrong on our side. Try again.';
   return { code: 'INTERNAL', message, ...place };
 }

@@ -1,5 +1,13 @@
 import { loggerFile, loggerFileDetail, loggerFileResult } from './testing/logger-file-builder';
-import { readingWords, removalWords, shapeWords, sizeWords, spanWords, unitWords } from './file-words';
+import {
+  endingWords,
+  readingWords,
+  removalWords,
+  shapeWords,
+  sizeWords,
+  spanWords,
+  unitWords,
+} from './file-words';
 
 describe('the words about a logger file', () => {
   it.each([
@@ -32,6 +40,26 @@ describe('the words about a logger file', () => {
     expect(removalWords({ ...kept, status: 'checked' })).toBe(
       'Only the file goes. None of its readings is stored.',
     );
+  });
+
+  it('say how work ended that left nothing to show', () => {
+    const failure = { code: 'UNCLOSED_QUOTE', message: 'A quote is never closed.', line: 9, column: 2 };
+    const ending = (changes: Parameters<typeof loggerFile>[0]) => endingWords(loggerFile(changes));
+    expect(ending({ status: 'failed', failure })).toBe(
+      'A quote is never closed. (line 9, column 2) Nothing was stored.',
+    );
+    const away = {
+      code: 'DATABASE_AWAY',
+      message: 'The database went away. Try again.',
+      line: null,
+      column: null,
+    };
+    expect(ending({ status: 'broughtIn', failure: away })).toBe(
+      'The database went away. Try again. Nothing was changed.',
+    );
+    expect(ending({ status: 'cancelled' })).toContain('Nothing was stored');
+    expect(ending({ status: 'takenOut' })).toContain('None of its readings is stored');
+    expect(ending({ status: 'broughtIn' })).toBeNull();
   });
 
   it('say how the file was read, without jargon', () => {

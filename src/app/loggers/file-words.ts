@@ -33,6 +33,18 @@ export const statusWords: Readonly<Record<LoggerFileStatus, string>> = {
   cancelled: 'Stopped, nothing stored',
 };
 
+/** How the last work on a file ended where it left nothing to show; null where it did not end so. */
+export function endingWords({ status, failure }: Pick<LoggerFile, 'status' | 'failure'>): string | null {
+  if (status === 'cancelled') return 'It was stopped. Nothing was stored; check it again when you like.';
+  if (status === 'takenOut') {
+    return 'It was taken out again. None of its readings is stored; the file is still here.';
+  }
+  if (failure === null) return null;
+  const { message, line, column } = failure;
+  const place = line === null ? '' : ` (line ${line}${column === null ? '' : `, column ${column}`})`;
+  return `${message}${place} Nothing was ${status === 'failed' ? 'stored' : 'changed'}.`;
+}
+
 /** Whether the server is at work on a file. */
 export function isAtWork({ status }: Pick<LoggerFile, 'status'>): boolean {
   return status === 'checking' || status === 'bringingIn' || status === 'takingOut';

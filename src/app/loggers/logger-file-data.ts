@@ -204,6 +204,8 @@ export class LoggerFileData {
   }
 
   private takeOver(file: LoggerFile): void {
+    // To change a resource that is still loading would break the loading off for good.
+    if (!this.resource.hasValue()) return;
     this.resource.update((held): LoggerFileDetail | undefined => held && { ...held, ...file });
   }
 

@@ -49,7 +49,11 @@ describe('a logger file on its way in', () => {
   let harness: RouterTestingHarness;
   let page: HTMLElement;
 
-  async function open(detail: LoggerFileDetail, role: Role = 'grower'): Promise<void> {
+  async function open(
+    detail: LoggerFileDetail,
+    role: Role = 'grower',
+    meanwhile: () => void = () => undefined,
+  ): Promise<void> {
     localStorage.clear();
     socket = new FakeSocket();
     TestBed.configureTestingModule({
@@ -65,6 +69,7 @@ describe('a logger file on its way in', () => {
     TestBed.inject(Session).load().subscribe();
     server.expectOne('/api/v1/account').flush(account({ memberships: [membership({ role })] }));
     harness = await RouterTestingHarness.create(`/loggers/${detail.id}`);
+    meanwhile();
     server.expectOne(file).flush(detail);
     const racks = [
       { id: inventedId(300), name: 'Rack A', note: '', shelves: [boardShelf({ id: shelfId, label: 'A3' })] },
@@ -265,6 +270,13 @@ describe('a logger file on its way in', () => {
     await open(loggerFileDetail({ status: 'failed', failure, columns: [], series: [], preview: [] }));
     expect(page.textContent).toContain('This is a spreadsheet. Save it as CSV. (line 1) Nothing was stored.');
     expect(page.querySelector('a[href="/loggers/new"]')).not.toBeNull();
+  });
+
+  it('is shown although news of it come before the file itself', async () => {
+    await open(loggerFileDetail({ status: 'bringingIn' }), 'grower', () =>
+      socket.tell('loggerFile:changed', loggerFile({ status: 'bringingIn' })),
+    );
+    expect(step()).toBe('Bring in');
   });
 
   it('says a failed answer and keeps what was there', async () => {

@@ -11,7 +11,7 @@ import { BringInResult } from './bring-in/bring-in-result';
 import { FileProgress } from './bring-in/file-progress';
 import { CheckResult } from './check-file/check-result';
 import { FileSteps } from './file-steps';
-import { sizeWords } from './file-words';
+import { endingWords, sizeWords } from './file-words';
 import { fileStep } from './file-step';
 import { LoggerFileData } from './logger-file-data';
 import { MatchColumns } from './match-columns/match-columns';
@@ -73,12 +73,12 @@ export class LoggerFilePage {
   /** Why the last attempt ended, where it is the person's turn again. */
   protected readonly ending = computed(() => {
     const file = this.file();
-    if (file?.status === 'cancelled')
-      return 'It was stopped. Nothing was stored; check it again when you like.';
-    if (file?.status !== 'failed' || file.failure === null) return null;
-    const { message, line, column } = file.failure;
-    const place = line === null ? '' : ` (line ${line}${column === null ? '' : `, column ${column}`})`;
-    return `${message}${place} Nothing was stored.`;
+    if (file === null) return null;
+    const words = endingWords(file);
+    const isFailure = file.failure !== null;
+    return words === null
+      ? null
+      : ({ words, tone: isFailure ? 'ember' : 'lamp', icon: isFailure ? 'error' : 'info' } as const);
   });
 
   constructor() {

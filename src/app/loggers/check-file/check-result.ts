@@ -33,6 +33,7 @@ export class CheckResult {
     const result = this.result();
     return result === null ? [] : resultRows(result, this.zone());
   });
+  protected readonly offShelf = computed(() => this.result()?.offShelf ?? []);
   protected readonly different = computed(() => formatNumber(this.result()?.different ?? 0, 0));
   protected readonly stored = computed(() => {
     const result = this.result();

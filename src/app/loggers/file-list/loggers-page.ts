@@ -103,6 +103,8 @@ export class LoggersPage {
   }
 
   private takeOver(file: LoggerFile): void {
+    // To change a resource that is still loading would break the loading off for good.
+    if (!this.resource.hasValue()) return;
     this.resource.update((held) => {
       if (held === undefined) return held;
       const isKnown = held.files.some(({ id }) => id === file.id);
