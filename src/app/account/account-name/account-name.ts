@@ -15,7 +15,7 @@ import { ProblemText } from '../../ui/states/problem-text';
   template: `
     <h2>Name</h2>
     <form (submit)="$event.preventDefault(); save()" novalidate>
-      <mat-form-field appearance="outline" hideRequiredMarker>
+      <mat-form-field appearance="outline" subscriptSizing="dynamic" hideRequiredMarker>
         <mat-label>Your name, as others in the room see it</mat-label>
         <input matInput autocomplete="name" maxlength="80" [formControl]="field" />
         <mat-error>Enter a name of up to 80 characters.</mat-error>

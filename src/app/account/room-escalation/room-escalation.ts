@@ -17,7 +17,7 @@ import { Notices } from '../../core/notices';
         in this room; only keepers set it.
       </p>
       <div class="times">
-        <mat-form-field>
+        <mat-form-field appearance="outline" subscriptSizing="dynamic">
           <mat-label>Urgent, after</mat-label>
           <mat-select
             [value]="escalation.goNowMinutes"
@@ -28,7 +28,7 @@ import { Notices } from '../../core/notices';
             }
           </mat-select>
         </mat-form-field>
-        <mat-form-field>
+        <mat-form-field appearance="outline" subscriptSizing="dynamic">
           <mat-label>Can wait a day, after</mat-label>
           <mat-select
             [value]="escalation.lookTodayMinutes"
