@@ -7,6 +7,9 @@ import { VarietiesService } from './crops/varieties-service';
 import { VarietiesStore } from './crops/varieties-store';
 import type { Transactions } from './database/transactions';
 import type { Route } from './http/route';
+import { PhotosService } from './photos/photos-service';
+import { photosRoutes } from './photos/photos-routes';
+import { PhotosStore } from './photos/photos-store';
 import { PlantingEventsService } from './plantings/planting-events-service';
 import { PlantingEventsStore } from './plantings/planting-events-store';
 import { PlantingRecords } from './plantings/planting-records';
@@ -54,6 +57,7 @@ export function growingServices(foundation: GrowingFoundation): GrowingServices 
   });
   const varieties = new VarietiesService({ transactions, varieties: varietiesStore, crops, changes });
 
+  const photosStore = new PhotosStore();
   const plantingsStore = new PlantingsStore();
   const testsStore = new GerminationTestsStore();
   const seed = new SeedService({
@@ -63,6 +67,7 @@ export function growingServices(foundation: GrowingFoundation): GrowingServices 
     crops,
     varieties,
     sowingsOf: (tx, lotId) => plantingsStore.trialsOf(tx, lotId),
+    photosOf: async (tx, lotId) => (await photosStore.of(tx, 'lots', [lotId])).get(lotId) ?? [],
     changes,
     now,
   });
@@ -74,6 +79,7 @@ export function growingServices(foundation: GrowingFoundation): GrowingServices 
     transactions,
     plantings: plantingsStore,
     events: eventsStore,
+    photosOf: async (tx, id) => (await photosStore.of(tx, 'plantings', [id])).get(id) ?? [],
     lotName: async (tx, roomId, lotId) => lotWords(await seed.lot(tx, roomId, lotId)),
   });
   const parts = {
@@ -88,11 +94,23 @@ export function growingServices(foundation: GrowingFoundation): GrowingServices 
   const start = new PlantingStartService({ ...parts, crops, varieties, seed });
   const happening = new PlantingEventsService(parts);
 
+  const photos = new PhotosService({
+    transactions,
+    photos: photosStore,
+    requireSubject: async (tx, roomId, subject) => {
+      if ('lotId' in subject) await seed.lot(tx, roomId, subject.lotId);
+      else await plantings.planting(tx, roomId, subject.plantingId);
+    },
+    changes,
+    now,
+  });
+
   return {
     routes: [
       ...cropsRoutes(crops, varieties),
       ...seedRoutes(seed, tests),
       ...plantingsRoutes(plantings, start, happening),
+      ...photosRoutes(photos),
     ],
     plantings,
   };

@@ -25,6 +25,7 @@ import { RoomEscalationEntity } from '../mail/room-escalation-entity';
 import { ToldAlertEntity } from '../mail/told-alert-entity';
 import { MembershipEntity } from '../people/membership-entity';
 import { PersonEntity } from '../people/person-entity';
+import { PhotoEntity } from '../photos/photo-entity';
 import { PlantingEntity } from '../plantings/planting-entity';
 import { PlantingEventEntity } from '../plantings/planting-event-entity';
 import { PlantingPlaceEntity } from '../plantings/planting-place-entity';
@@ -71,6 +72,7 @@ const entities = [
   MembershipEntity,
   MorningLetterEntity,
   PersonEntity,
+  PhotoEntity,
   PlacementEntity,
   PlantingEntity,
   PlantingEventEntity,

@@ -4,9 +4,9 @@ import * as profileContract from '@shared/contracts/logger-file-profiles';
 import * as contract from '@shared/contracts/logger-files';
 import { authorOf } from '../audit/room-author';
 import { decodeCursor, encodeCursor } from '../http/cursor';
+import { receiveUpload, type UploadReceiver } from '../http/receive-upload';
 import { route, type Route, type RouteContext } from '../http/route';
 import type { LoggerFileService } from './logger-file-service';
-import { receiveUpload, type UploadReceiver } from './receive-upload';
 
 /**
  * Logger files over HTTP.

@@ -1,4 +1,5 @@
 import type { PlantingSummary } from '@shared/contracts/board';
+import type { Photo } from '@shared/contracts/photos';
 import type { PlantingEventView } from '@shared/contracts/planting-events';
 import type { Planting, PlantingDetail } from '@shared/contracts/plantings';
 import type { Transactions, Tx } from '../database/transactions';
@@ -12,6 +13,8 @@ export interface PlantingsParts {
   readonly transactions: Transactions;
   readonly plantings: PlantingsStore;
   readonly events: PlantingEventsStore;
+  /** Photos of a planting, newest first. */
+  readonly photosOf: (tx: Tx, plantingId: string) => Promise<Photo[]>;
   /** A lot in words; null for one of another room or none. */
   readonly lotName: (tx: Tx, roomId: string, lotId: string) => Promise<string | null>;
 }
@@ -63,7 +66,7 @@ export class PlantingsService {
     plantingId: string,
     tx = this.parts.transactions.plain,
   ): Promise<PlantingDetail> {
-    const { plantings, events, lotName } = this.parts;
+    const { plantings, events, photosOf, lotName } = this.parts;
     const { planting, startedAt } = await plantings.listed(tx, roomId, plantingId);
     const { lotId, source, depthMm } = await plantings.planting(tx, roomId, plantingId);
     const story = await events.of(tx, plantingId);
@@ -82,7 +85,7 @@ export class PlantingsService {
         to: toAt?.toISOString() ?? null,
       })),
       events: [...story].sort((one, other) => one.at.getTime() - other.at.getTime()).map(eventView),
-      photos: [],
+      photos: await photosOf(tx, plantingId),
       undoableEventId: undoable(story),
     };
   }

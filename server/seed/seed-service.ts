@@ -1,3 +1,4 @@
+import type { Photo } from '@shared/contracts/photos';
 import type { SeedLot, SeedLotDetail, SeedsNeeded } from '@shared/contracts/seed';
 import { expectedSeedlings, seedsNeeded } from '@shared/growing/seed-expectations';
 import { compareUrgency, type SeedTrial } from '@shared/growing/seed-stock';
@@ -22,6 +23,8 @@ export interface SeedParts {
   readonly varieties: VarietiesService;
   /** What came of the finished sowings of a lot. */
   readonly sowingsOf: (tx: Tx, lotId: string) => Promise<SeedTrial[]>;
+  /** Photos of a lot, newest first. */
+  readonly photosOf: (tx: Tx, lotId: string) => Promise<Photo[]>;
   readonly changes: RoomChanges;
   readonly now: Clock;
 }
@@ -65,7 +68,7 @@ export class SeedService {
       ...lotView(lot, around),
       tests: around.tests.map(testView),
       uses: uses.map(({ at, ...use }) => ({ ...use, at: at.toISOString() })),
-      photos: [],
+      photos: [...around.photos],
     };
   }
 
@@ -240,6 +243,7 @@ export class SeedService {
       crop: await crops.crop(tx, room.id, lot.cropId),
       tests: await tests.ofLots(tx, [lot.id]),
       sowings: await this.parts.sowingsOf(tx, lot.id),
+      photos: await this.parts.photosOf(tx, lot.id),
       today: dayBounds(now().getTime(), room.timeZone).date,
     };
   }

@@ -1,3 +1,4 @@
+import type { Photo } from '@shared/contracts/photos';
 import type { GerminationTest, SeedLot } from '@shared/contracts/seed';
 import type { Crop } from '@shared/growing/crops/crop';
 import { germinationOf } from '@shared/growing/germination';
@@ -20,6 +21,8 @@ export interface LotSurroundings {
   readonly tests: readonly StoredTest[];
   /** What came of its finished sowings. */
   readonly sowings: readonly SeedTrial[];
+  /** Newest first. */
+  readonly photos: readonly Photo[];
   readonly today: string;
 }
 
@@ -39,7 +42,7 @@ export function lotView(lot: StoredLot, around: LotSurroundings): SeedLot {
     seedsLeft: seedsIn(lot, lot.left),
     age: { years, lifeYears, sources: [...sources], standing, useFirst },
     expectation: lotExpectation(around),
-    photo: null,
+    photo: around.photos[0] ?? null,
   };
 }
 

@@ -9,6 +9,7 @@ import * as loggerFileProfiles from './logger-file-profiles';
 import * as loggerFiles from './logger-files';
 import * as mail from './mail';
 import * as people from './people';
+import * as photos from './photos';
 import * as plantingEvents from './planting-events';
 import * as plantings from './plantings';
 import * as rooms from './rooms';
@@ -118,6 +119,10 @@ export const endpoints: readonly Endpoint[] = [
   plantingEvents.observePlanting,
   plantingEvents.stepPlanting,
   plantingEvents.undoPlantingEvent,
+  photos.addPlantingPhoto,
+  photos.addSeedLotPhoto,
+  photos.getPhotoImage,
+  photos.removePhoto,
   scenarios.listScenarios,
   scenarios.startScenario,
   scenarios.stopScenario,

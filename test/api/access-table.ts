@@ -215,6 +215,11 @@ export const accessTable: Readonly<Record<string, AccessRow>> = {
   stepPlanting: { outcomes: grower, body: { kind: 'pottedOn', container: '1 L' } },
   undoPlantingEvent: { outcomes: helper },
 
+  addPlantingPhoto: { outcomes: helper },
+  addSeedLotPhoto: { outcomes: grower },
+  getPhotoImage: { outcomes: viewer },
+  removePhoto: { outcomes: helper },
+
   listScenarios: { outcomes: keeper },
   startScenario: { outcomes: keeper },
   stopScenario: { outcomes: keeper },

@@ -9,6 +9,7 @@ import { aRoomCrop, aVariety } from '../builders/crops';
 import { aDevice, aSensor } from '../builders/devices';
 import { aFileProfile, aLoggerFile } from '../builders/logger-files';
 import { aMember, aPerson } from '../builders/people';
+import { aPhoto } from '../builders/photos';
 import { aPlanting, aPlantingEvent } from '../builders/plantings';
 import { aShelf, aWantedRange } from '../builders/rooms';
 import { aGerminationTest, aSeedLot } from '../builders/seed';
@@ -119,6 +120,7 @@ describe('access', () => {
         taskId: (await aTask(tx, { roomId })).id,
         fileId: (await aLoggerFile(tx, { roomId })).id,
         plantingId: planting.id,
+        photoId: (await aPhoto(tx, { plantingId: planting.id })).id,
         eventId: (await aPlantingEvent(tx, { plantingId: planting.id })).id,
         lotId: lot.id,
         testId: (await aGerminationTest(tx, { lotId: lot.id })).id,

@@ -15,6 +15,7 @@ import { TellOffShelfReadings1764552300000 } from './1764552300000-tell-off-shel
 import { CreateSeed1764552500000 } from './1764552500000-create-seed';
 import { WaitForSecondLook1764552550000 } from './1764552550000-wait-for-second-look';
 import { KeepPlantingHistory1764552600000 } from './1764552600000-keep-planting-history';
+import { CreatePhoto1764552700000 } from './1764552700000-create-photo';
 
 /** Every migration in order; a merged one is never edited. */
 export const migrations = [
@@ -35,4 +36,5 @@ export const migrations = [
   CreateSeed1764552500000,
   WaitForSecondLook1764552550000,
   KeepPlantingHistory1764552600000,
+  CreatePhoto1764552700000,
 ];

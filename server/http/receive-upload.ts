@@ -1,6 +1,6 @@
 import type { Request, Response } from 'express';
 import multer, { MulterError, type StorageEngine } from 'multer';
-import { RequestProblem } from '../http/request-problem';
+import { RequestProblem } from './request-problem';
 
 /** Takes the bytes of an uploaded file as they come. */
 export type UploadReceiver<T> = (fileName: string, bytes: AsyncIterable<Buffer>) => Promise<T>;
@@ -87,7 +87,7 @@ function tooLarge(maxBytes: number): RequestProblem {
   return new RequestProblem(
     413,
     'FILE_TOO_LARGE',
-    `The file is larger than ${megabytes} MB. Nothing was kept; split it, or ask for a higher limit.`,
+    `The file is larger than ${megabytes} MB. Nothing was kept.`,
   );
 }
 

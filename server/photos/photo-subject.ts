@@ -1,0 +1,2 @@
+/** What a photo shows. */
+export type PhotoSubject = { readonly plantingId: string } | { readonly lotId: string };
