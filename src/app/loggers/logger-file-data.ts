@@ -12,7 +12,6 @@ import {
   takeOutLoggerFile,
   type DifferingChoice,
   type LoggerFile,
-  type LoggerFileDetail,
 } from '@shared/contracts/logger-files';
 import {
   catchError,
@@ -206,7 +205,7 @@ export class LoggerFileData {
   private takeOver(file: LoggerFile): void {
     // To change a resource that is still loading would break the loading off for good.
     if (!this.resource.hasValue()) return;
-    this.resource.update((held): LoggerFileDetail | undefined => held && { ...held, ...file });
+    this.resource.set({ ...this.resource.value(), ...file });
   }
 
   private fetchPlaces(params: { roomId: string }): Observable<Places> {
