@@ -6,6 +6,11 @@ import { CropsStore } from './crops/crops-store';
 import { VarietiesService } from './crops/varieties-service';
 import { VarietiesStore } from './crops/varieties-store';
 import type { Transactions } from './database/transactions';
+import { EmergenceService } from './germination/emergence-service';
+import { EmergencesStore } from './germination/emergences-store';
+import { germinationRoutes } from './germination/germination-routes';
+import { GerminationService } from './germination/germination-service';
+import { ShelfWarmth } from './germination/shelf-warmth';
 import type { Route } from './http/route';
 import { PhotosService } from './photos/photos-service';
 import { photosRoutes } from './photos/photos-routes';
@@ -18,18 +23,23 @@ import { plantingsRoutes } from './plantings/plantings-routes';
 import { PlantingsService } from './plantings/plantings-service';
 import { PlantingsStore } from './plantings/plantings-store';
 import type { RoomsService } from './rooms/rooms-service';
+import type { ShelfPlansService } from './rooms/shelf-plans-service';
 import { GerminationTestsService } from './seed/germination-tests-service';
 import { GerminationTestsStore } from './seed/germination-tests-store';
 import { seedRoutes } from './seed/seed-routes';
 import { SeedService } from './seed/seed-service';
 import { SeedStore } from './seed/seed-store';
 import { lotWords } from './seed/seed-views';
+import { SeriesStore } from './series/series-store';
+
+const DAY_MS = 86_400_000;
 
 /** What the growing side stands on. */
 export interface GrowingFoundation {
   readonly transactions: Transactions;
   readonly changes: RoomChanges;
   readonly rooms: RoomsService;
+  readonly plans: ShelfPlansService;
   readonly now: Clock;
 }
 
@@ -37,6 +47,7 @@ export interface GrowingFoundation {
 export interface GrowingServices {
   readonly routes: readonly Route[];
   readonly plantings: PlantingsService;
+  readonly germination: GerminationService;
 }
 
 /**
@@ -46,7 +57,7 @@ export interface GrowingServices {
  * @returns The services and their routes.
  */
 export function growingServices(foundation: GrowingFoundation): GrowingServices {
-  const { transactions, changes, rooms, now } = foundation;
+  const { transactions, changes, rooms, plans, now } = foundation;
   const varietiesStore = new VarietiesStore();
   const crops = new CropsService({
     transactions,
@@ -79,6 +90,7 @@ export function growingServices(foundation: GrowingFoundation): GrowingServices 
     transactions,
     plantings: plantingsStore,
     events: eventsStore,
+    records,
     photosOf: async (tx, id) => (await photosStore.of(tx, 'plantings', [id])).get(id) ?? [],
     lotName: async (tx, roomId, lotId) => lotWords(await seed.lot(tx, roomId, lotId)),
   });
@@ -94,6 +106,20 @@ export function growingServices(foundation: GrowingFoundation): GrowingServices 
   const start = new PlantingStartService({ ...parts, crops, varieties, seed });
   const happening = new PlantingEventsService(parts);
 
+  const warmth = new ShelfWarmth(new SeriesStore());
+  const germination = new GerminationService({
+    transactions,
+    plantings,
+    crops,
+    emergence: new EmergenceService(warmth, new EmergencesStore(), now),
+    lotFacts: (tx, roomId, lotId) => seed.facts(tx, roomId, lotId),
+    isDark: async (tx, shelfId) => {
+      const today = now();
+      const lamps = await plans.plannedLamps(tx, [shelfId], new Date(today.getTime() - DAY_MS), today);
+      return (lamps.get(shelfId) ?? []).length === 0;
+    },
+    now,
+  });
   const photos = new PhotosService({
     transactions,
     photos: photosStore,
@@ -111,7 +137,9 @@ export function growingServices(foundation: GrowingFoundation): GrowingServices 
       ...seedRoutes(seed, tests),
       ...plantingsRoutes(plantings, start, happening),
       ...photosRoutes(photos),
+      ...germinationRoutes(germination),
     ],
     plantings,
+    germination,
   };
 }

@@ -128,7 +128,7 @@ export function composeServices(foundation: Foundation): Services {
 
   const roomsStore = new RoomsStore();
   const rooms = new RoomsService({ transactions, rooms: roomsStore, changes, hooks, now });
-  const growing = growingServices({ transactions, changes, rooms, now });
+  const growing = growingServices({ transactions, changes, rooms, plans, now });
   const { plantings } = growing;
   const rules = new ShelfRulesService({
     transactions,
@@ -182,6 +182,7 @@ export function composeServices(foundation: Foundation): Services {
     {
       roomOf: (tx, roomId) => rooms.roomOf(tx, roomId),
       plantingsOn: (tx, shelfIds) => plantings.plantingsOn(tx, shelfIds),
+      sowingsOn: (tx, shelfIds) => growing.germination.sowingsOn(tx, shelfIds),
       openAlerts: (roomId) => alerts.open(roomId),
       tasksOf: (roomId, from, to) => care.listTasks(roomId, { from, to }),
     },

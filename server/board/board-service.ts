@@ -1,6 +1,7 @@
 import type { Board, BoardRack, PlantingSummary, ShelfNow } from '@shared/contracts/board';
 import type { Alert } from '@shared/contracts/alerts';
 import type { Task } from '@shared/contracts/care';
+import type { SowingNow } from '@shared/contracts/germination';
 import { dayBounds } from '@shared/series/room-days';
 import type { Clock } from '../clock';
 import type { Transactions, Tx } from '../database/transactions';
@@ -12,6 +13,7 @@ import type { ShelfNowService } from './shelf-now-service';
 export interface BoardSources {
   roomOf(tx: Tx, roomId: string): Promise<{ name: string; timeZone: string } | null>;
   plantingsOn(tx: Tx, shelfIds: readonly string[]): Promise<Map<string, PlantingSummary[]>>;
+  sowingsOn(tx: Tx, shelfIds: readonly string[]): Promise<Map<string, SowingNow[]>>;
   openAlerts(roomId: string): Promise<Alert[]>;
   /** Tasks due from a day up to another, exclusive, with everything late before it. */
   tasksOf(roomId: string, from: string, to: string): Promise<Task[]>;
@@ -50,10 +52,11 @@ export class BoardService {
     const rows = await this.store.shelves(tx, roomId);
     const shelves = rows.filter(isUsed);
     const shelfIds = shelves.map(({ shelfId }) => shelfId);
-    const [latest, states, plantings, openAlerts, tasks] = await Promise.all([
+    const [latest, states, plantings, sowings, openAlerts, tasks] = await Promise.all([
       this.store.latest(tx, shelfIds),
       this.shelfNow.of(tx, shelves, day, now),
       this.sources.plantingsOn(tx, shelfIds),
+      this.sources.sowingsOn(tx, shelfIds),
       this.sources.openAlerts(roomId),
       this.sources.tasksOf(roomId, day.date, dayBounds(now + AHEAD_MS, room.timeZone).date),
     ]);
@@ -68,7 +71,7 @@ export class BoardService {
       dayEnd: new Date(day.end).toISOString(),
       sensorCount: live.length,
       sensorsReporting: live.filter((reading) => isReporting(reading, now)).length,
-      racks: racksOf(rows, states, plantings),
+      racks: racksOf(rows, states, { plantings, sowings }),
       openAlerts,
       tasks,
     };
@@ -100,10 +103,16 @@ function isReporting({ at, expectedIntervalS }: LatestReading, now: number): boo
   return at !== null && now - at <= expectedIntervalS * REPORTING_INTERVALS * 1_000;
 }
 
+/** What grows, by shelf. */
+interface Growing {
+  readonly plantings: ReadonlyMap<string, PlantingSummary[]>;
+  readonly sowings: ReadonlyMap<string, SowingNow[]>;
+}
+
 function racksOf(
   rows: readonly ShelfRow[],
   states: readonly ShelfNow[],
-  plantings: ReadonlyMap<string, PlantingSummary[]>,
+  { plantings, sowings }: Growing,
 ): BoardRack[] {
   const racks = new Map<string, BoardRack>();
   const nowOf = new Map(states.map((state) => [state.shelfId, state]));
@@ -122,6 +131,7 @@ function racksOf(
       label: row.label,
       heatMatOn: row.heatMatOn,
       plantings: plantings.get(row.shelfId) ?? [],
+      sowings: sowings.get(row.shelfId) ?? [],
       now: state,
     });
   }

@@ -2,10 +2,12 @@ import type { PlantingSummary } from '@shared/contracts/board';
 import type { Photo } from '@shared/contracts/photos';
 import type { PlantingEventView } from '@shared/contracts/planting-events';
 import type { Planting, PlantingDetail } from '@shared/contracts/plantings';
+import type { PlantingState } from '@shared/growing/planting-history';
 import type { Transactions, Tx } from '../database/transactions';
 import { encodeCursor } from '../http/cursor';
 import type { PlantingEntity } from './planting-entity';
-import type { PlantingEventsStore, StoredEvent } from './planting-events-store';
+import type { PlantingEventsStore, StoredEvent, StoredPlace } from './planting-events-store';
+import type { PlantingRecords } from './planting-records';
 import { summaryOf, type PlantingFilter, type PlantingsStore } from './plantings-store';
 
 /** What {@link PlantingsService} reads from. */
@@ -13,6 +15,7 @@ export interface PlantingsParts {
   readonly transactions: Transactions;
   readonly plantings: PlantingsStore;
   readonly events: PlantingEventsStore;
+  readonly records: PlantingRecords;
   /** Photos of a planting, newest first. */
   readonly photosOf: (tx: Tx, plantingId: string) => Promise<Photo[]>;
   /** A lot in words; null for one of another room or none. */
@@ -45,6 +48,16 @@ export class PlantingsService {
       plantings: found.map(({ planting }) => planting),
       nextCursor: last === undefined ? null : encodeCursor(last.startedAt.toISOString(), last.planting.id),
     };
+  }
+
+  /** What a planting's events leave. */
+  state(tx: Tx, plantingId: string): Promise<PlantingState> {
+    return this.parts.records.state(tx, plantingId);
+  }
+
+  /** Where a planting stood, in order. */
+  placesOf(tx: Tx, plantingId: string): Promise<StoredPlace[]> {
+    return this.parts.events.placesOf(tx, plantingId);
   }
 
   /** One planting with all that is kept of it; 404 when the room has none such. */

@@ -12,7 +12,15 @@ import type { Transactions, Tx } from '../database/transactions';
 import { conflict, invalidField } from '../http/request-problem';
 import type { GerminationTestsStore } from './germination-tests-store';
 import type { LotChange, NewLot, SeedStore, StoredLot } from './seed-store';
-import { ageOf, amountOf, lotExpectation, lotView, testView, type LotSurroundings } from './seed-views';
+import {
+  ageOf,
+  amountOf,
+  lotExpectation,
+  lotView,
+  newestTrial,
+  testView,
+  type LotSurroundings,
+} from './seed-views';
 
 /** What the seed services work with. */
 export interface SeedParts {
@@ -75,6 +83,17 @@ export class SeedService {
   /** A lot as it is stored; 404 when the room has none such. */
   lot(tx: Tx, roomId: string, lotId: string): Promise<StoredLot> {
     return this.parts.seed.lot(tx, roomId, lotId);
+  }
+
+  /** Year of a lot, and what its own newest test found [%]; 404 when the room has none such. */
+  async facts(
+    tx: Tx,
+    roomId: string,
+    lotId: string,
+  ): Promise<{ readonly packedYear: number | null; readonly testPct: number | null }> {
+    const { packedYear } = await this.parts.seed.lot(tx, roomId, lotId);
+    const trial = newestTrial(await this.parts.tests.ofLots(tx, [lotId]));
+    return { packedYear, testPct: trial === null ? null : (100 * trial.up) / trial.seeds };
   }
 
   /** Adds a lot, and its variety when it is new. */

@@ -115,7 +115,13 @@ export function testView({ lotId: _, counts, ...test }: StoredTest): Germination
   };
 }
 
-function newestTrial(tests: readonly StoredTest[]): SeedTrial | null {
+/**
+ * What the newest test with a count found.
+ *
+ * @param tests - Newest first.
+ * @returns Seeds and how many germinated; null without a count.
+ */
+export function newestTrial(tests: readonly StoredTest[]): SeedTrial | null {
   const test = tests.find(({ counts }) => counts.length > 0);
   return test === undefined ? null : { seeds: test.seeds, up: germinationOf(test.seeds, test.counts).up };
 }

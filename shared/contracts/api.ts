@@ -6,6 +6,7 @@ import * as care from './care';
 import * as crops from './crops';
 import * as devices from './devices';
 import * as loggerFileProfiles from './logger-file-profiles';
+import * as germination from './germination';
 import * as loggerFiles from './logger-files';
 import * as mail from './mail';
 import * as people from './people';
@@ -119,6 +120,7 @@ export const endpoints: readonly Endpoint[] = [
   plantingEvents.observePlanting,
   plantingEvents.stepPlanting,
   plantingEvents.undoPlantingEvent,
+  germination.getGermination,
   photos.addPlantingPhoto,
   photos.addSeedLotPhoto,
   photos.getPhotoImage,

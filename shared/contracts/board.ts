@@ -4,6 +4,7 @@ import { plantHabits, plantingStages } from '../growing/planting-stage';
 import { alert } from './alerts';
 import { task } from './care';
 import { day, endpoint, id, instant, roomParams } from './endpoint';
+import { sowingNow } from './germination';
 import { limits } from './rooms';
 
 /** The newest value of one quantity on a shelf, against what is wanted at this moment. */
@@ -65,6 +66,8 @@ export const boardShelf = z.object({
   label: z.string(),
   heatMatOn: z.boolean().nullable(),
   plantings: z.array(plantingSummary),
+  /** Its sowings that still come up, with when to expect the first. */
+  sowings: z.array(sowingNow),
   now: shelfNow,
 });
 /** A shelf as it stands in the room now. */

@@ -215,6 +215,7 @@ export const accessTable: Readonly<Record<string, AccessRow>> = {
   stepPlanting: { outcomes: grower, body: { kind: 'pottedOn', container: '1 L' } },
   undoPlantingEvent: { outcomes: helper },
 
+  getGermination: { outcomes: viewer },
   addPlantingPhoto: { outcomes: helper },
   addSeedLotPhoto: { outcomes: grower },
   getPhotoImage: { outcomes: viewer },

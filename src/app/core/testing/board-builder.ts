@@ -61,6 +61,7 @@ export function boardShelf(changes: Partial<BoardShelf> = {}): BoardShelf {
     label: 'A1',
     heatMatOn: null,
     plantings: [planting()],
+    sowings: [],
     now: {
       shelfId: id,
       measures: [
