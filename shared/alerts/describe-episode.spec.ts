@@ -54,6 +54,24 @@ describe('an episode in words', () => {
     });
   });
 
+  it.each([
+    ['aboveRange', 'airTemperature', /heater/],
+    ['aboveRange', 'illuminance', /window/],
+    ['belowRange', 'ppfd', /timer/],
+  ] as const)('that is %s of %s never blames a lamp that is off', (kind, quantity, tryThis) => {
+    const unlit = describeEpisode(facts({ kind, quantity, isLit: false }));
+    expect(unlit.tryThis).toMatch(tryThis);
+    expect(unlit.tryThis).not.toMatch(/lamp may be/);
+    const lit = describeEpisode(facts({ kind, quantity, isLit: true }));
+    expect(lit).toEqual(describeEpisode(facts({ kind, quantity, isLit: null })));
+    expect(lit.tryThis).toMatch(/lamp may be/);
+  });
+
+  it('of the root zone gives the same advice with lamps on or off', () => {
+    const root = { quantity: 'rootZoneTemperature' as const };
+    expect(describeEpisode(facts({ ...root, isLit: false }))).toEqual(describeEpisode(facts(root)));
+  });
+
   it('is in the past tense once over', () => {
     const episode = { ...open, endedAt: at(15, 20), clearedAt: at(15, 30) };
     expect(describeEpisode(facts({ episode }))).toMatchObject({

@@ -23,6 +23,8 @@ export interface EpisodeFacts {
   readonly quantity: AlertQuantity;
   /** "A1" */
   readonly shelfLabel: string;
+  /** Whether the shelf's lamps shone at the peak; null, or left out, where that is not known. */
+  readonly isLit?: boolean | null;
   readonly formatters: EpisodeFormatters;
   /** The present [ms since 1970 UTC]. */
   readonly now: number;
@@ -49,7 +51,7 @@ export interface EpisodeDescription {
 export function describeEpisode(facts: EpisodeFacts): EpisodeDescription {
   const quantity = toldQuantity(facts);
   const { title, sentence } = wordsOf({ ...facts, quantity });
-  return { title: `${facts.shelfLabel} ${title}`, sentence, ...adviceFor(facts.kind, quantity) };
+  return { title: `${facts.shelfLabel} ${title}`, sentence, ...adviceFor(facts.kind, quantity, facts.isLit) };
 }
 
 /** A light sensor's short day is told in hours, not in what the sensor measures. */

@@ -59,6 +59,32 @@ const brightenLamp: Advice = {
   caution: cautions.lamp,
 };
 
+/** What may be the matter when the lamps are off, where lamps are the usual cause. */
+const unlitAdvice: Readonly<Record<'aboveRange' | 'belowRange', Partial<Record<AlertQuantity, Advice>>>> = {
+  aboveRange: {
+    airTemperature: {
+      tryThis:
+        'A heater or a warm shelf below may be the cause, as the lamps are off; open the vent or move the air.',
+      caution: null,
+    },
+    ppfd: strayLight(),
+    illuminance: strayLight(),
+  },
+  belowRange: { ppfd: lampOff(), illuminance: lampOff() },
+};
+
+function strayLight(): Advice {
+  return {
+    tryThis:
+      'Light may come from a window or another shelf, as the lamps are off; shade it if it should be dark.',
+    caution: null,
+  };
+}
+
+function lampOff(): Advice {
+  return { tryThis: 'The lamps are off; look at the timer and the plug.', caution: cautions.lamp };
+}
+
 const aboveAdvice: Readonly<Record<AlertQuantity, Advice>> = {
   airTemperature: {
     tryThis: 'The lamp may be too close; raise it or open the vent.',
@@ -163,13 +189,15 @@ const adviceByKind: Readonly<Record<Exclude<AlertKind, 'aboveRange' | 'belowRang
  *
  * @param kind - Kind of the alert.
  * @param quantity - What it is about.
+ * @param isLit - Whether the shelf's lamps shone then; null where that is not known.
  * @returns One sentence or two, and the caution that belongs to it.
  */
-export function adviceFor(kind: AlertKind, quantity: AlertQuantity): Advice {
+export function adviceFor(kind: AlertKind, quantity: AlertQuantity, isLit: boolean | null = null): Advice {
   switch (kind) {
     case 'aboveRange':
-      return aboveAdvice[quantity];
+      return unlit(kind, quantity, isLit) ?? aboveAdvice[quantity];
     case 'belowRange':
+      return unlit(kind, quantity, isLit) ?? belowAdvice[quantity];
     case 'lightShort':
       return belowAdvice[quantity];
     case 'dangerHigh':
@@ -180,6 +208,14 @@ export function adviceFor(kind: AlertKind, quantity: AlertQuantity): Advice {
     default:
       return adviceByKind[kind];
   }
+}
+
+function unlit(
+  side: keyof typeof unlitAdvice,
+  quantity: AlertQuantity,
+  isLit: boolean | null,
+): Advice | undefined {
+  return isLit === false ? unlitAdvice[side][quantity] : undefined;
 }
 
 /**

@@ -12,8 +12,14 @@ import type { Alert } from '@shared/contracts/alerts';
  * @param alert - As the server sent it.
  * @param formatters - How its numbers and instants are written for this reader.
  * @param now - The present [ms since 1970 UTC].
+ * @param isLit - Whether the shelf's lamps shone at its peak; null where that is not known.
  */
-export function describeAlert(alert: Alert, formatters: EpisodeFormatters, now: number): EpisodeDescription {
+export function describeAlert(
+  alert: Alert,
+  formatters: EpisodeFormatters,
+  now: number,
+  isLit: boolean | null = null,
+): EpisodeDescription {
   return describeEpisode({
     episode: {
       beganAt: Date.parse(alert.beganAt),
@@ -29,6 +35,7 @@ export function describeAlert(alert: Alert, formatters: EpisodeFormatters, now: 
     kind: alert.kind,
     quantity: alert.quantity,
     shelfLabel: alert.shelfLabel,
+    isLit,
     formatters,
     now,
   });

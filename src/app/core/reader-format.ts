@@ -2,6 +2,7 @@ import { computed, inject, Injectable } from '@angular/core';
 import type { EpisodeDescription } from '@shared/alerts/describe-episode';
 import type { Quantity } from '@shared/climate/quantity';
 import type { Alert } from '@shared/contracts/alerts';
+import type { LampDay } from '@shared/contracts/board';
 import { episodeFormatters } from '@shared/format/episode-formatters';
 import { formatQuantity } from '@shared/format/quantities';
 import { formatDayAndYear, formatTime, sayWhen, type Instant } from '@shared/format/room-time';
@@ -9,6 +10,7 @@ import { dayBounds } from '@shared/series/room-days';
 import { describeAlert } from './describe-alert';
 import { RoomClock } from './room-clock';
 import { Session } from './session';
+import { wasLit } from './was-lit';
 
 /** Says values, instants and alerts in the reader's unit and the room's time zone. Templates follow its signals. */
 @Injectable({ providedIn: 'root' })
@@ -42,8 +44,14 @@ export class ReaderFormat {
     return sayWhen(at, this.clock.calmNow(), this.session.timeZone());
   }
 
-  /** An alert in words. */
-  describe(alert: Alert): EpisodeDescription {
-    return describeAlert(alert, this.episodes(), this.clock.calmNow());
+  /**
+   * An alert in words.
+   *
+   * @param lampDay - The light of its shelf today, where it is known: lamps that were off are not to blame.
+   */
+  describe(alert: Alert, lampDay: LampDay | null = null): EpisodeDescription {
+    const now = this.clock.calmNow();
+    const isLit = lampDay && wasLit(lampDay, alert.peakAt, dayBounds(now, this.session.timeZone()).start);
+    return describeAlert(alert, this.episodes(), now, isLit);
   }
 }

@@ -48,11 +48,13 @@ export class Room {
 
   protected readonly board = this.room.board;
   protected readonly alertsByShelf = this.room.alertsByShelf;
+  protected readonly needsByShelf = this.room.needsByShelf;
+  protected readonly needs = computed(() => [...this.needsByShelf().values()].flat());
   protected readonly hasRoom = computed(() => this.session.room() !== null);
   protected readonly isHelper = computed(() => this.session.may('helper'));
   protected readonly isKeeper = computed(() => this.session.may('keeper'));
   /** The same list every time, so that a quiet shelf is not drawn anew. */
-  protected readonly none: readonly Alert[] = [];
+  protected readonly none: readonly never[] = [];
   /** Alerts and tasks that are being changed. */
   protected readonly busyIds = signal<ReadonlySet<string>>(new Set());
 

@@ -117,7 +117,7 @@ export class ShelfPage {
   });
   protected readonly alerts = computed(() =>
     this.data.openAlerts().map((alert) => {
-      const { sentence, tryThis } = this.format.describe(alert);
+      const { sentence, tryThis } = this.format.describe(alert, this.data.now()?.lampDay);
       return { id: alert.id, ...alertLook(alert.kind), text: `${sentence} ${tryThis}` };
     }),
   );

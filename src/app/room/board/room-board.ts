@@ -10,6 +10,7 @@ import { LiveConnection } from '../../core/live-connection';
 import { RoomClock } from '../../core/room-clock';
 import { Session } from '../../core/session';
 import { alertChanged, shelfMeasured, taskChanged, type BoardChange } from './board-changes';
+import { shelfNeeds, type ShelfNeed } from './shelf-needs';
 
 /** The room as it is now, kept so by what the server tells. One for each time the Room screen is open. */
 @Injectable()
@@ -38,6 +39,14 @@ export class RoomBoard {
       byShelf.set(alert.shelfId, [...(byShelf.get(alert.shelfId) ?? []), alert]);
     }
     return byShelf;
+  });
+
+  /** What shelves need for what grows on them, by shelf; a shelf that needs nothing is not in it. */
+  readonly needsByShelf = computed<ReadonlyMap<string, readonly ShelfNeed[]>>(() => {
+    const shelves = this.held()?.racks.flatMap((rack) => rack.shelves) ?? [];
+    return new Map(
+      shelves.map((shelf) => [shelf.id, shelfNeeds(shelf)] as const).filter(([, needs]) => needs.length > 0),
+    );
   });
 
   constructor() {

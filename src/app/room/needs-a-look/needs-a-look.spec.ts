@@ -56,6 +56,23 @@ describe('what needs a look', () => {
     expect(page().querySelector('button')).toBeNull();
   });
 
+  it('lists what a shelf needs for its plants, which is not to be acknowledged', async () => {
+    await shown([]);
+    const need = {
+      title: 'A3 needs light now',
+      why: 'Leek has come up.',
+      note: '',
+      tone: 'lamp',
+      icon: 'lightbulb',
+    };
+    fixture.componentRef.setInput('needs', [{ id: 'a', shelfId: inventedId(3), ...need }]);
+    await fixture.whenStable();
+    expect(texts('li a')).toEqual(['A3 needs light now']);
+    expect(page().querySelector('li a')?.getAttribute('href')).toBe(`/shelf/${inventedId(3)}`);
+    expect(texts('li p')).toEqual(['Leek has come up.']);
+    expect(page().querySelector('button')).toBeNull();
+  });
+
   it('says so when there is nothing', async () => {
     await shown([]);
     expect(texts('li p')).toEqual(['Every shelf is as it should be.']);

@@ -8,8 +8,9 @@ import { formatDuration } from '@shared/format/room-time';
 import { ReaderFormat } from '../../core/reader-format';
 import { RoomClock } from '../../core/room-clock';
 import { alertLook } from '../../ui/note-line/alert-look';
+import type { ShelfNeed } from '../board/shelf-needs';
 
-/** What is wrong in the room now, the newest first, with a way to say "I have seen it". */
+/** What is wrong in the room now, the newest first, with a way to say "I have seen it"; then what shelves need. */
 @Component({
   selector: 'app-needs-a-look',
   templateUrl: './needs-a-look.html',
@@ -19,6 +20,8 @@ import { alertLook } from '../../ui/note-line/alert-look';
 })
 export class NeedsALook {
   readonly alerts = input.required<readonly Alert[]>();
+  /** What shelves need for what grows on them. */
+  readonly needs = input<readonly ShelfNeed[]>([]);
   /** Whether the person may acknowledge. */
   readonly mayAcknowledge = input(false);
   /** Alerts whose acknowledgement is under way. */

@@ -3,6 +3,7 @@ import type { ComponentFixture } from '@angular/core/testing';
 import { account } from '../../core/testing/account-builder';
 import { alert, boardShelf, lampDay, measure, planting } from '../../core/testing/board-builder';
 import { providePlayedServer, signedInAs } from '../../core/testing/signed-in';
+import { shelfNeeds } from '../board/shelf-needs';
 import { ShelfBay } from './shelf-bay';
 
 const day = {
@@ -73,11 +74,21 @@ describe('a shelf in its rack', () => {
   });
 
   it('asks for light as soon as a leaf is up in the dark', async () => {
-    const shelf = boardShelf({ plantings: [planting({ crop: 'Leek', stage: 'emerging' })] });
-    await shown({
-      shelf: { ...shelf, now: { ...shelf.now, lampDay: lampDay({ lit: false, planned: [] }) } },
-    });
+    const made = boardShelf({ plantings: [planting({ crop: 'Leek', stage: 'emerging' })] });
+    const shelf = { ...made, now: { ...made.now, lampDay: lampDay({ lit: false, planned: [] }) } };
+    await shown({ shelf, needs: shelfNeeds(shelf) });
     expect(text('app-note-line')).toContain('Leek has come up: this shelf needs light now.');
+  });
+
+  it('does not blame a lamp that was off', async () => {
+    const shelf = boardShelf();
+    const measured = [{ from: '2026-12-01T00:00:00Z', to: '2026-12-01T01:00:00Z' }];
+    await shown({
+      shelf: { ...shelf, now: { ...shelf.now, lampDay: lampDay({ lit: false, measured }) } },
+      alerts: [alert()],
+    });
+    expect(text('app-note-line')).toContain('Too warm since 13:54');
+    expect(text('app-note-line')).not.toContain('The lamp may be');
   });
 
   it('keeps its strips in place when a new value arrives', async () => {

@@ -13,9 +13,10 @@ import { NoteLine } from '../../ui/note-line/note-line';
 import { PlantLabel } from '../../ui/plant-label/plant-label';
 import { plantLook } from '../../ui/plants/crop-look';
 import { PlantTray } from '../../ui/plants/plant-tray';
+import type { ShelfNeed } from '../board/shelf-needs';
 import { dayParts, minuteOfDay, type DaySpan } from './day-minutes';
 import { plantingSize, plantingWords } from '../../core/planting-words';
-import { firstLeafNote, shelfSituation } from './shelf-situation';
+import { shelfSituation } from './shelf-situation';
 import { shelfStrips } from './shelf-strips';
 
 /** The room's day, as a bay needs it. */
@@ -37,6 +38,8 @@ export class ShelfBay {
   readonly shelf = input.required<BoardShelf>();
   /** Open alerts of this shelf. */
   readonly alerts = input<readonly Alert[]>([]);
+  /** What it needs for what grows on it. */
+  readonly needs = input<readonly ShelfNeed[]>([]);
   readonly day = input.required<BayDay>();
 
   private readonly session = inject(Session);
@@ -75,13 +78,11 @@ export class ShelfBay {
     })),
   );
 
-  protected readonly notes = computed(() => {
-    const notes = this.alerts().map((alert) => {
-      const { sentence, tryThis } = this.format.describe(alert);
+  protected readonly notes = computed(() => [
+    ...this.alerts().map((alert) => {
+      const { sentence, tryThis } = this.format.describe(alert, this.shelf().now.lampDay);
       return { id: alert.id, ...alertLook(alert.kind), text: `${sentence} ${tryThis}` };
-    });
-    const text = firstLeafNote(this.shelf());
-    if (text === null) return notes;
-    return [...notes, { id: 'first-leaf', tone: 'leek' as const, icon: 'lightbulb', text }];
-  });
+    }),
+    ...this.needs().map(({ id, tone, icon, note }) => ({ id, tone, icon, text: note })),
+  ]);
 }

@@ -1,5 +1,5 @@
 import { boardShelf, lampDay, planting } from '../../core/testing/board-builder';
-import { firstLeafNote, shelfSituation, waitsToGerminate } from './shelf-situation';
+import { shelfSituation, waitsToGerminate } from './shelf-situation';
 import type { BoardShelf, LampDay, PlantingSummary } from '@shared/contracts/board';
 
 const dark: Partial<LampDay> = { lit: false, planned: [], measured: [] };
@@ -12,7 +12,6 @@ function shelf(
   return { ...made, now: { ...made.now, lampDay: lampDay(light) } };
 }
 const sown = planting({ crop: 'Onion', stage: 'sown' });
-const up = planting({ crop: 'Leek', stage: 'emerging' });
 
 describe('the situation of a shelf', () => {
   it.each([
@@ -33,19 +32,5 @@ describe('the situation of a shelf', () => {
   it('waits to germinate while anything is sown or coming up', () => {
     expect(waitsToGerminate(shelf(dark, [planting(), sown]))).toBe(true);
     expect(waitsToGerminate(shelf(dark, [planting()]))).toBe(false);
-  });
-});
-
-describe('a shelf kept dark', () => {
-  it('needs light as soon as the first leaf is up', () => {
-    expect(firstLeafNote(shelf(dark, [up, sown]))).toBe(
-      'Leek has come up, though onion has not: this shelf needs light now.',
-    );
-    expect(firstLeafNote(shelf(dark, [up]))).toBe('Leek has come up: this shelf needs light now.');
-  });
-
-  it('needs none before, nor once its lamps have hours', () => {
-    expect(firstLeafNote(shelf(dark, [sown]))).toBeNull();
-    expect(firstLeafNote(shelf({ lit: false }, [up]))).toBeNull();
   });
 });

@@ -27,17 +27,3 @@ function lightWords({ plantings, now: { lampDay } }: BoardShelf): string {
   }
   return lampDay.lit === null ? 'light not measured' : 'lamps off';
 }
-
-/**
- * What a shelf needs that is kept dark although leaves have come up: light.
- *
- * @returns A sentence, or null when nothing is up or the lamps have hours.
- */
-export function firstLeafNote({ plantings, now: { lampDay } }: BoardShelf): string | null {
-  if (!lampDay.hasLamp || lampDay.planned.length > 0 || lampDay.lit === true) return null;
-  const up = plantings.find(({ stage }) => stage === 'emerging' || stage === 'seedling');
-  if (up === undefined) return null;
-  const below = plantings.find(({ stage }) => underground.includes(stage));
-  const others = below === undefined ? '' : `, though ${below.crop.toLowerCase()} has not`;
-  return `${up.crop} has come up${others}: this shelf needs light now.`;
-}
