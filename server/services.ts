@@ -6,6 +6,7 @@ import { AlertHistoryStore } from './alerts/alert-history-store';
 import { AlertService } from './alerts/alert-service';
 import { alertRoutes } from './alerts/alert-routes';
 import { AlertStore } from './alerts/alert-store';
+import { RangeTrialService } from './alerts/range-trial-service';
 import type { SecondLookJob } from './alerts/second-look-job';
 import { secondLookJob } from './alerts/second-look-parts';
 import { AuditStore } from './audit/audit-store';
@@ -212,6 +213,17 @@ export function composeServices(foundation: Foundation): Services {
     luxPerUmolOf: (tx, shelfId) => seriesStore.luxPerUmolOf(tx, shelfId),
   });
 
+  const rangeTrials = new RangeTrialService(
+    transactions,
+    {
+      requireShelf: (roomId, shelfId) => pages.requireShelf(roomId, shelfId),
+      sensorsOn: (...of) => seriesStore.sensorsOn(...of),
+      samples: (...of) => series.flaggedSamples(...of),
+      plannedLamps: (...of) => plans.plannedLamps(...of),
+    },
+    now,
+  );
+
   const { publicUrl } = foundation;
   const tokens = new MailLinkTokens(foundation.secret);
   const mailComposer = new MailComposer({
@@ -252,7 +264,7 @@ export function composeServices(foundation: Foundation): Services {
       ...deviceIntakeRoutes(deviceIntake),
       ...boardRoutes(boards),
       ...seriesRoutes(pages, series, reports),
-      ...alertRoutes(alerts, answering),
+      ...alertRoutes(alerts, answering, rangeTrials),
       ...loggerFileRoutes(loggerFiles.files, config.uploadMaxBytes),
       ...careRoutes(care),
       ...growing.routes,

@@ -1,9 +1,10 @@
 import type { AlertRule } from '@shared/alerts/alert-rule';
-import { patienceDefaults, rangeRules, standingRules } from '@shared/alerts/alert-defaults';
+import { patienceDefaults, standingRules } from '@shared/alerts/alert-defaults';
 import type { Quantity } from '@shared/climate/quantity';
 import type { WantedRange } from '@shared/contracts/rooms';
 import { maxGapMs } from '@shared/series/expected-interval';
 import type { SensorOnRoad } from '../readings/reading-store';
+import { rulesOfRange } from './range-rules';
 
 /** A rule with the instant from which it judges readings [ms]. */
 export interface WatchingRule {
@@ -38,7 +39,7 @@ export function rulesFor(
     }
   }
   return [
-    ...rangeRulesOf(quantity, wanted, gap).map(({ rule, since }) => ({
+    ...rangeRulesOf(sensor, wanted).map(({ rule, since }) => ({
       rule,
       judgesFrom: Math.max(placedAt, since),
     })),
@@ -47,19 +48,10 @@ export function rulesFor(
 }
 
 function rangeRulesOf(
-  quantity: Quantity,
+  { expectedIntervalS }: SensorOnRoad,
   wanted: WantedRange | undefined,
-  gap: { readonly maxGapMs: number },
 ): { rule: AlertRule; since: number }[] {
   if (wanted === undefined) return [];
   const since = Date.parse(wanted.since);
-  const { above, below } = rangeRules(quantity, wanted, {
-    holdMs: wanted.holdMinutes * 60_000,
-    clearMargin: wanted.clearingMargin,
-    ...gap,
-  });
-  return [
-    { rule: above, since },
-    { rule: below, since },
-  ];
+  return rulesOfRange(wanted, expectedIntervalS).map((rule) => ({ rule, since }));
 }

@@ -1,6 +1,6 @@
 import { chmod, mkdir, writeFile } from 'node:fs/promises';
 import { dirname } from 'node:path';
-import { patienceDefaults } from '@shared/alerts/alert-defaults';
+import { patienceDefaults, usualUrgency } from '@shared/alerts/alert-defaults';
 import { simulatedRoom, type SimulatedRoom } from '@shared/contracts/simulation';
 import { kestrelLane } from '@shared/demonstration/kestrel-lane';
 import { dayBounds } from '@shared/series/room-days';
@@ -139,6 +139,8 @@ export class DemonstrationService {
         lampsOffHigh: lampsOff.high,
         holdMinutes: patienceDefaults[quantity].holdMs / 60_000,
         clearingMargin: patienceDefaults[quantity].clearMargin,
+        urgentBy: usualUrgency(quantity).by,
+        urgentAfterMinutes: usualUrgency(quantity).afterMinutes,
         reason,
         // From the noon after, when covers, lamps and mats had done their part.
         since: new Date(dayBounds(dayBefore(now, sinceDaysAgo - 1, zone), zone).start + DAY_MS / 2),

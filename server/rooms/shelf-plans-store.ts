@@ -44,6 +44,8 @@ export class ShelfPlansStore {
       lampsOff: { low: range.lampsOffLow, high: range.lampsOffHigh },
       holdMinutes: range.holdMinutes,
       clearingMargin: range.clearingMargin,
+      urgency: { by: range.urgentBy, afterMinutes: range.urgentAfterMinutes },
+      source: range.source,
       reason: range.reason,
       since: range.since.toISOString(),
     }));
@@ -51,7 +53,7 @@ export class ShelfPlansStore {
 
   /** Sets what a shelf wants of one quantity. */
   async setWantedRange(tx: Tx, shelfId: string, wanted: WantedRange): Promise<void> {
-    const { quantity, lampsOn, lampsOff, holdMinutes, clearingMargin, reason, since } = wanted;
+    const { quantity, lampsOn, lampsOff, holdMinutes, clearingMargin, urgency, source, reason } = wanted;
     await tx.upsert(
       WantedRangeEntity,
       {
@@ -63,8 +65,11 @@ export class ShelfPlansStore {
         lampsOffHigh: lampsOff.high,
         holdMinutes,
         clearingMargin,
+        urgentBy: urgency.by,
+        urgentAfterMinutes: urgency.afterMinutes,
+        source,
         reason,
-        since: new Date(since),
+        since: new Date(wanted.since),
       },
       ['shelfId', 'quantity'],
     );

@@ -1,5 +1,6 @@
+import { usualUrgency } from '@shared/alerts/alert-defaults';
 import type { Quantity } from '@shared/climate/quantity';
-import type { LampHours, Shelf, WantedRange } from '@shared/contracts/rooms';
+import type { LampHours, RangeUrgency, Shelf, WantedRange } from '@shared/contracts/rooms';
 import type { RoomAuthor } from '../audit/room-author';
 import type { RoomChanges } from '../audit/room-changes';
 import type { Clock } from '../clock';
@@ -19,6 +20,11 @@ export interface ShelfRulesParts {
   readonly changes: RoomChanges;
   readonly hooks: Pick<RoomHooks, 'onRangeChanged'>;
   readonly now: Clock;
+}
+
+/** A range as a person sets it; the urgency is the usual one where they say none. */
+export interface NewWantedRange extends Omit<WantedRange, 'since' | 'source' | 'urgency'> {
+  readonly urgency?: RangeUrgency | undefined;
 }
 
 /** Sets what alerts go by: lamp hours and wanted ranges. */
@@ -44,10 +50,15 @@ export class ShelfRulesService {
   }
 
   /** Sets what a shelf wants of one quantity, from now on. */
-  setWantedRange(by: RoomAuthor, shelfId: string, range: Omit<WantedRange, 'since'>): Promise<WantedRange> {
+  setWantedRange(by: RoomAuthor, shelfId: string, range: NewWantedRange): Promise<WantedRange> {
     const { plans, hooks, now } = this.parts;
     return this.change(by, shelfId, 'wanted-range.set', { ...range }, async (tx) => {
-      const wanted = { ...range, since: now().toISOString() };
+      const wanted: WantedRange = {
+        ...range,
+        urgency: range.urgency ?? usualUrgency(range.quantity),
+        source: 'shelf',
+        since: now().toISOString(),
+      };
       await plans.setWantedRange(tx, shelfId, wanted);
       await hooks.onRangeChanged(tx, shelfId, range.quantity);
       return wanted;

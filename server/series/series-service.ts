@@ -6,7 +6,7 @@ import { thinForChart } from '@shared/series/thin-for-chart';
 import type { ShelfPlans } from '../board/shelf-now-service';
 import type { Transactions, Tx } from '../database/transactions';
 import type { ComputedQuantities } from '../readings/computed-quantities';
-import type { ReadingStore } from '../readings/reading-store';
+import type { FlaggedSample, ReadingStore } from '../readings/reading-store';
 import type { Bucket, SensorSpan, SeriesStore } from './series-store';
 import { wantedSteps } from './wanted-steps';
 
@@ -78,6 +78,29 @@ export class SeriesService {
           sensor.from,
           sensor.to,
         );
+  }
+
+  /**
+   * Readings of a sensor's time on a shelf with their flags, failed ones included, or computed points.
+   *
+   * @param tx - Any.
+   * @param sensor - Whose and when.
+   * @param quantity - Its own or a computed one.
+   * @returns In order.
+   */
+  async flaggedSamples(
+    tx: Tx,
+    {
+      sensorId,
+      expectedIntervalS,
+      from,
+      to,
+    }: Pick<SensorSpan, 'sensorId' | 'expectedIntervalS' | 'from' | 'to'>,
+    quantity: Quantity,
+  ): Promise<FlaggedSample[]> {
+    if (isMeasured(quantity)) return this.readings.between(tx, sensorId, from, to, true);
+    const points = await this.computed.points(tx, { id: sensorId, expectedIntervalS }, quantity, from, to);
+    return points.map((point) => ({ ...point, flags: 0 }));
   }
 
   private async line(tx: Tx, sensor: SensorSpan, quantity: Quantity): Promise<ChartLine> {

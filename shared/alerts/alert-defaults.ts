@@ -55,6 +55,20 @@ function patience(of: {
   };
 }
 
+/**
+ * From when on an alert of a wanted range is urgent, unless its shelf says otherwise.
+ *
+ * @param quantity - What the range is about.
+ * @returns How far past the limit [stored unit] and after how many minutes; null is never by this.
+ */
+export function usualUrgency(quantity: Quantity): {
+  readonly by: number | null;
+  readonly afterMinutes: number | null;
+} {
+  const { urgentBy, urgentAfterMs } = patienceDefaults[quantity];
+  return { by: urgentBy, afterMinutes: urgentAfterMs === null ? null : urgentAfterMs / minute };
+}
+
 /** What a shelf wants of a quantity while the lamps are on and while they are off; null is no limit. */
 export interface WantedLimits {
   readonly lampsOn: { readonly low: number | null; readonly high: number | null };

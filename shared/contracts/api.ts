@@ -43,6 +43,7 @@ export const endpoints: readonly Endpoint[] = [
   rooms.setHeatMat,
   rooms.listWantedRanges,
   rooms.setWantedRange,
+  rooms.tryWantedRange,
   rooms.clearWantedRange,
   devices.postReadings,
   devices.getDeviceState,

@@ -223,6 +223,20 @@ export const limits = z
 /** Limits of one quantity on one side of the lamps; null is no limit. */
 export type Limits = z.infer<typeof limits>;
 
+/** From when on an alert of a range is urgent; null is never by this. */
+export const rangeUrgency = z.strictObject({
+  /** How far past the limit, in the stored unit of the quantity. */
+  by: z.number().min(0).max(100_000).nullable(),
+  afterMinutes: z.number().min(0).max(10_080).nullable(),
+});
+/** From when on an alert of a range is urgent. */
+export type RangeUrgency = z.infer<typeof rangeUrgency>;
+
+/** Where a range comes from: a person set it for the shelf, its plantings want it, or the room has it for all. */
+export const rangeSource = z.enum(['shelf', 'plantings', 'room']);
+/** Where a range comes from. */
+export type RangeSource = z.infer<typeof rangeSource>;
+
 /** What a shelf wants of one quantity. */
 export const wantedRange = z.object({
   quantity: z.enum(quantities),
@@ -230,6 +244,8 @@ export const wantedRange = z.object({
   lampsOff: limits,
   holdMinutes: z.number(),
   clearingMargin: z.number(),
+  urgency: rangeUrgency,
+  source: rangeSource,
   reason: z.string(),
   /** Readings are judged by it from this instant on. */
   since: instant,
@@ -248,6 +264,15 @@ export const listWantedRanges = endpoint({
   reply: z.array(wantedRange),
 });
 
+const rangeRule = z.strictObject({
+  lampsOn: limits,
+  lampsOff: limits,
+  holdMinutes: z.number().min(0).max(1440),
+  clearingMargin: z.number().min(0).max(50),
+  /** The usual one of the quantity where it is left out. */
+  urgency: rangeUrgency.optional(),
+});
+
 /** Sets one wanted range; alerts follow it from now on. */
 export const setWantedRange = endpoint({
   name: 'setWantedRange',
@@ -256,14 +281,41 @@ export const setWantedRange = endpoint({
   access: 'grower',
   summary: 'Set the wanted range of one quantity on a shelf',
   params: shelfParams.extend({ quantity: z.enum(quantities) }),
-  body: z.strictObject({
-    lampsOn: limits,
-    lampsOff: limits,
-    holdMinutes: z.number().min(0).max(1440),
-    clearingMargin: z.number().min(0).max(50),
-    reason: z.string().trim().max(200).default(''),
-  }),
+  body: rangeRule.extend({ reason: z.string().trim().max(200).default('') }),
   reply: wantedRange,
+});
+
+const openings = z.object({
+  count: z.number().int(),
+  /** Time past the limit in all [ms]. */
+  totalMs: z.number(),
+  urgentCount: z.number().int(),
+});
+
+/** What a wanted range would have done with the readings of the last days. */
+export const rangeTrial = z.object({
+  /** How many days the readings are of: 14, or fewer where there are very many. */
+  days: z.number().int(),
+  above: openings,
+  below: openings,
+  /** When alerts would have been open, for the chart; the newest hundred, in order. */
+  episodes: z.array(z.object({ beganAt: instant, endedAt: instant.nullable() })),
+  /** Fraction of those days for which there are readings, 0–1. */
+  coverage: z.number(),
+});
+/** What a wanted range would have done with the readings of the last days. */
+export type RangeTrial = z.infer<typeof rangeTrial>;
+
+/** Tries a wanted range on past readings; nothing is set. */
+export const tryWantedRange = endpoint({
+  name: 'tryWantedRange',
+  method: 'post',
+  path: '/rooms/:roomId/shelves/:shelfId/wanted-ranges/:quantity/trial',
+  access: 'grower',
+  summary: 'How often a wanted range would have opened an alert lately; nothing is set',
+  params: shelfParams.extend({ quantity: z.enum(quantities) }),
+  body: rangeRule,
+  reply: rangeTrial,
 });
 
 /** Takes a wanted range away, and with it its alerts. */

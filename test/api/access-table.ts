@@ -107,6 +107,10 @@ export const accessTable: Readonly<Record<string, AccessRow>> = {
     outcomes: grower,
     body: { lampsOn: noLimits, lampsOff: noLimits, holdMinutes: 15, clearingMargin: 0.5 },
   },
+  tryWantedRange: {
+    outcomes: grower,
+    body: { lampsOn: noLimits, lampsOff: noLimits, holdMinutes: 15, clearingMargin: 0.5 },
+  },
   clearWantedRange: { outcomes: grower },
 
   postReadings: { outcomes: device },

@@ -246,11 +246,12 @@ describe('rooms', () => {
   });
 
   describe('wanted ranges', () => {
-    const range: Omit<WantedRange, 'quantity' | 'since'> = {
+    const range: Omit<WantedRange, 'quantity' | 'since' | 'source'> = {
       lampsOn: { low: 0, high: 25 },
       lampsOff: { low: null, high: 22 },
       holdMinutes: 15,
       clearingMargin: 0.5,
+      urgency: { by: 3, afterMinutes: null },
       reason: 'peppers',
     };
 
@@ -265,6 +266,7 @@ describe('rooms', () => {
       expect(reply.body).toEqual({
         quantity: 'airTemperature',
         ...range,
+        source: 'shelf',
         since: application.now.toISOString(),
       });
       const listed = (await staff.viewer.get(path).expect(200)).body as WantedRange[];

@@ -84,6 +84,8 @@ export async function aWantedRange(
     lampsOffHigh: 22,
     holdMinutes: 15,
     clearingMargin: 0.5,
+    urgentBy: 4,
+    urgentAfterMinutes: 360,
     reason: '',
     ...overrides,
   });

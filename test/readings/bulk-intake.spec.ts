@@ -111,6 +111,8 @@ const litByDay: Plans = {
             lampsOff: { low: 15, high: 21 },
             holdMinutes: 15,
             clearingMargin: 0.5,
+            urgency: { by: 4, afterMinutes: 360 },
+            source: 'shelf',
             reason: 'for the test',
             since: '2026-01-01T00:00:00Z',
           },

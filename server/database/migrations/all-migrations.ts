@@ -16,6 +16,7 @@ import { CreateSeed1764552500000 } from './1764552500000-create-seed';
 import { WaitForSecondLook1764552550000 } from './1764552550000-wait-for-second-look';
 import { KeepPlantingHistory1764552600000 } from './1764552600000-keep-planting-history';
 import { CreatePhoto1764552700000 } from './1764552700000-create-photo';
+import { SetUrgencyOfRanges1764553300000 } from './1764553300000-set-urgency-of-ranges';
 
 /** Every migration in order; a merged one is never edited. */
 export const migrations = [
@@ -37,4 +38,5 @@ export const migrations = [
   WaitForSecondLook1764552550000,
   KeepPlantingHistory1764552600000,
   CreatePhoto1764552700000,
+  SetUrgencyOfRanges1764553300000,
 ];

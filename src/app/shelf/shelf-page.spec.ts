@@ -44,6 +44,8 @@ function detail(changes: Partial<ShelfDetail> = {}): ShelfDetail {
         lampsOn: { low: 20, high: 26 },
         lampsOff: { low: 16, high: 20 },
         holdMinutes: 10,
+        urgency: { by: 4, afterMinutes: 360 },
+        source: 'shelf',
         clearingMargin: 0.5,
         reason: 'Where both plantings’ ranges meet',
         since: '2026-11-01T00:00:00Z',

@@ -83,7 +83,7 @@ export class ShelfWants {
 
   private open(dialog: ComponentType<unknown>, data: unknown): void {
     this.dialog
-      .open<unknown, unknown, boolean>(dialog, { data, maxWidth: '520px' })
+      .open<unknown, unknown, boolean>(dialog, { data, maxWidth: '640px' })
       .afterClosed()
       .subscribe((isSaved) => {
         if (isSaved === true) this.data.detailResource.reload();

@@ -9,13 +9,15 @@ import { MatSelectModule } from '@angular/material/select';
 import type { Quantity } from '@shared/climate/quantity';
 import { clearWantedRange, setWantedRange, type WantedRange } from '@shared/contracts/rooms';
 import { quantityName, shownUnit } from '@shared/format/quantities';
-import { finalize, type Observable } from 'rxjs';
+import { finalize, map, type Observable } from 'rxjs';
 import { ApiClient } from '../../core/api-client';
 import { failureText } from '../../core/failure-text';
 import { Session } from '../../core/session';
 import { ProblemText } from '../../ui/states/problem-text';
 import { quantityTitle } from '../quantity-title';
+import { RangePreview } from './range-preview';
 import { rangeProblem, savedRange, typedRange } from './wanted-range-form';
+import { sourceWords } from './wants-words';
 
 /** Which range is changed. */
 export interface WantedRangeSubject {
@@ -40,6 +42,7 @@ const numberField = (): FormControl<number | null> => new FormControl<number | n
     MatInput,
     MatSelectModule,
     ProblemText,
+    RangePreview,
     ReactiveFormsModule,
   ],
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -56,7 +59,7 @@ export class WantedRangeDialog {
       nonNullable: true,
     },
   );
-  private readonly quantity = toSignal(this.quantityField.valueChanges, {
+  protected readonly quantity = toSignal(this.quantityField.valueChanges, {
     initialValue: this.quantityField.value,
   });
   protected readonly name = computed(() => quantityName[this.quantity()]);
@@ -77,8 +80,19 @@ export class WantedRangeDialog {
     offHigh: numberField(),
     holdMinutes: numberField(),
     clearingMargin: numberField(),
+    urgentBy: numberField(),
+    urgentAfterHours: numberField(),
     reason: new FormControl('', { nonNullable: true }),
   });
+  private readonly typed = toSignal(this.fields.valueChanges.pipe(map(() => this.fields.getRawValue())), {
+    initialValue: this.fields.getRawValue(),
+  });
+  /** The range as it would be saved, for its trial; null while it can't be. */
+  protected readonly tried = computed(() => {
+    const typed = this.typed();
+    return rangeProblem(typed) === null ? savedRange(this.quantity(), typed, this.unit) : null;
+  });
+  protected readonly origin = this.subject.range === null ? null : sourceWords[this.subject.range.source];
   protected readonly isSaving = signal(false);
   protected readonly problem = signal<string | null>(null);
 

@@ -8,6 +8,8 @@ const range: WantedRange = {
   lampsOff: { low: 16, high: null },
   holdMinutes: 10,
   clearingMargin: 0.5,
+  urgency: { by: 4, afterMinutes: 360 },
+  source: 'shelf',
   since: '2026-11-01T00:00:00Z',
   reason: 'Where both plantings’ ranges meet',
 };
@@ -21,6 +23,8 @@ describe('a wanted range in a form', () => {
       offHigh: null,
       holdMinutes: 10,
       clearingMargin: 0.9,
+      urgentBy: 7.2,
+      urgentAfterHours: 6,
       reason: range.reason,
     });
   });
@@ -34,6 +38,8 @@ describe('a wanted range in a form', () => {
         // The form shows a tenth of a degree, of either unit.
         expect(Math.abs((saved.lampsOn.low ?? NaN) - low)).toBeLessThan(0.051);
         expect(saved.clearingMargin).toBeCloseTo(0.5, 2);
+        expect(saved.urgency.by).toBeCloseTo(4, 2);
+        expect(saved.urgency.afterMinutes).toBe(360);
       }),
     );
   });
@@ -54,9 +60,16 @@ describe('a wanted range in a form', () => {
     [{ holdMinutes: null }, /patience/],
     [{ holdMinutes: 1441 }, /patience/],
     [{ clearingMargin: -1 }, /margin/],
+    [{ urgentBy: -0.1 }, /urgent/],
+    [{ urgentAfterHours: 169 }, /urgent/],
   ])('with %j is refused', (changes, problem) => {
     expect(rangeProblem(good)).toBeNull();
     expect(rangeProblem({ ...good, ...changes })).toMatch(problem);
+  });
+
+  it('can be never urgent, or at once', () => {
+    const saved = savedRange('airTemperature', { ...good, urgentBy: null, urgentAfterHours: 0 }, '°C');
+    expect(saved.urgency).toEqual({ by: null, afterMinutes: 0 });
   });
 
   it('takes zero for a limit, not for an empty field', () => {

@@ -33,6 +33,8 @@ function range(changes: Partial<WantedRange> = {}): WantedRange {
     lampsOff: { low: 16, high: 20 },
     holdMinutes: 10,
     clearingMargin: 0.5,
+    urgency: { by: 4, afterMinutes: 360 },
+    source: 'shelf',
     since: '2026-11-01T00:00:00Z',
     reason: 'Where both plantings’ ranges meet',
     ...changes,
@@ -49,7 +51,15 @@ describe('a wanted range', () => {
   ])('is told for both sides of the lamps, once when they agree', (of, text) => {
     const { text: told, reason } = rangeWords(of, '°C');
     expect(told.replaceAll('\u2060', '')).toBe(text);
-    expect(reason).toBe(of.reason);
+    expect(reason).toBe('Set for this shelf · Where both plantings’ ranges meet');
+  });
+
+  it.each([
+    ['shelf', '', 'Set for this shelf'],
+    ['plantings', 'Leeks germinate at this', 'From what grows here · Leeks germinate at this'],
+    ['room', '', 'As everywhere in this room'],
+  ] as const)('from the %s with the reason %j says where it comes from', (source, reason, words) => {
+    expect(rangeWords(range({ source, reason }), '°C').reason).toBe(words);
   });
 
   it('is told in the reader’s unit', () => {

@@ -1,6 +1,6 @@
 import type { Quantity } from '@shared/climate/quantity';
 import type { PlantingSummary } from '@shared/contracts/board';
-import type { LampHours, Shelf, WantedRange } from '@shared/contracts/rooms';
+import type { LampHours, RangeSource, Shelf, WantedRange } from '@shared/contracts/rooms';
 import { formatNumber, type TemperatureUnit } from '@shared/format/numbers';
 import { formatQuantityRange } from '@shared/format/quantities';
 import { quantityTitle } from '../quantity-title';
@@ -32,9 +32,17 @@ export function lampWords({ lamps, lampHours }: Pick<Shelf, 'lamps' | 'lampHours
     : { text: `Lamps ${lampHours.switchesOn}–${lampHours.switchesOff}`, reason };
 }
 
-/** A wanted range in words, with what it is there for. */
+/** Where a range comes from. */
+export const sourceWords: Readonly<Record<RangeSource, string>> = {
+  shelf: 'Set for this shelf',
+  plantings: 'From what grows here',
+  room: 'As everywhere in this room',
+};
+
+/** A wanted range in words, with where it comes from and what it is there for. */
 export function rangeWords(range: WantedRange, temperatureUnit: TemperatureUnit): WantLine {
-  const { quantity, lampsOn, lampsOff, reason } = range;
+  const { quantity, lampsOn, lampsOff } = range;
+  const reason = [sourceWords[range.source], range.reason].filter((words) => words !== '').join(' · ');
   const title = quantityTitle(quantity);
   const [on, off] = [lampsOn, lampsOff].map(({ low, high }) =>
     low === null && high === null
