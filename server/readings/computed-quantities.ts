@@ -115,6 +115,8 @@ export class ComputedQuantities {
     from: number,
     to: number,
   ): Promise<Sample[]> {
+    // Nothing is paired yet, or not any more, after all of a sensor's readings were taken out.
+    if (to <= from) return [];
     return pointsOf(quantity, sensor, await this.store.airOf(tx, [spanOf(sensor, from, to)]));
   }
 }

@@ -1,6 +1,6 @@
 import type { Problem } from '@shared/contracts/problem';
 import { aDevice, aPlacement, aSensor } from '../builders/devices';
-import { aShelf } from '../builders/rooms';
+import { aShelf, aWantedRange } from '../builders/rooms';
 import { fileOf, fileRoad, fileStart, fileStep, type FileRoad } from './file-road';
 import { aStaffedRoom, type StaffedRoom } from './room-callers';
 import { startTestApplication, type TestApplication } from './test-application';
@@ -140,6 +140,24 @@ describe('logger files over HTTP', () => {
     await done(kept.id, 'take-out');
     expect(await readingsOf(sensors.temperature)).toEqual(before.readings);
     expect(await sumsOf(sensors.temperature)).toEqual(before.sums);
+  });
+
+  it('taken out of a shelf whose deficit is watched leave nothing, when they were all that it had', async () => {
+    const sensors = await shelfSensors();
+    const wanted = { lampsOnLow: 0.4, lampsOnHigh: 0.8, lampsOffLow: 0.4, lampsOffHigh: 0.8 };
+    const quantity = 'vapourPressureDeficit';
+    await aWantedRange(application.tx, {
+      shelfId: sensors.shelfId,
+      quantity,
+      ...wanted,
+      since: new Date('2026-01-01'),
+    });
+    const file = await uploaded(fileOf(200));
+    await matched(file, [sensors.temperature, sensors.humidity]);
+    await done(file.id, 'bring-in');
+    expect(await done(file.id, 'take-out')).toMatchObject({ status: 'takenOut', failure: null });
+    expect(await readingsOf(sensors.humidity)).toEqual([]);
+    expect(await sumsOf(sensors.humidity)).toEqual([]);
   });
 
   it('taken out in any order leave what the files still in have brought', async () => {
