@@ -19,6 +19,11 @@ const titles: Readonly<Record<number, string>> = {
 
 /** What pg and the operating system say when the database can't be reached. */
 const databaseAway = new Set(['ECONNREFUSED', 'ECONNRESET', 'ETIMEDOUT', 'EPIPE', '57P01', '57P02', '57P03']);
+/** What TypeORM throws once it has put away a connection that broke in the middle of a transaction. */
+const connectionPutAway = new Set([
+  'QueryRunnerAlreadyReleasedError',
+  'QueryRunnerProviderAlreadyReleasedError',
+]);
 
 /**
  * Whether an error means that the database is away rather than that the request is wrong.
@@ -30,6 +35,7 @@ export function isDatabaseAway(error: unknown): boolean {
   if (!(error instanceof Error)) return false;
   const code = (error as { code?: unknown }).code;
   if (typeof code === 'string' && databaseAway.has(code)) return true;
+  if (connectionPutAway.has(error.name)) return true;
   return /Connection terminated|timeout exceeded when trying to connect|Client has encountered/.test(
     error.message,
   );
