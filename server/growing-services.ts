@@ -1,4 +1,9 @@
+import type { Logger } from 'pino';
+import { adviceRoutes } from './advice/advice-routes';
+import { AdviceService } from './advice/advice-service';
+import { AdviceStore } from './advice/advice-store';
 import type { RoomChanges } from './audit/room-changes';
+import type { OpenTasks } from './care/open-tasks';
 import type { Clock } from './clock';
 import { cropsRoutes } from './crops/crops-routes';
 import { CropsService } from './crops/crops-service';
@@ -12,6 +17,7 @@ import { germinationRoutes } from './germination/germination-routes';
 import { GerminationService } from './germination/germination-service';
 import { ShelfWarmth } from './germination/shelf-warmth';
 import type { Route } from './http/route';
+import type { LiveFeed } from './live/live-feed';
 import { PhotosService } from './photos/photos-service';
 import { photosRoutes } from './photos/photos-routes';
 import { PhotosStore } from './photos/photos-store';
@@ -22,8 +28,10 @@ import { PlantingStartService } from './plantings/planting-start-service';
 import { plantingsRoutes } from './plantings/plantings-routes';
 import { PlantingsService } from './plantings/plantings-service';
 import { PlantingsStore } from './plantings/plantings-store';
+import type { RoomHooks } from './rooms/room-hooks';
 import type { RoomsService } from './rooms/rooms-service';
 import type { ShelfPlansService } from './rooms/shelf-plans-service';
+import type { ShelfPlansStore } from './rooms/shelf-plans-store';
 import { GerminationTestsService } from './seed/germination-tests-service';
 import { GerminationTestsStore } from './seed/germination-tests-store';
 import { seedRoutes } from './seed/seed-routes';
@@ -40,6 +48,11 @@ export interface GrowingFoundation {
   readonly changes: RoomChanges;
   readonly rooms: RoomsService;
   readonly plans: ShelfPlansService;
+  readonly plansStore: ShelfPlansStore;
+  readonly hooks: RoomHooks;
+  readonly openTasks: OpenTasks;
+  readonly feed: LiveFeed;
+  readonly log: Pick<Logger, 'warn'>;
   readonly now: Clock;
 }
 
@@ -48,6 +61,7 @@ export interface GrowingServices {
   readonly routes: readonly Route[];
   readonly plantings: PlantingsService;
   readonly germination: GerminationService;
+  readonly advice: AdviceService;
 }
 
 /**
@@ -120,6 +134,28 @@ export function growingServices(foundation: GrowingFoundation): GrowingServices 
     },
     now,
   });
+  const advice = new AdviceService({
+    transactions,
+    advice: new AdviceStore(),
+    rooms,
+    plantings,
+    crops,
+    ranges: {
+      of: (tx, shelfIds) => plans.wantedRangesOf(tx, shelfIds),
+      set: (...of) => foundation.plansStore.setWantedRange(...of),
+      clear: (...of) => foundation.plansStore.clearWantedRange(...of),
+    },
+    hooks: foundation.hooks,
+    tasks: foundation.openTasks,
+    feed: foundation.feed,
+    now,
+  });
+  changes.followBy((roomId) =>
+    // The change itself is made; advice is worked out again within minutes anyway.
+    advice.refresh(roomId).catch((error: unknown) => {
+      foundation.log.warn({ err: error }, 'advice not worked out');
+    }),
+  );
   const photos = new PhotosService({
     transactions,
     photos: photosStore,
@@ -138,8 +174,10 @@ export function growingServices(foundation: GrowingFoundation): GrowingServices 
       ...plantingsRoutes(plantings, start, happening),
       ...photosRoutes(photos),
       ...germinationRoutes(germination),
+      ...adviceRoutes(advice),
     ],
     plantings,
     germination,
+    advice,
   };
 }

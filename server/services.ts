@@ -3,6 +3,7 @@ import type { Logger } from 'pino';
 import { AlertAnswerService } from './alerts/alert-answer-service';
 import { AlertAnswerStore } from './alerts/alert-answer-store';
 import { AlertHistoryStore } from './alerts/alert-history-store';
+import type { AdviceService } from './advice/advice-service';
 import { AlertService } from './alerts/alert-service';
 import { alertRoutes } from './alerts/alert-routes';
 import { AlertStore } from './alerts/alert-store';
@@ -19,6 +20,7 @@ import { ShelfNowService } from './board/shelf-now-service';
 import { careRoutes } from './care/care-routes';
 import { CareService } from './care/care-service';
 import { CareStore } from './care/care-store';
+import { OpenTasks } from './care/open-tasks';
 import type { Clock } from './clock';
 import type { Config } from './config';
 import type { Transactions } from './database/transactions';
@@ -95,6 +97,7 @@ export interface Services {
   readonly boardPublisher: BoardPublisher;
   readonly secondLookJob: SecondLookJob;
   readonly care: CareService;
+  readonly advice: AdviceService;
   readonly loggerFiles: LoggerFileRunner;
   /** Tells the scenarios which room is the demonstration. */
   setDemonstrationRoom(roomId: string | null): void;
@@ -127,9 +130,21 @@ export function composeServices(foundation: Foundation): Services {
   const road = intakeParts(transactions, plans, teller);
   const hooks = new HistoryUpkeepService({ ...road, alerts: alertStore, now });
 
+  const careStore = new CareStore();
   const roomsStore = new RoomsStore();
   const rooms = new RoomsService({ transactions, rooms: roomsStore, changes, hooks, now });
-  const growing = growingServices({ transactions, changes, rooms, plans, now });
+  const growing = growingServices({
+    transactions,
+    changes,
+    rooms,
+    plans,
+    plansStore,
+    hooks,
+    openTasks: new OpenTasks(careStore),
+    feed: relay,
+    log,
+    now,
+  });
   const { plantings } = growing;
   const rules = new ShelfRulesService({
     transactions,
@@ -148,7 +163,7 @@ export function composeServices(foundation: Foundation): Services {
     hooks,
     now,
   });
-  const care = new CareService({ transactions, care: new CareStore(), rooms, people, feed: relay, now });
+  const care = new CareService({ transactions, care: careStore, rooms, people, feed: relay, now });
   const alerts = new AlertService({
     transactions,
     alerts: alertStore,
@@ -184,6 +199,7 @@ export function composeServices(foundation: Foundation): Services {
       roomOf: (tx, roomId) => rooms.roomOf(tx, roomId),
       plantingsOn: (tx, shelfIds) => plantings.plantingsOn(tx, shelfIds),
       sowingsOn: (tx, shelfIds) => growing.germination.sowingsOn(tx, shelfIds),
+      adviceOn: (tx, shelfIds) => growing.advice.adviceOn(tx, shelfIds),
       openAlerts: (roomId) => alerts.open(roomId),
       tasksOf: (roomId, from, to) => care.listTasks(roomId, { from, to }),
     },
@@ -291,6 +307,7 @@ export function composeServices(foundation: Foundation): Services {
       now,
     }),
     care,
+    advice: growing.advice,
     loggerFiles: loggerFiles.runner,
     setDemonstrationRoom: (roomId) => {
       demonstrationRoom = roomId;

@@ -10,11 +10,22 @@ export interface NotedChange<T> extends Pick<AuditNote, 'action' | 'subjectId' |
 
 /** The one way in which people change a room: in one transaction with who did it; its dashboards hear of it afterwards. */
 export class RoomChanges {
+  private follow: (roomId: string) => Promise<void> = () => Promise.resolve();
+
   constructor(
     private readonly transactions: Transactions,
     private readonly audit: AuditStore,
     private readonly feed: LiveFeed,
   ) {}
+
+  /**
+   * Names what follows every change, before dashboards hear of it.
+   *
+   * @param work - Must not fail: the change is made already.
+   */
+  followBy(work: (roomId: string) => Promise<void>): void {
+    this.follow = work;
+  }
 
   /**
    * Makes a change.
@@ -29,6 +40,7 @@ export class RoomChanges {
       await this.audit.note(tx, { ...by, ...note });
       return result;
     });
+    await this.follow(by.roomId);
     this.feed.publish(by.roomId, 'room:changed', { roomId: by.roomId });
     return done;
   }

@@ -1,4 +1,5 @@
 import type { Board, BoardRack, PlantingSummary, ShelfNow } from '@shared/contracts/board';
+import type { ShelfAdviceView } from '@shared/contracts/advice';
 import type { Alert } from '@shared/contracts/alerts';
 import type { Task } from '@shared/contracts/care';
 import type { SowingNow } from '@shared/contracts/germination';
@@ -14,6 +15,7 @@ export interface BoardSources {
   roomOf(tx: Tx, roomId: string): Promise<{ name: string; timeZone: string } | null>;
   plantingsOn(tx: Tx, shelfIds: readonly string[]): Promise<Map<string, PlantingSummary[]>>;
   sowingsOn(tx: Tx, shelfIds: readonly string[]): Promise<Map<string, SowingNow[]>>;
+  adviceOn(tx: Tx, shelfIds: readonly string[]): Promise<Map<string, ShelfAdviceView>>;
   openAlerts(roomId: string): Promise<Alert[]>;
   /** Tasks due from a day up to another, exclusive, with everything late before it. */
   tasksOf(roomId: string, from: string, to: string): Promise<Task[]>;
@@ -52,11 +54,12 @@ export class BoardService {
     const rows = await this.store.shelves(tx, roomId);
     const shelves = rows.filter(isUsed);
     const shelfIds = shelves.map(({ shelfId }) => shelfId);
-    const [latest, states, plantings, sowings, openAlerts, tasks] = await Promise.all([
+    const [latest, states, plantings, sowings, advice, openAlerts, tasks] = await Promise.all([
       this.store.latest(tx, shelfIds),
       this.shelfNow.of(tx, shelves, day, now),
       this.sources.plantingsOn(tx, shelfIds),
       this.sources.sowingsOn(tx, shelfIds),
+      this.sources.adviceOn(tx, shelfIds),
       this.sources.openAlerts(roomId),
       this.sources.tasksOf(roomId, day.date, dayBounds(now + AHEAD_MS, room.timeZone).date),
     ]);
@@ -71,7 +74,7 @@ export class BoardService {
       dayEnd: new Date(day.end).toISOString(),
       sensorCount: live.length,
       sensorsReporting: live.filter((reading) => isReporting(reading, now)).length,
-      racks: racksOf(rows, states, { plantings, sowings }),
+      racks: racksOf(rows, states, { plantings, sowings, advice }),
       openAlerts,
       tasks,
     };
@@ -107,12 +110,13 @@ function isReporting({ at, expectedIntervalS }: LatestReading, now: number): boo
 interface Growing {
   readonly plantings: ReadonlyMap<string, PlantingSummary[]>;
   readonly sowings: ReadonlyMap<string, SowingNow[]>;
+  readonly advice: ReadonlyMap<string, ShelfAdviceView>;
 }
 
 function racksOf(
   rows: readonly ShelfRow[],
   states: readonly ShelfNow[],
-  { plantings, sowings }: Growing,
+  { plantings, sowings, advice }: Growing,
 ): BoardRack[] {
   const racks = new Map<string, BoardRack>();
   const nowOf = new Map(states.map((state) => [state.shelfId, state]));
@@ -132,6 +136,7 @@ function racksOf(
       heatMatOn: row.heatMatOn,
       plantings: plantings.get(row.shelfId) ?? [],
       sowings: sowings.get(row.shelfId) ?? [],
+      advice: advice.get(row.shelfId) ?? null,
       now: state,
     });
   }

@@ -1,6 +1,8 @@
 import 'reflect-metadata';
 import { DataSource } from 'typeorm';
 import { AlertAssignmentEntity } from '../alerts/alert-assignment-entity';
+import { AdviceTaskEntity } from '../advice/advice-task-entity';
+import { ShelfAdviceEntity } from '../advice/shelf-advice-entity';
 import { AlertDeedEntity } from '../alerts/alert-deed-entity';
 import { AlertEntity } from '../alerts/alert-entity';
 import { AlertQuietEntity } from '../alerts/alert-quiet-entity';
@@ -49,6 +51,7 @@ import { migrations } from './migrations/all-migrations';
 
 /** Every table that TypeORM maps. */
 const entities = [
+  AdviceTaskEntity,
   AlertAssignmentEntity,
   AlertDeedEntity,
   AlertEntity,
@@ -87,6 +90,7 @@ const entities = [
   SeedUseEntity,
   SensorEntity,
   SensorStateEntity,
+  ShelfAdviceEntity,
   ShelfEntity,
   ShelfEventEntity,
   ComputedHourlySummaryEntity,

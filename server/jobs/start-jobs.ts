@@ -18,7 +18,7 @@ const AHEAD_MS = 62 * 24 * HOUR_MS;
  * @returns Stops them all, after the work in hand.
  */
 export function startJobs(app: App, transactions: Transactions, log: Logger): () => Promise<void> {
-  const { secondLookJob, escalationJob, morningLetterJob, care, loggerFiles } = app.services;
+  const { secondLookJob, escalationJob, morningLetterJob, advice, care, loggerFiles } = app.services;
   const alone = (name: string, everyMs: number, work: () => Promise<void>): RepeatingJob =>
     new RepeatingJob(name, everyMs, async () => void (await whenAlone(transactions, name, work)), log);
   const jobs = [
@@ -26,6 +26,7 @@ export function startJobs(app: App, transactions: Transactions, log: Logger): ()
     alone('logger files left behind', MINUTE_MS / 4, () => loggerFiles.failAbandoned()),
     alone('escalation', MINUTE_MS / 2, () => escalationJob.run()),
     alone('morning letters', MINUTE_MS, () => morningLetterJob.run()),
+    alone('advice', 10 * MINUTE_MS, () => advice.refreshAll()),
     alone('tasks', HOUR_MS, () => care.planAhead()),
     alone('partitions', 6 * HOUR_MS, async () => {
       const now = Date.now();

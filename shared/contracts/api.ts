@@ -1,5 +1,6 @@
 import type { Endpoint } from './endpoint';
 import * as alertAnswers from './alert-answers';
+import * as advice from './advice';
 import * as alerts from './alerts';
 import * as board from './board';
 import * as care from './care';
@@ -122,6 +123,7 @@ export const endpoints: readonly Endpoint[] = [
   plantingEvents.stepPlanting,
   plantingEvents.undoPlantingEvent,
   germination.getGermination,
+  advice.getShelfAdvice,
   photos.addPlantingPhoto,
   photos.addSeedLotPhoto,
   photos.getPhotoImage,

@@ -1,6 +1,7 @@
 import * as z from 'zod';
 import { quantities } from '../climate/quantity';
 import { plantHabits, plantingStages } from '../growing/planting-stage';
+import { shelfAdvice } from './advice';
 import { alert } from './alerts';
 import { task } from './care';
 import { day, endpoint, id, instant, roomParams } from './endpoint';
@@ -68,6 +69,8 @@ export const boardShelf = z.object({
   plantings: z.array(plantingSummary),
   /** Its sowings that still come up, with when to expect the first. */
   sowings: z.array(sowingNow),
+  /** What it should be for them; null until it was worked out. */
+  advice: shelfAdvice.nullable(),
   now: shelfNow,
 });
 /** A shelf as it stands in the room now. */

@@ -1,4 +1,5 @@
 import * as z from 'zod';
+import { shelfAdvice, type ShelfAdviceView } from './advice';
 import { alert, type Alert } from './alerts';
 import { shelfNow, type ShelfNow } from './board';
 import { task, type Task } from './care';
@@ -9,6 +10,8 @@ import type { ReadingsReceipt } from './devices';
 /** What dashboards are told in namespace `/live`, after the commit, in the past tense. */
 export interface LiveEvents {
   'shelf:measured': (now: ShelfNow) => void;
+  /** What a shelf should be is something else now. */
+  'shelf:advised': (advice: ShelfAdviceView) => void;
   'alert:changed': (alert: Alert) => void;
   'task:changed': (task: Task) => void;
   'loggerFile:changed': (file: LoggerFile) => void;
@@ -19,6 +22,7 @@ export interface LiveEvents {
 /** How to read each live event on arrival. */
 export const liveEventSchemas = {
   'shelf:measured': shelfNow,
+  'shelf:advised': shelfAdvice,
   'alert:changed': alert,
   'task:changed': task,
   'loggerFile:changed': loggerFile,

@@ -219,6 +219,7 @@ export const accessTable: Readonly<Record<string, AccessRow>> = {
   stepPlanting: { outcomes: grower, body: { kind: 'pottedOn', container: '1 L' } },
   undoPlantingEvent: { outcomes: helper },
 
+  getShelfAdvice: { outcomes: viewer },
   getGermination: { outcomes: viewer },
   addPlantingPhoto: { outcomes: helper },
   addSeedLotPhoto: { outcomes: grower },

@@ -17,6 +17,7 @@ import { WaitForSecondLook1764552550000 } from './1764552550000-wait-for-second-
 import { KeepPlantingHistory1764552600000 } from './1764552600000-keep-planting-history';
 import { CreatePhoto1764552700000 } from './1764552700000-create-photo';
 import { SetUrgencyOfRanges1764553300000 } from './1764553300000-set-urgency-of-ranges';
+import { CreateShelfAdvice1764553400000 } from './1764553400000-create-shelf-advice';
 
 /** Every migration in order; a merged one is never edited. */
 export const migrations = [
@@ -39,4 +40,5 @@ export const migrations = [
   KeepPlantingHistory1764552600000,
   CreatePhoto1764552700000,
   SetUrgencyOfRanges1764553300000,
+  CreateShelfAdvice1764553400000,
 ];

@@ -62,6 +62,7 @@ export function boardShelf(changes: Partial<BoardShelf> = {}): BoardShelf {
     heatMatOn: null,
     plantings: [planting()],
     sowings: [],
+    advice: null,
     now: {
       shelfId: id,
       measures: [
