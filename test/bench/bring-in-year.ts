@@ -58,7 +58,7 @@ export async function aBenchRoom(dataSource: DataSource): Promise<BenchRoom> {
 /** Three new sensors on the room's shelf, in place of those that were there. */
 export async function newSensors(dataSource: DataSource, room: BenchRoom): Promise<string[]> {
   const tx = dataSource.manager;
-  await tx.query('DELETE FROM placement');
+  await tx.query('DELETE FROM placement WHERE shelf_id = $1', [room.shelfId]);
   const ids: string[] = [];
   for (const quantity of quantities) {
     const lightThreshold = quantity === 'ppfd' ? 5 : null;

@@ -1,16 +1,20 @@
+import { alertsVsStore } from './alerts-vs-store';
 import type { Benchmark } from './benchmark';
 import { bringInFresh } from './bring-in-fresh';
 import { bringInHalfHeld } from './bring-in-half-held';
 import { bringInMemory } from './bring-in-memory';
 import { chartYearVsWeek } from './chart-year-vs-week';
+import { liveDuringBringIn } from './live-during-bring-in';
 import { storeLive } from './store-live';
 
 const benchmarks: readonly Benchmark[] = [
   storeLive,
+  alertsVsStore,
   chartYearVsWeek,
   bringInFresh,
   bringInHalfHeld,
   bringInMemory,
+  liveDuringBringIn,
 ];
 
 /** Runs all benchmarks, or those named on the command line, and prints a line for each. */
