@@ -4,7 +4,7 @@ import { formatDuration } from '@shared/format/room-time';
 /** An instant as a person says it: "14:20", "yesterday 14:20". */
 type When = (at: string) => string;
 
-/** How long an alert has lasted and who was written to, in sentences: "Open for 26 min. Mail sent 14:06." */
+/** How long an alert has lasted and whether somebody was written to: "Going on for 26 min. Mail written 14:06." */
 export function lastingWords(alert: Alert, now: number, when: When): string {
   const { beganAt, endedAt, clearedAt, foundLater, toldAt } = alert;
   const lasted = formatDuration((endedAt === null ? now : Date.parse(endedAt)) - Date.parse(beganAt));
@@ -12,7 +12,7 @@ export function lastingWords(alert: Alert, now: number, when: When): string {
     clearedAt !== null
       ? `Lasted ${lasted}.`
       : endedAt === null
-        ? `Lasting for ${lasted}.`
+        ? `Going on for ${lasted}.`
         : `Lasted ${lasted}; over once it stays right.`;
   if (foundLater) return `${length} Found later, when readings were brought in; nobody was written to.`;
   return `${length} ${toldAt === null ? 'Nobody was written to.' : `Mail written ${when(toldAt)}.`}`;

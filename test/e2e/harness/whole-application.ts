@@ -25,8 +25,8 @@ export interface WholeApplication {
    * @param args - Its command line.
    */
   startSimulator(settings?: Readonly<Record<string, string>>, args?: string[]): Promise<void>;
-  /** Sends readings of one device now, by the names of its sensors. */
-  measure(values: Readonly<Record<string, number>>): Promise<void>;
+  /** Sends readings of one device, by the names of its sensors, as taken at an instant; now unless said otherwise. */
+  measure(values: Readonly<Record<string, number>>, at?: Date): Promise<void>;
   stop(): Promise<void>;
 }
 
@@ -72,7 +72,7 @@ export async function startWholeApplication(): Promise<WholeApplication> {
         );
         undo.push(() => simulator.stop());
       },
-      measure: (values) => sendReadings(address, room, values),
+      measure: (values, at = new Date()) => sendReadings(address, room, values, at),
       stop,
     };
   } catch (error) {
@@ -85,6 +85,7 @@ async function sendReadings(
   address: string,
   { devices }: SimulatedRoom,
   values: Readonly<Record<string, number>>,
+  at: Date,
 ): Promise<void> {
   const device = devices.find(({ sensors }) => sensors.some(({ key }) => key in values));
   const answer = await fetch(`${address}/api/v1/devices/readings`, {
@@ -93,7 +94,7 @@ async function sendReadings(
       Authorization: `Bearer ${device?.token ?? ''}`,
       'Content-Type': 'application/senml+json',
     },
-    body: JSON.stringify(Object.entries(values).map(([n, v]) => ({ n, v }))),
+    body: JSON.stringify(Object.entries(values).map(([n, v]) => ({ n, v, t: at.getTime() / 1000 }))),
   });
   const receipt = (await answer.json()) as { stored?: number };
   if (receipt.stored !== Object.keys(values).length) throw new Error(JSON.stringify(receipt));

@@ -16,6 +16,7 @@ import { isQuiet, quietWords, seenWords } from '../alert-words';
   templateUrl: './alert-standing.html',
   styleUrl: './alert-standing.scss',
   imports: [MatIcon, MatIconButton],
+  host: { '[hidden]': 'isEmpty()' },
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class AlertStanding {
@@ -40,6 +41,13 @@ export class AlertStanding {
       by: `${deed.personName ?? 'Somebody who has left'}, ${this.when(deed.at)}`,
       isOwn: this.isOwn(deed.personId),
     })),
+  );
+  protected readonly isEmpty = computed(
+    () =>
+      this.seen() === null &&
+      this.quiet() === null &&
+      this.alert().assignee === null &&
+      this.deeds().length === 0,
   );
   protected readonly mayAnswer = computed(() => this.session.may('helper'));
   protected readonly canTakeBack = computed(() => this.isOwn(this.alert().acknowledgedById));

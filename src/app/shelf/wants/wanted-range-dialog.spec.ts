@@ -88,7 +88,7 @@ describe('setting a wanted range', () => {
     expect(request.request.body).toEqual(rule);
     request.flush(trial);
     await fixture.whenStable();
-    expect(text()).toContain('This one: From what grows here.');
+    expect(text()).toContain('This one comes from what grows here');
     expect(text()).toContain('This rule would have opened 9 times in the last 14 days, 31 h in all.');
   });
 

@@ -7,7 +7,12 @@ import { MatFormFieldModule } from '@angular/material/form-field';
 import { MatInput } from '@angular/material/input';
 import { MatSelectModule } from '@angular/material/select';
 import type { Quantity } from '@shared/climate/quantity';
-import { clearWantedRange, setWantedRange, type WantedRange } from '@shared/contracts/rooms';
+import {
+  clearWantedRange,
+  setWantedRange,
+  type RangeSource,
+  type WantedRange,
+} from '@shared/contracts/rooms';
 import { quantityName, shownUnit } from '@shared/format/quantities';
 import { finalize, map, type Observable } from 'rxjs';
 import { ApiClient } from '../../core/api-client';
@@ -17,7 +22,6 @@ import { ProblemText } from '../../ui/states/problem-text';
 import { quantityTitle } from '../quantity-title';
 import { RangePreview } from './range-preview';
 import { rangeProblem, savedRange, typedRange } from './wanted-range-form';
-import { sourceWords } from './wants-words';
 
 /** Which range is changed. */
 export interface WantedRangeSubject {
@@ -27,6 +31,13 @@ export interface WantedRangeSubject {
   /** The quantities to choose from, at least one; only that of the range where there is one. */
   readonly quantities: readonly Quantity[];
 }
+
+/** Where a range comes from, and what becomes of that when another one is saved. */
+const origins: Readonly<Record<RangeSource, string>> = {
+  shelf: 'This one was set for this shelf.',
+  plantings: 'This one comes from what grows here; one that you save takes its place.',
+  room: 'This one holds everywhere in this room; one that you save takes its place on this shelf.',
+};
 
 const numberField = (): FormControl<number | null> => new FormControl<number | null>(null);
 
@@ -92,7 +103,7 @@ export class WantedRangeDialog {
     const typed = this.typed();
     return rangeProblem(typed) === null ? savedRange(this.quantity(), typed, this.unit) : null;
   });
-  protected readonly origin = this.subject.range === null ? null : sourceWords[this.subject.range.source];
+  protected readonly origin = this.subject.range === null ? '' : origins[this.subject.range.source];
   protected readonly isSaving = signal(false);
   protected readonly problem = signal<string | null>(null);
 
