@@ -14,7 +14,7 @@ import { shownPhoto } from '../core/shown-photo';
 import { EmptyState } from '../ui/states/empty-state';
 import { ErrorState } from '../ui/states/error-state';
 import { LoadingLines } from '../ui/states/loading-lines';
-import { ageWords, leftWords, lotTitle, shareWords, standingOf } from './seed-words';
+import { ageWords, basisWords, leftWords, lotTitle, shareWords, standingOf } from './seed-words';
 
 /** The room's seed: what to sow first, what is left of it, and how much of it may come up. */
 @Component({
@@ -97,7 +97,7 @@ export class SeedPage {
       left: leftWords(lot),
       badge: standingOf(lot),
       expected: lot.expectation === null ? null : shareWords(lot.expectation),
-      basis: lot.expectation?.source ?? '',
+      basis: lot.expectation === null ? '' : basisWords(lot.expectation),
       photo:
         lot.photo === null
           ? null

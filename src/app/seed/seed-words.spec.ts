@@ -2,6 +2,7 @@ import { seedLot } from './testing/seed-lot-builder';
 import {
   ageWords,
   amountWords,
+  basisWords,
   leftWords,
   lotTitle,
   neededWords,
@@ -60,6 +61,13 @@ describe('a seed lot in words', () => {
   it('has a share with its range, without one where there is none', () => {
     expect(shareWords({ percent: 80, lowPct: 66.1, highPct: 89.9 })).toBe('80\u00a0% (66 to 90\u00a0%)');
     expect(shareWords({ percent: 70, lowPct: 70, highPct: 70 })).toBe('70\u00a0%');
+  });
+
+  it('names its own test, and a standard for what it is', () => {
+    expect(basisWords({ basis: 'test', source: 'own test: 16 of 20' })).toBe('own test: 16 of 20');
+    expect(basisWords({ basis: 'standard', source: 'A federal rule of 1994' })).toBe(
+      'the least for seed on sale',
+    );
   });
 
   it('has tests that count zero and those that nobody looked at', () => {

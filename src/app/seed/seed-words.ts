@@ -1,4 +1,10 @@
-import type { GerminationTest, SeedLot, SeedUnit, SeedsNeeded } from '@shared/contracts/seed';
+import type {
+  GerminationTest,
+  SeedExpectation,
+  SeedLot,
+  SeedUnit,
+  SeedsNeeded,
+} from '@shared/contracts/seed';
 import { formatNumber, formatValue } from '@shared/format/numbers';
 
 /** A lot by crop and variety: "Leek Winter Piper". */
@@ -56,6 +62,11 @@ export function shareWords(share: {
   const range = `${formatNumber(share.lowPct, 0)} to ${formatValue(share.highPct, '%', 0)}`;
   const isExact = Math.round(share.lowPct) === Math.round(share.highPct);
   return formatValue(share.percent, '%', 0) + (isExact ? '' : ` (${range})`);
+}
+
+/** What an expectation rests on, in a few words; whose standard it is stands on the lot's own page. */
+export function basisWords({ basis, source }: Pick<SeedExpectation, 'basis' | 'source'>): string {
+  return basis === 'standard' ? 'the least for seed on sale' : source;
 }
 
 /** Where a test stands: "32 of 40 germinated by day 14", or that nobody has looked yet. */

@@ -2,12 +2,11 @@ import { ChangeDetectionStrategy, Component, computed, inject, input } from '@an
 import { MatButton } from '@angular/material/button';
 import { RouterLink } from '@angular/router';
 import type { Planting } from '@shared/contracts/plantings';
-import { plantingWords } from '../../core/planting-words';
 import { ReaderFormat } from '../../core/reader-format';
 import { Session } from '../../core/session';
 import { plantLook } from '../../ui/plants/crop-look';
 import { PlantDrawing } from '../../ui/plants/plant-drawing';
-import { countWords, harvestWords, placeWords, plantingTitle, stageNames } from '../words/planting-facts';
+import { countWords, harvestWords, placeWords, plantingTitle, standingWords } from '../words/planting-facts';
 import type { Grouping } from './planting-groups';
 
 /** One planting in a list; where seedlings are awaited, with the short way to count them. */
@@ -45,12 +44,12 @@ export class PlantingRow {
   protected readonly count = computed(() => countWords(this.planting()));
   protected readonly facts = computed(() => {
     const planting = this.planting();
-    const { stage, container } = planting;
+    const harvest = harvestWords(planting);
     return [
-      this.grouping() === 'shelf' ? stageNames[stage] : placeWords(planting),
-      stage === 'ended' || stage === 'out' ? null : plantingWords(planting, this.format.today()),
-      container === '' ? null : container,
-      harvestWords(planting),
+      standingWords(planting, this.format.today()),
+      this.grouping() === 'shelf' ? null : placeWords(planting),
+      planting.container === '' ? null : planting.container,
+      harvest === null ? null : `${harvest} harvested`,
     ]
       .filter((part) => part !== null)
       .join(' · ');

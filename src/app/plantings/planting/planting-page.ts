@@ -10,7 +10,6 @@ import { filter, switchMap } from 'rxjs';
 import { ApiClient } from '../../core/api-client';
 import { Notices } from '../../core/notices';
 import { PhotoSender } from '../../core/photo-sender';
-import { plantingWords } from '../../core/planting-words';
 import { ReaderFormat } from '../../core/reader-format';
 import { Session } from '../../core/session';
 import { shownPhoto } from '../../core/shown-photo';
@@ -26,7 +25,7 @@ import { deedLooks, deedsOf, type DeedKind } from '../note/deed';
 import { DeedDialog, type DeedSubject } from '../note/deed-dialog';
 import { ProgressCard } from '../progress/progress-card';
 import { StoryCard } from '../story/story-card';
-import { countWords, harvestWords, placeWords, plantingTitle, stageNames } from '../words/planting-facts';
+import { countWords, harvestWords, placeWords, plantingTitle, standingWords } from '../words/planting-facts';
 import { PlantingData } from './planting-data';
 
 /** One planting: what, where and how far it is, what to do with it, and its story. */
@@ -75,10 +74,7 @@ export class PlantingPage {
   protected readonly standing = computed(() => {
     const planting = this.data.planting();
     if (planting === null) return '';
-    const { stage, stageSince, endedOn } = planting;
-    const since =
-      endedOn === null ? plantingWords(planting, this.format.today()) : this.format.day(stageSince);
-    return [stageNames[stage], since, countWords(planting)].join(' · ');
+    return `${standingWords(planting, this.format.today())} · ${countWords(planting)}`;
   });
   protected readonly place = computed(() => {
     const planting = this.data.planting();

@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, computed, inject } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { MatIcon } from '@angular/material/icon';
 import { RouterLink } from '@angular/router';
@@ -9,6 +9,8 @@ import { PlantingData } from '../planting/planting-data';
 import { plantingTitle } from '../words/planting-facts';
 import { storyOf } from './story';
 import { StoryClimate } from './story-climate';
+
+const fewLines = 8;
 
 /** What happened to the planting, over the climate of where it stood. */
 @Component({
@@ -23,7 +25,7 @@ export class StoryCard {
   private readonly session = inject(Session);
   protected readonly data = inject(PlantingData);
 
-  protected readonly lines = computed(() => {
+  private readonly story = computed(() => {
     const [planting, roomId] = [this.data.planting(), this.session.roomId()];
     if (planting === null || roomId === null) return [];
     const about = plantingTitle(planting);
@@ -39,5 +41,10 @@ export class StoryCard {
       photo: line.photoId === null ? null : (photos.get(line.photoId) ?? null),
     }));
   });
+  protected readonly showsAll = signal(false);
+  protected readonly lines = computed(() =>
+    this.showsAll() ? this.story() : this.story().slice(0, fewLines),
+  );
+  protected readonly hiddenLines = computed(() => this.story().length - this.lines().length);
   protected readonly mayUndo = computed(() => this.session.may('helper'));
 }

@@ -1,5 +1,5 @@
 import { listedPlanting } from '../testing/planting-builder';
-import { countWords, harvestWords, placeWords, plantingTitle } from './planting-facts';
+import { countWords, harvestWords, placeWords, plantingTitle, standingWords } from './planting-facts';
 
 describe('a planting in words', () => {
   it('is its crop, with its variety where it has one', () => {
@@ -15,6 +15,16 @@ describe('a planting in words', () => {
     ['brought in, as plants', { stage: 'emerging' as const, sown: null, up: null, count: 3 }, '3 plants'],
   ])('is counted %s', (_, changes, words) => {
     expect(countWords(listedPlanting(changes))).toBe(words);
+  });
+
+  it.each([
+    [{ stage: 'sown' as const }, 'Sown 21 Nov'],
+    [{ stage: 'emerging' as const, stageSince: '2026-12-01' }, 'First up today'],
+    [{ stage: 'seedling' as const }, 'Seedlings · day 10'],
+    [{ stage: 'ended' as const, stageSince: '2026-11-30' }, 'Ended since 30 Nov'],
+    [{ stage: 'out' as const, stageSince: '2026-11-30' }, 'Planted out since 30 Nov'],
+  ])('%j says how far it is: %s', (changes, words) => {
+    expect(standingWords(listedPlanting(changes), '2026-12-01')).toBe(words);
   });
 
   it('stands on a shelf, outdoors or on none', () => {

@@ -1,4 +1,5 @@
 import type { Planting } from '@shared/contracts/plantings';
+import { plantingWords } from '../../core/planting-words';
 import { formatNumber, formatValue } from '@shared/format/numbers';
 import type { PlantingStage } from '@shared/growing/planting-stage';
 
@@ -14,6 +15,22 @@ export const stageNames: Readonly<Record<PlantingStage, string>> = {
   out: 'Planted out',
   ended: 'Ended',
 };
+
+/** Stage and age: "Sown 21 Nov", "Seedlings · day 24"; what has ended, since when. */
+export function standingWords(planting: Planting, today: string): string {
+  const words = plantingWords(planting, today);
+  switch (planting.stage) {
+    case 'sown':
+    case 'emerging':
+    case 'resting':
+      return words.charAt(0).toUpperCase() + words.slice(1);
+    case 'out':
+    case 'ended':
+      return words.replace(/^out/, stageNames[planting.stage]);
+    default:
+      return `${stageNames[planting.stage]} · ${words}`;
+  }
+}
 
 /** A planting by crop and variety: "Leek Winter Piper". */
 export function plantingTitle({ crop, variety }: Pick<Planting, 'crop' | 'variety'>): string {
