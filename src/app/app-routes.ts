@@ -82,6 +82,18 @@ export const appRoutes: Routes = [
     loadComponent: () => import('./seed/lot-form/lot-form-page').then((m) => m.LotFormPage),
   },
   {
+    path: 'crops',
+    title: 'Crop library',
+    ...signedIn,
+    loadComponent: () => import('./crops/crops-page').then((m) => m.CropsPage),
+  },
+  {
+    path: 'crops/:cropId',
+    title: 'Crop',
+    ...signedIn,
+    loadComponent: () => import('./crops/crop/crop-page').then((m) => m.CropPage),
+  },
+  {
     path: 'loggers',
     title: 'Logger files',
     ...signedIn,
