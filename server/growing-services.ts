@@ -3,6 +3,7 @@ import { adviceRoutes } from './advice/advice-routes';
 import { AdviceService } from './advice/advice-service';
 import { AdviceStore } from './advice/advice-store';
 import type { RoomChanges } from './audit/room-changes';
+import type { CareStore } from './care/care-store';
 import type { OpenTasks } from './care/open-tasks';
 import type { Clock } from './clock';
 import { cropsRoutes } from './crops/crops-routes';
@@ -18,6 +19,7 @@ import { GerminationService } from './germination/germination-service';
 import { ShelfWarmth } from './germination/shelf-warmth';
 import type { Route } from './http/route';
 import type { LiveFeed } from './live/live-feed';
+import type { PeopleService } from './people/people-service';
 import { PhotosService } from './photos/photos-service';
 import { photosRoutes } from './photos/photos-routes';
 import { PhotosStore } from './photos/photos-store';
@@ -39,6 +41,10 @@ import { SeedService } from './seed/seed-service';
 import { SeedStore } from './seed/seed-store';
 import { lotWords } from './seed/seed-views';
 import { SeriesStore } from './series/series-store';
+import { PlaceService } from './sowing/place-service';
+import { sowingRoutes } from './sowing/sowing-routes';
+import { SowingService } from './sowing/sowing-service';
+import { SowingStore } from './sowing/sowing-store';
 
 const DAY_MS = 86_400_000;
 
@@ -50,7 +56,9 @@ export interface GrowingFoundation {
   readonly plans: ShelfPlansService;
   readonly plansStore: ShelfPlansStore;
   readonly hooks: RoomHooks;
+  readonly care: CareStore;
   readonly openTasks: OpenTasks;
+  readonly people: PeopleService;
   readonly feed: LiveFeed;
   readonly log: Pick<Logger, 'warn'>;
   readonly now: Clock;
@@ -156,6 +164,21 @@ export function growingServices(foundation: GrowingFoundation): GrowingServices 
       foundation.log.warn({ err: error }, 'advice not worked out');
     }),
   );
+  const sowingStore = new SowingStore();
+  const place = new PlaceService(transactions, sowingStore, rooms, changes);
+  const sowing = new SowingService({
+    transactions,
+    sowing: sowingStore,
+    place,
+    rooms,
+    crops,
+    seed,
+    people: foundation.people,
+    tasks: foundation.openTasks,
+    taskOf: (...of) => foundation.care.task(...of),
+    changes,
+    now,
+  });
   const photos = new PhotosService({
     transactions,
     photos: photosStore,
@@ -175,6 +198,7 @@ export function growingServices(foundation: GrowingFoundation): GrowingServices 
       ...photosRoutes(photos),
       ...germinationRoutes(germination),
       ...adviceRoutes(advice),
+      ...sowingRoutes(place, sowing, now),
     ],
     plantings,
     germination,

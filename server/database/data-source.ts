@@ -47,6 +47,8 @@ import { GerminationCountEntity } from '../seed/germination-count-entity';
 import { GerminationTestEntity } from '../seed/germination-test-entity';
 import { SeedLotEntity } from '../seed/seed-lot-entity';
 import { SeedUseEntity } from '../seed/seed-use-entity';
+import { RoomFrostEntity } from '../sowing/room-frost-entity';
+import { SowingChoiceEntity } from '../sowing/sowing-choice-entity';
 import { migrations } from './migrations/all-migrations';
 
 /** Every table that TypeORM maps. */
@@ -85,6 +87,7 @@ const entities = [
   RoomCropEntity,
   RoomEntity,
   RoomEscalationEntity,
+  RoomFrostEntity,
   RoutineEntity,
   SeedLotEntity,
   SeedUseEntity,
@@ -94,6 +97,7 @@ const entities = [
   ShelfEntity,
   ShelfEventEntity,
   ComputedHourlySummaryEntity,
+  SowingChoiceEntity,
   TaskEntity,
   ToldAlertEntity,
   VarietyEntity,

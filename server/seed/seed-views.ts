@@ -52,7 +52,11 @@ export function lotView(lot: StoredLot, around: LotSurroundings): SeedLot {
  * @param lot - Which.
  * @returns Such as “packed 2025, lot 17/4, swap at the village hall”.
  */
-export function lotWords({ packedYear, lotNumber, source }: StoredLot): string {
+export function lotWords({
+  packedYear,
+  lotNumber,
+  source,
+}: Pick<StoredLot, 'packedYear' | 'lotNumber' | 'source'>): string {
   const words = [
     packedYear === null ? null : `packed ${packedYear}`,
     lotNumber === '' ? null : `lot ${lotNumber}`,

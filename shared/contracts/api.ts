@@ -18,6 +18,7 @@ import * as rooms from './rooms';
 import * as scenarios from './scenarios';
 import * as seed from './seed';
 import * as series from './series';
+import * as sowing from './sowing';
 
 /** Every route of `/api/v1`: the table that authorisation, OpenAPI and the tests walk. */
 export const endpoints: readonly Endpoint[] = [
@@ -124,6 +125,13 @@ export const endpoints: readonly Endpoint[] = [
   plantingEvents.undoPlantingEvent,
   germination.getGermination,
   advice.getShelfAdvice,
+  sowing.getFrostDates,
+  sowing.setFrostDates,
+  sowing.getDayLength,
+  sowing.getSowingCalendar,
+  sowing.chooseSowingCrop,
+  sowing.unchooseSowingCrop,
+  sowing.addSowingTask,
   photos.addPlantingPhoto,
   photos.addSeedLotPhoto,
   photos.getPhotoImage,

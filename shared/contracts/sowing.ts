@@ -142,7 +142,7 @@ export const sowingCalendar = z.object({
   latitudeDeg: z.number().nullable(),
   /** Chosen crops by the day on which their window opens; those without a window last. */
   plans: z.array(sowingPlan),
-  /** Crops to sow this week: a sowing day in the seven days from today, or a window that closes within them, nothing sown yet. */
+  /** Sowings due in the seven days from today or before, not made yet, while their window is open. */
   thisWeek: z.array(z.object({ cropId, cropName: z.string(), on: day, closes: day })),
 });
 /** The sowing calendar. */

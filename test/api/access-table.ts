@@ -219,6 +219,13 @@ export const accessTable: Readonly<Record<string, AccessRow>> = {
   stepPlanting: { outcomes: grower, body: { kind: 'pottedOn', container: '1 L' } },
   undoPlantingEvent: { outcomes: helper },
 
+  getFrostDates: { outcomes: viewer },
+  setFrostDates: { outcomes: grower, body: { lastSpring: null, firstAutumn: null } },
+  getDayLength: { outcomes: viewer },
+  getSowingCalendar: { outcomes: viewer },
+  chooseSowingCrop: { outcomes: grower },
+  unchooseSowingCrop: { outcomes: grower },
+  addSowingTask: { outcomes: grower, body: { on: '2026-05-01' } },
   getShelfAdvice: { outcomes: viewer },
   getGermination: { outcomes: viewer },
   addPlantingPhoto: { outcomes: helper },

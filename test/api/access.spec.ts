@@ -13,6 +13,7 @@ import { aPhoto } from '../builders/photos';
 import { aPlanting, aPlantingEvent } from '../builders/plantings';
 import { aShelf, aWantedRange } from '../builders/rooms';
 import { aGerminationTest, aSeedLot } from '../builders/seed';
+import { aSowingChoice } from '../builders/sowing';
 import { accessTable, callers, type CallerName, type Outcome } from './access-table';
 import { Caller } from './caller';
 import { aStaffedRoom, type StaffedRoom } from './room-callers';
@@ -106,6 +107,8 @@ describe('access', () => {
       await aWantedRange(tx, { shelfId: shelf.id });
       const sensor = await aSensor(tx, { roomId });
       const lot = await aSeedLot(tx, { roomId });
+      const crop = await aRoomCrop(tx, { roomId });
+      await aSowingChoice(tx, { roomId, cropId: crop.id });
       const planting = await aPlanting(tx, { shelfId: shelf.id });
       const alert = await anAlert(tx, { shelfId: shelf.id });
       return {
@@ -124,7 +127,7 @@ describe('access', () => {
         eventId: (await aPlantingEvent(tx, { plantingId: planting.id })).id,
         lotId: lot.id,
         testId: (await aGerminationTest(tx, { lotId: lot.id })).id,
-        cropId: (await aRoomCrop(tx, { roomId })).id,
+        cropId: crop.id,
         varietyId: (await aVariety(tx, { roomId })).id,
         profileId: (await aFileProfile(tx, { roomId })).id,
       };

@@ -18,6 +18,7 @@ import { KeepPlantingHistory1764552600000 } from './1764552600000-keep-planting-
 import { CreatePhoto1764552700000 } from './1764552700000-create-photo';
 import { SetUrgencyOfRanges1764553300000 } from './1764553300000-set-urgency-of-ranges';
 import { CreateShelfAdvice1764553400000 } from './1764553400000-create-shelf-advice';
+import { CreateSowingCalendar1764553500000 } from './1764553500000-create-sowing-calendar';
 
 /** Every migration in order; a merged one is never edited. */
 export const migrations = [
@@ -41,4 +42,5 @@ export const migrations = [
   CreatePhoto1764552700000,
   SetUrgencyOfRanges1764553300000,
   CreateShelfAdvice1764553400000,
+  CreateSowingCalendar1764553500000,
 ];
