@@ -177,6 +177,7 @@ export function composeServices(foundation: Foundation): Services {
     answers: new AlertAnswerStore(),
     alerts,
     people,
+    teller,
     audit,
     now,
   });

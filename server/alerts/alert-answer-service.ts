@@ -9,12 +9,18 @@ import type { PeopleService } from '../people/people-service';
 import type { AlertAnswerStore, AnsweredAlert, Doing } from './alert-answer-store';
 import type { AlertService } from './alert-service';
 
+/** Writes to who is to look after an alert, in the transaction that says so. */
+export interface AssigneeTeller {
+  tellAssigned(tx: Tx, alertId: string, personId: string, now: number): Promise<void>;
+}
+
 /** What {@link AlertAnswerService} works with. */
 export interface AlertAnswerParts {
   readonly transactions: Transactions;
   readonly answers: AlertAnswerStore;
   readonly alerts: AlertService;
   readonly people: Pick<PeopleService, 'membershipOf'>;
+  readonly teller: AssigneeTeller;
   readonly audit: AuditStore;
   readonly now: Clock;
 }
@@ -105,10 +111,10 @@ export class AlertAnswerService {
     });
   }
 
-  /** Says who looks after an alert; 422 for who is no member, or may only look. */
+  /** Says who looks after an alert, and writes to them unless it is oneself; 422 for who is no member, or may only look. */
   assign(answer: AlertAnswer, personId: string | null): Promise<Alert> {
     return this.answer(answer, async (tx, alert, doing) => {
-      const { answers, people } = this.parts;
+      const { answers, people, teller } = this.parts;
       if (personId !== null) {
         const member = await people.membershipOf(personId, answer.room.id);
         if (member === null) throw invalidField('body.personId', 'is no member of this room');
@@ -117,6 +123,9 @@ export class AlertAnswerService {
       }
       if ((await answers.assigneeOf(tx, alert.id)) === personId) return null;
       await answers.assign(tx, alert.id, doing, personId);
+      if (personId !== null && personId !== doing.by) {
+        await teller.tellAssigned(tx, alert.id, personId, doing.at.getTime());
+      }
       return { action: 'alert.assign', detail: { personId } };
     });
   }

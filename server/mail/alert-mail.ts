@@ -118,6 +118,8 @@ export function alertOpening(kind: MailKind, count: number): string | null {
       return `${it} became urgent: go now.`;
     case 'escalated':
       return `Nobody has acknowledged ${they} yet, so the room’s keepers are asked to look.`;
+    case 'assigned':
+      return `You are asked to look after ${count === 1 ? 'this alert' : 'these alerts'}.`;
     case 'cleared':
       return count === 1 ? 'It is over.' : 'These are over.';
     case 'opened':

@@ -137,6 +137,25 @@ export class MailAlertTeller implements AlertTeller {
     });
   }
 
+  /**
+   * Tells a member that an alert is theirs to look after. Somebody asks this person, so a quiet does not hold it back;
+   * their own choice and quiet hours do.
+   */
+  async tellAssigned(tx: Tx, alertId: string, personId: string, now: number): Promise<void> {
+    const { alerts, tellings } = this.parts;
+    const [alert] = await alerts.byIds(tx, [alertId]);
+    if (alert === undefined) return;
+    await tellings.holdRoom(tx, alert.roomId);
+    const room = await tellings.room(tx, alert.roomId);
+    const recipient = await tellings.recipient(tx, alert.roomId, personId);
+    if (room === null || recipient === null) return;
+    const before = toldTo(await tellings.told(tx, [alertId]), alert, recipient);
+    if (before.some(({ reason }) => reason === 'assigned')) return;
+    const dueAt = pastQuietHours(recipient.mails, alert.urgency, now, room.timeZone);
+    const inReplyTo = before[0]?.messageId ?? null;
+    await this.write(tx, room, { recipient, kind: 'assigned', alerts: [alert], dueAt, inReplyTo }, now);
+  }
+
   private write(
     tx: Tx,
     room: RoomOfMail,

@@ -60,7 +60,10 @@ export class MailComposer {
       found.map(({ id }) => id),
       now,
     );
-    const wanted = found.filter(({ id, urgency }) => recipient.mails[urgency] !== 'never' && !quiet.has(id));
+    const wanted = found.filter(
+      ({ id, urgency }) =>
+        recipient.mails[urgency] !== 'never' && (mail.kind === 'assigned' || !quiet.has(id)),
+    );
     const told = (await this.worthTelling(tx, mail, wanted)).sort(byUrgency);
     if (told.length === 0) return null;
     await tellings.keepOnly(
@@ -119,6 +122,11 @@ export class MailComposer {
         told.filter(({ personId, isSent }) => isSent && personId === mail.personId).map((one) => one.alertId),
       );
       return alerts.filter(({ id, clearedAt }) => clearedAt !== null && heardOf.has(id));
+    }
+    if (mail.kind === 'assigned') {
+      return alerts.filter(
+        ({ clearedAt, assignee }) => clearedAt === null && assignee?.personId === mail.personId,
+      );
     }
     const isStale = mail.isHeldBack || mail.kind === 'escalated';
     return alerts.filter(

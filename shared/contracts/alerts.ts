@@ -141,7 +141,7 @@ export const alertTimeLine = z.object({
   mails: z.array(
     z.object({
       personName: z.string(),
-      reason: z.enum(['opened', 'urgent', 'escalated', 'cleared']),
+      reason: z.enum(['opened', 'urgent', 'escalated', 'assigned', 'cleared']),
       writtenAt: instant,
       sentAt: instant.nullable(),
       /** When the mail server refused it for good. */

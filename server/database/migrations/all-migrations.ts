@@ -19,6 +19,7 @@ import { CreatePhoto1764552700000 } from './1764552700000-create-photo';
 import { SetUrgencyOfRanges1764553300000 } from './1764553300000-set-urgency-of-ranges';
 import { CreateShelfAdvice1764553400000 } from './1764553400000-create-shelf-advice';
 import { CreateSowingCalendar1764553500000 } from './1764553500000-create-sowing-calendar';
+import { TellAssignees1764553400000 } from './1764553400000-tell-assignees';
 
 /** Every migration in order; a merged one is never edited. */
 export const migrations = [
@@ -43,4 +44,5 @@ export const migrations = [
   SetUrgencyOfRanges1764553300000,
   CreateShelfAdvice1764553400000,
   CreateSowingCalendar1764553500000,
+  TellAssignees1764553400000,
 ];

@@ -8,6 +8,7 @@ const reasons: Readonly<Record<Mail['reason'], string>> = {
   opened: 'Mail that it opened',
   urgent: 'Mail that it became urgent',
   escalated: 'Mail that nobody has seen it',
+  assigned: 'Mail that it is theirs to look after',
   cleared: 'Mail that it is over',
 };
 
