@@ -14,6 +14,7 @@ import type { Transactions, Tx } from '../database/transactions';
 import type { DeviceAccess } from '../http/route';
 import type { ReadingIntakeService } from '../readings/reading-intake-service';
 import type { DeviceIntakeStore } from './device-intake-store';
+import { DeviceQueue } from './device-queue';
 
 /** Told after the commit, for whoever looks on. */
 export interface IntakeListener {
@@ -40,6 +41,8 @@ interface Accepted {
 
 /** Takes batches of devices: checks each reading, stores the good ones, and answers after the commit. */
 export class DeviceIntakeService {
+  private readonly queue = new DeviceQueue();
+
   constructor(
     private readonly transactions: Transactions,
     private readonly store: DeviceIntakeStore,
@@ -101,7 +104,15 @@ export class DeviceIntakeService {
     return newest.map(({ sensor, latestAt }) => ({ sensor, latestAt: latestAt?.toISOString() ?? null }));
   }
 
-  private async take(
+  private take(
+    device: DeviceAccess,
+    readings: readonly SentReading[],
+    batteryPct: number | null,
+  ): Promise<ReadingsReceipt> {
+    return this.queue.run(device.id, () => this.takeNow(device, readings, batteryPct));
+  }
+
+  private async takeNow(
     device: DeviceAccess,
     readings: readonly SentReading[],
     batteryPct: number | null,

@@ -19,6 +19,8 @@ const titles: Readonly<Record<number, string>> = {
 
 /** What pg and the operating system say when the database can't be reached. */
 const databaseAway = new Set(['ECONNREFUSED', 'ECONNRESET', 'ETIMEDOUT', 'EPIPE', '57P01', '57P02', '57P03']);
+/** PostgreSQL's lock_not_available: somebody held a lock for longer than this transaction was to wait. */
+const lockNotAvailable = '55P03';
 /** What TypeORM throws once it has put away a connection that broke in the middle of a transaction. */
 const connectionPutAway = new Set([
   'QueryRunnerAlreadyReleasedError',
@@ -49,6 +51,15 @@ function asProblem(error: unknown): RequestProblem {
       503,
       'DATABASE_AWAY',
       'The database can’t be reached just now. Nothing was changed; try again in a moment.',
+      [],
+      { 'Retry-After': '5' },
+    );
+  }
+  if ((error as { code?: unknown } | null)?.code === lockNotAvailable) {
+    return new RequestProblem(
+      503,
+      'BUSY',
+      'Something else is changing this just now. Nothing was changed; try again in a moment.',
       [],
       { 'Retry-After': '5' },
     );

@@ -51,6 +51,22 @@ describe('readings of a device', () => {
     ]);
   }
 
+  it('are to be sent again, and keep nobody waiting, while something holds their sensor for long', async () => {
+    const runner = application.tx.connection.createQueryRunner();
+    await runner.startTransaction();
+    await runner.query('SELECT FROM sensor WHERE id = $1 FOR UPDATE', [sensorId]);
+    const pack = [{ n: 'air', t: at(600), v: 20.5 }];
+    const reply = await caller
+      .call('post', '/devices/readings')
+      .set('Content-Type', 'application/senml+json')
+      .send(JSON.stringify(pack));
+    await runner.rollbackTransaction();
+    await runner.release();
+    expect(reply).toMatchObject({ status: 503, body: { code: 'BUSY' } });
+    expect(await held()).toEqual([]);
+    expect(await post(pack)).toEqual({ stored: 1, alreadyHeld: 0, refused: [] });
+  });
+
   it('are stored once, however often they come, zero among them', async () => {
     const pack = [
       { n: 'air', t: at(600), v: 20.5 },
