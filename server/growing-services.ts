@@ -30,6 +30,9 @@ import { PlantingStartService } from './plantings/planting-start-service';
 import { plantingsRoutes } from './plantings/plantings-routes';
 import { PlantingsService } from './plantings/plantings-service';
 import { PlantingsStore } from './plantings/plantings-store';
+import { progressRoutes } from './progress/progress-routes';
+import { ProgressService } from './progress/progress-service';
+import { ShelfLight } from './progress/shelf-light';
 import type { RoomHooks } from './rooms/room-hooks';
 import type { RoomsService } from './rooms/rooms-service';
 import type { ShelfPlansService } from './rooms/shelf-plans-service';
@@ -128,7 +131,18 @@ export function growingServices(foundation: GrowingFoundation): GrowingServices 
   const start = new PlantingStartService({ ...parts, crops, varieties, seed });
   const happening = new PlantingEventsService(parts);
 
-  const warmth = new ShelfWarmth(new SeriesStore());
+  const seriesStore = new SeriesStore();
+  const warmth = new ShelfWarmth(seriesStore);
+  const progress = new ProgressService({
+    transactions,
+    plantings,
+    crops,
+    rooms,
+    plans,
+    warmth,
+    light: new ShelfLight(seriesStore),
+    now,
+  });
   const germination = new GerminationService({
     transactions,
     plantings,
@@ -197,6 +211,7 @@ export function growingServices(foundation: GrowingFoundation): GrowingServices 
       ...plantingsRoutes(plantings, start, happening),
       ...photosRoutes(photos),
       ...germinationRoutes(germination),
+      ...progressRoutes(progress),
       ...adviceRoutes(advice),
       ...sowingRoutes(place, sowing, now),
     ],

@@ -13,6 +13,7 @@ import * as mail from './mail';
 import * as people from './people';
 import * as photos from './photos';
 import * as plantingEvents from './planting-events';
+import * as plantingProgress from './planting-progress';
 import * as plantings from './plantings';
 import * as rooms from './rooms';
 import * as scenarios from './scenarios';
@@ -124,6 +125,7 @@ export const endpoints: readonly Endpoint[] = [
   plantingEvents.stepPlanting,
   plantingEvents.undoPlantingEvent,
   germination.getGermination,
+  plantingProgress.getPlantingProgress,
   advice.getShelfAdvice,
   sowing.getFrostDates,
   sowing.setFrostDates,

@@ -227,6 +227,7 @@ export const accessTable: Readonly<Record<string, AccessRow>> = {
   unchooseSowingCrop: { outcomes: grower },
   addSowingTask: { outcomes: grower, body: { on: '2026-05-01' } },
   getShelfAdvice: { outcomes: viewer },
+  getPlantingProgress: { outcomes: viewer },
   getGermination: { outcomes: viewer },
   addPlantingPhoto: { outcomes: helper },
   addSeedLotPhoto: { outcomes: grower },
