@@ -1,5 +1,6 @@
 import { computed, inject, Injectable, linkedSignal, signal, untracked } from '@angular/core';
 import { rxResource, takeUntilDestroyed } from '@angular/core/rxjs-interop';
+import type { ShelfAdviceView } from '@shared/contracts/advice';
 import { listAlerts } from '@shared/contracts/alerts';
 import { getBoard, type Board, type Measure, type ShelfNow } from '@shared/contracts/board';
 import type { Quantity } from '@shared/climate/quantity';
@@ -35,6 +36,7 @@ export class ShelfData {
     computation: () => untracked(this.clock.now),
   });
   private readonly newest = signal<ShelfNow | null>(null);
+  private readonly newestAdvice = signal<ShelfAdviceView | null>(null);
 
   /** The span's instants. */
   readonly span = computed(() => boundsOf(this.choice(), this.asOf(), this.session.timeZone()));
@@ -91,6 +93,17 @@ export class ShelfData {
     const newest = this.newest();
     return newest?.shelfId === this.shelfId() ? newest : null;
   });
+  /** What the shelf should be for what grows on it; null until worked out. */
+  readonly advice = computed(() => {
+    const advice = this.newestAdvice();
+    return advice?.shelfId === this.shelfId() ? advice : null;
+  });
+  /** Care that is due on the shelf and not done. */
+  readonly openTasks = computed(() =>
+    (this.board.hasValue() ? this.board.value().tasks : []).filter(
+      ({ shelfId, doneAt }) => shelfId === this.shelfId() && doneAt === null,
+    ),
+  );
   /** The day of the room's calendar, `YYYY-MM-DD`; null until known. */
   readonly today = computed(() => (this.board.hasValue() ? this.board.value().today : null));
 
@@ -104,6 +117,20 @@ export class ShelfData {
       )
       .subscribe((now) => this.newest.set(now));
     live
+      .on('shelf:advised')
+      .pipe(
+        filter(({ shelfId }) => shelfId === this.shelfId()),
+        takeUntilDestroyed(),
+      )
+      .subscribe((advice) => this.newestAdvice.set(advice));
+    live
+      .on('task:changed')
+      .pipe(
+        filter(({ shelfId }) => shelfId === this.shelfId()),
+        takeUntilDestroyed(),
+      )
+      .subscribe(() => this.refreshBoard());
+    live
       .on('alert:changed')
       .pipe(
         filter(({ shelfId }) => shelfId === this.shelfId()),
@@ -116,7 +143,10 @@ export class ShelfData {
     live
       .on('room:changed')
       .pipe(takeUntilDestroyed())
-      .subscribe(() => this.detailResource.reload());
+      .subscribe(() => {
+        this.detailResource.reload();
+        this.refreshBoard();
+      });
   }
 
   /** The newest value of a quantity; null without any. */
@@ -129,10 +159,15 @@ export class ShelfData {
     return computed(() => `${this.params()?.shelfId} ${JSON.stringify(this.choice())}`);
   }
 
+  /** Fetches newest values, advice and care again. */
+  refreshBoard(): void {
+    this.board.reload();
+  }
+
   /** Fetches what may have changed unseen, up to this moment. */
   refresh(): void {
     this.detailResource.reload();
-    this.board.reload();
+    this.refreshBoard();
     this.alertResource.reload();
     if (this.isLive()) this.asOf.set(this.clock.now());
     else this.reportResource.reload();
@@ -144,7 +179,9 @@ export class ShelfData {
     const isClockWrong = Math.abs(this.clock.now() - before) > clockToleranceMs;
     if (isClockWrong && this.isLive()) this.asOf.set(this.clock.now());
     const shelves = racks.flatMap(({ shelves: onRack }) => onRack);
-    this.newest.set(shelves.find(({ id }) => id === this.shelfId())?.now ?? null);
+    const shelf = shelves.find(({ id }) => id === this.shelfId());
+    this.newest.set(shelf?.now ?? null);
+    this.newestAdvice.set(shelf?.advice ?? null);
   }
 
   private withQuery() {

@@ -15,6 +15,7 @@ import { plantingWords } from '../core/planting-words';
 import { EmptyState } from '../ui/states/empty-state';
 import { ErrorState } from '../ui/states/error-state';
 import { LoadingLines } from '../ui/states/loading-lines';
+import { ShelfAdviceCard } from './advice/shelf-advice-card';
 import { ShelfChart } from './charts/shelf-chart';
 import { ShelfNotes } from './notes/shelf-notes';
 import { chartedQuantities } from './quantity-title';
@@ -50,6 +51,7 @@ const usualBaseC = 10;
     NoteLine,
     PlantLabel,
     RouterLink,
+    ShelfAdviceCard,
     ShelfChart,
     ShelfLight,
     ShelfNotes,

@@ -1,5 +1,6 @@
 import { alert, board, boardShelf, inventedId, measure, task } from '../../core/testing/board-builder';
-import { alertChanged, shelfMeasured, taskChanged } from './board-changes';
+import { shelfAdvice } from '../../core/testing/advice-builder';
+import { alertChanged, shelfAdvised, shelfMeasured, taskChanged } from './board-changes';
 
 const otherRack = {
   id: inventedId(301),
@@ -14,6 +15,14 @@ describe('a board', () => {
     const now = { ...boardShelf().now, measures: [measure('airTemperature', 24)] };
     const after = shelfMeasured(now)(before);
     expect(after.racks[0]?.shelves[0]?.now.measures).toEqual([measure('airTemperature', 24)]);
+    expect(after.racks[1]).toBe(otherRack);
+  });
+
+  it('takes other advice on one shelf', () => {
+    const advice = shelfAdvice({ notes: ['Leave it uncovered.'] });
+    const before = board({ racks: [...board().racks, otherRack] });
+    const after = shelfAdvised(advice)(before);
+    expect(after.racks[0]?.shelves[0]).toEqual({ ...boardShelf(), advice });
     expect(after.racks[1]).toBe(otherRack);
   });
 

@@ -1,5 +1,6 @@
+import type { ShelfAdviceView } from '@shared/contracts/advice';
 import type { Alert } from '@shared/contracts/alerts';
-import type { Board, BoardRack, ShelfNow } from '@shared/contracts/board';
+import type { Board, BoardRack, BoardShelf, ShelfNow } from '@shared/contracts/board';
 import type { Task } from '@shared/contracts/care';
 
 /** What something that was told makes of the board. What it doesn't touch stays the same object. */
@@ -7,14 +8,12 @@ export type BoardChange = (board: Board) => Board;
 
 /** New readings on a shelf. */
 export function shelfMeasured(now: ShelfNow): BoardChange {
-  const within = (rack: BoardRack): BoardRack =>
-    rack.shelves.some(({ id }) => id === now.shelfId)
-      ? {
-          ...rack,
-          shelves: rack.shelves.map((shelf) => (shelf.id === now.shelfId ? { ...shelf, now } : shelf)),
-        }
-      : rack;
-  return (board) => ({ ...board, racks: board.racks.map(within) });
+  return changedShelf(now.shelfId, (shelf) => ({ ...shelf, now }));
+}
+
+/** Other advice on a shelf. */
+export function shelfAdvised(advice: ShelfAdviceView): BoardChange {
+  return changedShelf(advice.shelfId, (shelf) => ({ ...shelf, advice }));
 }
 
 /** An alert that opened, got worse, was acknowledged or cleared. A new one comes first. */
@@ -40,4 +39,12 @@ export function taskChanged(task: Task): BoardChange {
       : [...board.tasks, task];
     return { ...board, tasks };
   };
+}
+
+function changedShelf(shelfId: string, change: (shelf: BoardShelf) => BoardShelf): BoardChange {
+  const within = (rack: BoardRack): BoardRack =>
+    rack.shelves.some(({ id }) => id === shelfId)
+      ? { ...rack, shelves: rack.shelves.map((shelf) => (shelf.id === shelfId ? change(shelf) : shelf)) }
+      : rack;
+  return (board) => ({ ...board, racks: board.racks.map(within) });
 }

@@ -4,6 +4,7 @@ import { RoomClock } from '../../core/room-clock';
 import { Session } from '../../core/session';
 import { account, membership } from '../../core/testing/account-builder';
 import { alert, board, boardShelf, inventedId, measure, task } from '../../core/testing/board-builder';
+import { shelfAdvice } from '../../core/testing/advice-builder';
 import { FakeSocket } from '../../core/testing/fake-socket';
 import { providePlayedServer, signedInAs } from '../../core/testing/signed-in';
 import { RoomBoard } from './room-board';
@@ -43,6 +44,14 @@ describe('the board of the room', () => {
     expect(air()).toBe(29.5);
     expect(room.alertsByShelf().get(inventedId(1))).toEqual([alert()]);
     expect(room.board()?.tasks[0]?.doneAt).toBe('2026-12-01T14:21:00Z');
+  });
+
+  it('knows what shelves need, as it is told', () => {
+    server.expectOne(path).flush(board());
+    expect(room.needsByShelf().size).toBe(0);
+    const heatMat = { state: 'off' as const, reason: 'All are up.', change: 'switchOff' as const };
+    socket.tell('shelf:advised', shelfAdvice({ heatMat }));
+    expect(room.needsByShelf().get(inventedId(1))).toMatchObject([{ title: 'A1 heat mat off' }]);
   });
 
   it('keeps what was told while an older answer was on its way', () => {

@@ -9,7 +9,7 @@ import { ApiClient } from '../../core/api-client';
 import { LiveConnection } from '../../core/live-connection';
 import { RoomClock } from '../../core/room-clock';
 import { Session } from '../../core/session';
-import { alertChanged, shelfMeasured, taskChanged, type BoardChange } from './board-changes';
+import { alertChanged, shelfAdvised, shelfMeasured, taskChanged, type BoardChange } from './board-changes';
 import { shelfNeeds, type ShelfNeed } from './shelf-needs';
 
 /** The room as it is now, kept so by what the server tells. One for each time the Room screen is open. */
@@ -110,6 +110,7 @@ export class RoomBoard {
   private follow(): void {
     merge(
       this.live.on('shelf:measured').pipe(tap((now) => this.apply(shelfMeasured(now)))),
+      this.live.on('shelf:advised').pipe(tap((advice) => this.apply(shelfAdvised(advice)))),
       this.live.on('task:changed').pipe(tap((task) => this.apply(taskChanged(task)))),
       this.live.on('alert:changed').pipe(tap((alert) => this.takeAlert(alert))),
     )

@@ -65,7 +65,7 @@ describe('what needs a look', () => {
       tone: 'lamp',
       icon: 'lightbulb',
     };
-    fixture.componentRef.setInput('needs', [{ id: 'a', shelfId: inventedId(3), ...need }]);
+    fixture.componentRef.setInput('needs', [{ id: 'a', link: ['/shelf', inventedId(3)], ...need }]);
     await fixture.whenStable();
     expect(texts('li a')).toEqual(['A3 needs light now']);
     expect(page().querySelector('li a')?.getAttribute('href')).toBe(`/shelf/${inventedId(3)}`);

@@ -1,7 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input } from '@angular/core';
 import { RouterLink } from '@angular/router';
 import type { Alert } from '@shared/contracts/alerts';
-import type { BoardShelf } from '@shared/contracts/board';
+import type { BoardShelf, PlantingSummary } from '@shared/contracts/board';
 import { ReaderFormat } from '../../core/reader-format';
 import { RoomClock } from '../../core/room-clock';
 import { Session } from '../../core/session';
@@ -18,6 +18,7 @@ import { dayParts, minuteOfDay, type DaySpan } from './day-minutes';
 import { plantingSize, plantingWords } from '../../core/planting-words';
 import { shelfSituation } from './shelf-situation';
 import { shelfStrips } from './shelf-strips';
+import { sowingNote } from './sowing-note';
 
 /** The room's day, as a bay needs it. */
 export interface BayDay extends DaySpan {
@@ -64,10 +65,7 @@ export class ShelfBay {
   });
 
   protected readonly labels = computed(() =>
-    this.shelf().plantings.map((planting) => ({
-      ...planting,
-      note: plantingWords(planting, this.day().today),
-    })),
+    this.shelf().plantings.map((planting) => ({ ...planting, note: this.labelNote(planting) })),
   );
 
   protected readonly plants = computed(() =>
@@ -85,4 +83,12 @@ export class ShelfBay {
     }),
     ...this.needs().map(({ id, tone, icon, note }) => ({ id, tone, icon, text: note })),
   ]);
+
+  /** Age or stage; for seed that comes up, how far it is or when to look. */
+  private labelNote(planting: PlantingSummary): string {
+    const sowing = this.shelf().sowings.find(({ plantingId }) => plantingId === planting.id);
+    const coming = sowing === undefined ? null : sowingNote(sowing, this.session.timeZone());
+    const words = plantingWords(planting, this.day().today);
+    return coming === null ? words : `${words} · ${coming}`;
+  }
 }
