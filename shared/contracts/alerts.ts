@@ -79,7 +79,7 @@ const alertFilter = z.object({
   /** A month of the room's calendar, `YYYY-MM`, in which they opened. */
   month: z
     .string()
-    .regex(/^\d{4}-(0[1-9]|1[0-2])$/, { error: 'must be a month such as 2026-04' })
+    .regex(/^(19|20)\d\d-(0[1-9]|1[0-2])$/, { error: 'must be a month such as 2026-04' })
     .optional(),
 });
 

@@ -76,6 +76,7 @@ describe('alerts of a room', () => {
 
   it.each([
     ['a month that is none', 'month=2026-13', 'query.month'],
+    ['a month that no calendar has', 'month=0000-01', 'query.month'],
     ['a kind that is none', 'kind=tooPurple', 'query.kind'],
     ['a shelf without a proper id', 'shelfId=A3', 'query.shelfId'],
   ])('with %s are refused, saying where', async (_, query, path) => {
