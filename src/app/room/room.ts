@@ -1,7 +1,5 @@
-import { ChangeDetectionStrategy, Component, computed, inject, signal, type Type } from '@angular/core';
-import { MatDialog } from '@angular/material/dialog';
+import { ChangeDetectionStrategy, Component, computed, inject, Injector, signal } from '@angular/core';
 import type { Alert } from '@shared/contracts/alerts';
-import type { ShelfEvent } from '@shared/contracts/care';
 import { catchError, finalize, from, switchMap, throwError, type Observable } from 'rxjs';
 import { ApiFailure } from '../core/api-failure';
 import { failureText } from '../core/failure-text';
@@ -13,7 +11,6 @@ import { EmptyState } from '../ui/states/empty-state';
 import { ErrorState } from '../ui/states/error-state';
 import { RoomBoard } from './board/room-board';
 import { NeedsALook } from './needs-a-look/needs-a-look';
-import type { ObservationDialog, ObservationPlace } from './observation-dialog/observation-dialog';
 import { RoomHeading } from './room-heading/room-heading';
 import { RoomSkeleton } from './room-skeleton/room-skeleton';
 import { ScenarioPanel } from './scenario-panel/scenario-panel';
@@ -44,7 +41,7 @@ export class Room {
   private readonly session = inject(Session);
   private readonly notices = inject(Notices);
   private readonly format = inject(ReaderFormat);
-  private readonly dialog = inject(MatDialog);
+  private readonly injector = inject(Injector);
 
   protected readonly board = this.room.board;
   protected readonly alertsByShelf = this.room.alertsByShelf;
@@ -105,11 +102,12 @@ export class Room {
   protected noteObservation(): void {
     const roomId = this.session.roomId();
     if (roomId === null) return;
-    // Forms are loaded with the first note: the racks shouldn't wait for them.
-    from(import('./observation-dialog/observation-dialog'))
+    from(import('./observation-dialog/open-observation'))
       .pipe(
         catchError((cause: unknown) => throwError(() => new ApiFailure('offline', { cause }))),
-        switchMap((part) => this.openDialog(part.ObservationDialog, roomId)),
+        switchMap(({ openObservation }) =>
+          openObservation(this.injector, { roomId, shelves: this.shelves() }),
+        ),
       )
       .subscribe({
         next: (event) => {
@@ -117,16 +115,6 @@ export class Room {
         },
         error: (error: unknown) => this.notices.sayFailure(error),
       });
-  }
-
-  private openDialog(dialog: Type<ObservationDialog>, roomId: string): Observable<ShelfEvent | undefined> {
-    return this.dialog
-      .open<ObservationDialog, ObservationPlace, ShelfEvent>(dialog, {
-        data: { roomId, shelves: this.shelves() },
-        width: '480px',
-        maxWidth: 'calc(100vw - 24px)',
-      })
-      .afterClosed();
   }
 
   private carryOut<T>(id: string, deed: Observable<T>): Observable<T> {
