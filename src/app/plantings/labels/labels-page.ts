@@ -17,6 +17,7 @@ import { formatDayAndYear } from '@shared/format/room-time';
 import { ApiClient } from '../../core/api-client';
 import { failureText } from '../../core/failure-text';
 import { Session } from '../../core/session';
+import { NoteLine } from '../../ui/note-line/note-line';
 import { QrCode } from '../../ui/qr-code/qr-code';
 import { EmptyState } from '../../ui/states/empty-state';
 import { ErrorState } from '../../ui/states/error-state';
@@ -36,7 +37,7 @@ type SizeName = (typeof sizes)[number]['name'];
   selector: 'app-labels-page',
   templateUrl: './labels-page.html',
   styleUrl: './labels-page.scss',
-  imports: [EmptyState, ErrorState, LoadingLines, MatButton, MatIcon, QrCode, RouterLink],
+  imports: [EmptyState, ErrorState, LoadingLines, MatButton, MatIcon, NoteLine, QrCode, RouterLink],
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class LabelsPage {
@@ -86,6 +87,9 @@ export class LabelsPage {
       formatDayAndYear(`${day}T00:00:00Z`, 'UTC'),
     ).map((label) => ({ ...label, address: this.addressOf(label.plantingId) })),
   );
+
+  /** Whether the squares would lead a phone to itself, as the page was opened on the server's own machine. */
+  protected readonly leadsNowhere = /^(localhost|127\.|\[::1\])/.test(this.window?.location.hostname ?? '');
 
   protected setCount(plantingId: string, count: number): void {
     this.counts.update((counts) => withCount(counts, plantingId, count));

@@ -255,6 +255,21 @@ describe('the page of a planting', () => {
     });
   });
 
+  it('is corrected where it was written down wrongly', async () => {
+    await open();
+    await press(/^Correct it$/);
+    const dialog = await loader.getHarness(MatDialogHarness);
+    await (await dialog.getHarness(MatInputHarness.with({ label: 'Variety' }))).setValue(' Slate Harbour ');
+    await (await dialog.getHarness(MatInputHarness.with({ label: 'Depth' }))).setValue('0');
+    document.querySelector<HTMLButtonElement>('mat-dialog-container [type=submit]')?.click();
+    const request = server.expectOne({ method: 'PATCH', url: address });
+    expect(request.request.body).toEqual({ variety: 'Slate Harbour', depthMm: 0, source: '' });
+    request.flush(plantingDetail({ variety: 'Slate Harbour', depthMm: 0 }));
+    await harness.fixture.whenStable();
+    expect(page.querySelector('h1')?.textContent).toBe('Leek Slate Harbour');
+    expect(page.textContent).toContain('0\u00a0mm');
+  });
+
   it('that is not there says so', async () => {
     await start(plantingDetail().id, 'grower');
     for (const url of [address, `${address}/progress`])

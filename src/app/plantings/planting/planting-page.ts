@@ -4,7 +4,7 @@ import { MatDialog } from '@angular/material/dialog';
 import { MatIcon } from '@angular/material/icon';
 import { Router, RouterLink } from '@angular/router';
 import { addPlantingPhoto, removePhoto } from '@shared/contracts/photos';
-import { removePlanting } from '@shared/contracts/plantings';
+import { removePlanting, type PlantingDetail } from '@shared/contracts/plantings';
 import { formatValue } from '@shared/format/numbers';
 import { filter, switchMap } from 'rxjs';
 import { ApiClient } from '../../core/api-client';
@@ -26,6 +26,7 @@ import { DeedDialog, type DeedSubject } from '../note/deed-dialog';
 import { ProgressCard } from '../progress/progress-card';
 import { StoryCard } from '../story/story-card';
 import { countWords, harvestWords, placeWords, plantingTitle, standingWords } from '../words/planting-facts';
+import { CorrectDialog } from './correct-dialog';
 import { PlantingData } from './planting-data';
 
 /** One planting: what, where and how far it is, what to do with it, and its story. */
@@ -123,6 +124,18 @@ export class PlantingPage {
     if (planting === null) return;
     const subject: DeedSubject = { kind, planting, data: this.data };
     this.dialog.open(DeedDialog, { data: subject, width: '480px', maxWidth: '96vw' });
+  }
+
+  protected correct(): void {
+    this.dialog
+      .open<CorrectDialog, PlantingDetail, PlantingDetail>(CorrectDialog, {
+        data: this.data.planting(),
+        width: '440px',
+        maxWidth: '96vw',
+      })
+      .afterClosed()
+      .pipe(filter((planting) => planting !== undefined))
+      .subscribe((planting) => this.data.resource.set(planting));
   }
 
   protected remove(): void {
