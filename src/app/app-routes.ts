@@ -82,6 +82,12 @@ export const appRoutes: Routes = [
     loadComponent: () => import('./seed/lot-form/lot-form-page').then((m) => m.LotFormPage),
   },
   {
+    path: 'sowing',
+    title: 'Sowing',
+    ...signedIn,
+    loadComponent: () => import('./sowing/sowing-page').then((m) => m.SowingPage),
+  },
+  {
     path: 'crops',
     title: 'Crop library',
     ...signedIn,
