@@ -6,10 +6,16 @@ import { PlantingEventsStore } from '../plantings/planting-events-store';
 import { PlantingRecords } from '../plantings/planting-records';
 import { PlantingsStore } from '../plantings/plantings-store';
 import { GerminationTestsStore } from '../seed/germination-tests-store';
+import { PhotosStore } from '../photos/photos-store';
+import { shrinkPhoto } from '../photos/shrink-photo';
 import { SeedStore } from '../seed/seed-store';
+import { SowingStore } from '../sowing/sowing-store';
+import { drawTray } from './draw-photo';
 import {
+  demonstrationFrost,
   demonstrationLots,
   demonstrationPlantings,
+  demonstrationSowings,
   type DemonstrationHappening,
   type DemonstrationLot,
   type DemonstrationPlanting,
@@ -35,13 +41,19 @@ export class DemonstrationGrowing {
   private readonly seed = new SeedStore();
   private readonly tests = new GerminationTestsStore();
   private readonly varieties = new VarietiesStore();
+  private readonly photos = new PhotosStore();
+  private readonly sowing = new SowingStore();
   private readonly records = new PlantingRecords(new PlantingsStore(), new PlantingEventsStore());
 
-  /** Writes lots, tests, plantings and all that happened to them. */
+  /** Writes lots, tests, plantings with all that happened to them, and the sowing calendar. */
   async fill(tx: Tx, room: FilledRoom): Promise<void> {
     const lots = new Map<string, { readonly id: string; readonly lot: DemonstrationLot }>();
     for (const lot of demonstrationLots) lots.set(lot.key, { id: await this.addLot(tx, room, lot), lot });
     for (const planting of demonstrationPlantings) await this.grow(tx, room, planting, lots);
+    await this.sowing.setFrost(tx, room.roomId, demonstrationFrost);
+    for (const { cropId, everyDays } of demonstrationSowings) {
+      await this.sowing.choose(tx, room.roomId, cropId, everyDays);
+    }
   }
 
   private async addLot(tx: Tx, room: FilledRoom, lot: DemonstrationLot): Promise<string> {
@@ -109,6 +121,7 @@ export class DemonstrationGrowing {
     for (const happening of later) {
       await this.records.append(tx, plantingId, this.event(room, happening), room.zone);
     }
+    if (planting.pictured !== null) await this.picture(tx, room, plantingId, planting.pictured);
     if (from === undefined) return;
     await this.seed.addUse(tx, {
       lotId: from.id,
@@ -118,6 +131,13 @@ export class DemonstrationGrowing {
       plantingId,
       personId: room.personId,
     });
+  }
+
+  private async picture(tx: Tx, room: FilledRoom, plantingId: string, up: number): Promise<void> {
+    const { roomId, personId, now } = room;
+    const photo = await shrinkPhoto(await drawTray(up));
+    const caption = `${up} up (drawn, as all this is invented)`;
+    await this.photos.add(tx, { ...photo, roomId, plantingId, at: new Date(now), caption, personId });
   }
 
   private event(room: FilledRoom, { daysAgo, clock, ...event }: DemonstrationHappening) {

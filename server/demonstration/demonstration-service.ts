@@ -220,15 +220,6 @@ export class DemonstrationService {
     }
     await this.planTasks(tx, roomId, dayBefore(now, -14, zone));
     await this.store.completeTasksBefore(tx, roomId, today);
-    await this.store.addTask(tx, {
-      roomId,
-      shelfId: idOf(shelves, 'A3'),
-      kind: 'switchLamps',
-      title: 'Switch the lamps on',
-      detail: 'The first leeks are up. The onions beside them keep their cover.',
-      dueOn: today,
-      personId: people.get('maren@example.org') ?? null,
-    });
   }
 }
 

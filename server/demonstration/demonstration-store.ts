@@ -1,7 +1,6 @@
 import type { DeepPartial, EntityTarget, ObjectLiteral } from 'typeorm';
 import { RoutineEntity } from '../care/routine-entity';
 import { ShelfEventEntity } from '../care/shelf-event-entity';
-import { TaskEntity } from '../care/task-entity';
 import type { Tx } from '../database/transactions';
 import { DeviceEntity } from '../devices/device-entity';
 import { PlacementEntity } from '../devices/placement-entity';
@@ -44,8 +43,6 @@ export class DemonstrationStore {
   addDevice = adder(DeviceEntity);
   /** Adds a routine. */
   addRoutine = adder(RoutineEntity);
-  /** Adds a task. */
-  addTask = adder(TaskEntity);
   /** Adds a mark for the charts. */
   addShelfEvent = adder(ShelfEventEntity);
 

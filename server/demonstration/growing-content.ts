@@ -103,6 +103,8 @@ export interface DemonstrationPlanting {
   readonly lot: string | null;
   readonly source: string;
   readonly depthMm: number | null;
+  /** Seedlings of the tray in its picture; null without one. */
+  readonly pictured: number | null;
   readonly story: readonly DemonstrationHappening[];
 }
 
@@ -135,12 +137,22 @@ export const demonstrationPlantings: readonly DemonstrationPlanting[] = [
   ]),
   standing('A2', 'chives', null, 5, 420, 'division of an old clump', '1 L pots'),
   standing('A2', 'lemongrass', null, 3, 210, 'stems rooted in water', '2 L pots'),
-  sowing('A3', 'leek', 24, story.leekAndOnionSown, { depthMm: 6, container: 'deep tray' }, [
-    { kind: 'counted', daysAgo: 0, clock: '00:20', count: 7, note: 'First leeks are up.' },
-  ]),
-  sowing('A3', 'onion', 24, story.leekAndOnionSown, { depthMm: 6, container: 'deep tray' }, []),
+  {
+    ...sowing('A3', 'leek', 24, story.leekAndOnionSown, { depthMm: 6, container: 'deep tray' }, [
+      { kind: 'counted', daysAgo: 0, clock: '00:20', count: 7, note: 'First leeks are up.' },
+    ]),
+    pictured: 7,
+  },
+  sowing(
+    'A3',
+    'onion',
+    24,
+    story.leekAndOnionSown,
+    { depthMm: 6, container: 'deep tray', clock: '10:20' },
+    [],
+  ),
   sowing('A4', 'sweet-pepper', 6, story.peppersSown, { depthMm: 8, container: 'cells', clock: '11:00' }, []),
-  sowing('A4', 'hot-pepper', 6, story.peppersSown, { depthMm: 8, container: 'cells', clock: '11:00' }, []),
+  sowing('A4', 'hot-pepper', 6, story.peppersSown, { depthMm: 8, container: 'cells', clock: '11:20' }, []),
   sowing('A4', 'sweet-pepper', 12, story.earlierPeppersSown, { depthMm: 8, clock: '11:00' }, [
     counted(story.earlierPeppersUp, 4),
     counted(56, 8),
@@ -225,6 +237,7 @@ function sowing(
     lot: lotKey,
     source: '',
     depthMm,
+    pictured: null,
     story: [begun('sown', daysAgo, count, start), ...later],
   };
 }
@@ -239,5 +252,23 @@ function standing(
   container: string,
 ): DemonstrationPlanting {
   const start = begun('broughtIn', daysAgo, count, { container, stage: 'growingOn' });
-  return { shelf, cropId, variety, lot: null, source, depthMm: null, story: [start] };
+  return { shelf, cropId, variety, lot: null, source, depthMm: null, pictured: null, story: [start] };
 }
+
+/** The last and the first frost of the invented place. */
+export const demonstrationFrost = {
+  lastSpring: { on: '05-02', wording: { kind: 'probability', percent: 20 } },
+  firstAutumn: { on: '10-24', wording: { kind: 'probability', percent: 20 } },
+  note: 'Invented, as the place is; for 0 °C at 1.25 m.',
+} as const;
+
+/** Crops on the sowing calendar, with the days between sowings that follow each other. */
+export const demonstrationSowings: readonly { readonly cropId: string; readonly everyDays: number | null }[] =
+  [
+    { cropId: 'onion-long-day', everyDays: null },
+    { cropId: 'leek', everyDays: 21 },
+    { cropId: 'sweet-pepper', everyDays: null },
+    { cropId: 'tomato', everyDays: null },
+    { cropId: 'lettuce-head', everyDays: 14 },
+    { cropId: 'broccoli', everyDays: null },
+  ];

@@ -56,7 +56,7 @@ export class PlantingsStore {
   async plantingsOn(tx: Tx, shelfIds: readonly string[]): Promise<Map<string, PlantingEntity[]>> {
     const found = await tx.find(PlantingEntity, {
       where: { shelfId: In([...shelfIds]), endedOn: IsNull() },
-      order: { startedOn: 'ASC', createdAt: 'ASC', id: 'ASC' },
+      order: { startedAt: 'ASC', createdAt: 'ASC', id: 'ASC' },
     });
     const byShelf = new Map<string | null, PlantingEntity[]>(shelfIds.map((shelfId) => [shelfId, []]));
     for (const planting of found) byShelf.get(planting.shelfId)?.push(planting);

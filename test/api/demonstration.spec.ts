@@ -1,12 +1,17 @@
 import { mkdtemp, rm } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
+import type { Task } from '@shared/contracts/care';
 import type { Planting } from '@shared/contracts/plantings';
 import type { SeedLot } from '@shared/contracts/seed';
 import { demonstrationPassword, demonstrationPeople } from '../../server/demonstration/demonstration-content';
 import { DemonstrationService } from '../../server/demonstration/demonstration-service';
 import { DemonstrationStore } from '../../server/demonstration/demonstration-store';
-import { demonstrationLots, demonstrationPlantings } from '../../server/demonstration/growing-content';
+import {
+  demonstrationLots,
+  demonstrationPlantings,
+  demonstrationSowings,
+} from '../../server/demonstration/growing-content';
 import { Caller } from './caller';
 import { startTestApplication, type TestApplication } from './test-application';
 
@@ -59,6 +64,19 @@ describe('the demonstration', () => {
     expect(plantings.filter(({ endedOn }) => endedOn !== null)).toHaveLength(2);
     expect(lots).toHaveLength(demonstrationLots.length);
     expect(lots.filter(({ left, amount }) => left < 0 || left >= amount)).toEqual([]);
+    expect((await caller.get(`${path}/sowing`).expect(200)).body).toMatchObject({
+      plans: demonstrationSowings.map(() => ({ window: { opens: expect.any(String) as string } })),
+    });
     expect(lots.filter(({ age }) => age.useFirst).map(({ variety }) => variety)).toContain('Harvest Moon');
+  });
+
+  it('is advised as its story goes: lamps on over the first leeks, and nothing else to change', async () => {
+    const { caller, path } = await filled('2026-12-01T12:00:00Z');
+
+    await application.app.services.advice.refreshAll();
+
+    const tasks = (await caller.get(`${path}/tasks?from=2026-12-01&to=2026-12-02`).expect(200))
+      .body as Task[];
+    expect(tasks.map(({ title }) => title)).toEqual(['Switch A3 lamps on: Leek is up']);
   });
 });
