@@ -118,19 +118,24 @@ export class AlertEvaluationService {
     return starts;
   }
 
+  /** Lamps are asked for only where a rule follows them. */
   private async contexts(
     tx: Tx,
     watched: readonly Watched[],
     from: number,
     now: number,
   ): Promise<(sensor: SensorOnRoad) => AlertContext> {
-    const shelfIds = [...new Set(watched.map(({ news }) => news.sensor.shelfId ?? ''))];
-    const lamps = await this.sources.plannedLamps(
-      tx,
-      shelfIds,
-      new Date(from - LAMP_MARGIN_MS),
-      new Date(now + LAMP_MARGIN_MS),
-    );
+    const following = watched.filter(({ rule }) => 'settleMs' in rule);
+    const shelfIds = [...new Set(following.map(({ news }) => news.sensor.shelfId ?? ''))];
+    const lamps =
+      shelfIds.length === 0
+        ? new Map<string, LampInterval[]>()
+        : await this.sources.plannedLamps(
+            tx,
+            shelfIds,
+            new Date(from - LAMP_MARGIN_MS),
+            new Date(now + LAMP_MARGIN_MS),
+          );
     const plans = new Map(shelfIds.map((shelfId) => [shelfId, lampPlan(lamps.get(shelfId) ?? [])]));
     return (sensor) => plans.get(sensor.shelfId ?? '') ?? lampPlan([]);
   }

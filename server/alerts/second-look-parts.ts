@@ -1,24 +1,21 @@
 import type { Clock } from '../clock';
 import type { Transactions } from '../database/transactions';
 import type { ReadingStore } from '../readings/reading-store';
-import type { AlertSources } from './alert-evaluation-service';
 import type { AlertService } from './alert-service';
 import { AlertStore } from './alert-store';
 import { EpisodeKeeper, type AlertTeller } from './episode-keeper';
 import { LightLookService } from './light-look-service';
 import { SecondLookJob } from './second-look-job';
-import { SecondLookService, type GerminatingOn } from './second-look-service';
+import { SecondLookService, type ShelfSources } from './second-look-service';
 import { SecondLookStore } from './second-look-store';
 import { SilenceService } from './silence-service';
 import { SilenceStore } from './silence-store';
 
 /** What the second look needs of others. */
-export interface SecondLookSources {
+export interface SecondLookSources extends ShelfSources {
   readonly transactions: Transactions;
   readonly readings: ReadingStore;
   readonly teller: AlertTeller;
-  readonly plannedLamps: AlertSources['plannedLamps'];
-  readonly germinatingOn: GerminatingOn;
   /** Tells dashboards. */
   readonly alerts: Pick<AlertService, 'publishChanged'>;
   readonly now: Clock;
@@ -38,7 +35,7 @@ export function secondLookJob(sources: SecondLookSources): SecondLookJob {
     readings,
     looks,
     silences,
-    shelves: new SecondLookService(store, looks, sources.germinatingOn),
+    shelves: new SecondLookService(store, looks, sources),
     light: new LightLookService(store, looks, sources.plannedLamps),
     devices: new SilenceService(store, silences),
     keeper: new EpisodeKeeper(store, sources.teller),

@@ -2,10 +2,11 @@ import { advanceSeries } from '@shared/alerts/alert-machine';
 import type { FixedLimitRule } from '@shared/alerts/alert-rule';
 import { idleState, type AlertState, type ObservationColumns } from '@shared/alerts/alert-state';
 import type { EpisodeChange } from '@shared/alerts/episode';
-import { lampPlan } from '@shared/alerts/lamp-plan';
+import { lampPlan, type AlertContext } from '@shared/alerts/lamp-plan';
 import { restartFrom } from '@shared/alerts/restart-from';
 import type { Tx } from '../database/transactions';
 import type { SensorOnRoad } from '../readings/reading-store';
+import type { AlertSources } from './alert-evaluation-service';
 import type { AlertStore, Watch } from './alert-store';
 import { outcomeOf, type FoldedWatch } from './episode-keeper';
 import { secondLooksOf, settledTo, type ReadColumns, type SecondLook } from './second-look';
@@ -19,6 +20,17 @@ export interface Stretch {
 
 /** When something waited to germinate on shelves: stretches by shelf, in any order. */
 export type GerminatingOn = (tx: Tx, shelfIds: readonly string[]) => Promise<ReadonlyMap<string, Stretch[]>>;
+
+/** What is known of shelves beside their readings. */
+export interface ShelfSources extends Pick<AlertSources, 'plannedLamps'> {
+  readonly germinatingOn: GerminatingOn;
+}
+
+/** The same, of some shelves. */
+interface ShelfPlans {
+  readonly germinating: ReadonlyMap<string, Stretch[]>;
+  readonly lamps: ReadonlyMap<string, AlertContext>;
+}
 
 interface Work {
   readonly look: SecondLook;
@@ -37,6 +49,8 @@ interface Work {
 const MINUTE_MS = 60_000;
 /** A long past is looked at in parts, so that memory stays the same however long it is. */
 const PART_MS = 20 * 86_400_000;
+/** Two days cover any stretch of light that reaches into the span. */
+const LAMP_MARGIN_MS = 2 * 86_400_000;
 /** These kinds have one limit at all hours. */
 const noLamps = lampPlan([]);
 const noReadings: ReadColumns = { times: [], values: [], qualities: [], flags: [] };
@@ -49,7 +63,7 @@ export class SecondLookService {
   constructor(
     private readonly alerts: AlertStore,
     private readonly looks: SecondLookStore,
-    private readonly germinatingOn: GerminatingOn,
+    private readonly plans: ShelfSources,
   ) {}
 
   /**
@@ -69,15 +83,27 @@ export class SecondLookService {
         leafOffsetC: leafOffsets.get(id) ?? 0,
       }),
     );
-    const work = await this.begin(tx, looks.filter(hasNews));
+    const begun = await this.begin(tx, looks.filter(hasNews));
+    const work = begun.filter((one) => !isSameMinute(one));
     const toFold = await this.worthReading(tx, work);
-    if (toFold.length > 0) await this.foldAll(tx, toFold, await this.germinatingOn(tx, shelfIds));
+    if (toFold.length > 0) await this.foldAll(tx, toFold, await this.plansOf(tx, shelfIds, toFold));
     for (const { watch, from, isAnew, changes } of work) {
       if (!isAnew) continue;
       const found = outcomeOf(changes).episodes.map(({ beganAt }) => beganAt);
       await this.alerts.removeEpisodes(tx, watch.id, from, found);
     }
     return work.map(foldedOf);
+  }
+
+  private async plansOf(tx: Tx, shelfIds: readonly string[], work: readonly Work[]): Promise<ShelfPlans> {
+    const { plannedLamps, germinatingOn } = this.plans;
+    const from = new Date(Math.min(...work.map((one) => one.from)) - LAMP_MARGIN_MS);
+    const to = new Date(Math.max(...work.map((one) => one.to)) + LAMP_MARGIN_MS);
+    const lamps = await plannedLamps(tx, shelfIds, from, to);
+    return {
+      germinating: await germinatingOn(tx, shelfIds),
+      lamps: new Map([...lamps].map(([shelfId, intervals]) => [shelfId, lampPlan(intervals)])),
+    };
   }
 
   private async begin(tx: Tx, looks: readonly SecondLook[]): Promise<Work[]> {
@@ -105,15 +131,17 @@ export class SecondLookService {
     watch: Watch,
     to: number,
   ): Promise<Work> {
-    const newsFrom = newsFromOf(look);
+    const newsFrom = newsFromOf(look) ?? to;
     const judgesFrom = look.holder.placedAt ?? 0;
     const { lastAt } = watch.state;
     const common = { look, rule, watch, to, changes: [] };
     if (lastAt !== null && newsFrom > lastAt) {
       return { ...common, from: Math.max(lastAt + 1, judgesFrom), isAnew: false, state: watch.state };
     }
-    const around = await this.alerts.episodesAround(tx, watch.id, newsFrom);
-    const { at } = restartFrom(rule, around, newsFrom);
+    // The first reading of a minute counts; one that comes late may be another.
+    const changedFrom = wholeMinute(newsFrom);
+    const around = await this.alerts.episodesAround(tx, watch.id, changedFrom);
+    const { at } = restartFrom(rule, around, changedFrom);
     return { ...common, from: Math.max(at, judgesFrom), isAnew: true, state: idleState };
   }
 
@@ -126,35 +154,28 @@ export class SecondLookService {
     return work.filter((one) => !doubtful.includes(one) || reached.has(one.look.holder.id));
   }
 
-  private async foldAll(
-    tx: Tx,
-    work: readonly Work[],
-    germinating: ReadonlyMap<string, Stretch[]>,
-  ): Promise<void> {
+  private async foldAll(tx: Tx, work: readonly Work[], plans: ShelfPlans): Promise<void> {
     const end = Math.max(...work.map(({ to }) => to));
     for (let part = Math.min(...work.map(({ from }) => from)); part <= end; part += PART_MS) {
       const window = { from: part, to: Math.min(part + PART_MS, end + 1) };
       const due = work.filter(({ from, to }) => from < window.to && to >= window.from);
-      if (due.length > 0) await this.foldPart(tx, due, window, germinating);
+      if (due.length > 0) await this.foldPart(tx, due, window, plans);
     }
   }
 
-  private async foldPart(
-    tx: Tx,
-    due: readonly Work[],
-    window: Stretch,
-    germinating: ReadonlyMap<string, Stretch[]>,
-  ): Promise<void> {
+  private async foldPart(tx: Tx, due: readonly Work[], window: Stretch, plans: ShelfPlans): Promise<void> {
     const readings = await this.looks.readings(tx, spansOf(due, window));
     const derived = new Map<SecondLook, ObservationColumns>();
     for (const one of due) {
       const { look, rule } = one;
-      const stretches = germinating.get(look.holder.shelfId ?? '') ?? [];
+      const shelfId = look.holder.shelfId ?? '';
+      const stretches = plans.germinating.get(shelfId) ?? [];
       const series =
         derived.get(look) ??
         look.derive({
           readingsOf: ({ id }) => readings.get(id) ?? noReadings,
           isGerminating: (at) => stretches.some(({ from, to }) => at >= from && at < to),
+          lampsAt: (plans.lamps.get(shelfId) ?? noLamps).lampsAt,
         });
       derived.set(look, series);
       const { times, values, qualities } = within(series, {
@@ -176,14 +197,20 @@ function isIdle({ run, open }: AlertState): boolean {
   return run === null && open === null;
 }
 
-function hasNews({ groups }: SecondLook): boolean {
-  return groups.flat().some(({ unjudgedFrom }) => unjudgedFrom !== null);
+function hasNews(look: SecondLook): boolean {
+  return newsFromOf(look) !== null;
 }
 
-/** Where a look's readings first changed [ms]: a whole minute, since the first reading of each minute counts. */
-function newsFromOf({ groups }: SecondLook): number {
+/** Where a look's readings first changed [ms]; null where they did not. */
+function newsFromOf({ groups }: SecondLook): number | null {
   const first = Math.min(...groups.flat().map(({ unjudgedFrom }) => unjudgedFrom ?? Infinity));
-  return wholeMinute(first);
+  return Number.isFinite(first) ? first : null;
+}
+
+/** Whether a sensor with many readings a minute has had none yet that counts, since it was looked at last. */
+function isSameMinute({ look, watch, to, isAnew }: Work): boolean {
+  const isAlone = look.groups.flat().length === 1;
+  return isAlone && !isAnew && watch.state.lastAt !== null && wholeMinute(to) <= watch.state.lastAt;
 }
 
 function wholeMinute(at: number): number {
@@ -221,12 +248,15 @@ function within({ times, values, qualities }: ObservationColumns, { from, to }: 
   };
 }
 
-function foldedOf({ look, watch, to, state, changes }: Work): FoldedWatch {
+function foldedOf({ look, watch, to, isAnew, state, changes }: Work): FoldedWatch {
+  // What is idle and was is not worth writing at every look: a minute looked at twice stays idle.
+  const isStill = !isAnew && changes.length === 0 && isIdle(state) && isIdle(watch.state);
+  const isRecent = to - (watch.state.lastAt ?? -Infinity) < MINUTE_MS;
   return {
     watch,
     sensor: look.holder,
     // Up to here it is judged, also where no value came of the readings.
-    state: { ...state, lastAt: to },
+    state: isStill && isRecent ? watch.state : { ...state, lastAt: to },
     newestAt: Math.max(...look.groups.flat().map(({ latestAt }) => latestAt ?? -Infinity)),
     ...outcomeOf(changes),
   };

@@ -2,15 +2,16 @@ import { standingRules } from '@shared/alerts/alert-defaults';
 import type { FixedLimitRule } from '@shared/alerts/alert-rule';
 import type { ObservationColumns, Quality } from '@shared/alerts/alert-state';
 import {
-  botrytisWindow,
   changePerHour,
   dewPointSurplus,
   disagreement,
   failedShare,
-  mergedReadings,
+  unaskedChange,
   unaskedWarmth,
-  wetHours,
 } from '@shared/alerts/derived-series';
+import { mergedReadings } from '@shared/alerts/joined-series';
+import type { AlertContext } from '@shared/alerts/lamp-plan';
+import { botrytisWindow, wetHours } from '@shared/alerts/wet-leaves';
 import type { MeasuredQuantity, Quantity } from '@shared/climate/quantity';
 import { maxGapMs } from '@shared/series/expected-interval';
 import { isFaulty } from '@shared/series/quality-tests';
@@ -25,6 +26,8 @@ export interface ReadColumns extends ObservationColumns {
 export interface LookContext {
   readonly readingsOf: (sensor: SensorOnRoad) => ReadColumns;
   readonly isGerminating: (at: number) => boolean;
+  /** Planned. */
+  readonly lampsAt: AlertContext['lampsAt'];
 }
 
 /** A series that is made from readings of one sensor or more, with the rules that watch it. */
@@ -52,8 +55,10 @@ export interface LookedShelf {
 }
 
 const MINUTE_MS = 60_000;
-/** Change is measured over a quarter of an hour: an open door shows within it, a lamp's own warmth hardly. */
+/** Change is measured over a quarter of an hour. */
 const RATE_WINDOW_MS = 15 * MINUTE_MS;
+/** The air of a small shelf follows its lamp within ten minutes or so, which the window shows for a quarter of an hour. */
+const LAMP_SETTLE_MS = 45 * MINUTE_MS;
 /** Half an hour, or six readings of a slow sensor. */
 const FAILURE_READINGS = 6;
 const FAILURE_WINDOW_MS = 30 * MINUTE_MS;
@@ -105,7 +110,8 @@ function rateLook(sensor: SensorOnRoad): SecondLook {
     lookBackMs: 2 * RATE_WINDOW_MS,
     withinMs: 0,
     nothingBelow: null,
-    derive: ({ readingsOf }) => changePerHour(readingsOf(sensor), RATE_WINDOW_MS),
+    derive: ({ readingsOf, lampsAt }) =>
+      unaskedChange(changePerHour(readingsOf(sensor), RATE_WINDOW_MS), lampsAt, LAMP_SETTLE_MS),
   };
 }
 

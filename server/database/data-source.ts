@@ -124,6 +124,11 @@ export function createDataSource(url: string, poolSize = 12): DataSource {
     poolSize,
     // A server that went away must be noticed within seconds, so that devices keep what they hold.
     connectTimeoutMS: 5_000,
-    extra: { application_name: 'lampmeadow', statement_timeout: 120_000, idleTimeoutMillis: 30_000 },
+    extra: {
+      application_name: 'lampmeadow',
+      statement_timeout: 120_000,
+      idleTimeoutMillis: 30_000,
+      options: '-c jit=off', // Statements are short; compiling one takes longer than it would run.
+    },
   });
 }

@@ -130,7 +130,8 @@ export class DeviceIntakeService {
       if (refusal !== null) refused.push(refusal);
       else if (sensor !== undefined) accepted.push({ index, sensorId: sensor.id, at, value: reading.value });
     });
-    const seen = (tx: Tx): Promise<void> => this.store.noteSeen(tx, device.id, batteryPct);
+    const seenAt = this.now();
+    const seen = (tx: Tx): Promise<void> => this.store.noteSeen(tx, device.id, seenAt, batteryPct);
     if (accepted.length === 0) {
       await seen(this.transactions.plain);
       return { stored: 0, alreadyHeld: 0, refused };

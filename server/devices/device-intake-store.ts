@@ -15,11 +15,11 @@ export class DeviceIntakeStore {
     return new Map(rows.map(({ key, id, quantity }) => [key, { id, quantity }]));
   }
 
-  /** Notes that the device has just reported, and its battery where it said so. */
-  async noteSeen(tx: Tx, deviceId: string, batteryPct: number | null): Promise<void> {
+  /** Notes when the device has reported, and its battery where it said so. */
+  async noteSeen(tx: Tx, deviceId: string, at: Date, batteryPct: number | null): Promise<void> {
     await tx.query(
-      'UPDATE device SET last_seen_at = now(), battery_pct = coalesce($2, battery_pct) WHERE id = $1',
-      [deviceId, batteryPct],
+      'UPDATE device SET last_seen_at = $2, battery_pct = coalesce($3, battery_pct) WHERE id = $1',
+      [deviceId, at, batteryPct],
     );
   }
 

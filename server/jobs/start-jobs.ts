@@ -22,7 +22,7 @@ export function startJobs(app: App, transactions: Transactions, log: Logger): ()
   const alone = (name: string, everyMs: number, work: () => Promise<void>): RepeatingJob =>
     new RepeatingJob(name, everyMs, async () => void (await whenAlone(transactions, name, work)), log);
   const jobs = [
-    alone('second look', MINUTE_MS / 4, () => secondLookJob.run()),
+    alone('second look', MINUTE_MS / 2, () => secondLookJob.run()),
     alone('logger files left behind', MINUTE_MS / 4, () => loggerFiles.failAbandoned()),
     alone('escalation', MINUTE_MS / 2, () => escalationJob.run()),
     alone('morning letters', MINUTE_MS, () => morningLetterJob.run()),

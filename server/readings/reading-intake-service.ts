@@ -50,7 +50,7 @@ export class ReadingIntakeService {
     private readonly summaries: SummaryStore,
     private readonly lateReadings: LateReadings,
     private readonly computed: ComputedQuantities,
-    private readonly alerts: AlertEvaluationService,
+    private readonly alerts: Pick<AlertEvaluationService, 'observe'>,
     private readonly memory: StreamMemory,
   ) {}
 

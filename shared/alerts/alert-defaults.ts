@@ -125,8 +125,8 @@ const light = { ...fixed, settleMs: 5 * minute, rampMs: 0 };
  *
  * @remarks
  * `dangerLow` and `dangerHigh` [°C] hold for air and root zone whatever is planted. `fastRise` and `fastFall` [°C/h]
- * lie beyond what the lamps do to a shelf at every change: 7 °C with a time constant of 40 min makes about 9 °C/h
- * over 15 min. `lampDark` and `lampLit` [µmol m⁻² s⁻¹] suit a PPFD sensor, `sensorsDisagree` [°C] temperatures. `wetHours` [h] is the shorter of the
+ * are 3 °C in a quarter of an hour, which an open window makes; what lamps do to a shelf at their changes is as fast, and
+ * is left out of the series. `lampDark` and `lampLit` [µmol m⁻² s⁻¹] suit a PPFD sensor, `sensorsDisagree` [°C] temperatures. `wetHours` [h] is the shorter of the
  * 8 to 12 h of wet leaves that Botrytis needs (University of Massachusetts Extension).
  */
 export const standingRules = {

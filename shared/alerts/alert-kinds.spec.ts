@@ -5,16 +5,15 @@ import { advanceSeries } from './alert-machine';
 import { alertKinds, type AlertRule } from './alert-rule';
 import { idleState, type ObservationColumns, type Quality } from './alert-state';
 import {
-  botrytisWindow,
   changePerHour,
   dewPointSurplus,
   disagreement,
   failedShare,
   lightDays,
   unaskedWarmth,
-  wetHours,
 } from './derived-series';
 import { lampPlan } from './lamp-plan';
+import { botrytisWindow, wetHours } from './wet-leaves';
 
 const minute = 60_000;
 const hour = 60 * minute;

@@ -1,17 +1,17 @@
 import fc from 'fast-check';
 import type { ObservationColumns, Quality } from './alert-state';
 import {
-  botrytisWindow,
   changePerHour,
   dewPointSurplus,
   disagreement,
   failedShare,
-  joinAsOf,
   lightDays,
-  mergedReadings,
+  unaskedChange,
   unaskedWarmth,
-  wetHours,
 } from './derived-series';
+import { joinAsOf, mergedReadings } from './joined-series';
+import { lampPlan } from './lamp-plan';
+import { botrytisWindow, wetHours } from './wet-leaves';
 
 const minute = 60_000;
 const hour = 60 * minute;
@@ -136,6 +136,14 @@ describe('series of single kinds', () => {
     expect(rowsOf(rates)).toEqual([
       [16, 7.5, 'pass'],
       [25, 10, 'pass'],
+    ]);
+  });
+
+  it('change that the lamps ask for is none, while they settle and in their direction only', () => {
+    const plan = lampPlan([{ onAt: 10 * minute, offAt: 60 * minute }]);
+    const rates = series([5, 20], [10, 20], [39, 20], [39.5, -20], [40, 20], [65, -20], [66, 20], [90, -20]);
+    expect(rowsOf(unaskedChange(rates, plan.lampsAt, 30 * minute)).map(([, rate]) => rate)).toEqual([
+      20, 0, 0, -20, 20, 0, 20, -20,
     ]);
   });
 

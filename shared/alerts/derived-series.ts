@@ -1,101 +1,10 @@
 import { airFromReadings, dewPointC } from '../climate/psychrometrics';
-import type { ObservationColumns, Quality } from './alert-state';
+import type { ObservationColumns } from './alert-state';
+import { joinAsOf, joinLatest } from './joined-series';
+import type { AlertContext } from './lamp-plan';
+import { append, emptyColumns, type Columns } from './observation-columns';
 
 const msPerHour = 3_600_000;
-
-/** A series being built. */
-interface Columns extends ObservationColumns {
-  readonly times: number[];
-  readonly values: number[];
-  readonly qualities: Quality[];
-}
-
-/**
- * Joins series as a clock would see them: at every reading of any of them, the latest of each that is young enough.
- *
- * @remarks
- * Nothing looks ahead, so a value never changes through readings taken after it, and a reading that comes late
- * changes none before it. Look-back: to fold from an instant, hand in readings from `withinMs` before it.
- *
- * @param sources - The series to join, in order of time.
- * @param withinMs - Longest age at which a reading still speaks for now [ms].
- * @param combine - Makes the value from one value of each series, null where none is young enough, and the instant;
- * null for no value.
- * @returns The joined series, as doubtful as the most doubtful reading in each value. Failed readings are left out.
- */
-export function joinLatest(
-  sources: readonly ObservationColumns[],
-  withinMs: number,
-  combine: (values: readonly (number | null)[], at: number) => number | null,
-): ObservationColumns {
-  const joined = emptyColumns();
-  const passed = sources.map(() => 0);
-  const latest = sources.map(() => ({ at: -Infinity, value: NaN, isPass: true }));
-  for (let at = nextTime(sources, passed); at < Infinity; at = nextTime(sources, passed)) {
-    sources.forEach((source, s) => {
-      const i = passed[s] ?? 0;
-      if (source.times[i] !== at) return;
-      passed[s] = i + 1;
-      if (source.qualities[i] === 'fail') return;
-      latest[s] = { at, value: source.values[i] ?? NaN, isPass: source.qualities[i] === 'pass' };
-    });
-    const isYoung = (reading: { readonly at: number }): boolean => at - reading.at <= withinMs;
-    const value = combine(
-      latest.map((reading) => (isYoung(reading) ? reading.value : null)),
-      at,
-    );
-    if (value === null) continue;
-    const isPass = latest.every((reading) => reading.isPass || !isYoung(reading));
-    append(joined, at, value, isPass ? 'pass' : 'suspect');
-  }
-  return joined;
-}
-
-/**
- * As {@link joinLatest}, with a value only where every series has a reading that is young enough.
- *
- * @param sources - As there.
- * @param withinMs - As there.
- * @param combine - Makes the value from one value of each series and the instant; null for none.
- * @returns As there.
- */
-export function joinAsOf(
-  sources: readonly ObservationColumns[],
-  withinMs: number,
-  combine: (values: readonly number[], at: number) => number | null,
-): ObservationColumns {
-  return joinLatest(sources, withinMs, (values, at) => {
-    const known = values.filter((value) => value !== null);
-    return known.length < values.length ? null : combine(known, at);
-  });
-}
-
-/**
- * Readings of sensors that measure the same thing as one series, such as two thermometers of a shelf.
- *
- * @param sources - In order of time; of two readings at one instant that of the source named first counts.
- * @returns All of them in order.
- */
-export function mergedReadings(sources: readonly ObservationColumns[]): ObservationColumns {
-  const [only] = sources;
-  if (sources.length === 1 && only !== undefined) return only;
-  const merged = emptyColumns();
-  const passed = sources.map(() => 0);
-  for (let at = nextTime(sources, passed); at < Infinity; at = nextTime(sources, passed)) {
-    const isThere = (source: ObservationColumns, s: number): boolean => source.times[passed[s] ?? 0] === at;
-    const first = sources.findIndex(isThere);
-    const i = passed[first] ?? 0;
-    append(merged, at, sources[first]?.values[i] ?? NaN, sources[first]?.qualities[i] ?? 'fail');
-    sources.forEach((source, s) => {
-      if (isThere(source, s)) passed[s] = (passed[s] ?? 0) + 1;
-    });
-  }
-  return merged;
-}
-
-function nextTime(sources: readonly ObservationColumns[], passed: readonly number[]): number {
-  return Math.min(...sources.map(({ times }, s) => times[passed[s] ?? 0] ?? Infinity));
-}
 
 /**
  * How far sensors of one quantity on one shelf are apart; for `sensorsDisagree`.
@@ -201,92 +110,27 @@ export function changePerHour(readings: ObservationColumns, windowMs: number): O
   return rates;
 }
 
-/** When leaves count as wet, and how wet time adds up. */
-export interface WetLeaves {
-  /** Relative humidity from which leaves count as wet [%]. */
-  readonly wetFromPct: number;
-  /** Temperatures between which wet time counts [°C]; null counts it at all. */
-  readonly betweenC: readonly [low: number, high: number] | null;
-  /** Dry time after which the count starts again [ms]. */
-  readonly dryAfterMs: number;
-  /** Only wet time within this long before now counts [ms]. */
-  readonly windowMs: number;
-  /** Longest time a reading speaks for [ms]; a longer gap counts as neither wet nor dry. */
-  readonly maxGapMs: number;
-}
-
 /**
- * The Botrytis window.
+ * Change that the planned lamps don't ask for; for `fastRise` and `fastFall`.
  *
- * @remarks
- * An hour is wet at 90 % or more (Sentelhas et al., as a proxy for leaf wetness); 55 to 75 °F is the range for
- * infection in University of Massachusetts Extension's Botrytis advice, which sources contradict each other on the
- * humidity (85 or 93 %). Two hours of drying and a day's window are common practice, no source.
+ * @param rates - From {@link changePerHour}.
+ * @param lampsAt - The planned lamps.
+ * @param settleMs - Time after the lamps go on in which air may warm as fast as it likes, and cool after they go off [ms].
+ * @returns The rates, 0 where the lamps ask for them, so that an open alert clears.
  */
-export const botrytisWindow: WetLeaves = {
-  wetFromPct: 90,
-  betweenC: [12.8, 23.9],
-  dryAfterMs: 2 * msPerHour,
-  windowMs: 24 * msPerHour,
-  maxGapMs: msPerHour / 2,
-};
-
-/**
- * Hours of wet leaves up to each reading; for `wetHours`.
- *
- * @remarks
- * A reading speaks for the time until the next. Look-back is `windowMs + maxGapMs`.
- *
- * @param humidity - Relative humidity [%].
- * @param temperature - Air temperature [°C]; read only where the window has temperatures.
- * @param wet - When leaves count as wet.
- * @param isGerminating - Whether something waits to germinate at an instant: a covered tray is meant to be damp, and
- * has no leaves yet.
- * @returns Wet time in this spell and window [h].
- */
-export function wetHours(
-  humidity: ObservationColumns,
-  temperature: ObservationColumns,
-  wet: WetLeaves,
-  isGerminating: (at: number) => boolean = () => false,
+export function unaskedChange(
+  { times, values, qualities }: ObservationColumns,
+  lampsAt: AlertContext['lampsAt'],
+  settleMs: number,
 ): ObservationColumns {
-  const [lowC, highC] = wet.betweenC ?? [-Infinity, Infinity];
-  const sources = wet.betweenC === null ? [humidity] : [humidity, temperature];
-  const wetness = joinAsOf(sources, wet.maxGapMs, ([humidityPct = NaN, temperatureC = 0], at) => {
-    const isWet = humidityPct >= wet.wetFromPct && temperatureC >= lowC && temperatureC <= highC;
-    return Number(isWet && !isGerminating(at));
-  });
-  return accumulateWetTime(wetness, wet);
-}
-
-function accumulateWetTime({ times, values, qualities }: ObservationColumns, wet: WetLeaves): Columns {
-  const spells = emptyColumns();
-  const intervalMs = (i: number) => {
-    const ms = (times[i] ?? NaN) - (times[i - 1] ?? NaN);
-    return ms <= wet.maxGapMs ? ms : 0;
-  };
-  const wetMs = (i: number) => (values[i - 1] === 1 ? intervalMs(i) : 0);
-  let oldest = 1;
-  let sumMs = 0;
-  let dryMs = 0;
+  const rates = emptyColumns();
   for (let i = 0; i < times.length; i += 1) {
-    const at = times[i] ?? NaN;
-    sumMs += wetMs(i);
-    dryMs = values[i - 1] === 1 ? 0 : dryMs + intervalMs(i);
-    if (dryMs >= wet.dryAfterMs) {
-      oldest = i + 1;
-      sumMs = 0;
-    }
-    while (oldest <= i && (times[oldest] ?? NaN) <= at - wet.windowMs) {
-      sumMs -= wetMs(oldest);
-      oldest += 1;
-    }
-    // The oldest interval may begin before the window does.
-    const beforeWindowMs = Math.max(0, at - wet.windowMs - (times[oldest - 1] ?? at));
-    const outsideMs = oldest <= i ? Math.min(wetMs(oldest), beforeWindowMs) : 0;
-    append(spells, at, (sumMs - outsideMs) / msPerHour, qualities[i] ?? 'pass');
+    const [at, rate] = [times[i] ?? NaN, values[i] ?? NaN];
+    const { on, since } = lampsAt(at);
+    const isAsked = at - since < settleMs && (on ? rate > 0 : rate < 0);
+    append(rates, at, isAsked ? 0 : rate, qualities[i] ?? 'fail');
   }
-  return spells;
+  return rates;
 }
 
 /** How many of a sensor's readings must fail before the sensor counts as failed; see {@link failedShare}. */
@@ -357,14 +201,4 @@ function withoutFailed({ times, values, qualities }: ObservationColumns): Column
     if (quality !== 'fail') append(kept, times[i] ?? NaN, values[i] ?? NaN, quality);
   }
   return kept;
-}
-
-function emptyColumns(): Columns {
-  return { times: [], values: [], qualities: [] };
-}
-
-function append(columns: Columns, at: number, value: number, quality: Quality): void {
-  columns.times.push(at);
-  columns.values.push(value);
-  columns.qualities.push(quality);
 }

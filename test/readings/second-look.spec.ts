@@ -49,7 +49,7 @@ function isWithin(at: number, fromHour: number, toHour: number): boolean {
 const measured: Readonly<Record<Name, (at: number) => number | null>> = {
   air: (at) => {
     if (isWithin(at, 40, 41.5)) return null; // The whole device is silent.
-    return isWithin(at, 4, 6) ? 12 : 20; // A door stands open, and is shut.
+    return isWithin(at, 2, 4) ? 12 : 20; // A door stands open, and is shut.
   },
   humidity: (at) => {
     if (isWithin(at, 40, 41.5)) return null;
@@ -63,7 +63,7 @@ const measured: Readonly<Record<Name, (at: number) => number | null>> = {
   otherAir: (at) => {
     if (isWithin(at, 34, 36)) return null; // Alone, while its device goes on.
     if (isWithin(at, 44, 46)) return 999; // Wet inside.
-    if (isWithin(at, 4, 6)) return 12;
+    if (isWithin(at, 2, 4)) return 12;
     return isWithin(at, 50, 53) ? 23 : 20; // Drifted.
   },
   light: (at) => {
@@ -155,10 +155,10 @@ describe('the second look at readings', () => {
     expect(found).toEqual([
       ['condensation', 15, 17.17],
       ['deviceSilent', 39.83, 41.5],
-      ['fastFall', 4, 4.5],
-      ['fastFall', 4, 4.5],
-      ['fastRise', 6, 6.5],
-      ['fastRise', 6, 6.5],
+      ['fastFall', 2, 2.5],
+      ['fastFall', 2, 2.5],
+      ['fastRise', 4, 4.5],
+      ['fastRise', 4, 4.5],
       ['lightShort', 48, null],
       ['matStuckOn', 10, 14.17],
       ['sensorFailed', 44.5, 46.5],
