@@ -80,25 +80,25 @@ export class KeepPlantingHistory1764552600000 implements MigrationInterface {
         DROP COLUMN harvested_grams, DROP COLUMN harvested_count`);
   }
 
-  /** What was written down before gets the events that leave it as it stands; how many were sown is not known of seedlings. */
+  /**
+   * What was written down before gets the events that leave it as it stands. Of what had begun to come up nobody wrote
+   * down how many were sown, so there is no more to count: these are seedlings.
+   */
   private async beginOlderPlantings(runner: QueryRunner): Promise<void> {
-    await runner.query(`
-      UPDATE planting SET origin = 'sown', sown = greatest(count, 1), up = CASE stage WHEN 'sown' THEN 0 ELSE count END
-      WHERE stage = 'sown' OR (stage = 'emerging' AND count > 0)`);
-    await runner.query(`UPDATE planting SET stage = 'seedling' WHERE stage = 'emerging' AND sown IS NULL`);
+    await runner.query(
+      `UPDATE planting SET origin = 'sown', sown = count, up = 0 WHERE stage = 'sown' AND count > 0`,
+    );
+    await runner.query(
+      `UPDATE planting SET stage = 'seedling' WHERE stage IN ('sown', 'emerging') AND sown IS NULL`,
+    );
     await runner.query(`
       INSERT INTO planting_event (planting_id, seq, at, kind, count, stage, shelf_id)
-      SELECT id, 0, started_at, CASE WHEN sown IS NULL THEN 'broughtIn' ELSE 'sown' END, coalesce(sown, count),
+      SELECT id, 0, started_at, CASE WHEN sown IS NULL THEN 'broughtIn' ELSE 'sown' END, count,
         CASE WHEN sown IS NULL AND stage <> 'ended' THEN stage END, shelf_id FROM planting`);
-    const laterDay = `(stage_since + time '12:00') AT TIME ZONE room.time_zone`;
     await runner.query(`
-      INSERT INTO planting_event (planting_id, seq, at, kind, count)
-      SELECT planting.id, 1, greatest(started_at, ${laterDay}), CASE stage WHEN 'ended' THEN 'ended' ELSE 'counted' END,
-        CASE stage WHEN 'ended' THEN NULL ELSE up END
-      FROM planting JOIN room ON room.id = room_id WHERE stage IN ('ended', 'emerging')`);
-    await runner.query(`
-      UPDATE planting SET first_up_at = event.at FROM planting_event AS event
-      WHERE event.planting_id = planting.id AND event.kind = 'counted'`);
+      INSERT INTO planting_event (planting_id, seq, at, kind)
+      SELECT planting.id, 1, greatest(started_at, (stage_since + time '12:00') AT TIME ZONE room.time_zone), 'ended'
+      FROM planting JOIN room ON room.id = room_id WHERE stage = 'ended'`);
     await runner.query(`
       INSERT INTO planting_place (planting_id, shelf_id, from_at, to_at)
       SELECT planting.id, planting.shelf_id, started_at, (SELECT at FROM planting_event AS event
