@@ -35,6 +35,7 @@ describe('the alerts page', () => {
     TestBed.inject(Session).load().subscribe();
     server.expectOne('/api/v1/account').flush(account({ memberships: [membership({ role })] }));
     harness = await RouterTestingHarness.create(url);
+    if (role !== 'viewer') server.expectOne(({ url: asked }) => asked.endsWith('/members')).flush([]);
     return harness.routeNativeElement as HTMLElement;
   }
 

@@ -1,10 +1,12 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input } from '@angular/core';
 import { Router } from '@angular/router';
 import { AlertInbox } from '../core/alert-inbox';
+import { Session } from '../core/session';
 import type { HistoryFilter } from './history/alert-history';
 import { filterOf } from './history/history-filter';
 import { HistoryList } from './history/history-list';
 import { OpenAlerts } from './open-alerts';
+import { RoomMembers } from './room-members';
 
 /** The alerts of the room: those open now, or all of them with those that are over. */
 @Component({
@@ -30,6 +32,10 @@ export class AlertsPage {
   protected readonly filter = computed(() =>
     filterOf({ shelf: this.shelf(), kind: this.kind(), month: this.month() }),
   );
+
+  constructor() {
+    if (inject(Session).may('helper')) inject(RoomMembers).want();
+  }
 
   protected showOpen(): void {
     void this.router.navigate([], { queryParams: {} });

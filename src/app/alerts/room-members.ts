@@ -36,9 +36,9 @@ export class RoomMembers {
     return error === undefined ? null : failureText(error);
   });
 
-  /** Fetches them; those known before are there meanwhile. */
+  /** Fetches them, unless they are there already. A page wants them early: a menu must not grow once it is open. */
   want(): void {
-    if (this.isWanted()) this.resource.reload();
+    if (this.resource.error() !== undefined) this.resource.reload();
     this.isWanted.set(true);
   }
 }

@@ -44,6 +44,7 @@ describe('the page of an alert', () => {
     harness = await RouterTestingHarness.create(`/alerts/${alert().id}`);
     page = harness.routeNativeElement as HTMLElement;
     TestBed.tick();
+    server.expectOne(`${room}/members`).flush([]);
     server
       .match(({ url }) => url === `${room}/alerts`)
       .forEach((one) => one.flush({ alerts: [], nextCursor: null }));

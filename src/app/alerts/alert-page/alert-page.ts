@@ -18,6 +18,7 @@ import { AlertCard } from '../alert-card/alert-card';
 import { isValueKind } from '../alert-values';
 import { EpisodeChart } from '../episode-chart/episode-chart';
 import { spanAround } from '../episode-chart/span-around';
+import { RoomMembers } from '../room-members';
 import { alertTimeLine } from './time-line';
 
 const mailsAgainMs = 60_000;
@@ -86,6 +87,7 @@ export class AlertPage {
   });
 
   constructor() {
+    if (this.session.may('helper')) inject(RoomMembers).want();
     const live = inject(LiveConnection);
     const changed = live.on('alert:changed').pipe(filter(({ id }) => id === this.alertId()));
     merge(changed, live.caughtUp)

@@ -1,17 +1,7 @@
-import {
-  afterRenderEffect,
-  ChangeDetectionStrategy,
-  Component,
-  computed,
-  inject,
-  input,
-  output,
-  signal,
-  viewChild,
-} from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, inject, input, output, signal } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { MatIcon } from '@angular/material/icon';
-import { MatMenuModule, MatMenuTrigger } from '@angular/material/menu';
+import { MatMenuModule } from '@angular/material/menu';
 import type { Alert } from '@shared/contracts/alerts';
 import { finalize, type Observable } from 'rxjs';
 import { newIdempotencyKey } from '../../core/api-client';
@@ -49,7 +39,6 @@ export class AlertActions {
   private readonly notices = inject(Notices);
   protected readonly members = inject(RoomMembers);
 
-  private readonly assigning = viewChild(MatMenuTrigger);
   protected readonly panel = signal<Panel | null>(null);
   protected readonly isBusy = signal(false);
   // One for each note: sending it again after a lost answer stores nothing twice.
@@ -58,14 +47,6 @@ export class AlertActions {
   protected readonly isOpen = computed(() => this.alert().clearedAt === null);
   protected readonly isSeen = computed(() => this.alert().acknowledgedAt !== null);
   protected readonly isQuiet = computed(() => isQuiet(this.alert(), this.clock.calmNow()));
-
-  constructor() {
-    afterRenderEffect(() => {
-      // The menu opens before its members are there, and must not grow off the screen.
-      this.members.caring();
-      this.assigning()?.updatePosition();
-    });
-  }
 
   protected toggle(panel: Panel): void {
     this.panel.update((shown) => (shown === panel ? null : panel));
