@@ -57,7 +57,8 @@ describe('the figures of a sowing', () => {
       againstStandard: 'lower' as const,
       age: 'pastLife' as const,
     };
-    expect(verdictWords(germination({ verdict }))).toEqual([
+    expect(verdictWords(germination({ verdict, isOpen: true }))).toEqual([]);
+    expect(verdictWords(germination({ verdict, isOpen: false }))).toEqual([
       'Came up fewer than the lot’s own test promised (80\u00a0%).',
       'That is fewer than the least for seed on sale (60\u00a0%, federal rules).',
       'The seed was past the life that the sources give it.',

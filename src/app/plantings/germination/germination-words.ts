@@ -32,7 +32,7 @@ export function germinationFacts(germination: GerminationView): readonly Germina
     {
       word: 'T50',
       meaning:
-        'The day by which half of those that came up were up, read between the counts before and after.',
+        'The day by which half of those that came up were up, read between the counts before and after. There is none where half were up at the first look.',
       value: dayWords(t50Days),
     },
     {
@@ -60,9 +60,12 @@ function decimals(days: number): number {
   return Number.isInteger(days) ? 0 : 1;
 }
 
-/** How the sowing compares with its lot's test and with the standard; empty while neither is known. */
-export function verdictWords({ verdict }: GerminationView): readonly string[] {
-  if (verdict === null) return [];
+/**
+ * How the sowing compares with its lot's test and with the standard; empty while neither is known, and while more may
+ * come: it would be judged by half of itself.
+ */
+export function verdictWords({ verdict, isOpen }: GerminationView): readonly string[] {
+  if (verdict === null || isOpen) return [];
   const against = { lower: 'fewer than', asExpected: 'about as', higher: 'more than' };
   const lines: string[] = [];
   if (verdict.againstLot !== null && verdict.lotPct !== null)
