@@ -98,12 +98,14 @@ export class ShelfData {
     const advice = this.newestAdvice();
     return advice?.shelfId === this.shelfId() ? advice : null;
   });
-  /** Care that is due on the shelf and not done. */
-  readonly openTasks = computed(() =>
-    (this.board.hasValue() ? this.board.value().tasks : []).filter(
-      ({ shelfId, doneAt }) => shelfId === this.shelfId() && doneAt === null,
-    ),
-  );
+  /** Care that is due on the shelf by now and not done. */
+  readonly openTasks = computed(() => {
+    if (!this.board.hasValue()) return [];
+    const { tasks, today } = this.board.value();
+    return tasks.filter(
+      ({ shelfId, doneAt, dueOn }) => shelfId === this.shelfId() && doneAt === null && dueOn <= today,
+    );
+  });
   /** The day of the room's calendar, `YYYY-MM-DD`; null until known. */
   readonly today = computed(() => (this.board.hasValue() ? this.board.value().today : null));
 

@@ -92,9 +92,11 @@ describe('what grows on a shelf asks for', () => {
     await shown(shelfAdvice(), 'helper', [
       task(),
       task({ id: inventedId(801), shelfId: inventedId(2), title: 'Elsewhere' }),
+      task({ id: inventedId(802), dueOn: '2026-12-03', title: 'In two days' }),
     ]);
     expect(text()).toContain('Feed strawberries');
     expect(text()).not.toContain('Elsewhere');
+    expect(text()).not.toContain('In two days');
     const loader = TestbedHarnessEnvironment.documentRootLoader(fixture);
     await (await loader.getHarness(MatButtonHarness.with({ text: 'Done' }))).click();
     const completion = `${base}/tasks/${task().id}/completion`;

@@ -53,6 +53,12 @@ export class PlanRow {
     }));
     return sowings.length === 0 ? null : sowings;
   });
+  /** How its sowings follow each other, for the button that changes it. */
+  protected readonly interval = computed(() => {
+    const { everyDays } = this.plan();
+    if (everyDays === null) return 'Sow bit by bit';
+    return everyDays === 1 ? 'Every day' : `Every ${everyDays} days`;
+  });
   protected readonly sources = computed(() =>
     this.plan().bySource.map(({ opens, closes, source }) => ({
       words: `${this.dayWords(opens)} to ${this.dayWords(closes)}`,
