@@ -9,7 +9,7 @@ import { matchingCrops, type PickedCrop } from './matching-crops';
 @Component({
   selector: 'app-crop-picker',
   template: `
-    <mat-form-field appearance="outline" subscriptSizing="dynamic">
+    <mat-form-field appearance="outline" subscriptSizing="dynamic" hideRequiredMarker>
       <mat-label>Crop</mat-label>
       <input
         matInput
