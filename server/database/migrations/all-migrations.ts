@@ -10,8 +10,8 @@ import { CreateRequestCounters1764551600000 } from './1764551600000-create-reque
 import { CreateSocketAttachments1764551700000 } from './1764551700000-create-socket-attachments';
 import { TellPeopleByChoice1764551800000 } from './1764551800000-tell-people-by-choice';
 import { AnswerAlerts1764552100000 } from './1764552100000-answer-alerts';
-import { CreateCrops1764552400000 } from './1764552400000-create-crops';
 import { TellOffShelfReadings1764552300000 } from './1764552300000-tell-off-shelf-readings';
+import { CreateCrops1764552400000 } from './1764552400000-create-crops';
 import { CreateSeed1764552500000 } from './1764552500000-create-seed';
 import { WaitForSecondLook1764552550000 } from './1764552550000-wait-for-second-look';
 import { KeepPlantingHistory1764552600000 } from './1764552600000-keep-planting-history';
@@ -35,8 +35,8 @@ export const migrations = [
   CreateSocketAttachments1764551700000,
   TellPeopleByChoice1764551800000,
   AnswerAlerts1764552100000,
-  CreateCrops1764552400000,
   TellOffShelfReadings1764552300000,
+  CreateCrops1764552400000,
   CreateSeed1764552500000,
   WaitForSecondLook1764552550000,
   KeepPlantingHistory1764552600000,
