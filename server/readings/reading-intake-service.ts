@@ -71,7 +71,7 @@ export class ReadingIntakeService {
     const positions: { sensor: SensorOnRoad; position: StreamPosition }[] = [];
     const outcome = await this.transactions.run(async (tx) => {
       // A file that fills the same sensors may take a minute; whoever waited for it with a connection would keep others out.
-      if (origin.isLive) await tx.query(`SET LOCAL lock_timeout = '3s'`);
+      if (origin.isLive) await tx.query(`SET LOCAL lock_timeout = '6s'`);
       const sensors = await this.lock(tx, [...bySensor.keys()]);
       const work = await this.takeAll(tx, sensors, bySensor);
       const stored = work.filter(({ fresh }) => fresh.length > 0);
