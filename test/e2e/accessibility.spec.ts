@@ -2,6 +2,8 @@ import { mkdirSync } from 'node:fs';
 import { join } from 'node:path';
 import type { Page } from 'playwright-core';
 import { ShelfEntity } from '../../server/rooms/shelf-entity';
+import { RoomFrostEntity } from '../../server/sowing/room-frost-entity';
+import { SowingChoiceEntity } from '../../server/sowing/sowing-choice-entity';
 import { anAlert } from '../builders/alerts';
 import { seriousViolations } from './harness/accessibility';
 import { prepareJourney } from './harness/journey';
@@ -28,7 +30,16 @@ describe('every screen', () => {
   beforeAll(async () => {
     const { application } = journey;
     const tx = application.database.dataSource.manager;
-    shelfId = (await tx.findOneByOrFail(ShelfEntity, { label: 'A1' })).id;
+    const { id, roomId } = await tx.findOneByOrFail(ShelfEntity, { label: 'A1' });
+    shelfId = id;
+    // Sown now, in weeks, and with an onion that does not suit the place.
+    const lastSpring = { on: '05-12', wording: { kind: 'probability' as const, percent: 50 } };
+    await tx.save(RoomFrostEntity, { roomId, lastSpring, firstAutumn: null, note: '' });
+    const crops = ['celery', 'leek', 'lettuce-head', 'onion-short-day', 'tomato'];
+    await tx.save(
+      SowingChoiceEntity,
+      crops.map((cropId) => ({ roomId, cropId, everyDays: cropId === 'lettuce-head' ? 14 : null })),
+    );
     const ago = (hours: number): Date => new Date(Date.now() - hours * HOUR_MS);
     await anAlert(tx, { shelfId, beganAt: ago(3), openedAt: ago(2.5), peakAt: ago(2) });
     await application.startSimulator();
@@ -97,6 +108,24 @@ describe('every screen', () => {
       .first()
       .waitFor();
     await inspect('loggers');
+
+    await page.goto(`${address}/sowing`);
+    await page.getByRole('img', { name: /^Length of the day/ }).waitFor();
+    await page.locator('summary', { hasText: 'Leek' }).click();
+    await inspect('sowing');
+    await page.getByRole('button', { name: 'Change the frost dates' }).click();
+    await page.getByRole('heading', { name: 'Frost dates of this place' }).waitFor();
+    await inspect('sowing-frost');
+
+    await page.goto(`${address}/crops`);
+    await page.getByRole('link', { name: /^Leek/ }).waitFor();
+    await inspect('crops');
+    await page.goto(`${address}/crops/onion-long-day`);
+    await page
+      .getByRole('button', { name: /^Who says/ })
+      .first()
+      .click();
+    await inspect('crop');
 
     await page.goto(`${address}/account`);
     await page.getByRole('heading', { level: 1, name: 'Your account' }).waitFor();
