@@ -3,7 +3,7 @@ import { MatIcon } from '@angular/material/icon';
 
 let shown = 0;
 
-/** A word of the trade with its meaning behind a button. */
+/** Words with what there is to say about them behind a button. */
 @Component({
   selector: 'app-explained',
   template: `
@@ -11,12 +11,12 @@ let shown = 0;
       >{{ word()
       }}<button
         type="button"
-        [attr.aria-label]="'What is ' + word() + '?'"
+        [attr.aria-label]="question() ?? 'What is ' + word() + '?'"
         [attr.aria-expanded]="isOpen()"
         [attr.aria-controls]="id"
         (click)="isOpen.set(!isOpen())"
       >
-        <mat-icon aria-hidden="true">help</mat-icon>
+        <mat-icon aria-hidden="true">{{ icon() }}</mat-icon>
       </button></span
     >
     <span class="meaning" role="note" [id]="id" [hidden]="!isOpen()">{{ meaning() }}</span>
@@ -28,6 +28,9 @@ let shown = 0;
 export class Explained {
   readonly word = input.required<string>();
   readonly meaning = input.required<string>();
+  /** What the button asks; null asks what the word is. */
+  readonly question = input<string | null>(null);
+  readonly icon = input('help');
 
   protected readonly id = `explained-${(shown += 1)}`;
   protected readonly isOpen = signal(false);

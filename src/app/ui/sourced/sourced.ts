@@ -1,29 +1,24 @@
-import { ChangeDetectionStrategy, Component, computed, input, signal } from '@angular/core';
-import { MatIcon } from '@angular/material/icon';
+import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
+import { Explained } from '../explained/explained';
 import { sourceWords } from './source-words';
-
-let shown = 0;
 
 /** A figure with who says so behind a button. */
 @Component({
   selector: 'app-sourced',
   template: `
-    <span class="figure"
-      >{{ figure()
-      }}<button
-        type="button"
-        [attr.aria-label]="'Who says ' + figure() + '?'"
-        [attr.aria-expanded]="isOpen()"
-        [attr.aria-controls]="id"
-        (click)="isOpen.set(!isOpen())"
-      >
-        <mat-icon aria-hidden="true">menu_book</mat-icon>
-      </button></span
-    >
-    <span class="source" role="note" [id]="id" [hidden]="!isOpen()">{{ words() }}</span>
+    <app-explained
+      icon="menu_book"
+      [word]="figure()"
+      [meaning]="words()"
+      [question]="'Who says ' + figure() + '?'"
+    />
   `,
-  styleUrl: './sourced.scss',
-  imports: [MatIcon],
+  styles: `
+    :host {
+      display: inline-block;
+    }
+  `,
+  imports: [Explained],
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class Sourced {
@@ -31,7 +26,5 @@ export class Sourced {
   readonly figure = input.required<string>();
   readonly source = input.required<string>();
 
-  protected readonly id = `source-${(shown += 1)}`;
-  protected readonly isOpen = signal(false);
   protected readonly words = computed(() => sourceWords(this.source()));
 }
