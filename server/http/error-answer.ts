@@ -101,6 +101,8 @@ export const errorAnswer: ErrorRequestHandler = (error: unknown, req, res, next)
     return;
   }
   const problem = asProblem(error);
-  if (problem.status >= 500) req.log.error({ err: error }, 'request failed');
+  // Whoever is told to wait a moment met no fault.
+  if (problem.status >= 500)
+    req.log[problem.code === 'BUSY' ? 'warn' : 'error']({ err: error }, 'request failed');
   sendProblem(res, problem);
 };

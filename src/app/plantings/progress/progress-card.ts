@@ -9,6 +9,7 @@ import { Chart } from '../../ui/chart/chart';
 import type { ChartLine, ChartPoint, WantedSpan } from '../../ui/chart/chart-data';
 import { Explained } from '../../ui/explained/explained';
 import { NoteLine } from '../../ui/note-line/note-line';
+import { Sourced } from '../../ui/sourced/sourced';
 import { ErrorState } from '../../ui/states/error-state';
 import { LoadingLines } from '../../ui/states/loading-lines';
 import { PlantingData } from '../planting/planting-data';
@@ -21,7 +22,7 @@ const hourMs = 3_600_000;
   selector: 'app-progress-card',
   templateUrl: './progress-card.html',
   styleUrl: './progress-card.scss',
-  imports: [Chart, ErrorState, Explained, LoadingLines, NoteLine],
+  imports: [Chart, ErrorState, Explained, LoadingLines, NoteLine, Sourced],
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class ProgressCard {
@@ -54,10 +55,10 @@ export class ProgressCard {
     const still =
       low === null || high === null
         ? ''
-        : `, ${formatNumber(low, 0)} to ${formatValue(high, '°C·d', 0)} from now at the present warmth`;
+        : `${formatNumber(low, 0)} to ${formatValue(high, '°C·d', 0)} from now at the present warmth`;
     const from = this.format.day(earliest);
     const to = this.format.day(latest);
-    return { words: `${from === to ? from : `${from} to ${to}`}${still}`, source };
+    return { days: from === to ? from : `${from} to ${to}`, still, source };
   });
   protected readonly light = computed(() => {
     const light = this.progress()?.light ?? null;
