@@ -45,35 +45,56 @@ export class SecondLookJob {
     if (quiet.length > 0) await this.look([], quiet);
     for (;;) {
       const unjudged = await looks.unjudged(transactions.plain, MOST_AT_ONCE);
-      if (unjudged.length > 0) await this.look(unjudged, []);
-      if (unjudged.length < MOST_AT_ONCE) return;
+      const judged = unjudged.length > 0 ? await this.look(unjudged, []) : 0;
+      if (judged === 0 || unjudged.length < MOST_AT_ONCE) return;
     }
   }
 
-  private async look(unjudged: readonly UnjudgedSensor[], quietDevices: readonly string[]): Promise<void> {
+  /**
+   * Looks at the shelves and devices of some sensors, save those of which somebody holds a sensor: waiting for it with the
+   * others locked would keep live readings out. Those stay for the next run.
+   *
+   * @returns How many of the unjudged sensors have been looked at.
+   */
+  private async look(unjudged: readonly UnjudgedSensor[], quietDevices: readonly string[]): Promise<number> {
     const { transactions, readings, looks, shelves, light, devices, keeper } = this.parts;
     const now = this.parts.now().getTime();
-    const shelfIds = distinct(unjudged.map(({ shelfId }) => shelfId));
-    const deviceIds = distinct([...unjudged.map(({ deviceId }) => deviceId), ...quietDevices]);
-    const changed = await transactions.run(async (tx) => {
-      const ids = await looks.sensorsOf(tx, shelfIds, deviceIds);
-      const sensors = await readings.lockSensors(tx, [...new Set([...ids, ...unjudged.map(({ id }) => id)])]);
+    const { changed, judged } = await transactions.run(async (tx) => {
+      const all = {
+        shelfIds: distinct(unjudged.map(({ shelfId }) => shelfId)),
+        deviceIds: devicesOf(unjudged, quietDevices),
+      };
+      const wanted = [
+        ...(await looks.sensorsOf(tx, all.shelfIds, all.deviceIds)),
+        ...unjudged.map(({ id }) => id),
+      ];
+      const held = await looks.lockFree(tx, distinct(wanted));
+      const free = unjudged.filter(
+        ({ shelfId, deviceId }) => !held.shelfIds.has(shelfId) && !held.deviceIds.has(deviceId),
+      );
+      const freeIds = free.map(({ id }) => id);
+      const shelfIds = distinct(free.map(({ shelfId }) => shelfId));
+      const deviceIds = devicesOf(free, quietDevices).filter((id) => !held.deviceIds.has(id));
+      const beside = (await looks.sensorsOf(tx, shelfIds, deviceIds)).filter((id) => wanted.includes(id));
+      const sensors = await readings.lockSensors(tx, distinct([...beside, ...freeIds]));
       const onShelves = sensors.filter(({ shelfId }) => shelfId !== null && shelfIds.includes(shelfId));
       const folded = [
         ...(await shelves.lookAt(tx, onShelves)),
         ...(await light.lookAt(tx, onShelves)),
         ...(await devices.lookAt(tx, sensors, deviceIds, now)),
       ];
-      await looks.noteJudged(
-        tx,
-        unjudged.map(({ id }) => id),
-      );
-      return keeper.keep(tx, folded, { isLive: true, now });
+      await looks.noteJudged(tx, freeIds);
+      return { changed: await keeper.keep(tx, folded, { isLive: true, now }), judged: free.length };
     });
     await this.parts.alerts.publishChanged(changed);
+    return judged;
   }
 }
 
 function distinct(ids: readonly (string | null)[]): string[] {
   return [...new Set(ids.filter((id) => id !== null))];
+}
+
+function devicesOf(sensors: readonly UnjudgedSensor[], others: readonly string[]): string[] {
+  return distinct([...sensors.map(({ deviceId }) => deviceId), ...others]);
 }

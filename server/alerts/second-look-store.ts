@@ -15,6 +15,12 @@ export interface UnjudgedSensor {
   readonly deviceId: string | null;
 }
 
+/** Where sensors are that somebody else holds. */
+export interface HeldPlaces {
+  readonly shelfIds: ReadonlySet<string | null>;
+  readonly deviceIds: ReadonlySet<string | null>;
+}
+
 /** Readings of a sensor in [from, to) [ms]; `from` is a whole minute. */
 export interface ReadingSpan {
   readonly sensorId: string;
@@ -73,6 +79,31 @@ export class SecondLookStore {
       [shelfIds, deviceIds],
     );
     return rows.map(({ id }) => id);
+  }
+
+  /**
+   * Locks those of some sensors that nobody else holds.
+   *
+   * @returns Shelves and devices of the others, which are held by live batches for moments and by files for as long as
+   *   those come in.
+   */
+  async lockFree(tx: Tx, sensorIds: readonly string[]): Promise<HeldPlaces> {
+    const locked: { id: string }[] = await tx.query(
+      'SELECT id FROM sensor WHERE id = ANY($1) ORDER BY id FOR NO KEY UPDATE SKIP LOCKED',
+      [sensorIds],
+    );
+    const free = new Set(locked.map(({ id }) => id));
+    const held = sensorIds.filter((id) => !free.has(id));
+    if (held.length === 0) return { shelfIds: new Set(), deviceIds: new Set() };
+    const rows: { shelf_id: string | null; device_id: string }[] = await tx.query(
+      `SELECT p.shelf_id, s.device_id FROM sensor s
+       LEFT JOIN placement p ON p.sensor_id = s.id AND p.to_at IS NULL WHERE s.id = ANY($1)`,
+      [held],
+    );
+    return {
+      shelfIds: new Set(rows.map((row) => row.shelf_id)),
+      deviceIds: new Set(rows.map((row) => row.device_id)),
+    };
   }
 
   /** Notes that sensors have had their second look. */

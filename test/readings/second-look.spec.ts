@@ -169,6 +169,26 @@ describe('the second look at readings', () => {
     ]);
   });
 
+  it('waits for no sensor that somebody holds, and looks at its shelf later', async () => {
+    const road = roadOver(database.dataSource, litByDay);
+    const [held, other] = [await sensorsOfTwoDevices(tx), await sensorsOfTwoDevices(tx)];
+    await send(road, held, [readings], now);
+    await send(road, other, [readings], now);
+    const holder = database.dataSource.createQueryRunner();
+    await holder.startTransaction();
+    await holder.query('SELECT FROM sensor WHERE id = $1 FOR UPDATE', [held.air]);
+    await lookAgain(road, litByDay, now);
+    const kinds = async (sensors: NamedSensors): Promise<Set<AlertKind>> =>
+      new Set((await alertsOf(tx, sensors)).map(({ kind }) => kind));
+    expect(await kinds(other)).toContain('matStuckOn');
+    expect(await kinds(held)).not.toContain('matStuckOn');
+
+    await holder.rollbackTransaction();
+    await holder.release();
+    await lookAgain(road, litByDay, now);
+    expect(await alertsOf(tx, held)).toEqual(await alertsOf(tx, other));
+  });
+
   it('comes to the same whatever the order and the batches, live or from a file, looked at early or late', async () => {
     const reference = await afterOneBatch();
     const ways = fc.record({
