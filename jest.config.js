@@ -31,7 +31,6 @@ const node = {
 module.exports = {
   testTimeout: 120_000, // Real databases and browsers; no test asserts a time.
   workerIdleMemoryLimit: '1GB',
-  maxWorkers: '100%', // Jest would leave a core for whoever sits at it, which on two is half of them.
   projects: [
     {
       ...node,
