@@ -171,10 +171,11 @@ describe('rooms', () => {
   describe('lamps and heat mats', () => {
     it('of a kind get the usual factor, unless another was measured', async () => {
       const { id } = await shelfHere();
-      const fit = (body: object) => staff.keeper.post(`${staff.path}/shelves/${id}/lamps`, body).expect(201);
+      const fitLamp = (body: object) =>
+        staff.keeper.post(`${staff.path}/shelves/${id}/lamps`, body).expect(201);
 
-      await fit({ kind: 'fluorescent', watts: 56, fittedOn: '2026-01-02' });
-      const reply = await fit({ kind: 'whiteLed', watts: 40, luxPerUmol: 71.5, fittedOn: '2026-01-03' });
+      await fitLamp({ kind: 'fluorescent', watts: 56, fittedOn: '2026-01-02' });
+      const reply = await fitLamp({ kind: 'whiteLed', watts: 40, luxPerUmol: 71.5, fittedOn: '2026-01-03' });
 
       // Thimijan & Heins (1983): 74 lx per µmol m⁻² s⁻¹ under cool white fluorescent lamps.
       expect((reply.body as Shelf).lamps.map(({ luxPerUmol }) => luxPerUmol)).toEqual([74, 71.5]);
