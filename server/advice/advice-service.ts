@@ -1,3 +1,4 @@
+import { hoursADay } from '@shared/climate/daily-lamp-hours';
 import type { ShelfAdviceView } from '@shared/contracts/advice';
 import type { Task } from '@shared/contracts/care';
 import type { Shelf, WantedRange } from '@shared/contracts/rooms';
@@ -50,7 +51,6 @@ interface Changed {
 
 /** Temperatures without the mat are those of so long. */
 const UNHEATED_SPAN_MS = 72 * 3_600_000;
-const HOUR_MIN = 60;
 
 /**
  * Keeps advice on shelves: what stands there and how far it is says what lamps, mat and air should be. It sets the wanted
@@ -137,7 +137,7 @@ export class AdviceService {
         label: shelf.label,
         plantings: namedShortly(here, standing.get(shelf.id) ?? []),
         hasLamp: shelf.lamps.length > 0,
-        lampHours: shelf.lamps.length === 0 ? null : lampHoursOf(shelf),
+        lampHours: shelf.lamps.length === 0 ? null : hoursADay(shelf.lampHours),
         hasHeatMat: shelf.heatMat !== null,
         isHeatMatOn: shelf.heatMat?.isOn ?? null,
         unheatedC: unheatedC(
@@ -222,17 +222,6 @@ function namedShortly(
     const isAlone = entities.filter((other) => other.crop === crop).length === 1;
     return isAlone ? { ...planting, name: crop } : planting;
   });
-}
-
-function lampHoursOf({ lampHours: { switchesOn, switchesOff } }: Shelf): number {
-  if (switchesOn === null || switchesOff === null) return 0;
-  const minutes = minutesOf(switchesOff) - minutesOf(switchesOn);
-  const day = 24 * HOUR_MIN;
-  return minutes === 0 ? 24 : ((minutes + day) % day) / HOUR_MIN;
-}
-
-function minutesOf(clock: string): number {
-  return Number(clock.slice(0, 2)) * HOUR_MIN + Number(clock.slice(3));
 }
 
 /** A mat that is on warms the roots, so that only the air tells what the shelf is without it. */

@@ -4,6 +4,8 @@ import { catchError, finalize, from, switchMap, throwError, type Observable } fr
 import { ApiFailure } from '../core/api-failure';
 import { failureText } from '../core/failure-text';
 import { Notices } from '../core/notices';
+import type { PlanQuestion } from '../core/plan-change';
+import { PlanChanges } from '../core/plan-changes';
 import { ReaderFormat } from '../core/reader-format';
 import { Session } from '../core/session';
 import { NoteLine } from '../ui/note-line/note-line';
@@ -42,6 +44,7 @@ export class Room {
   private readonly notices = inject(Notices);
   private readonly format = inject(ReaderFormat);
   private readonly injector = inject(Injector);
+  private readonly plans = inject(PlanChanges);
 
   protected readonly board = this.room.board;
   protected readonly alertsByShelf = this.room.alertsByShelf;
@@ -91,8 +94,8 @@ export class Room {
     this.carryOut(task.id, this.room.tick(task, isDone)).subscribe({
       next: (changed) => {
         if (!isDone) return;
-        this.notices
-          .sayUndoable(`Ticked: ${task.title}`)
+        this.plans
+          .sayTicked(task, (question) => this.ask(question))
           .subscribe(() => this.tick({ task: changed, isDone: false }));
       },
       error: (error: unknown) => this.notices.sayFailure(error),
@@ -102,9 +105,8 @@ export class Room {
   protected noteObservation(): void {
     const roomId = this.session.roomId();
     if (roomId === null) return;
-    from(import('./observation-dialog/open-observation'))
+    fetched(import('./observation-dialog/open-observation'))
       .pipe(
-        catchError((cause: unknown) => throwError(() => new ApiFailure('offline', { cause }))),
         switchMap(({ openObservation }) =>
           openObservation(this.injector, { roomId, shelves: this.shelves() }),
         ),
@@ -117,10 +119,23 @@ export class Room {
       });
   }
 
+  /** Dialogs are fetched once they are wanted: the room opens sooner without them. */
+  private ask(question: PlanQuestion): Observable<boolean> {
+    return fetched(import('../ui/dialogs/asking')).pipe(
+      switchMap(({ Asking }) => this.injector.get(Asking).ask(question)),
+    );
+  }
+
   private carryOut<T>(id: string, deed: Observable<T>): Observable<T> {
     this.busyIds.update((ids) => new Set([...ids, id]));
     return deed.pipe(
       finalize(() => this.busyIds.update((ids) => new Set([...ids].filter((busy) => busy !== id)))),
     );
   }
+}
+
+function fetched<T>(module: Promise<T>): Observable<T> {
+  return from(module).pipe(
+    catchError((cause: unknown) => throwError(() => new ApiFailure('offline', { cause }))),
+  );
 }

@@ -6,8 +6,11 @@ import { completeTask, reopenTask, type Task } from '@shared/contracts/care';
 import { finalize } from 'rxjs';
 import { ApiClient } from '../../core/api-client';
 import { Notices } from '../../core/notices';
+import { lampPlanChange, matPlanChange, planQuestion, type PlanChange } from '../../core/plan-change';
+import { PlanChanges } from '../../core/plan-changes';
 import { ReaderFormat } from '../../core/reader-format';
 import { Session } from '../../core/session';
+import { Asking } from '../../ui/dialogs/asking';
 import { NoteLine } from '../../ui/note-line/note-line';
 import { Sourced } from '../../ui/sourced/sourced';
 import { ShelfData } from '../shelf-data';
@@ -27,9 +30,12 @@ export class ShelfAdviceCard {
   private readonly notices = inject(Notices);
   private readonly session = inject(Session);
   private readonly data = inject(ShelfData);
+  private readonly plans = inject(PlanChanges);
+  private readonly asking = inject(Asking);
 
   protected readonly advice = this.data.advice;
   protected readonly mayTick = computed(() => this.session.may('helper'));
+  private readonly mayPlan = computed(() => this.session.may('grower'));
   /** Tasks that are being ticked. */
   protected readonly busyIds = signal<ReadonlySet<string>>(new Set());
 
@@ -37,20 +43,24 @@ export class ShelfAdviceCard {
     const advice = this.advice();
     if (advice === null) return [];
     const { lamps, heatMat } = advice;
+    const shelf = this.data.detail()?.shelf ?? null;
+    const change = (of: typeof lampPlanChange): PlanChange | null =>
+      shelf === null || !this.mayPlan() ? null : of(shelf, advice);
     const lampLine = {
       icon: lamps.state === 'on' ? 'lightbulb' : 'light_off',
       text: lampText(lamps),
       reason: lamps.reason,
       change: changeText(lamps.change),
+      plan: change(lampPlanChange),
     };
     const matLine = {
       icon: heatMat.state === 'on' ? 'mode_heat' : 'mode_heat_off',
       text: matText(heatMat),
       reason: heatMat.reason,
       change: changeText(heatMat.change),
+      plan: change(matPlanChange),
     };
-    const hasMat = (this.data.detail()?.shelf.heatMat ?? null) !== null;
-    return hasMat || heatMat.state !== 'off' ? [lampLine, matLine] : [lampLine];
+    return (shelf?.heatMat ?? null) !== null || heatMat.state !== 'off' ? [lampLine, matLine] : [lampLine];
   });
   protected readonly wanted = computed(() => {
     const ranges = this.data.detail()?.wantedRanges ?? [];
@@ -71,6 +81,12 @@ export class ShelfAdviceCard {
     })),
   );
 
+  protected changePlan(change: PlanChange): void {
+    this.asking.ask(planQuestion(change)).subscribe((isWanted) => {
+      if (isWanted) this.plans.make(change);
+    });
+  }
+
   protected tick(task: Task): void {
     const params = this.data.params();
     if (params === undefined) return;
@@ -82,14 +98,18 @@ export class ShelfAdviceCard {
       .subscribe({
         next: () => {
           this.data.refreshBoard();
-          this.notices.sayUndoable(`Ticked: ${task.title}`).subscribe(() =>
-            this.api.call(reopenTask, { params: taskParams }).subscribe({
-              next: () => this.data.refreshBoard(),
-              error: (error: unknown) => this.notices.sayFailure(error),
-            }),
-          );
+          this.plans
+            .sayTicked(task, (question) => this.asking.ask(question))
+            .subscribe(() => this.reopen(taskParams));
         },
         error: (error: unknown) => this.notices.sayFailure(error),
       });
+  }
+
+  private reopen(params: { readonly roomId: string; readonly taskId: string }): void {
+    this.api.call(reopenTask, { params }).subscribe({
+      next: () => this.data.refreshBoard(),
+      error: (error: unknown) => this.notices.sayFailure(error),
+    });
   }
 }

@@ -1,20 +1,11 @@
 import type { WantedRange } from '@shared/contracts/rooms';
 import { planting } from '../../core/testing/board-builder';
-import { lampWords, matWords, plannedHours, rangeWords } from './wants-words';
+import { lampWords, matWords, rangeWords } from './wants-words';
 
 const lamp = { id: '', kind: 'whiteLed', watts: 46, luxPerUmol: 70, fittedOn: '2026-03-02' } as const;
 const hours = (switchesOn: string | null, switchesOff: string | null) => ({ switchesOn, switchesOff });
 
 describe('planned lamp hours', () => {
-  it.each([
-    ['06:00', '22:00', 16],
-    ['20:00', '06:30', 10.5],
-    ['06:00', '06:00', 24],
-    [null, null, 0],
-  ])('from %s to %s are %d', (on, off, expected) => {
-    expect(plannedHours(hours(on, off))).toBe(expected);
-  });
-
   it.each([
     [[lamp], hours('06:00', '22:00'), 'Lamps 06:00–22:00', '16 h a day'],
     [[lamp], hours('20:00', '06:30'), 'Lamps 20:00–06:30', '10.5 h a day'],

@@ -1,6 +1,7 @@
+import { hoursADay } from '@shared/climate/daily-lamp-hours';
 import type { Quantity } from '@shared/climate/quantity';
 import type { PlantingSummary } from '@shared/contracts/board';
-import type { LampHours, RangeSource, Shelf, WantedRange } from '@shared/contracts/rooms';
+import type { RangeSource, Shelf, WantedRange } from '@shared/contracts/rooms';
 import { formatNumber, type TemperatureUnit } from '@shared/format/numbers';
 import { formatQuantityRange } from '@shared/format/quantities';
 import { quantityTitle } from '../quantity-title';
@@ -12,19 +13,10 @@ export interface WantLine {
   readonly reason: string;
 }
 
-const minutesOfDay = 24 * 60;
-
-/** Hours that lamps are planned on each day. @returns 0 to 24. */
-export function plannedHours({ switchesOn, switchesOff }: LampHours): number {
-  if (switchesOn === null || switchesOff === null) return 0;
-  const minutes = (minuteOf(switchesOff) - minuteOf(switchesOn) + minutesOfDay) % minutesOfDay;
-  return (minutes === 0 ? minutesOfDay : minutes) / 60;
-}
-
 /** The lamp hours in words. */
 export function lampWords({ lamps, lampHours }: Pick<Shelf, 'lamps' | 'lampHours'>): WantLine {
   if (lamps.length === 0) return { text: 'No lamp fitted', reason: '' };
-  const hours = plannedHours(lampHours);
+  const hours = hoursADay(lampHours);
   if (hours === 0) return { text: 'Lamps off all day', reason: 'This shelf is kept dark.' };
   const reason = `${formatNumber(hours, Number.isInteger(hours) ? 0 : 1)} h a day`;
   return hours === 24
@@ -83,9 +75,4 @@ export const quantityIcons: Readonly<Record<Quantity, string>> = {
 /** A range that stays on one line: a browser may break after a dash. */
 function unbroken(range: string): string {
   return range.replace('–', '\u2060–\u2060');
-}
-
-function minuteOf(clockTime: string): number {
-  const [hours = 0, minutes = 0] = clockTime.split(':').map(Number);
-  return hours * 60 + minutes;
 }
