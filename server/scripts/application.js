@@ -2,6 +2,7 @@ const { randomBytes } = require('node:crypto');
 const { join } = require('node:path');
 const { startProgram } = require('./child-program');
 const { portFor } = require('./free-port');
+const { withProgress } = require('./progress');
 
 const usualPorts = { web: 4280, mailboxPage: 4380, mailboxSmtp: 4525, simulator: 4480 };
 
@@ -51,18 +52,14 @@ async function startApplication({ folder, env, log, signal, defer }) {
   const mail = isSet(env['SMTP_URL']) ? {} : await startMailbox(start, env, log);
   const hasSimulator = env['LAMPMEADOW_DEMO'] !== 'off';
   const control = hasSimulator ? await controlOf(env, log) : null;
-  const { address, notes } = await start('server', 'The server', {
-    PORT: String(web),
-    ...mail,
-    ...devices,
-    ...control?.forServer,
-  });
+  const { address, notes } = await withProgress('Starting the server', log, () =>
+    start('server', 'The server', { PORT: String(web), ...mail, ...devices, ...control?.forServer }),
+  );
   if (control !== null) {
-    await start('simulator', 'The simulator', {
-      LAMPMEADOW_URL: address,
-      ...devices,
-      ...control.forSimulator,
-    });
+    // At the first start that is a hundred days of readings.
+    await withProgress('Bringing the demonstration room up to now', log, () =>
+      start('simulator', 'The simulator', { LAMPMEADOW_URL: address, ...devices, ...control.forSimulator }),
+    );
   }
   return { address, notes, failed: Promise.race(programs.map((program) => program.failed)) };
 }
