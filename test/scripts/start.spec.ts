@@ -42,7 +42,9 @@ describe('npm start', () => {
   it('builds, starts everything, refuses a second one beside it, and ends with a killed npm', async () => {
     const first = npmStart();
     await until(() => first.said().includes('Ctrl-C'));
-    expect(first.said()).toMatch(/Building the server[^]*Building the pages[^]*Starting the server[^]*Lampmeadow is at http:/);
+    expect(first.said()).toMatch(
+      /Building the server[^]*Building the pages[^]*Starting the server[^]*Lampmeadow is at http:/,
+    );
     expect(first.said()).toContain('/lampmeadow\n'); // the server was given our database
 
     const second = npmStart();
