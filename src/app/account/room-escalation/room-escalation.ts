@@ -58,7 +58,7 @@ import { Notices } from '../../core/notices';
     .times {
       display: grid;
       grid-template-columns: repeat(auto-fit, minmax(200px, 1fr));
-      gap: 0 14px;
+      gap: 14px;
     }
   `,
   imports: [MatFormFieldModule, MatSelectModule],
