@@ -30,6 +30,7 @@ import { PlantingStartService } from './plantings/planting-start-service';
 import { plantingsRoutes } from './plantings/plantings-routes';
 import { PlantingsService } from './plantings/plantings-service';
 import { PlantingsStore } from './plantings/plantings-store';
+import { LightShortages } from './progress/light-shortages';
 import { progressRoutes } from './progress/progress-routes';
 import { ProgressService } from './progress/progress-service';
 import { ShelfLight } from './progress/shelf-light';
@@ -133,14 +134,20 @@ export function growingServices(foundation: GrowingFoundation): GrowingServices 
 
   const seriesStore = new SeriesStore();
   const warmth = new ShelfWarmth(seriesStore);
+  const light = new ShelfLight(seriesStore);
+  const shortages = new LightShortages({
+    rooms,
+    plans,
+    light,
+    placesOf: (...of) => plantings.placesOf(...of),
+  });
   const progress = new ProgressService({
     transactions,
     plantings,
     crops,
-    rooms,
-    plans,
     warmth,
-    light: new ShelfLight(seriesStore),
+    light,
+    shortages,
     now,
   });
   const germination = new GerminationService({
@@ -167,6 +174,7 @@ export function growingServices(foundation: GrowingFoundation): GrowingServices 
       set: (...of) => foundation.plansStore.setWantedRange(...of),
       clear: (...of) => foundation.plansStore.clearWantedRange(...of),
     },
+    shortageOf: (...of) => shortages.shortageOf(...of),
     hooks: foundation.hooks,
     tasks: foundation.openTasks,
     feed: foundation.feed,

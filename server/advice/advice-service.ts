@@ -1,11 +1,12 @@
 import { hoursADay } from '@shared/climate/daily-lamp-hours';
 import type { ShelfAdviceView } from '@shared/contracts/advice';
 import type { Task } from '@shared/contracts/care';
-import type { Shelf, WantedRange } from '@shared/contracts/rooms';
+import type { Room, Shelf, WantedRange } from '@shared/contracts/rooms';
 import type { AdvisedShelf } from '@shared/growing/advice/advice';
 import { adviceSubjects, adviceTasks, type AdviceTask } from '@shared/growing/advice/advice-tasks';
 import { adviseShelf, type ShelfAdvice } from '@shared/growing/advice/shelf-advice';
 import type { StandingPlanting } from '@shared/growing/advice/standing-planting';
+import type { LightShortage } from '@shared/growing/light-need';
 import { dayBounds } from '@shared/series/room-days';
 import { isDeepStrictEqual } from 'node:util';
 import type { OpenTask } from '../care/open-tasks';
@@ -15,6 +16,7 @@ import type { Transactions, Tx } from '../database/transactions';
 import { notFound } from '../http/request-problem';
 import type { LiveFeed } from '../live/live-feed';
 import type { PlantingsService } from '../plantings/plantings-service';
+import type { LightShortages } from '../progress/light-shortages';
 import type { RoomHooks } from '../rooms/room-hooks';
 import type { RoomsService } from '../rooms/rooms-service';
 import type { AdviceContent, AdviceStore, ShelfMeans } from './advice-store';
@@ -33,6 +35,8 @@ export interface AdviceParts {
     set(tx: Tx, shelfId: string, range: WantedRange): Promise<void>;
     clear(tx: Tx, shelfId: string, quantity: WantedRange['quantity']): Promise<boolean>;
   };
+  /** Whether a planting has lived on too little light. */
+  readonly shortageOf: LightShortages['shortageOf'];
   readonly hooks: Pick<RoomHooks, 'onRangeChanged'>;
   readonly tasks: {
     open(tx: Tx, task: OpenTask): Promise<Task>;
@@ -103,7 +107,7 @@ export class AdviceService {
     const room = await rooms.roomOf(tx, roomId);
     if (room === null) return changed;
     const shelves = (await rooms.racksOf(roomId)).flatMap((rack) => rack.shelves);
-    const advised = await this.advisedShelves(tx, roomId, shelves);
+    const advised = await this.advisedShelves(tx, room, shelves);
     const today = dayBounds(now().getTime(), room.timeZone).date;
     for (const [index, shelf] of shelves.entries()) {
       const seen = advised[index];
@@ -120,18 +124,26 @@ export class AdviceService {
     return changed;
   }
 
-  private async advisedShelves(tx: Tx, roomId: string, shelves: readonly Shelf[]): Promise<AdvisedShelf[]> {
-    const { advice, plantings, crops, now } = this.parts;
+  private async advisedShelves(
+    tx: Tx,
+    { id: roomId, timeZone }: Room,
+    shelves: readonly Shelf[],
+  ): Promise<AdvisedShelf[]> {
+    const { advice, plantings, crops, shortageOf, now } = this.parts;
     const shelfIds = shelves.map(({ id }) => id);
     const standing = await plantings.standingOn(tx, shelfIds);
     const means = await advice.meansOf(tx, shelfIds, new Date(now().getTime() - UNHEATED_SPAN_MS));
     const advised: AdvisedShelf[] = [];
     for (const shelf of shelves) {
       const here: StandingPlanting[] = [];
-      for (const { id, cropId, crop: name, variety, stage } of standing.get(shelf.id) ?? []) {
+      const shortages = new Map<string, LightShortage>();
+      for (const planting of standing.get(shelf.id) ?? []) {
+        const { id, cropId, crop: name, variety, stage } = planting;
         const crop = cropId === null ? null : await crops.crop(tx, roomId, cropId);
-        if (crop !== null)
-          here.push({ id, name: variety === null ? name : `${name} ${variety}`, crop, stage });
+        if (crop === null) continue;
+        here.push({ id, name: variety === null ? name : `${name} ${variety}`, crop, stage });
+        const shortage = await shortageOf(tx, { planting, timeZone, to: now().getTime() }, crop);
+        if (shortage !== null) shortages.set(id, shortage);
       }
       advised.push({
         label: shelf.label,
@@ -144,6 +156,7 @@ export class AdviceService {
           shelf,
           means.find(({ shelfId }) => shelfId === shelf.id),
         ),
+        shortages,
       });
     }
     return advised;

@@ -1,11 +1,8 @@
 import type { PlantingProgress } from '@shared/contracts/planting-progress';
-import type { Shelf } from '@shared/contracts/rooms';
 import { degreeDaysFromSeries } from '@shared/climate/degree-days';
 import { wantedClimate } from '@shared/growing/advice/standing-planting';
 import { daysBetween } from '@shared/growing/calendar-day';
 import type { Crop } from '@shared/growing/crops/crop';
-import { lampOutput } from '@shared/growing/lamp-wear';
-import { lightShortage, type LampOverPlanting } from '@shared/growing/light-need';
 import { transplantDates } from '@shared/growing/sowing-window';
 import { dayBounds } from '@shared/series/room-days';
 import type { Clock } from '../clock';
@@ -14,9 +11,8 @@ import type { Transactions, Tx } from '../database/transactions';
 import { HOURLY_GAP_MS, type ShelfTime, type ShelfWarmth } from '../germination/shelf-warmth';
 import type { PlantingEntity } from '../plantings/planting-entity';
 import type { PlantingsService } from '../plantings/plantings-service';
-import type { RoomsService } from '../rooms/rooms-service';
-import type { ShelfPlansService } from '../rooms/shelf-plans-service';
 import type { RoomCalendar } from '../seed/seed-service';
+import type { LightShortages } from './light-shortages';
 import type { ShelfLight } from './shelf-light';
 
 /** What {@link ProgressService} works with. */
@@ -24,10 +20,9 @@ export interface ProgressParts {
   readonly transactions: Transactions;
   readonly plantings: PlantingsService;
   readonly crops: CropsService;
-  readonly rooms: Pick<RoomsService, 'racksOf'>;
-  readonly plans: ShelfPlansService;
   readonly warmth: ShelfWarmth;
   readonly light: ShelfLight;
+  readonly shortages: LightShortages;
   readonly now: Clock;
 }
 
@@ -44,7 +39,6 @@ interface Course {
 }
 
 const DAY_MS = 86_400_000;
-const HOUR_MS = 3_600_000;
 /** The warmth to go on with is that of so long. */
 const OUTLOOK_MS = 3 * DAY_MS;
 /** So many days of light are told. */
@@ -114,7 +108,7 @@ export class ProgressService {
     const measured = await this.parts.light.along(tx, places, timeZone, from, to);
     const finished = measured.filter(({ end }) => end <= to).slice(-LIGHT_DAYS);
     const sums = measured.flatMap(({ dliMolM2D }) => (dliMolM2D === null ? [] : [dliMolM2D]));
-    const shortage = lightShortage(finished, figure.value, await this.lampOver(tx, course));
+    const shortage = await this.parts.shortages.among(tx, course, places, finished, figure.value);
     return {
       wanted: { ...figure.value },
       source: figure.source,
@@ -127,39 +121,6 @@ export class ProgressService {
       sumMolM2: sums.length === 0 ? null : sums.reduce((sum, dli) => sum + dli, 0),
       shortage: shortage && { ...shortage, causes: [...shortage.causes] },
     };
-  }
-
-  /** What is known of the lamp over a planting: yesterday's plan, and its wear by the light measured since it was fitted. */
-  private async lampOver(tx: Tx, { planting, timeZone, to }: Course): Promise<LampOverPlanting> {
-    const { shelfId, roomId } = planting;
-    if (shelfId === null) return { plannedHours: null, output: null };
-    const today = dayBounds(to, timeZone);
-    const yesterday = dayBounds(today.start - 1, timeZone);
-    const lamps = await this.parts.plans.plannedLamps(
-      tx,
-      [shelfId],
-      new Date(yesterday.start),
-      new Date(yesterday.end),
-    );
-    const plannedMs = (lamps.get(shelfId) ?? []).reduce((sum, { onAt, offAt }) => sum + offAt - onAt, 0);
-    const shelves = (await this.parts.rooms.racksOf(roomId)).flatMap((rack) => rack.shelves);
-    const lamp = shelves.find(({ id }) => id === shelfId)?.lamps.at(-1);
-    const output = lamp === undefined ? null : await this.outputOf(tx, shelfId, lamp, timeZone, to);
-    return { plannedHours: plannedMs / HOUR_MS, output };
-  }
-
-  private async outputOf(
-    tx: Tx,
-    shelfId: string,
-    { kind, fittedOn }: Shelf['lamps'][number],
-    timeZone: string,
-    to: number,
-  ): Promise<number | null> {
-    const fittedAt = dayBounds(fittedOn, timeZone).start;
-    if (fittedAt >= to) return null;
-    const hoursRun = await this.parts.light.hoursOn(tx, shelfId, timeZone, fittedAt, to);
-    if (hoursRun === null) return null;
-    return lampOutput({ kind, fittedOn, hoursRun, l70Hours: null, l90Hours: null })?.value ?? null;
   }
 }
 

@@ -4,8 +4,8 @@ import type { Task } from '@shared/contracts/care';
 import type { WantedRange } from '@shared/contracts/rooms';
 import { LiveRelay } from '../../server/live/live-relay';
 import { aPlacement, aSensor } from '../builders/devices';
-import { aHeatMat, aLamp, aShelf, aWantedRange } from '../builders/rooms';
-import { steadyHours } from '../builders/summaries';
+import { aHeatMat, aLamp, aLampPlan, aShelf, aWantedRange } from '../builders/rooms';
+import { litDays, steadyHours } from '../builders/summaries';
 import { eventOf, PlantingRoom } from './planting-room';
 import { startTestApplication, type TestApplication } from './test-application';
 
@@ -119,6 +119,35 @@ describe('advice on a shelf', () => {
 
     expect((await advice()).heatMat).toMatchObject({ state: 'off', change: null });
     expect((await advice()).heatMat.reason).toContain('27 °C');
+  });
+
+  // Vegetable transplants want 10–15 mol m⁻² d⁻¹ (Owen 2021).
+  it('asks for a look at the lamp after three days of too little light, with what may be the cause', async () => {
+    const { tx } = application;
+    const { id: sensorId } = await aSensor(tx, { roomId: room.staff.room.id, quantity: 'ppfd' });
+    await aPlacement(tx, { sensorId, shelfId: room.shelf.id });
+    await litDays(tx, sensorId, { until: '2026-04-13T23:00:00Z', sums: [8, 7] });
+    await aLampPlan(tx, { shelfId: room.shelf.id });
+    const leek = await room.sown();
+    await room.counted(leek.id, 20, '2026-04-09T08:00:00Z').expect(201);
+    expect(await tasks()).toEqual([]);
+
+    await litDays(tx, sensorId, { until: '2026-04-14T23:00:00Z', sums: [6] });
+    await application.app.services.advice.refreshAll();
+
+    const [task, ...others] = await tasks();
+    expect(others).toEqual([]);
+    expect(task).toMatchObject({
+      kind: 'inspect',
+      title: 'Look at the lamp of A3: Leek gets too little light',
+      shelfLabel: 'A3',
+    });
+    expect(task?.detail).toContain('7.0 mol/m² a day for three days, 10.0 wanted. ');
+    // Planned are 16 h, measured 14.
+    expect(task?.detail).toContain('The lamp may not burn as planned');
+
+    await room.step(leek.id, { kind: 'ended' }).expect(201);
+    expect((await tasks()).map(({ kind }) => kind)).not.toContain('inspect');
   });
 
   it('names what does not go together, and a shelf that fits', async () => {

@@ -1,12 +1,9 @@
 import type { PlantingProgress } from '@shared/contracts/planting-progress';
-import { DailySummaryEntity } from '../../server/readings/daily-summary-entity';
 import { aPlacement, aSensor } from '../builders/devices';
 import { aLamp, aLampPlan, aShelf } from '../builders/rooms';
-import { steadyHours } from '../builders/summaries';
+import { litDays, steadyHours } from '../builders/summaries';
 import { PlantingRoom } from './planting-room';
 import { startTestApplication, type TestApplication } from './test-application';
-
-const DAY_MS = 86_400_000;
 
 describe('the progress of a planting', () => {
   let application: TestApplication;
@@ -35,24 +32,12 @@ describe('the progress of a planting', () => {
       value,
     });
   }
-  /** Days of light that a sensor measured, as sums alone; each gives hours at 5 µmol and more. */
-  async function lit(sums: readonly number[], hours = 14): Promise<void> {
-    const sensorId = await sensorOn(room.shelf.id, 'ppfd');
-    for (const [index, dliMolM2D] of sums.entries()) {
-      // Days of Dublin in summer time, up to and with yesterday.
-      const start = Date.parse('2026-04-14T23:00:00Z') - (sums.length - index) * DAY_MS;
-      await application.tx.insert(DailySummaryEntity, {
-        sensorId,
-        startAt: new Date(start),
-        endAt: new Date(start + DAY_MS),
-        count: 288,
-        coveredMs: DAY_MS,
-        min: 0,
-        max: 200,
-        integralMs: dliMolM2D * 1e9,
-        aboveThresholdMs: hours * 3_600_000,
-      });
-    }
+  /** Days of light on A3 up to and with yesterday, in Dublin's summer time. */
+  async function lit(sums: readonly number[]): Promise<void> {
+    await litDays(application.tx, await sensorOn(room.shelf.id, 'ppfd'), {
+      until: '2026-04-14T23:00:00Z',
+      sums,
+    });
   }
 
   // Leek grows above 5 °C (from memory): at a steady 20 °C it gathers 15 °C·d a day.
@@ -127,6 +112,26 @@ describe('the progress of a planting', () => {
       await lit([6, 6, 11, 6]);
 
       expect((await progress(await seedlings())).light?.shortage).toBeNull();
+    });
+
+    // The seed was dark as it should be; lamps came on when it was up.
+    it.each([
+      ['at its stage', async (id: string) => room.counted(id, 20, '2026-04-13T08:00:00Z')],
+      [
+        'where it stands',
+        async (id: string) => {
+          await room.counted(id, 20, '2026-04-09T08:00:00Z');
+          const a2 = await aShelf(application.tx, { roomId: room.staff.room.id, label: 'A2' });
+          await room.step(id, { kind: 'moved', shelfId: a2.id, at: '2026-04-10T08:00:00Z' });
+          return room.step(id, { kind: 'moved', shelfId: room.shelf.id, at: '2026-04-13T08:00:00Z' });
+        },
+      ],
+    ])('is not short by days before it was %s', async (_case, happen) => {
+      await lit([0, 0, 0, 6]);
+      const { id } = await room.sown({ at: '2026-04-01T10:00:00Z' });
+      expect((await happen(id)).status).toBe(201);
+
+      expect((await progress(id)).light?.shortage).toBeNull();
     });
 
     it('is unknown where nothing was measured, and not none', async () => {

@@ -41,6 +41,43 @@ describe('the care that advice asks for', () => {
     expect(tasksOn(words, { lampHours })).toMatchObject([{ about: 'lamps', change, title }]);
   });
 
+  describe('after days of too little light', () => {
+    const shortage = {
+      meanMolM2D: 7,
+      missingMolM2D: 3,
+      causes: [
+        'The lamp may be worn out: by its hours it gives 80 % of its first light.',
+        'It may hang too high.',
+      ],
+    };
+    const shortages = new Map([
+      ['leek', shortage],
+      ['sweet-pepper', { ...shortage, meanMolM2D: 8, missingMolM2D: 2 }],
+    ]);
+    const lit = { lampHours: 14, shortages };
+
+    it('is a look at the lamp, with the greater shortage and what may be its cause', () => {
+      expect(tasksOn('leek:seedling sweet-pepper:seedling', lit)).toEqual([
+        {
+          about: 'light',
+          change: 'findMore',
+          kind: 'inspect',
+          title: 'Look at the lamp of A3: Leek and Sweet pepper get too little light',
+          detail:
+            '7.0 mol/m² a day for three days, 10.0 wanted. The lamp may be worn out: by its hours it gives 80 % of its first light. It may hang too high.',
+        },
+      ]);
+    });
+
+    it('is the plan alone where that is too short, and nothing about a lamp that is not there', () => {
+      const about = (more: Partial<AdvisedShelf>): string[] =>
+        tasksOn('leek:seedling', { ...lit, ...more }).map((task) => task.about);
+      expect(about({ lampHours: 8 })).toEqual(['lamps']);
+      expect(about({ lampHours: 0 })).toEqual(['lamps']);
+      expect(about({ hasLamp: false, lampHours: null })).toEqual([]);
+    });
+  });
+
   it('is nothing where all is as it should be, or the mat suits one and harms another', () => {
     expect(tasksOn('leek:seedling', { lampHours: 14 })).toEqual([]);
     expect(tasksOn('leek:seedling sweet-pepper:sown', { lampHours: 14 })).toEqual([]);

@@ -1,4 +1,5 @@
 import type { ValueRange } from '../../series/time-weighted-statistics';
+import type { LightShortage } from '../light-need';
 import type { StandingPlanting } from './standing-planting';
 
 /** A shelf as advice needs to know it. */
@@ -14,6 +15,8 @@ export interface AdvisedShelf {
   readonly isHeatMatOn: boolean | null;
   /** Temperature that the shelf has without its mat [°C]; null when not measured. */
   readonly unheatedC: number | null;
+  /** Plantings on it that have lived on too little light, by their ids. */
+  readonly shortages: ReadonlyMap<string, LightShortage>;
 }
 
 /** What wanted ranges are for. */

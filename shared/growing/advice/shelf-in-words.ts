@@ -45,6 +45,7 @@ export function shelf(words: string, more: Partial<AdvisedShelf> = {}): AdvisedS
     hasHeatMat: true,
     isHeatMatOn: false,
     unheatedC: 20,
+    shortages: new Map(),
     ...more,
   };
 }

@@ -94,7 +94,7 @@ describe('what grows on a shelf asks for', () => {
       task({ id: inventedId(801), shelfId: inventedId(2), title: 'Elsewhere' }),
       task({ id: inventedId(802), dueOn: '2026-12-03', title: 'In two days' }),
     ]);
-    expect(text()).toContain('Feed strawberries');
+    expect(text()).toContain('Feed strawberries Half strength');
     expect(text()).not.toContain('Elsewhere');
     expect(text()).not.toContain('In two days');
     const loader = TestbedHarnessEnvironment.documentRootLoader(fixture);
