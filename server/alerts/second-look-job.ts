@@ -5,6 +5,7 @@ import type { ReadingStore } from '../readings/reading-store';
 import type { AlertService } from './alert-service';
 import type { EpisodeKeeper } from './episode-keeper';
 import type { LightLookService } from './light-look-service';
+import { looksApart } from './looks-apart';
 import type { SecondLookService } from './second-look-service';
 import type { SecondLookStore, UnjudgedSensor } from './second-look-store';
 import type { SilenceService } from './silence-service';
@@ -25,7 +26,7 @@ export interface SecondLookParts {
   readonly now: Clock;
 }
 
-/** Sensors of one transaction; devices wait for it no longer than that takes. */
+/** Sensors of one transaction at most; devices wait for it no longer than that takes. */
 const MOST_AT_ONCE = 250;
 
 /**
@@ -45,7 +46,8 @@ export class SecondLookJob {
     if (quiet.length > 0) await this.look([], quiet);
     for (;;) {
       const unjudged = await looks.unjudged(transactions.plain, MOST_AT_ONCE);
-      const judged = unjudged.length > 0 ? await this.look(unjudged, []) : 0;
+      let judged = 0;
+      for (const together of looksApart(unjudged)) judged += await this.look(together, []);
       if (judged === 0 || unjudged.length < MOST_AT_ONCE) return;
     }
   }

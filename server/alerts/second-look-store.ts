@@ -13,6 +13,8 @@ export interface UnjudgedSensor {
   readonly id: string;
   readonly shelfId: string | null;
   readonly deviceId: string | null;
+  /** Whether more than a day of readings waits, as after a file. */
+  readonly isLong: boolean;
 }
 
 /** Where sensors are that somebody else holds. */
@@ -62,7 +64,8 @@ export class SecondLookStore {
   /** Some sensors that wait for their second look, room by room. */
   async unjudged(tx: Tx, most: number): Promise<UnjudgedSensor[]> {
     return tx.query(
-      `SELECT s.id, p.shelf_id AS "shelfId", s.device_id AS "deviceId"
+      `SELECT s.id, p.shelf_id AS "shelfId", s.device_id AS "deviceId",
+              st.latest_at - st.unjudged_from > interval '1 day' AS "isLong"
        FROM sensor_state st
        JOIN sensor s ON s.id = st.sensor_id
        LEFT JOIN placement p ON p.sensor_id = s.id AND p.to_at IS NULL

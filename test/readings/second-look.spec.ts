@@ -189,6 +189,41 @@ describe('the second look at readings', () => {
     expect(await alertsOf(tx, held)).toEqual(await alertsOf(tx, other));
   });
 
+  it('holds only the sensors that hang together with a long past while it looks at that', async () => {
+    const road = roadOver(database.dataSource, litByDay);
+    const [past, recent] = [await sensorsOfTwoDevices(tx), await sensorsOfTwoDevices(tx)];
+    await send(road, past, [readings], now);
+    await send(road, recent, [readings.filter(({ at }) => at >= end - 2 * hour)], now);
+    const [place]: { shelf_id: string }[] = await tx.query(
+      'SELECT shelf_id FROM placement WHERE sensor_id = $1',
+      [past.air],
+    );
+    const heldMeanwhile: boolean[] = [];
+    const watching: Plans = {
+      ...litByDay,
+      plannedLamps: async (inLook, shelfIds, ...span) => {
+        if (shelfIds.includes(place?.shelf_id ?? '')) heldMeanwhile.push(await isHeld(recent.air));
+        return litByDay.plannedLamps(inLook, shelfIds, ...span);
+      },
+    };
+    await lookAgain(road, watching, now);
+
+    expect(heldMeanwhile).not.toHaveLength(0);
+    expect(heldMeanwhile).not.toContain(true);
+    const left: unknown[] = await tx.query(
+      'SELECT FROM sensor_state WHERE unjudged_from IS NOT NULL AND sensor_id = ANY($1)',
+      [[...Object.values(past), ...Object.values(recent)]],
+    );
+    expect(left).toEqual([]);
+  });
+
+  async function isHeld(sensorId: string): Promise<boolean> {
+    const free: unknown[] = await tx.query('SELECT FROM sensor WHERE id = $1 FOR NO KEY UPDATE SKIP LOCKED', [
+      sensorId,
+    ]);
+    return free.length === 0;
+  }
+
   it('comes to the same whatever the order and the batches, live or from a file, looked at early or late', async () => {
     const reference = await afterOneBatch();
     const ways = fc.record({
