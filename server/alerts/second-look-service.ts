@@ -47,8 +47,8 @@ interface Work {
 }
 
 const MINUTE_MS = 60_000;
-/** A long past is looked at in parts, so that memory stays the same however long it is. */
-const PART_MS = 20 * 86_400_000;
+/** A long past is looked at in parts, so that memory stays the same and others get their turn however long it is. */
+const PART_MS = 5 * 86_400_000;
 /** Two days cover any stretch of light that reaches into the span. */
 const LAMP_MARGIN_MS = 2 * 86_400_000;
 /** These kinds have one limit at all hours. */
@@ -240,12 +240,20 @@ function spansOf(due: readonly Work[], window: Stretch): ReadingSpan[] {
 }
 
 function within({ times, values, qualities }: ObservationColumns, { from, to }: Stretch): ObservationColumns {
-  const kept = Array.from(times, (at, index) => ({ at, index })).filter(({ at }) => at >= from && at < to);
-  return {
-    times: kept.map(({ at }) => at),
-    values: kept.map(({ index }) => values[index] ?? NaN),
-    qualities: kept.map(({ index }) => qualities[index] ?? 'fail'),
-  };
+  const [first, end] = [placeOf(times, from), placeOf(times, to)];
+  const cut = <T>(column: ArrayLike<T>): T[] => Array.prototype.slice.call(column, first, end);
+  return { times: cut(times), values: cut(values), qualities: cut(qualities) };
+}
+
+/** How many of some instants in order come before another one. */
+function placeOf(times: ArrayLike<number>, at: number): number {
+  let [low, high] = [0, times.length];
+  while (low < high) {
+    const middle = (low + high) >>> 1;
+    if ((times[middle] ?? Infinity) < at) low = middle + 1;
+    else high = middle;
+  }
+  return low;
 }
 
 function foldedOf({ look, watch, to, isAnew, state, changes }: Work): FoldedWatch {

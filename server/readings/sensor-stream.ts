@@ -97,7 +97,8 @@ function foldFrom(
   boundsAt: (at: number) => PeriodBounds,
 ): PeriodFold {
   return createPeriodFold({
-    boundsAt,
+    // Most batches stay within the newest period, which spares asking the calendar.
+    boundsAt: (at) => (newest !== undefined && at >= newest.start && at < newest.end ? newest : boundsAt(at)),
     maxGapMs: maxGapMs(sensor.expectedIntervalS),
     threshold: sensor.lightThreshold,
     previous: lastReadingIn(newest),
