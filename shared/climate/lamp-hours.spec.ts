@@ -96,6 +96,15 @@ describe('plannedLight', () => {
     expect(lit([plan(on, off)], from, to)).toEqual(expected);
   });
 
+  // Apia went from −11 h to −10 h at midnight of 26 September 2010 (IANA time zone database).
+  it('takes the offset of the day itself far west of Greenwich', () => {
+    const plans = [plan('06:00', '22:00', '2010-01-01T00:00Z')];
+
+    expect(lit(plans, '2010-09-26T12:00Z', '2010-09-27T12:00Z', 'Pacific/Apia')).toEqual([
+      '2010-09-26T16:00/2010-09-27T08:00',
+    ]);
+  });
+
   it('follows a plan from the instant on at which it was made, in the middle of a day', () => {
     const plans = [plan('06:00', '22:00'), plan('14:00', '20:00', '2026-01-10T12:00Z')];
 

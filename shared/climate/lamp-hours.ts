@@ -1,4 +1,4 @@
-import { DateTime } from 'luxon';
+import { DateTime, IANAZone } from 'luxon';
 
 import type { LampInterval } from '../alerts/lamp-plan';
 
@@ -11,6 +11,10 @@ export interface LampHoursPlan {
   /** `HH:MM`; before `switchesOn` runs past midnight, equal times are lit all day. */
   readonly switchesOff: string | null;
 }
+
+const MINUTE_MS = 60_000;
+const DAY_MS = 86_400_000;
+const WEEK_MS = 7 * DAY_MS;
 
 /** A span of time, half-open. */
 interface Span {
@@ -45,32 +49,61 @@ export function plannedLight(plans: readonly LampHoursPlan[], zone: string, span
 function lightUnder({ switchesOn, switchesOff }: LampHoursPlan, zone: string, span: Span): LampInterval[] {
   if (switchesOn === null || switchesOff === null) return [];
   if (switchesOn === switchesOff) return [{ onAt: span.from, offAt: span.to }];
-  const daysOn = switchesOff < switchesOn ? 1 : 0;
+  const onMs = ofDayMs(switchesOn);
+  const offMs = ofDayMs(switchesOff) + (switchesOff < switchesOn ? DAY_MS : 0);
+  const offsetAt = steadyOffset(zone);
   return daysAround(span, zone)
     .map((day) => ({
-      onAt: Math.max(span.from, instantOf(day, switchesOn, zone)),
-      offAt: Math.min(span.to, instantOf(day.plus({ days: daysOn }), switchesOff, zone)),
+      onAt: Math.max(span.from, instantOf(day + onMs, zone, offsetAt)),
+      offAt: Math.min(span.to, instantOf(day + offMs, zone, offsetAt)),
     }))
     .filter(({ onAt, offAt }) => onAt < offAt);
 }
 
-/** Every calendar day of the span and the one before, whose light may run past midnight; as dates without a zone. */
-function daysAround({ from, to }: Span, zone: string): DateTime[] {
-  const first = dateOf(from, zone).minus({ days: 1 });
-  const last = dateOf(to, zone);
-  const count = Math.round(last.diff(first, 'days').days) + 1;
-  return Array.from({ length: count }, (_, index) => first.plus({ days: index }));
+/** Every calendar day of the span and the one before, whose light may run past midnight; local times read as UTC [ms]. */
+function daysAround({ from, to }: Span, zone: string): number[] {
+  const first = dateOf(from, zone) - DAY_MS;
+  const count = (dateOf(to, zone) - first) / DAY_MS + 1;
+  return Array.from({ length: count }, (_, index) => first + index * DAY_MS);
 }
 
-function dateOf(at: number, zone: string): DateTime {
+function dateOf(at: number, zone: string): number {
   const { year, month, day } = DateTime.fromMillis(at, { zone });
-  return DateTime.utc(year, month, day);
+  return Date.UTC(year, month - 1, day);
 }
 
-function instantOf({ year, month, day }: DateTime, clockTime: string, zone: string): number {
-  const [hour, minute] = clockTime.split(':').map(Number);
-  const local = DateTime.fromObject({ year, month, day, hour, minute }, { zone });
+function ofDayMs(clockTime: string): number {
+  const [hours = 0, minutes = 0] = clockTime.split(':').map(Number);
+  return (hours * 60 + minutes) * MINUTE_MS;
+}
+
+/** The instant of a local time that is read as UTC [ms]. */
+function instantOf(asUtc: number, zone: string, offsetAt: (asUtc: number) => number | null): number {
+  const offset = offsetAt(asUtc);
+  if (offset !== null) return asUtc - offset * MINUTE_MS;
+  const local = DateTime.fromMillis(asUtc, { zone: 'UTC' }).setZone(zone, { keepLocalTime: true });
   return Math.min(...local.getPossibleOffsets().map((possible) => possible.toMillis()));
+}
+
+/**
+ * Offsets of a zone in weeks without a change of its clock. Asking for one is slow, and files ask for years of days.
+ *
+ * @param zone - IANA time zone.
+ * @returns From a local time, read as UTC [ms], to its offset [min]; null where the clock may change nearby.
+ */
+function steadyOffset(zone: string): (asUtc: number) => number | null {
+  const clock = IANAZone.create(zone);
+  const known = new Map<number, number>();
+  const beforeWeek = (week: number): number => {
+    const offset = known.get(week) ?? clock.offset(week * WEEK_MS - DAY_MS);
+    known.set(week, offset);
+    return offset;
+  };
+  return (asUtc) => {
+    const week = Math.floor(asUtc / WEEK_MS);
+    const offset = beforeWeek(week);
+    return offset === beforeWeek(week + 1) && offset === beforeWeek(week + 2) ? offset : null;
+  };
 }
 
 function joined(stretches: readonly LampInterval[]): LampInterval[] {
