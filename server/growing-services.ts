@@ -175,6 +175,11 @@ export function growingServices(foundation: GrowingFoundation): GrowingServices 
       clear: (...of) => foundation.plansStore.clearWantedRange(...of),
     },
     shortageOf: (...of) => shortages.shortageOf(...of),
+    light: {
+      of: (tx, shelfIds) => plans.wantedLightOf(tx, shelfIds),
+      set: (...of) => foundation.plansStore.setWantedLight(...of),
+      clear: (...of) => foundation.plansStore.clearWantedLight(...of),
+    },
     hooks: foundation.hooks,
     tasks: foundation.openTasks,
     feed: foundation.feed,

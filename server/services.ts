@@ -224,6 +224,7 @@ export function composeServices(foundation: Foundation): Services {
     racksOf: (roomId) => rooms.racksOf(roomId),
     plantingsOn: (tx, shelfIds) => plantings.plantingsOn(tx, shelfIds),
     wantedRangesOf: (tx, shelfIds) => plans.wantedRangesOf(tx, shelfIds),
+    wantedLightOf: (...of) => plans.wantedLightOf(...of),
   });
   const reports = new ShelfReportService(transactions, seriesStore, series, lightStore, {
     plannedLamps: (...of) => plans.plannedLamps(...of),
@@ -306,6 +307,7 @@ export function composeServices(foundation: Foundation): Services {
       teller,
       plannedLamps: (...of) => plans.plannedLamps(...of),
       germinatingOn: (...of) => germination.germinatingOn(...of),
+      wantedLightOf: (...of) => plans.wantedLightOf(...of),
       alerts,
       now,
     }),

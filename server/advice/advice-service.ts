@@ -1,7 +1,7 @@
 import { hoursADay } from '@shared/climate/daily-lamp-hours';
 import type { ShelfAdviceView } from '@shared/contracts/advice';
 import type { Task } from '@shared/contracts/care';
-import type { Room, Shelf, WantedRange } from '@shared/contracts/rooms';
+import type { Room, Shelf, WantedLight, WantedRange } from '@shared/contracts/rooms';
 import type { AdvisedShelf } from '@shared/growing/advice/advice';
 import { adviceSubjects, adviceTasks, type AdviceTask } from '@shared/growing/advice/advice-tasks';
 import { adviseShelf, type ShelfAdvice } from '@shared/growing/advice/shelf-advice';
@@ -20,7 +20,7 @@ import type { LightShortages } from '../progress/light-shortages';
 import type { RoomHooks } from '../rooms/room-hooks';
 import type { RoomsService } from '../rooms/rooms-service';
 import type { AdviceContent, AdviceStore, ShelfMeans } from './advice-store';
-import { plantingRanges, type PlantingRange } from './planting-ranges';
+import { plantingLight, plantingRanges, type PlantingRange } from './planting-ranges';
 
 /** What {@link AdviceService} works with. */
 export interface AdviceParts {
@@ -37,7 +37,13 @@ export interface AdviceParts {
   };
   /** Whether a planting has lived on too little light. */
   readonly shortageOf: LightShortages['shortageOf'];
-  readonly hooks: Pick<RoomHooks, 'onRangeChanged'>;
+  /** Reads and writes the wanted light of a day. */
+  readonly light: {
+    of(tx: Tx, shelfIds: readonly string[]): Promise<Map<string, WantedLight>>;
+    set(tx: Tx, shelfId: string, light: WantedLight): Promise<void>;
+    clear(tx: Tx, shelfId: string, source: WantedLight['source']): Promise<boolean>;
+  };
+  readonly hooks: Pick<RoomHooks, 'onRangeChanged' | 'onWantedLightChanged'>;
   readonly tasks: {
     open(tx: Tx, task: OpenTask): Promise<Task>;
     withdraw(tx: Tx, taskId: string): Promise<boolean>;
@@ -117,6 +123,9 @@ export class AdviceService {
         advised.filter((other) => other !== seen),
       );
       const set = await this.setRanges(tx, shelf.id, plantingRanges(found.wanted), changed);
+      if (await this.setLight(tx, shelf.id, plantingLight(found.wanted), changed)) {
+        set.add('dailyLightIntegral');
+      }
       await this.ask(tx, { roomId, shelf, today }, adviceTasks(seen, found), changed);
       const kept = await advice.keep(tx, shelf.id, contentOf(found, set, shelves), now());
       if (kept !== null) changed.advice.push(kept);
@@ -168,7 +177,7 @@ export class AdviceService {
     shelfId: string,
     wanted: readonly PlantingRange[],
     changed: Changed,
-  ): Promise<ReadonlySet<string>> {
+  ): Promise<Set<string>> {
     const { ranges, hooks, now } = this.parts;
     const held = (await ranges.of(tx, [shelfId])).get(shelfId) ?? [];
     const set = new Set<string>();
@@ -176,7 +185,7 @@ export class AdviceService {
       const before = held.find(({ quantity }) => quantity === range.quantity);
       if (before?.source === 'shelf') continue;
       set.add(range.quantity);
-      if (before !== undefined && isSame(before, range)) continue;
+      if (isSame(before ?? null, range)) continue;
       await ranges.set(tx, shelfId, { ...range, since: now().toISOString() });
       await hooks.onRangeChanged(tx, shelfId, range.quantity);
       changed.hasRoomChanged = true;
@@ -188,6 +197,24 @@ export class AdviceService {
       changed.hasRoomChanged = true;
     }
     return set;
+  }
+
+  /** The same for the light of a day; tells whether it is set so. */
+  private async setLight(
+    tx: Tx,
+    shelfId: string,
+    wanted: Omit<WantedLight, 'since'> | null,
+    changed: Changed,
+  ): Promise<boolean> {
+    const { light, hooks, now } = this.parts;
+    const held = (await light.of(tx, [shelfId])).get(shelfId) ?? null;
+    if (held?.source === 'shelf') return false;
+    if (isSame(held, wanted)) return wanted !== null;
+    if (wanted === null) await light.clear(tx, shelfId, 'plantings');
+    else await light.set(tx, shelfId, { ...wanted, since: now().toISOString() });
+    await hooks.onWantedLightChanged(tx, shelfId);
+    changed.hasRoomChanged = true;
+    return wanted !== null;
   }
 
   /** Asks for care that was not asked for yet, and takes back what is no longer needed and not done. */
@@ -243,8 +270,11 @@ function unheatedC({ heatMat }: Shelf, means: ShelfMeans | undefined): number | 
   return heatMat?.isOn === true ? means.airC : (means.rootZoneC ?? means.airC);
 }
 
-function isSame({ since: _, ...before }: WantedRange, range: PlantingRange): boolean {
-  return isDeepStrictEqual(before, range);
+/** Whether what is set is what is wanted, since whenever. */
+function isSame(held: { readonly since: string } | null, wanted: object | null): boolean {
+  if (held === null || wanted === null) return held === wanted;
+  const { since: _, ...before } = held;
+  return isDeepStrictEqual(before, wanted);
 }
 
 function contentOf(found: ShelfAdvice, set: ReadonlySet<string>, shelves: readonly Shelf[]): AdviceContent {

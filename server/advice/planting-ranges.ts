@@ -1,6 +1,6 @@
 import { patienceDefaults, usualUrgency } from '@shared/alerts/alert-defaults';
 import { quantities, type Quantity } from '@shared/climate/quantity';
-import type { Limits, WantedRange } from '@shared/contracts/rooms';
+import type { Limits, WantedLight, WantedRange } from '@shared/contracts/rooms';
 import type { WantedAdvice } from '@shared/growing/advice/advice';
 
 /** A range that plantings want, before it is set. */
@@ -49,6 +49,18 @@ export function plantingRanges(wanted: readonly WantedAdvice[]): PlantingRange[]
       },
     ];
   });
+}
+
+/**
+ * The least light of a day that advice comes to, as alerts go by it.
+ *
+ * @param wanted - What everything on a shelf is content with.
+ * @returns It, before it is set; null where nothing here has a figure for it.
+ */
+export function plantingLight(wanted: readonly WantedAdvice[]): Omit<WantedLight, 'since'> | null {
+  const light = wanted.find(({ quantity }) => quantity === 'dailyLightIntegral');
+  if (light === undefined || light.range.low === null) return null;
+  return { leastMolM2D: light.range.low, source: 'plantings', reason: light.reason };
 }
 
 function limitsOf(quantity: Quantity, advice: WantedAdvice | undefined): Limits | null {

@@ -149,16 +149,15 @@ export class AlertStore {
 
   /** Ends the open range alerts of a shelf's quantity and has its watches begin anew. */
   async restartRangeWatches(tx: Tx, shelfId: string, quantity: Quantity, at: Date): Promise<void> {
-    await tx.query(
-      `UPDATE alert SET ended_at = coalesce(ended_at, $3), cleared_at = $3
-       WHERE shelf_id = $1 AND quantity = $2 AND kind IN ('aboveRange', 'belowRange') AND cleared_at IS NULL`,
-      [shelfId, quantity, at],
-    );
-    await tx.query(
-      `UPDATE alert_watch SET state = $3::jsonb
-       WHERE shelf_id = $1 AND quantity = $2 AND kind IN ('aboveRange', 'belowRange')`,
-      [shelfId, quantity, JSON.stringify(idleState)],
-    );
+    await restartThose(tx, `shelf_id = $3 AND quantity = $4 AND kind IN ('aboveRange', 'belowRange')`, at, [
+      shelfId,
+      quantity,
+    ]);
+  }
+
+  /** Ends the open alerts about a shelf's light sums and has their watches begin anew. */
+  async restartLightSumWatches(tx: Tx, shelfId: string, at: Date): Promise<void> {
+    await restartThose(tx, `shelf_id = $3 AND kind = 'lightSumShort'`, at, [shelfId]);
   }
 
   /**
@@ -166,18 +165,12 @@ export class AlertStore {
    * watches begin anew, its own on the shelf where it is now.
    */
   async restartWatches(tx: Tx, sensorId: string, at: Date): Promise<void> {
-    const concerned = `(sensor_id = $1 OR kind = ANY($3)
-      AND shelf_id IN (SELECT shelf_id FROM placement WHERE sensor_id = $1))`;
-    await tx.query(
-      `UPDATE alert SET ended_at = coalesce(ended_at, $2), cleared_at = $2
-       WHERE cleared_at IS NULL AND ${concerned}`,
-      [sensorId, at, joinedKinds],
+    await restartThose(
+      tx,
+      `(sensor_id = $3 OR kind = ANY($4) AND shelf_id IN (SELECT shelf_id FROM placement WHERE sensor_id = $3))`,
+      at,
+      [sensorId, joinedKinds],
     );
-    await tx.query(`UPDATE alert_watch SET state = $2::jsonb WHERE ${concerned}`, [
-      sensorId,
-      JSON.stringify(idleState),
-      joinedKinds,
-    ]);
     await tx.query(
       `UPDATE alert_watch SET shelf_id = placement.shelf_id FROM placement
        WHERE alert_watch.sensor_id = $1 AND placement.sensor_id = $1 AND placement.to_at IS NULL`,
@@ -267,6 +260,27 @@ export class AlertStore {
     );
     return new Set(rows.map(({ id }) => id));
   }
+}
+
+/**
+ * Ends open alerts and has their watches begin anew.
+ *
+ * @param concerned - Which, as a condition on columns that alerts and watches share; its parameters begin at $3.
+ */
+async function restartThose(
+  tx: Tx,
+  concerned: string,
+  at: Date,
+  parameters: readonly unknown[],
+): Promise<void> {
+  await tx.query(
+    `WITH ended AS (
+       UPDATE alert SET ended_at = coalesce(ended_at, $1), cleared_at = $1
+       WHERE cleared_at IS NULL AND ${concerned}
+     )
+     UPDATE alert_watch SET state = $2::jsonb WHERE ${concerned}`,
+    [at, JSON.stringify(idleState), ...parameters],
+  );
 }
 
 function keyOf({ sensor_id: sensorId, quantity, kind }: Omit<WatchRow, 'id' | 'state'>): string {

@@ -4,13 +4,11 @@ import type { LampInterval } from '@shared/alerts/lamp-plan';
 
 /** Share of a day's planned light below which the day was short. Common practice, no source. */
 const ENOUGH_OF_PLAN = 0.9;
-/** Share of a day that readings must speak for. */
-export const LIGHT_COVERAGE = 0.8;
 
 const HOUR_MS = 3_600_000;
 
 /**
- * The rule for one day's light.
+ * The rule for one day's hours of light.
  *
  * @param planned - Stretches of planned light, in order.
  * @param day - The room's day [ms], half-open.

@@ -4,7 +4,7 @@ import type { ReadingStore } from '../readings/reading-store';
 import type { AlertService } from './alert-service';
 import { AlertStore } from './alert-store';
 import { EpisodeKeeper, type AlertTeller } from './episode-keeper';
-import { LightLookService } from './light-look-service';
+import { LightLookService, type LightSources } from './light-look-service';
 import { SecondLookJob } from './second-look-job';
 import { SecondLookService, type ShelfSources } from './second-look-service';
 import { SecondLookStore } from './second-look-store';
@@ -12,7 +12,7 @@ import { SilenceService } from './silence-service';
 import { SilenceStore } from './silence-store';
 
 /** What the second look needs of others. */
-export interface SecondLookSources extends ShelfSources {
+export interface SecondLookSources extends ShelfSources, LightSources {
   readonly transactions: Transactions;
   readonly readings: ReadingStore;
   readonly teller: AlertTeller;
@@ -36,7 +36,7 @@ export function secondLookJob(sources: SecondLookSources): SecondLookJob {
     looks,
     silences,
     shelves: new SecondLookService(store, looks, sources),
-    light: new LightLookService(store, looks, sources.plannedLamps),
+    light: new LightLookService(store, looks, sources),
     devices: new SilenceService(store, silences),
     keeper: new EpisodeKeeper(store, sources.teller),
     alerts,

@@ -1,11 +1,17 @@
-import type { LightDay } from '@shared/alerts/derived-series';
 import { qualityLevel } from '@shared/series/quality-tests';
 import type { Tx } from '../database/transactions';
 import type { ReadColumns } from './second-look';
 
-/** A finished day's light, with when the day began [ms]. */
-export interface DayOfLight extends LightDay {
+/** A finished day of a light sensor. */
+export interface DayOfLight {
+  /** The room's day [ms], half-open. */
   readonly startAt: number;
+  readonly endAt: number;
+  readonly lightHours: number;
+  /** Of its readings over time [µmol m⁻² s⁻¹ · ms, or lx · ms]. */
+  readonly integralMs: number;
+  /** Share of the day that readings speak for, 0 to 1. */
+  readonly coverage: number;
 }
 
 /** A sensor whose readings have not had their second look. */
@@ -176,20 +182,26 @@ export class SecondLookStore {
     return new Set(rows.map(({ id }) => id));
   }
 
-  /** Finished days of a light sensor that end in [from, to], with their light hours. */
+  /** Finished days of a light sensor that end in [from, to]. */
   async lightDays(tx: Tx, sensorId: string, from: number, to: number): Promise<DayOfLight[]> {
-    const rows: { start_at: Date; end_at: Date; covered_ms: number; above_threshold_ms: number }[] =
-      await tx.query(
-        `SELECT start_at, end_at, covered_ms, above_threshold_ms FROM daily_summary
-         WHERE sensor_id = $1 AND above_threshold_ms IS NOT NULL
-           AND start_at >= $4 AND end_at >= $2 AND end_at <= $3 ORDER BY start_at`,
-        // The key begins with the start; no day is longer than two.
-        [sensorId, new Date(from), new Date(to), new Date(from - 2 * DAY_MS)],
-      );
+    const rows: {
+      start_at: Date;
+      end_at: Date;
+      covered_ms: number;
+      above_threshold_ms: number;
+      integral_ms: number;
+    }[] = await tx.query(
+      `SELECT start_at, end_at, covered_ms, above_threshold_ms, integral_ms FROM daily_summary
+       WHERE sensor_id = $1 AND above_threshold_ms IS NOT NULL
+         AND start_at >= $4 AND end_at >= $2 AND end_at <= $3 ORDER BY start_at`,
+      // The key begins with the start; no day is longer than two.
+      [sensorId, new Date(from), new Date(to), new Date(from - 2 * DAY_MS)],
+    );
     return rows.map((row) => ({
       startAt: row.start_at.getTime(),
       endAt: row.end_at.getTime(),
-      value: row.above_threshold_ms / 3_600_000,
+      lightHours: row.above_threshold_ms / 3_600_000,
+      integralMs: row.integral_ms,
       coverage: row.covered_ms / (row.end_at.getTime() - row.start_at.getTime()),
     }));
   }

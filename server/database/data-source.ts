@@ -42,6 +42,7 @@ import { LampPlanEntity } from '../rooms/lamp-plan-entity';
 import { RackEntity } from '../rooms/rack-entity';
 import { RoomEntity } from '../rooms/room-entity';
 import { ShelfEntity } from '../rooms/shelf-entity';
+import { WantedLightEntity } from '../rooms/wanted-light-entity';
 import { WantedRangeEntity } from '../rooms/wanted-range-entity';
 import { GerminationCountEntity } from '../seed/germination-count-entity';
 import { GerminationTestEntity } from '../seed/germination-test-entity';
@@ -101,6 +102,7 @@ const entities = [
   TaskEntity,
   ToldAlertEntity,
   VarietyEntity,
+  WantedLightEntity,
   WantedRangeEntity,
 ];
 

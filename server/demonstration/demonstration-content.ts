@@ -41,6 +41,8 @@ export interface DemonstrationRange {
   readonly sinceDaysAgo: number;
 }
 
+/** Longer than the story. */
+export const LONG_AGO_DAYS = 200;
 /** Since what stands there now was sown; on other shelves, ever since. */
 const sinceSowing: Readonly<Record<string, number>> = {
   A3: leekAndOnionSown,
@@ -66,6 +68,19 @@ export const demonstrationRanges: readonly DemonstrationRange[] = [
   ...climate('B2', 'potted citrus and bay', [17, 25, 13, 22], [45, 70, 45, 75], [0.6, 1.45, 0.4, 1.15]),
   ...climate('B3', 'cut lettuce', [14, 23, 10, 20], [50, 78, 58, 84], [0.4, 1.1, 0.2, 0.8]),
   range('B4', 'airTemperature', [5, 25, 5, 25], 'nothing grows here; frost and heat only'),
+];
+
+/** Least light of a day [mol m⁻²]: a little less than what these lamps give, with which the keeper is content. */
+export const demonstrationLight: readonly {
+  readonly shelf: string;
+  readonly leastMolM2D: number;
+  readonly reason: string;
+}[] = [
+  { shelf: 'A1', leastMolM2D: 11, reason: 'fruit sets under these lamps from this on' },
+  { shelf: 'A2', leastMolM2D: 8, reason: 'herbs for leaf, not for bulk' },
+  { shelf: 'B1', leastMolM2D: 9.5, reason: 'strawberry bears slowly at this' },
+  { shelf: 'B2', leastMolM2D: 8, reason: 'citrus and bay rest at this' },
+  { shelf: 'B3', leastMolM2D: 5.5, reason: 'lettuce cut young' },
 ];
 
 type Four = readonly [onLow: number, onHigh: number, offLow: number, offHigh: number];
@@ -96,7 +111,7 @@ function range(
     lampsOn: { low: onLow, high: onHigh },
     lampsOff: { low: offLow, high: offHigh },
     reason,
-    sinceDaysAgo: sinceSowing[shelf] ?? 200,
+    sinceDaysAgo: sinceSowing[shelf] ?? LONG_AGO_DAYS,
   };
 }
 

@@ -13,7 +13,9 @@ import {
   demonstrationPassword,
   demonstrationPeople,
   demonstrationRacks,
+  demonstrationLight,
   demonstrationRanges,
+  LONG_AGO_DAYS,
   demonstrationRoutines,
 } from './demonstration-content';
 import { DemonstrationGrowing } from './demonstration-growing';
@@ -145,6 +147,11 @@ export class DemonstrationService {
         // From the noon after, when covers, lamps and mats had done their part.
         since: new Date(dayBounds(dayBefore(now, sinceDaysAgo - 1, zone), zone).start + DAY_MS / 2),
       });
+    }
+    for (const { shelf, leastMolM2D, reason } of demonstrationLight) {
+      const since = new Date(dayBounds(dayBefore(now, LONG_AGO_DAYS, zone), zone).start);
+      const shelfId = idOf(shelves, shelf);
+      await this.store.addWantedLight(tx, { shelfId, leastMolM2D, source: 'shelf', reason, since });
     }
   }
 

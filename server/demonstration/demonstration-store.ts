@@ -13,6 +13,7 @@ import { LampPlanEntity } from '../rooms/lamp-plan-entity';
 import { RackEntity } from '../rooms/rack-entity';
 import { RoomEntity } from '../rooms/room-entity';
 import { ShelfEntity } from '../rooms/shelf-entity';
+import { WantedLightEntity } from '../rooms/wanted-light-entity';
 import { WantedRangeEntity } from '../rooms/wanted-range-entity';
 
 /** Writes the demonstration straight into every area's tables: it is there before anybody could have made it. */
@@ -73,6 +74,11 @@ export class DemonstrationStore {
   /** Adds a wanted range. */
   async addWantedRange(tx: Tx, range: DeepPartial<WantedRangeEntity>): Promise<void> {
     await tx.save(WantedRangeEntity, range);
+  }
+
+  /** Adds what a shelf wants of a day's light. */
+  async addWantedLight(tx: Tx, light: DeepPartial<WantedLightEntity>): Promise<void> {
+    await tx.save(WantedLightEntity, light);
   }
 
   /** Ticks what was due before a day, so that the past looks lived in; the last feeding was forgotten. */

@@ -39,6 +39,12 @@ export class HistoryUpkeepService {
     await this.parts.alerts.restartRangeWatches(tx, shelfId, quantity, this.parts.now());
   }
 
+  /** Ends what was open by the old want; the new one judges days that begin from now on. */
+  async onWantedLightChanged(tx: Tx, shelfId: string): Promise<void> {
+    await this.parts.readings.lockSensors(tx, await this.parts.readings.sensorsOnShelf(tx, shelfId));
+    await this.parts.alerts.restartLightSumWatches(tx, shelfId, this.parts.now());
+  }
+
   /** Computes the shelf's deficit anew with the other leaf temperature. */
   async onLeafOffsetChanged(tx: Tx, shelfId: string): Promise<void> {
     const ids = await this.parts.readings.sensorsOnShelf(tx, shelfId);

@@ -7,6 +7,8 @@ export interface RoomHooks {
   onTimeZoneChanged(tx: Tx, roomId: string, timeZone: string): Promise<void>;
   /** The shelf wants something else of a quantity from now on, or nothing any more. */
   onRangeChanged(tx: Tx, shelfId: string, quantity: Quantity): Promise<void>;
+  /** The shelf wants more or less light a day from now on, or none any more. */
+  onWantedLightChanged(tx: Tx, shelfId: string): Promise<void>;
   /** What is computed of the shelf's leaves is computed otherwise now. */
   onLeafOffsetChanged(tx: Tx, shelfId: string): Promise<void>;
 }

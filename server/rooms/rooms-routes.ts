@@ -8,7 +8,7 @@ import type { ShelfRulesService } from './shelf-rules-service';
  * The room's settings, its racks and shelves, and what is fitted to and wanted of them.
  *
  * @param rooms - Room, racks, shelves, lamps and heat mats.
- * @param rules - Lamp hours and wanted ranges.
+ * @param rules - Lamp hours, wanted ranges and wanted light.
  * @returns The routes.
  */
 export function roomsRoutes(rooms: RoomsService, rules: ShelfRulesService): Route[] {
@@ -42,5 +42,11 @@ export function roomsRoutes(rooms: RoomsService, rules: ShelfRulesService): Rout
       const { shelfId, quantity } = context.params;
       return rules.clearWantedRange(authorOf(context), shelfId, quantity);
     }),
+    route(contract.setWantedLight, (context) =>
+      rules.setWantedLight(authorOf(context), context.params.shelfId, context.body),
+    ),
+    route(contract.clearWantedLight, (context) =>
+      rules.clearWantedLight(authorOf(context), context.params.shelfId),
+    ),
   ];
 }

@@ -1,10 +1,10 @@
 import type { LampInterval } from '@shared/alerts/lamp-plan';
 import { plannedLight } from '@shared/climate/lamp-hours';
-import type { WantedRange } from '@shared/contracts/rooms';
+import type { WantedLight, WantedRange } from '@shared/contracts/rooms';
 import type { Tx } from '../database/transactions';
 import type { ShelfPlansStore } from './shelf-plans-store';
 
-/** What shelves are meant to have: light and ranges, for charts, the board and alerts. */
+/** What shelves are meant to have: lamp hours, ranges and light, for charts, the board and alerts. */
 export class ShelfPlansService {
   constructor(private readonly plans: ShelfPlansStore) {}
 
@@ -43,6 +43,11 @@ export class ShelfPlansService {
     return new Map(
       [...byShelf].map(([shelfId, own]) => [shelfId, own.map(({ shelfId: _, ...wanted }) => wanted)]),
     );
+  }
+
+  /** The least light of a day that shelves want, by shelf; those that want none have no entry. */
+  wantedLightOf(tx: Tx, shelfIds: readonly string[]): Promise<Map<string, WantedLight>> {
+    return this.plans.wantedLight(tx, shelfIds);
   }
 }
 

@@ -1,9 +1,10 @@
 import type { LampHoursPlan } from '@shared/climate/lamp-hours';
 import type { Quantity } from '@shared/climate/quantity';
-import type { LampHours, WantedRange } from '@shared/contracts/rooms';
+import type { LampHours, WantedLight, WantedRange } from '@shared/contracts/rooms';
 import { In } from 'typeorm';
 import type { Tx } from '../database/transactions';
 import { LampPlanEntity } from './lamp-plan-entity';
+import { WantedLightEntity } from './wanted-light-entity';
 import { WantedRangeEntity } from './wanted-range-entity';
 
 /** A plan with whose it is. */
@@ -12,7 +13,7 @@ export interface StoredLampPlan extends LampHoursPlan {
   readonly timeZone: string;
 }
 
-/** Lamp hours with their history, and wanted ranges. */
+/** Lamp hours with their history, wanted ranges and wanted light. */
 export class ShelfPlansStore {
   /** Every plan of shelves that begins before an instant, in order, with the time zone of its room. */
   async lampPlans(tx: Tx, shelfIds: readonly string[], before: Date): Promise<StoredLampPlan[]> {
@@ -78,6 +79,28 @@ export class ShelfPlansStore {
   /** Takes a wanted range away; false when there was none. */
   async clearWantedRange(tx: Tx, shelfId: string, quantity: Quantity): Promise<boolean> {
     const { affected } = await tx.delete(WantedRangeEntity, { shelfId, quantity });
+    return affected === 1;
+  }
+
+  /** What shelves want of a day's light, by shelf. */
+  async wantedLight(tx: Tx, shelfIds: readonly string[]): Promise<Map<string, WantedLight>> {
+    const wanted = await tx.findBy(WantedLightEntity, { shelfId: In([...shelfIds]) });
+    return new Map(
+      wanted.map(({ shelfId, leastMolM2D, source, reason, since }) => [
+        shelfId,
+        { leastMolM2D, source, reason, since: since.toISOString() },
+      ]),
+    );
+  }
+
+  /** Sets what a shelf wants of a day's light. */
+  async setWantedLight(tx: Tx, shelfId: string, wanted: WantedLight): Promise<void> {
+    await tx.upsert(WantedLightEntity, { shelfId, ...wanted, since: new Date(wanted.since) }, ['shelfId']);
+  }
+
+  /** Takes away what someone set for a shelf; false when they did not. */
+  async clearWantedLight(tx: Tx, shelfId: string, source: WantedLight['source']): Promise<boolean> {
+    const { affected } = await tx.delete(WantedLightEntity, { shelfId, source });
     return affected === 1;
   }
 }

@@ -1,6 +1,6 @@
 import { usualUrgency } from '@shared/alerts/alert-defaults';
 import type { Quantity } from '@shared/climate/quantity';
-import type { LampHours, RangeUrgency, Shelf, WantedRange } from '@shared/contracts/rooms';
+import type { LampHours, RangeUrgency, Shelf, WantedLight, WantedRange } from '@shared/contracts/rooms';
 import type { RoomAuthor } from '../audit/room-author';
 import type { RoomChanges } from '../audit/room-changes';
 import type { Clock } from '../clock';
@@ -18,7 +18,7 @@ export interface ShelfRulesParts {
   readonly plans: ShelfPlansStore;
   readonly reader: ShelfPlansService;
   readonly changes: RoomChanges;
-  readonly hooks: Pick<RoomHooks, 'onRangeChanged'>;
+  readonly hooks: Pick<RoomHooks, 'onRangeChanged' | 'onWantedLightChanged'>;
   readonly now: Clock;
 }
 
@@ -27,7 +27,7 @@ export interface NewWantedRange extends Omit<WantedRange, 'since' | 'source' | '
   readonly urgency?: RangeUrgency | undefined;
 }
 
-/** Sets what alerts go by: lamp hours and wanted ranges. */
+/** Sets what alerts go by: lamp hours, wanted ranges and wanted light. */
 export class ShelfRulesService {
   constructor(private readonly parts: ShelfRulesParts) {}
 
@@ -70,6 +70,29 @@ export class ShelfRulesService {
     return this.change(by, shelfId, 'wanted-range.clear', { quantity }, async (tx) => {
       if (!(await this.parts.plans.clearWantedRange(tx, shelfId, quantity))) throw notFound('wanted range');
       await this.parts.hooks.onRangeChanged(tx, shelfId, quantity);
+    });
+  }
+
+  /** Sets the least light of a day on a shelf, from the next day on. */
+  setWantedLight(
+    by: RoomAuthor,
+    shelfId: string,
+    light: Pick<WantedLight, 'leastMolM2D' | 'reason'>,
+  ): Promise<WantedLight> {
+    const { plans, hooks, now } = this.parts;
+    return this.change(by, shelfId, 'wanted-light.set', { ...light }, async (tx) => {
+      const wanted: WantedLight = { ...light, source: 'shelf', since: now().toISOString() };
+      await plans.setWantedLight(tx, shelfId, wanted);
+      await hooks.onWantedLightChanged(tx, shelfId);
+      return wanted;
+    });
+  }
+
+  /** Leaves the least light of a day to what grows on the shelf; 404 when no person set one. */
+  clearWantedLight(by: RoomAuthor, shelfId: string): Promise<void> {
+    return this.change(by, shelfId, 'wanted-light.clear', {}, async (tx) => {
+      if (!(await this.parts.plans.clearWantedLight(tx, shelfId, 'shelf'))) throw notFound('wanted light');
+      await this.parts.hooks.onWantedLightChanged(tx, shelfId);
     });
   }
 

@@ -1,5 +1,5 @@
 import type { PlantingSummary } from '@shared/contracts/board';
-import type { Rack, Shelf, WantedRange } from '@shared/contracts/rooms';
+import type { Rack, Shelf, WantedLight, WantedRange } from '@shared/contracts/rooms';
 import type { ShelfDetail } from '@shared/contracts/series';
 import type { Transactions, Tx } from '../database/transactions';
 import { notFound } from '../http/request-problem';
@@ -10,6 +10,7 @@ export interface ShelfPageSources {
   racksOf(roomId: string): Promise<Rack[]>;
   plantingsOn(tx: Tx, shelfIds: readonly string[]): Promise<Map<string, PlantingSummary[]>>;
   wantedRangesOf(tx: Tx, shelfIds: readonly string[]): Promise<Map<string, WantedRange[]>>;
+  wantedLightOf(tx: Tx, shelfIds: readonly string[]): Promise<Map<string, WantedLight>>;
 }
 
 /** A shelf as its own page shows it. */
@@ -40,6 +41,7 @@ export class ShelfPageService {
       tiers: rack.shelves.length,
       plantings: (await this.sources.plantingsOn(tx, [shelfId])).get(shelfId) ?? [],
       wantedRanges: (await this.sources.wantedRangesOf(tx, [shelfId])).get(shelfId) ?? [],
+      wantedLight: (await this.sources.wantedLightOf(tx, [shelfId])).get(shelfId) ?? null,
       quantities: hasDeficit ? [...quantities, 'vapourPressureDeficit'] : quantities,
       firstAt: firstAt?.toISOString() ?? null,
     };

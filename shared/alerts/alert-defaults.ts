@@ -1,4 +1,5 @@
 import type { Quantity } from '../climate/quantity';
+import { SHORT_DAYS_IN_A_ROW } from '../growing/light-need';
 import type {
   AboveRangeRule,
   BelowRangeRule,
@@ -11,6 +12,8 @@ import type {
 
 const minute = 60_000;
 const hour = 60 * minute;
+/** Days with a change of clocks. */
+const [shortestDay, longestDay] = [23 * hour, 25 * hour];
 
 /**
  * Patience with each quantity unless a shelf says otherwise, in stored units.
@@ -146,11 +149,23 @@ export const standingRules = {
 } as const satisfies Readonly<Record<string, StandingRule>>;
 
 /**
- * The rule for a day's light.
+ * The rule for a day's hours of light.
  *
- * @param wanted - Light hours [h] or daily light integral [mol m⁻² d⁻¹] that a day should reach.
+ * @param wanted - Light hours [h] that a day should reach.
  * @returns A rule over `lightDays`: one short day opens it, the next day that reaches it clears it.
  */
 export function lightShortRule(wanted: number): FixedLimitRule {
   return { kind: 'lightShort', limit: wanted, ...fixed, holdMs: 0, clearHoldMs: 0 };
+}
+
+/**
+ * The rule for a day's light sum.
+ *
+ * @param least - Daily light integral [mol m⁻² d⁻¹] that what grows there should get.
+ * @returns A rule over `lightDays`: as many short days in a row as make a planting short of light open it, so that a dull
+ *   day does not; the next day that reaches it clears it.
+ */
+export function lightSumShortRule(least: number): FixedLimitRule {
+  const holdMs = (SHORT_DAYS_IN_A_ROW - 2) * 24 * hour + shortestDay;
+  return { kind: 'lightSumShort', limit: least, ...fixed, holdMs, clearHoldMs: 0, maxGapMs: longestDay };
 }

@@ -1,6 +1,6 @@
 import { DateTime, FixedOffsetZone } from 'luxon';
 import { roomDayBoundsAt } from '../series/room-days';
-import { lightShortRule, rangeRules, standingRules } from './alert-defaults';
+import { lightShortRule, lightSumShortRule, rangeRules, standingRules } from './alert-defaults';
 import { advanceSeries } from './alert-machine';
 import { alertKinds, type AlertRule } from './alert-rule';
 import { idleState, type ObservationColumns, type Quality } from './alert-state';
@@ -107,6 +107,30 @@ describe('each kind, with its default patience', () => {
     ]);
   });
 
+  it.each([
+    ['three short days in a row', [9, 9, 9.9], [['opened', 3 * 24 - 1]]],
+    [
+      'and the day that reaches it',
+      [9, 9, 9, 9, 10],
+      [
+        ['opened', 3 * 24 - 1],
+        ['cleared', 5 * 24],
+      ],
+    ],
+    ['short days with a full one between', [9, 9, 10, 9, 9], []],
+    ['a short day, one of which nothing is known, and two short ones', [9, null, 9, 9], []],
+    ['zero three times', [0, 0, 0], [['opened', 3 * 24 - 1]]],
+    ['days that just reach it', [10, 10, 10], []],
+  ] as const)('lightSumShort, wanting 10 mol/m² a day: %s', (_, sums, expected) => {
+    const days = sums.map((value, index) => ({
+      endAt: (index + 1) * 24 * hour,
+      value: value ?? 2,
+      coverage: value === null ? 0.5 : 1,
+    }));
+    const changes = told(lightSumShortRule(10), lightDays(days, 0.8));
+    expect(changes.map(([type, at]) => [type, Number(at) / 60])).toEqual(expected);
+  });
+
   it('matStuckOn opens two hours after the last seed came up with the mat still on, and clears without it', () => {
     const rootZone = steps([26, 300], [20, 60]);
     const isWarmthWanted = (at: number) => at < 60 * minute;
@@ -192,7 +216,7 @@ describe('each kind, with its default patience', () => {
   );
 
   it('no kind is without a rule', () => {
-    const fromRange = [air.above.kind, air.below.kind, lightShortRule(12).kind];
+    const fromRange = [air.above.kind, air.below.kind, lightShortRule(12).kind, lightSumShortRule(12).kind];
     expect([...Object.keys(standingRules), ...fromRange].sort()).toEqual([...alertKinds].sort());
   });
 });
@@ -250,4 +274,16 @@ describe.each([
     const days = lightDays([{ endAt: bounds.end, value: 11, coverage: 1 }], 0.8);
     expect(told(lightShortRule(12), days)).toEqual([['opened', bounds.end / minute, 'lookToday']]);
   });
+
+  it.each([3, 2])(
+    '%d short days with the change among them open a short sum only when they are three',
+    (count) => {
+      const days = [2, 1, 0].map((before) => {
+        const noon = first.set({ day: changeDay, hour: 12 }).minus({ days: before }).toMillis();
+        return { endAt: roomDayBoundsAt(zone)(noon).end, value: 9, coverage: 1 };
+      });
+      const changes = told(lightSumShortRule(10), lightDays(days.slice(-count), 0.8));
+      expect(changes.map(([type]) => type)).toEqual(count === 3 ? ['opened'] : []);
+    },
+  );
 });

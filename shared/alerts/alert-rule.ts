@@ -11,7 +11,14 @@ export const aboveKinds = [
   'dangerHigh',
 ] as const;
 /** Kinds that compare a series with a lower limit. */
-export const belowKinds = ['belowRange', 'fastFall', 'lampDark', 'lightShort', 'dangerLow'] as const;
+export const belowKinds = [
+  'belowRange',
+  'fastFall',
+  'lampDark',
+  'lightShort',
+  'lightSumShort',
+  'dangerLow',
+] as const;
 /** Kinds that watch for readings that don't come. */
 export const silenceKinds = ['sensorSilent', 'deviceSilent'] as const;
 /** Kinds that rest on several sensors of a shelf. */

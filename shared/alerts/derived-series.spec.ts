@@ -164,7 +164,7 @@ describe('series of single kinds', () => {
       { endAt: 24 * hour, value: 14, coverage: 0.9 },
       { endAt: 47 * hour, value: 3, coverage: 0.4 },
     ];
-    expect(lightDays(days, 0.8)).toMatchObject({ values: [14, 3], qualities: ['pass', 'suspect'] });
+    expect(lightDays(days, 0.8)).toMatchObject({ values: [14, 3], qualities: ['pass', 'fail'] });
   });
 });
 

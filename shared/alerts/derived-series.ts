@@ -180,16 +180,16 @@ export interface LightDay {
 }
 
 /**
- * One value a day, at its end; for `lightShort`.
+ * One value a day, at its end; for `lightShort` and `lightSumShort`.
  *
  * @param days - Finished days in order; their ends come from the room's calendar, so 23 and 25 hours are right.
- * @param minCoverage - Share of a day below which its sum is doubtful and opens nothing, 0 to 1.
+ * @param minCoverage - Share of a day below which its sum says nothing, 0 to 1.
  * @returns The series of days.
  */
 export function lightDays(days: readonly LightDay[], minCoverage: number): ObservationColumns {
   const series = emptyColumns();
   for (const { endAt, value, coverage } of days) {
-    append(series, endAt, value, coverage >= minCoverage ? 'pass' : 'suspect');
+    append(series, endAt, value, coverage >= minCoverage ? 'pass' : 'fail');
   }
   return series;
 }

@@ -131,6 +131,12 @@ describe('an episode in words', () => {
       'Too short since 13:54: 28.3 units, wanted at least 26.',
     ],
     [
+      'lightSumShort',
+      'illuminance',
+      'A1 daily light is 2.3 units too low',
+      'Too low since 13:54: 28.3 units, wanted at least 26.',
+    ],
+    [
       'wetHours',
       'relativeHumidity',
       'A1 leaves have been wet for 28 h',

@@ -54,10 +54,10 @@ export function describeEpisode(facts: EpisodeFacts): EpisodeDescription {
   return { title: `${facts.shelfLabel} ${title}`, sentence, ...adviceFor(facts.kind, quantity, facts.isLit) };
 }
 
-/** A light sensor's short day is told in hours, not in what the sensor measures. */
+/** A day's light is told in hours or as its sum, not in what the sensor measures. */
 function toldQuantity({ kind, quantity }: EpisodeFacts): AlertQuantity {
-  const isOfSensor = quantity === 'ppfd' || quantity === 'illuminance';
-  return kind === 'lightShort' && isOfSensor ? 'lightHours' : quantity;
+  if (kind === 'lightShort') return 'lightHours';
+  return kind === 'lightSumShort' ? 'dailyLightIntegral' : quantity;
 }
 
 interface Words {
@@ -76,6 +76,7 @@ function wordsOf(facts: EpisodeFacts): Words {
     case 'aboveRange':
     case 'belowRange':
     case 'lightShort':
+    case 'lightSumShort':
       return rangeWords(facts, kind);
     case 'dangerHigh':
     case 'dangerLow': {

@@ -128,61 +128,60 @@ const belowAdvice: Readonly<Record<AlertQuantity, Advice>> = {
 
 const swing = 'A door, a window or the heating may have changed the air; look before the plants feel it.';
 
-const adviceByKind: Readonly<Record<Exclude<AlertKind, 'aboveRange' | 'belowRange' | 'lightShort'>, Advice>> =
-  {
-    fastRise: { tryThis: swing, caution: null },
-    fastFall: { tryThis: swing, caution: null },
-    lampDark: {
-      tryThis:
-        'The timer may have failed, a plug may be out, or the light sensor may be covered; look at each.',
-      caution: cautions.lamp,
-    },
-    lampLit: {
-      tryThis: 'The timer may be stuck or overridden; switch it back to its plan.',
-      caution: cautions.lamp,
-    },
-    matStuckOn: {
-      tryThis: 'Nothing here waits to germinate; the heat mat may have been forgotten. Switch it off.',
-      caution: cautions.mat,
-    },
-    condensation: {
-      tryThis:
-        'Water may be settling on the cold surface; air the shelf, or move plants away from cold walls.',
-      caution: cautions.damp,
-    },
-    wetHours: {
-      tryThis:
-        'Grey mould may start on wet leaves; space the plants out, move the air, take off dead leaves.',
-      caution: cautions.damp,
-    },
-    sensorsDisagree: {
-      tryThis:
-        'One of the two may have drifted or stand in a draught or in the light; lay them side by side for an hour.',
-      caution: null,
-    },
-    sensorFailed: {
-      tryThis:
-        'The sensor may be wet, unplugged or worn out; look at it. Its readings are kept but left out of sums.',
-      caution: null,
-    },
-    sensorSilent: {
-      tryThis: 'Its cable or battery may have failed; look at the sensor. What it sends later is filled in.',
-      caution: null,
-    },
-    deviceSilent: {
-      tryThis:
-        'It may have lost power or network; look at its plug and light. What it kept is filled in when it is back.',
-      caution: cautions.water,
-    },
-    dangerLow: {
-      tryThis: 'Plants may be lost at this; move them somewhere warmer now and look at the heating.',
-      caution: null,
-    },
-    dangerHigh: {
-      tryThis: 'Plants may be lost at this; switch off lamps and mats, and open the vent now.',
-      caution: cautions.lamp,
-    },
-  };
+const adviceByKind: Readonly<
+  Record<Exclude<AlertKind, 'aboveRange' | 'belowRange' | 'lightShort' | 'lightSumShort'>, Advice>
+> = {
+  fastRise: { tryThis: swing, caution: null },
+  fastFall: { tryThis: swing, caution: null },
+  lampDark: {
+    tryThis:
+      'The timer may have failed, a plug may be out, or the light sensor may be covered; look at each.',
+    caution: cautions.lamp,
+  },
+  lampLit: {
+    tryThis: 'The timer may be stuck or overridden; switch it back to its plan.',
+    caution: cautions.lamp,
+  },
+  matStuckOn: {
+    tryThis: 'Nothing here waits to germinate; the heat mat may have been forgotten. Switch it off.',
+    caution: cautions.mat,
+  },
+  condensation: {
+    tryThis: 'Water may be settling on the cold surface; air the shelf, or move plants away from cold walls.',
+    caution: cautions.damp,
+  },
+  wetHours: {
+    tryThis: 'Grey mould may start on wet leaves; space the plants out, move the air, take off dead leaves.',
+    caution: cautions.damp,
+  },
+  sensorsDisagree: {
+    tryThis:
+      'One of the two may have drifted or stand in a draught or in the light; lay them side by side for an hour.',
+    caution: null,
+  },
+  sensorFailed: {
+    tryThis:
+      'The sensor may be wet, unplugged or worn out; look at it. Its readings are kept but left out of sums.',
+    caution: null,
+  },
+  sensorSilent: {
+    tryThis: 'Its cable or battery may have failed; look at the sensor. What it sends later is filled in.',
+    caution: null,
+  },
+  deviceSilent: {
+    tryThis:
+      'It may have lost power or network; look at its plug and light. What it kept is filled in when it is back.',
+    caution: cautions.water,
+  },
+  dangerLow: {
+    tryThis: 'Plants may be lost at this; move them somewhere warmer now and look at the heating.',
+    caution: null,
+  },
+  dangerHigh: {
+    tryThis: 'Plants may be lost at this; switch off lamps and mats, and open the vent now.',
+    caution: cautions.lamp,
+  },
+};
 
 /**
  * What to try about an alert.
@@ -199,6 +198,7 @@ export function adviceFor(kind: AlertKind, quantity: AlertQuantity, isLit: boole
     case 'belowRange':
       return unlit(kind, quantity, isLit) ?? belowAdvice[quantity];
     case 'lightShort':
+    case 'lightSumShort':
       return belowAdvice[quantity];
     case 'dangerHigh':
       // A mat is what heats the root zone; a lamp is what heats the air.

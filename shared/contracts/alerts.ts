@@ -17,6 +17,7 @@ export const alertKind = z.enum([
   'lampDark',
   'lampLit',
   'lightShort',
+  'lightSumShort',
   'matStuckOn',
   'condensation',
   'wetHours',

@@ -48,6 +48,8 @@ export const endpoints: readonly Endpoint[] = [
   rooms.setWantedRange,
   rooms.tryWantedRange,
   rooms.clearWantedRange,
+  rooms.setWantedLight,
+  rooms.clearWantedLight,
   devices.postReadings,
   devices.getDeviceState,
   devices.listDevices,

@@ -253,6 +253,18 @@ export const wantedRange = z.object({
 /** What a shelf wants of one quantity. */
 export type WantedRange = z.infer<typeof wantedRange>;
 
+/** The least light that a day on a shelf should come to. */
+export const wantedLight = z.object({
+  /** Daily light integral; 0 is any light at all. */
+  leastMolM2D: z.number(),
+  source: rangeSource.exclude(['room']),
+  reason: z.string(),
+  /** Days that begin from this instant on are judged by it. */
+  since: instant,
+});
+/** The least light that a day on a shelf should come to. */
+export type WantedLight = z.infer<typeof wantedLight>;
+
 /** The wanted ranges of a shelf. */
 export const listWantedRanges = endpoint({
   name: 'listWantedRanges',
@@ -326,4 +338,29 @@ export const clearWantedRange = endpoint({
   access: 'grower',
   summary: 'Remove the wanted range of one quantity on a shelf',
   params: shelfParams.extend({ quantity: z.enum(quantities) }),
+});
+
+/** Sets the least light of a day; alerts follow it from the next day on. */
+export const setWantedLight = endpoint({
+  name: 'setWantedLight',
+  method: 'put',
+  path: '/rooms/:roomId/shelves/:shelfId/wanted-light',
+  access: 'grower',
+  summary: 'Set the least light that a day on a shelf should come to, in mol/m²; 0 is any light at all',
+  params: shelfParams,
+  body: z.strictObject({
+    leastMolM2D: z.number().min(0).max(100),
+    reason: z.string().trim().max(200).default(''),
+  }),
+  reply: wantedLight,
+});
+
+/** Takes back what a person set; the shelf wants what its plantings want again. */
+export const clearWantedLight = endpoint({
+  name: 'clearWantedLight',
+  method: 'delete',
+  path: '/rooms/:roomId/shelves/:shelfId/wanted-light',
+  access: 'grower',
+  summary: 'Leave the least light of a day to what grows on the shelf',
+  params: shelfParams,
 });

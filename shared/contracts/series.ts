@@ -3,7 +3,7 @@ import { quantities } from '../climate/quantity';
 import { interval, plantingSummary } from './board';
 import { shelfEvent } from './care';
 import { day, endpoint, id, instant, roomParams } from './endpoint';
-import { shelf, wantedRange } from './rooms';
+import { shelf, wantedLight, wantedRange } from './rooms';
 
 const shelfParams = roomParams.extend({ shelfId: id });
 
@@ -157,6 +157,8 @@ export const shelfDetail = z.object({
   tiers: z.number().int(),
   plantings: z.array(plantingSummary),
   wantedRanges: z.array(wantedRange),
+  /** Null where nothing here wants any. */
+  wantedLight: wantedLight.nullable(),
   /** Quantities that have a sensor here now or had one. */
   quantities: z.array(z.enum(quantities)),
   /** First reading ever taken here. */

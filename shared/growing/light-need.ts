@@ -2,9 +2,9 @@ import type { ValueRange } from '../series/time-weighted-statistics';
 import { formatNumber } from '../format/numbers';
 
 /** Days in a row short of light from which it is no longer the weather or a late start. */
-const DAYS_IN_A_ROW = 3;
-/** Share of a day that must be measured for its sum to count. */
-const LEAST_COVERAGE = 0.8;
+export const SHORT_DAYS_IN_A_ROW = 3;
+/** Share of a day that must be measured for its light to count. */
+export const LEAST_COVERAGE = 0.8;
 /** Output under which a lamp counts as worn; common practice, no source. */
 const WORN_OUTPUT = 0.85;
 
@@ -51,11 +51,11 @@ export function lightShortage(
   lamp: LampOverPlanting,
 ): LightShortage | null {
   const least = wanted.low;
-  const last = days.slice(-DAYS_IN_A_ROW);
+  const last = days.slice(-SHORT_DAYS_IN_A_ROW);
   const sums = last.flatMap(({ dliMolM2D, coverage }) =>
     dliMolM2D !== null && coverage >= LEAST_COVERAGE ? [dliMolM2D] : [],
   );
-  if (least === null || sums.length < DAYS_IN_A_ROW || sums.some((sum) => sum >= least)) return null;
+  if (least === null || sums.length < SHORT_DAYS_IN_A_ROW || sums.some((sum) => sum >= least)) return null;
   const meanMolM2D = sums.reduce((total, sum) => total + sum, 0) / sums.length;
   return { meanMolM2D, missingMolM2D: least - meanMolM2D, causes: causesOf(last, least / meanMolM2D, lamp) };
 }

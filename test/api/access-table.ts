@@ -112,6 +112,8 @@ export const accessTable: Readonly<Record<string, AccessRow>> = {
     body: { lampsOn: noLimits, lampsOff: noLimits, holdMinutes: 15, clearingMargin: 0.5 },
   },
   clearWantedRange: { outcomes: grower },
+  setWantedLight: { outcomes: grower, body: { leastMolM2D: 8 } },
+  clearWantedLight: { outcomes: grower },
 
   postReadings: { outcomes: device },
   getDeviceState: { outcomes: device },

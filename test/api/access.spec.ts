@@ -11,7 +11,7 @@ import { aFileProfile, aLoggerFile } from '../builders/logger-files';
 import { aMember, aPerson } from '../builders/people';
 import { aPhoto } from '../builders/photos';
 import { aPlanting, aPlantingEvent } from '../builders/plantings';
-import { aShelf, aWantedRange } from '../builders/rooms';
+import { aShelf, aWantedLight, aWantedRange } from '../builders/rooms';
 import { aGerminationTest, aSeedLot } from '../builders/seed';
 import { aSowingChoice } from '../builders/sowing';
 import { accessTable, callers, type CallerName, type Outcome } from './access-table';
@@ -105,6 +105,7 @@ describe('access', () => {
       const { tx } = application;
       const shelf = await aShelf(tx, { roomId });
       await aWantedRange(tx, { shelfId: shelf.id });
+      await aWantedLight(tx, { shelfId: shelf.id });
       const sensor = await aSensor(tx, { roomId });
       const lot = await aSeedLot(tx, { roomId });
       const crop = await aRoomCrop(tx, { roomId });

@@ -1,7 +1,8 @@
 import type { ShelfAdviceView } from '@shared/contracts/advice';
 import type { Board, BoardShelf } from '@shared/contracts/board';
 import type { Task } from '@shared/contracts/care';
-import type { WantedRange } from '@shared/contracts/rooms';
+import type { WantedLight, WantedRange } from '@shared/contracts/rooms';
+import type { ShelfDetail } from '@shared/contracts/series';
 import { LiveRelay } from '../../server/live/live-relay';
 import { aPlacement, aSensor } from '../builders/devices';
 import { aHeatMat, aLamp, aLampPlan, aShelf, aWantedRange } from '../builders/rooms';
@@ -222,6 +223,47 @@ describe('advice on a shelf', () => {
       await room.step(leek.id, { kind: 'ended' }).expect(201);
 
       expect(await ranges()).toEqual([]);
+    });
+  });
+
+  describe('on the light of a day', () => {
+    const light = async (): Promise<WantedLight | null> =>
+      (await room.read<ShelfDetail>(`/shelves/${room.shelf.id}`)).wantedLight;
+    const lightPath = (): string => `${room.staff.path}/shelves/${room.shelf.id}/wanted-light`;
+    const isSet = async (): Promise<boolean | undefined> =>
+      (await advice()).wanted.find(({ quantity }) => quantity === 'dailyLightIntegral')?.isSet;
+
+    it('sets the least that its plantings want, since when that is the same, and clears it with them', async () => {
+      const leek = await room.sown();
+      expect(await light()).toBeNull();
+
+      await room.counted(leek.id, 20).expect(201);
+      application.now = new Date('2026-04-15T12:00:00Z');
+      await room.observe(leek.id, { kind: 'noted', note: 'covered' }).expect(201);
+
+      // Seedlings: 10 to 15 mol m⁻² d⁻¹ (Owen 2021).
+      expect(await light()).toEqual({
+        leastMolM2D: 10,
+        source: 'plantings',
+        reason: 'Leek seedlings',
+        since: '2026-04-15T10:00:00.000Z',
+      });
+      expect(await isSet()).toBe(true);
+
+      await room.step(leek.id, { kind: 'ended' }).expect(201);
+      expect(await light()).toBeNull();
+    });
+
+    it('leaves alone what a person set, and takes over again when that is taken back', async () => {
+      await room.staff.grower.put(lightPath(), { leastMolM2D: 6 }).expect(200);
+      const leek = await room.sown();
+      await room.counted(leek.id, 20).expect(201);
+      expect(await light()).toMatchObject({ leastMolM2D: 6, source: 'shelf' });
+      expect(await isSet()).toBe(false);
+
+      await room.staff.grower.delete(lightPath()).expect(204);
+
+      expect(await light()).toMatchObject({ leastMolM2D: 10, source: 'plantings' });
     });
   });
 

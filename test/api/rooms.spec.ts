@@ -1,5 +1,6 @@
 import type { Problem } from '@shared/contracts/problem';
-import type { Rack, Shelf, WantedRange } from '@shared/contracts/rooms';
+import type { Rack, Shelf, WantedLight, WantedRange } from '@shared/contracts/rooms';
+import type { ShelfDetail } from '@shared/contracts/series';
 import { AuditEntryEntity } from '../../server/audit/audit-entry-entity';
 import { ShelfPlansService } from '../../server/rooms/shelf-plans-service';
 import { ShelfPlansStore } from '../../server/rooms/shelf-plans-store';
@@ -290,6 +291,44 @@ describe('rooms', () => {
         .expect(422);
 
       expect(problemOf(refused).errors?.map(({ path }) => path)).toEqual(['body.lampsOn.high']);
+    });
+  });
+
+  describe('wanted light', () => {
+    const lightOf = async (shelfId: string): Promise<WantedLight | null> =>
+      ((await staff.viewer.get(`${staff.path}/shelves/${shelfId}`).expect(200)).body as ShelfDetail)
+        .wantedLight;
+
+    it('of a day is set, set anew and taken back', async () => {
+      const { id } = await shelfHere();
+      const path = `${staff.path}/shelves/${id}/wanted-light`;
+      expect(await lightOf(id)).toBeNull();
+
+      await staff.grower.put(path, { leastMolM2D: 0 }).expect(200);
+      const reply = await staff.grower.put(path, { leastMolM2D: 9.5, reason: ' cut young ' }).expect(200);
+
+      const set = {
+        leastMolM2D: 9.5,
+        reason: 'cut young',
+        source: 'shelf',
+        since: application.now.toISOString(),
+      };
+      expect(reply.body).toEqual(set);
+      expect(await lightOf(id)).toEqual(set);
+
+      await staff.grower.delete(path).expect(204);
+      await staff.grower.delete(path).expect(404);
+      expect(await lightOf(id)).toBeNull();
+    });
+
+    it('below none is refused', async () => {
+      const { id } = await shelfHere();
+
+      const refused = await staff.grower
+        .put(`${staff.path}/shelves/${id}/wanted-light`, { leastMolM2D: -1 })
+        .expect(422);
+
+      expect(problemOf(refused).errors?.map(({ path }) => path)).toEqual(['body.leastMolM2D']);
     });
   });
 });

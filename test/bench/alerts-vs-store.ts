@@ -66,6 +66,7 @@ export const alertsVsStore: Benchmark = {
       teller,
       plannedLamps: (...of) => plans.plannedLamps(...of),
       germinatingOn: async () => new Map(),
+      wantedLightOf: async () => new Map(),
       alerts: { publishChanged: async () => undefined },
       now: () => new Date(now),
     });

@@ -5,6 +5,7 @@ import { LampPlanEntity } from '../../server/rooms/lamp-plan-entity';
 import { RackEntity } from '../../server/rooms/rack-entity';
 import { RoomEntity } from '../../server/rooms/room-entity';
 import { ShelfEntity } from '../../server/rooms/shelf-entity';
+import { WantedLightEntity } from '../../server/rooms/wanted-light-entity';
 import { WantedRangeEntity } from '../../server/rooms/wanted-range-entity';
 import { nextNumber, stored } from './stored';
 
@@ -87,6 +88,20 @@ export async function aWantedRange(
     urgentBy: 4,
     urgentAfterMinutes: 360,
     reason: '',
+    ...overrides,
+  });
+}
+
+/** Eight mol/m² of light a day at least, set by a person at the start of 2026. */
+export async function aWantedLight(
+  tx: Tx,
+  overrides: Partial<WantedLightEntity> = {},
+): Promise<WantedLightEntity> {
+  return stored(tx, WantedLightEntity, {
+    shelfId: overrides.shelfId ?? (await aShelf(tx)).id,
+    leastMolM2D: 8,
+    source: 'shelf',
+    since: new Date('2026-01-01T00:00:00Z'),
     ...overrides,
   });
 }

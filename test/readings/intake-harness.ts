@@ -71,6 +71,7 @@ export async function lookAgain(
     teller: nobody,
     plannedLamps: (...of) => plans.plannedLamps(...of),
     germinatingOn: async () => new Map(),
+    wantedLightOf: async () => new Map(),
     alerts: { publishChanged: async () => undefined },
     now: () => new Date(now),
   });

@@ -20,6 +20,7 @@ import { SetUrgencyOfRanges1764553300000 } from './1764553300000-set-urgency-of-
 import { CreateShelfAdvice1764553400000 } from './1764553400000-create-shelf-advice';
 import { CreateSowingCalendar1764553500000 } from './1764553500000-create-sowing-calendar';
 import { TellAssignees1764553400000 } from './1764553400000-tell-assignees';
+import { CreateWantedLight1764554500000 } from './1764554500000-create-wanted-light';
 
 /** Every migration in order; a merged one is never edited. */
 export const migrations = [
@@ -45,4 +46,5 @@ export const migrations = [
   CreateShelfAdvice1764553400000,
   CreateSowingCalendar1764553500000,
   TellAssignees1764553400000,
+  CreateWantedLight1764554500000,
 ];

@@ -38,6 +38,7 @@ function detail(changes: Partial<ShelfDetail> = {}): ShelfDetail {
     tier: 1,
     tiers: 4,
     plantings: [planting()],
+    wantedLight: null,
     wantedRanges: [
       {
         quantity: 'airTemperature',

@@ -8,7 +8,7 @@ export interface AlertLook {
   readonly icon: string;
 }
 
-const lampKinds: readonly AlertKind[] = ['lampDark', 'lampLit', 'lightShort'];
+const lampKinds: readonly AlertKind[] = ['lampDark', 'lampLit', 'lightShort', 'lightSumShort'];
 const sensorKinds: readonly AlertKind[] = [...silenceKinds, 'sensorFailed', 'sensorsDisagree'];
 
 /** The mark of an alert: too much, too little, the lamps, or a sensor that can't be trusted. */
