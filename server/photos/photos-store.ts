@@ -20,8 +20,8 @@ interface PhotoRow extends Omit<Photo, 'at'> {
 }
 
 const columns = `
-  SELECT photo.id, photo.at, photo.caption, photo.width, photo.height, person.name AS "personName",
-    coalesce(photo.planting_id, photo.lot_id) AS "subjectId"
+  SELECT photo.id, photo.at, photo.caption, photo.width, photo.height, photo.person_id AS "personId",
+    person.name AS "personName", coalesce(photo.planting_id, photo.lot_id) AS "subjectId"
   FROM photo LEFT JOIN person ON person.id = photo.person_id`;
 
 /** Photos; lists leave their bytes where they are. */

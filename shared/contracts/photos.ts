@@ -13,6 +13,8 @@ export const photo = z.object({
   /** Size in which it is kept [px]. */
   width: z.number().int(),
   height: z.number().int(),
+  /** Who added it; null where they have left. */
+  personId: id.nullable(),
   personName: z.string().nullable(),
 });
 /** A picture of a planting or a seed lot. */

@@ -44,6 +44,7 @@ describe('photos', () => {
       height: 1200,
       caption: 'first leaves',
       at: '2026-04-15T10:00:00.000Z',
+      personId: room.staff.people.helper.id,
       personName: room.staff.people.helper.name,
     });
     const full = await image(photo.id).expect(200);

@@ -13,6 +13,7 @@ const kept: Photo = {
   caption: '',
   width: 1600,
   height: 1200,
+  personId: inventedId(170),
   personName: 'Maren Oxley',
 };
 

@@ -8,9 +8,8 @@ import { Router, RouterLink } from '@angular/router';
 import { listSeedLots, type SeedLot } from '@shared/contracts/seed';
 import { ApiClient } from '../core/api-client';
 import { failureText } from '../core/failure-text';
-import { ReaderFormat } from '../core/reader-format';
+import { KeptPhotos } from '../core/kept-photos';
 import { Session } from '../core/session';
-import { shownPhoto } from '../core/shown-photo';
 import { EmptyState } from '../ui/states/empty-state';
 import { ErrorState } from '../ui/states/error-state';
 import { LoadingLines } from '../ui/states/loading-lines';
@@ -40,7 +39,7 @@ export class SeedPage {
   readonly find = input<string>();
 
   private readonly api = inject(ApiClient);
-  private readonly format = inject(ReaderFormat);
+  private readonly kept = inject(KeptPhotos);
   private readonly router = inject(Router);
   private readonly session = inject(Session);
 
@@ -89,7 +88,6 @@ export class SeedPage {
   }
 
   private line(lot: SeedLot) {
-    const roomId = this.session.roomId() ?? '';
     return {
       id: lot.id,
       title: lotTitle(lot),
@@ -98,10 +96,7 @@ export class SeedPage {
       badge: standingOf(lot),
       expected: lot.expectation === null ? null : shareWords(lot.expectation),
       basis: lot.expectation === null ? '' : basisWords(lot.expectation),
-      photo:
-        lot.photo === null
-          ? null
-          : shownPhoto(lot.photo, roomId, lotTitle(lot), this.format.when(lot.photo.at)).thumbnail,
+      photo: lot.photo && this.kept.thumbnailOf(lot.photo),
     };
   }
 }

@@ -220,6 +220,30 @@ describe('the page of a planting', () => {
     );
   });
 
+  it('lets a helper remove the photo that they added, and a grower any', async () => {
+    const photo = { at: '2026-11-30T09:00:00Z', width: 1600, height: 1200, personName: 'x' };
+    const planting = plantingDetail({
+      photos: [
+        { ...photo, id: inventedId(601), caption: 'Mine', personId: account().id },
+        { ...photo, id: inventedId(602), caption: 'Another’s', personId: inventedId(9) },
+      ],
+    });
+    const removable = (): (string | null)[] =>
+      [...page.querySelectorAll('app-photo-strip .remove')].map((one) => one.getAttribute('aria-label'));
+    await open(planting, 'helper');
+    expect(removable()).toEqual(['Remove the photo: Mine']);
+    await press(/^delete$/);
+    await press(/^Remove the photo/);
+    server.expectOne(`${room}/photos/${inventedId(601)}`).flush(null, { status: 204, statusText: '' });
+    await harness.fixture.whenStable();
+    expect(removable()).toEqual([]);
+    expect(page.querySelectorAll('app-photo-strip img')).toHaveLength(1);
+
+    TestBed.resetTestingModule();
+    await open(planting, 'grower');
+    expect(removable()).toHaveLength(2);
+  });
+
   it('notes a harvest by weight', async () => {
     await open(
       plantingDetail({ stage: 'growingOn', up: 31, count: 31 }),

@@ -3,16 +3,16 @@ import { MatButton } from '@angular/material/button';
 import { MatDialog } from '@angular/material/dialog';
 import { MatIcon } from '@angular/material/icon';
 import { Router, RouterLink } from '@angular/router';
-import { addPlantingPhoto, removePhoto } from '@shared/contracts/photos';
+import { addPlantingPhoto } from '@shared/contracts/photos';
 import { removePlanting, type PlantingDetail } from '@shared/contracts/plantings';
 import { formatValue } from '@shared/format/numbers';
 import { filter, switchMap } from 'rxjs';
 import { ApiClient } from '../../core/api-client';
+import { KeptPhotos } from '../../core/kept-photos';
 import { Notices } from '../../core/notices';
 import { PhotoSender } from '../../core/photo-sender';
 import { ReaderFormat } from '../../core/reader-format';
 import { Session } from '../../core/session';
-import { shownPhoto } from '../../core/shown-photo';
 import { Asking } from '../../ui/dialogs/asking';
 import { PhotoStrip } from '../../ui/photos/photo-strip';
 import { plantLook } from '../../ui/plants/crop-look';
@@ -62,6 +62,7 @@ export class PlantingPage {
   private readonly router = inject(Router);
   private readonly session = inject(Session);
   protected readonly data = inject(PlantingData);
+  private readonly kept = inject(KeptPhotos);
   protected readonly sender = inject(PhotoSender);
 
   protected readonly title = computed(() => {
@@ -108,11 +109,8 @@ export class PlantingPage {
   });
   protected readonly canRemove = computed(() => this.mayGrow() && this.data.planting()?.events.length === 1);
   protected readonly photos = computed(() => {
-    const [planting, params] = [this.data.planting(), this.data.params()];
-    if (planting === null || params === undefined) return [];
-    return planting.photos.map((photo) =>
-      shownPhoto(photo, params.roomId, plantingTitle(planting), this.format.when(photo.at)),
-    );
+    const planting = this.data.planting();
+    return planting === null ? [] : this.kept.shown(planting.photos, plantingTitle(planting));
   });
 
   constructor() {
@@ -175,26 +173,13 @@ export class PlantingPage {
   }
 
   protected removePhoto(photoId: string): void {
-    const roomId = this.data.params()?.roomId;
-    if (roomId === undefined) return;
-    this.asking
-      .ask({
-        title: 'Remove this photo?',
-        text: 'It can’t be brought back.',
-        confirm: 'Remove the photo',
-        isDestructive: true,
-      })
-      .pipe(
-        filter(Boolean),
-        switchMap(() => this.api.call(removePhoto, { params: { roomId, photoId } })),
-      )
-      .subscribe({
-        next: () =>
-          this.data.resource.update(
-            (planting) =>
-              planting && { ...planting, photos: planting.photos.filter(({ id }) => id !== photoId) },
-          ),
-        error: (error: unknown) => this.notices.sayFailure(error),
-      });
+    this.kept
+      .remove(photoId, (question) => this.asking.ask(question))
+      .subscribe(() =>
+        this.data.resource.update(
+          (planting) =>
+            planting && { ...planting, photos: planting.photos.filter(({ id }) => id !== photoId) },
+        ),
+      );
   }
 }

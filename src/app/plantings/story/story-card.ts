@@ -2,9 +2,9 @@ import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@a
 import { MatButton } from '@angular/material/button';
 import { MatIcon } from '@angular/material/icon';
 import { RouterLink } from '@angular/router';
+import { KeptPhotos } from '../../core/kept-photos';
 import { ReaderFormat } from '../../core/reader-format';
 import { Session } from '../../core/session';
-import { shownPhoto } from '../../core/shown-photo';
 import { PlantingData } from '../planting/planting-data';
 import { plantingTitle } from '../words/planting-facts';
 import { storyOf } from './story';
@@ -22,19 +22,15 @@ const fewLines = 8;
 })
 export class StoryCard {
   private readonly format = inject(ReaderFormat);
+  private readonly kept = inject(KeptPhotos);
   private readonly session = inject(Session);
   protected readonly data = inject(PlantingData);
 
   private readonly story = computed(() => {
-    const [planting, roomId] = [this.data.planting(), this.session.roomId()];
-    if (planting === null || roomId === null) return [];
-    const about = plantingTitle(planting);
-    const photos = new Map(
-      planting.photos.map((photo) => [
-        photo.id,
-        shownPhoto(photo, roomId, about, this.format.when(photo.at)),
-      ]),
-    );
+    const planting = this.data.planting();
+    if (planting === null) return [];
+    const shown = this.kept.shown(planting.photos, plantingTitle(planting));
+    const photos = new Map(shown.map((photo) => [photo.id, photo]));
     return storyOf(planting).map((line) => ({
       ...line,
       origin: [this.format.when(line.at), line.personName].filter((part) => part !== null).join(' · '),

@@ -12,6 +12,7 @@ describe('the story of a planting', () => {
     caption: 'Still bare',
     width: 1600,
     height: 1200,
+    personId: null,
     personName: null,
   };
 

@@ -2,15 +2,15 @@ import { ChangeDetectionStrategy, Component, computed, effect, inject, input } f
 import { MatButton } from '@angular/material/button';
 import { MatIcon } from '@angular/material/icon';
 import { Router, RouterLink } from '@angular/router';
-import { addSeedLotPhoto, removePhoto } from '@shared/contracts/photos';
+import { addSeedLotPhoto } from '@shared/contracts/photos';
 import { changeSeedLot, removeSeedLot } from '@shared/contracts/seed';
 import { formatValue } from '@shared/format/numbers';
 import { filter, switchMap } from 'rxjs';
 import { ApiClient } from '../../core/api-client';
+import { KeptPhotos } from '../../core/kept-photos';
 import { Notices } from '../../core/notices';
 import { PhotoSender } from '../../core/photo-sender';
 import { ReaderFormat } from '../../core/reader-format';
-import { shownPhoto } from '../../core/shown-photo';
 import { Asking } from '../../ui/dialogs/asking';
 import { Explained } from '../../ui/explained/explained';
 import { PhotoStrip } from '../../ui/photos/photo-strip';
@@ -52,6 +52,7 @@ export class LotPage {
   private readonly notices = inject(Notices);
   private readonly router = inject(Router);
   protected readonly data = inject(LotData);
+  private readonly kept = inject(KeptPhotos);
   protected readonly sender = inject(PhotoSender);
 
   protected readonly title = computed(() => {
@@ -83,11 +84,8 @@ export class LotPage {
     ].filter(({ value }) => value !== '');
   });
   protected readonly photos = computed(() => {
-    const [lot, params] = [this.data.lot(), this.data.params()];
-    if (lot === null || params === undefined) return [];
-    return lot.photos.map((photo) =>
-      shownPhoto(photo, params.roomId, lotTitle(lot), this.format.when(photo.at)),
-    );
+    const lot = this.data.lot();
+    return lot === null ? [] : this.kept.shown(lot.photos, lotTitle(lot));
   });
 
   constructor() {
@@ -148,25 +146,12 @@ export class LotPage {
   }
 
   protected removePhoto(photoId: string): void {
-    const roomId = this.data.params()?.roomId;
-    if (roomId === undefined) return;
-    this.asking
-      .ask({
-        title: 'Remove this photo?',
-        text: 'It can’t be brought back.',
-        confirm: 'Remove the photo',
-        isDestructive: true,
-      })
-      .pipe(
-        filter(Boolean),
-        switchMap(() => this.api.call(removePhoto, { params: { roomId, photoId } })),
-      )
-      .subscribe({
-        next: () =>
-          this.data.resource.update(
-            (lot) => lot && { ...lot, photos: lot.photos.filter(({ id }) => id !== photoId) },
-          ),
-        error: (error: unknown) => this.notices.sayFailure(error),
-      });
+    this.kept
+      .remove(photoId, (question) => this.asking.ask(question))
+      .subscribe(() =>
+        this.data.resource.update(
+          (lot) => lot && { ...lot, photos: lot.photos.filter(({ id }) => id !== photoId) },
+        ),
+      );
   }
 }

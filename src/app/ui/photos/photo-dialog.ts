@@ -10,6 +10,7 @@ export interface StripPhoto {
   readonly alt: string;
   readonly caption: string;
   readonly origin: string;
+  readonly isRemovable: boolean;
 }
 
 /** One photo, as large as the window lets it be. */

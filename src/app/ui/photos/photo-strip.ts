@@ -20,7 +20,6 @@ export class PhotoStrip {
   /** Newest first. */
   readonly photos = input.required<readonly StripPhoto[]>();
   readonly mayAdd = input(false);
-  readonly mayRemove = input(false);
   /** What is being sent; null when nothing is. */
   readonly sending = input<{ readonly name: string; readonly percent: number | null } | null>(null);
   readonly problem = input<string | null>(null);
