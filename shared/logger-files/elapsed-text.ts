@@ -29,10 +29,15 @@ export function elapsedMs(text: string, unit: ElapsedUnit, parseNumber: NumberPa
 export function elapsedUnitOfHeader(header: string): Exclude<ElapsedUnit, 'clock'> | null {
   const text = header.trim().toLowerCase();
   const stated =
-    /[([,_/\s-]\s*(s|sec|secs|seconds?|sek(?:unden)?|min|mins|minutes?|minuten|h|hrs?|hours?|stunden|d|days?|tage)\s*[)\]]?$/;
+    /(?:^|[([,_/\s-])\s*(s|sec|secs|seconds?|sek(?:unden)?|min|mins|minutes?|minuten|h|hrs?|hours?|stunden|d|days?|tage)\s*[)\]]?$/;
   const word = stated.exec(text)?.[1];
   if (word === undefined) return null;
   if (/^se?[ck]?/.test(word) && !word.startsWith('stund')) return 's';
   if (word.startsWith('min')) return 'min';
   return word.startsWith('h') || word.startsWith('stund') ? 'h' : 'd';
+}
+
+/** Tells whether a header is nothing but a unit of time in words, such as `Minutes`. */
+export function isElapsedUnit(header: string): boolean {
+  return /^\p{L}{3,}$/u.test(header.trim()) && elapsedUnitOfHeader(header) !== null;
 }

@@ -1,7 +1,7 @@
 import { createClockParser, splitTime } from './clock-text';
 import type { DateForm } from './date-text';
 import { createDateParser, dateFormsOf } from './date-text';
-import { elapsedUnitOfHeader } from './elapsed-text';
+import { elapsedUnitOfHeader, isElapsedUnit } from './elapsed-text';
 import { headerSays } from './header-words';
 import type {
   ElapsedUnit,
@@ -180,8 +180,13 @@ function recogniseElapsed(
   const clock = table.kinds.indexOf('clock');
   const counted = numberColumns(table, header).find((index) => {
     const name = header[index]?.name ?? '';
-    const says = headerSays(name, 'elapsed') || headerSays(name, 'time');
-    return says && isSteady(numbersOf(table, index, context.parseNumber));
+    const values = numbersOf(table, index, context.parseNumber);
+    // A bare unit may also head a duration that was measured, which does not climb from zero.
+    const says =
+      headerSays(name, 'elapsed') ||
+      headerSays(name, 'time') ||
+      (isElapsedUnit(name) && values[0] === 0 && orderOf(values) === 'ascending');
+    return says && isSteady(values);
   });
   const index = clock >= 0 ? clock : counted;
   if (index === undefined) return null;

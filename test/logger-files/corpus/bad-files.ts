@@ -121,6 +121,11 @@ export const badFiles: readonly CorpusFile[] = [
     error: refused('NO_TIME', 2),
   },
   {
+    says: 'minutes that do not count from a start',
+    bytes: lines('Minutes,Temperature (°C)', '14,21.5', '15,21.4', '21,21.6'),
+    error: refused('NO_TIME', 2),
+  },
+  {
     says: 'times without any quantity that is kept',
     bytes: lines('Time,Battery (V)', '2026-01-20T08:00:00Z,2.9'),
     error: refused('NO_VALUES', 2),

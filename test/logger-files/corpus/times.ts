@@ -209,6 +209,20 @@ export const timeFiles: readonly CorpusFile[] = [
     questions: ['ELAPSED_NEEDS_START'],
   },
   {
+    says: 'elapsed minutes under a header that is only their unit',
+    startAt: '2026-01-20T08:00:00Z',
+    bytes: lines('Minutes,Temperature (°C)', '0,20.5', '10,21.5'),
+    readings: read(...eight),
+    questions: ['ELAPSED_NEEDS_START'],
+  },
+  {
+    says: 'elapsed hours under a German header that is only their unit',
+    startAt: '2026-01-20T08:00:00Z',
+    bytes: lines('Temperatur (°C);Stunden', '20,5;0', '21,5;0,25', '22,5;0,5'),
+    readings: read('2026-01-20T08:00:00Z', '2026-01-20T08:15:00Z', '2026-01-20T08:30:00Z'),
+    questions: ['ELAPSED_NEEDS_START'],
+  },
+  {
     says: 'elapsed hours, minutes and seconds beyond a day',
     startAt: '2026-01-20T08:00:00Z',
     bytes: lines('Elapsed,Temperature (°C)', '0:00:00,20.5', '0:10:00,21.5', '26:00:30,22.5'),
