@@ -3,7 +3,6 @@ import { adviceRoutes } from './advice/advice-routes';
 import { AdviceService } from './advice/advice-service';
 import { AdviceStore } from './advice/advice-store';
 import type { RoomChanges } from './audit/room-changes';
-import type { CareStore } from './care/care-store';
 import type { OpenTasks } from './care/open-tasks';
 import type { Clock } from './clock';
 import { cropsRoutes } from './crops/crops-routes';
@@ -60,7 +59,6 @@ export interface GrowingFoundation {
   readonly plans: ShelfPlansService;
   readonly plansStore: ShelfPlansStore;
   readonly hooks: RoomHooks;
-  readonly care: CareStore;
   readonly openTasks: OpenTasks;
   readonly people: PeopleService;
   readonly feed: LiveFeed;
@@ -72,6 +70,11 @@ export interface GrowingFoundation {
 export interface GrowingServices {
   readonly routes: readonly Route[];
   readonly plantings: PlantingsService;
+  readonly plantingsStore: PlantingsStore;
+  readonly plantingEvents: PlantingEventsStore;
+  readonly plantingRecords: PlantingRecords;
+  readonly crops: CropsService;
+  readonly photos: PhotosService;
   readonly germination: GerminationService;
   readonly advice: AdviceService;
 }
@@ -202,15 +205,17 @@ export function growingServices(foundation: GrowingFoundation): GrowingServices 
     seed,
     people: foundation.people,
     tasks: foundation.openTasks,
-    taskOf: (...of) => foundation.care.task(...of),
     changes,
     now,
   });
   const photos = new PhotosService({
     transactions,
     photos: photosStore,
+    plantingOfTask: async (tx, roomId, taskId) =>
+      (await foundation.openTasks.task(tx, roomId, taskId)).plantingId,
     requireSubject: async (tx, roomId, subject) => {
       if ('lotId' in subject) await seed.lot(tx, roomId, subject.lotId);
+      else if ('taskId' in subject) await foundation.openTasks.task(tx, roomId, subject.taskId);
       else await plantings.planting(tx, roomId, subject.plantingId);
     },
     changes,
@@ -229,6 +234,11 @@ export function growingServices(foundation: GrowingFoundation): GrowingServices 
       ...sowingRoutes(place, sowing, now),
     ],
     plantings,
+    plantingsStore,
+    plantingEvents: eventsStore,
+    plantingRecords: records,
+    crops,
+    photos,
     germination,
     advice,
   };

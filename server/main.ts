@@ -41,7 +41,12 @@ async function serve(config: Config): Promise<() => Promise<void>> {
   const dataSource = await createDataSource(config.databaseUrl).initialize();
   await migrate(dataSource);
   const app = await buildApp({ dataSource, config, log, now: systemClock, webFolder });
-  const room = await fillDemonstration(new Transactions(dataSource), app.services.care, config, systemClock);
+  const room = await fillDemonstration(
+    new Transactions(dataSource),
+    app.services.planning,
+    config,
+    systemClock,
+  );
   app.services.setDemonstrationRoom(room);
   const address = await listen(app, config);
   app.setPublicUrl(address);

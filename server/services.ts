@@ -17,10 +17,9 @@ import { boardRoutes } from './board/board-routes';
 import { BoardService } from './board/board-service';
 import { BoardStore } from './board/board-store';
 import { ShelfNowService } from './board/shelf-now-service';
-import { careRoutes } from './care/care-routes';
-import { CareService } from './care/care-service';
-import { CareStore } from './care/care-store';
-import { OpenTasks } from './care/open-tasks';
+import { careGround, careServices } from './care-services';
+import type { ShelfEventsService } from './care/shelf-events-service';
+import type { TaskPlanningService } from './care/task-planning-service';
 import type { Clock } from './clock';
 import type { Config } from './config';
 import type { Transactions } from './database/transactions';
@@ -40,9 +39,11 @@ import { loggerFileParts } from './logger-files/logger-file-parts';
 import { loggerFileRoutes } from './logger-files/logger-file-routes';
 import type { LoggerFileRunner } from './logger-files/logger-file-runner';
 import { MailAlertTeller } from './mail/alert-teller';
+import { CareTeller } from './mail/care-teller';
 import { EscalationJob } from './mail/escalation-job';
 import { EscalationService } from './mail/escalation-service';
 import { MailComposer } from './mail/mail-composer';
+import { MailFooters } from './mail/mail-footers';
 import { MailLinkTokens } from './mail/mail-link-tokens';
 import { MailLinksService } from './mail/mail-links-service';
 import { mailRoutes } from './mail/mail-routes';
@@ -96,7 +97,8 @@ export interface Services {
   readonly deviceIntake: DeviceIntakeService;
   readonly boardPublisher: BoardPublisher;
   readonly secondLookJob: SecondLookJob;
-  readonly care: CareService;
+  readonly planning: TaskPlanningService;
+  readonly shelfEvents: ShelfEventsService;
   readonly advice: AdviceService;
   readonly loggerFiles: LoggerFileRunner;
   /** Tells the scenarios which room is the demonstration. */
@@ -130,9 +132,9 @@ export function composeServices(foundation: Foundation): Services {
   const road = intakeParts(transactions, plans, teller);
   const hooks = new HistoryUpkeepService({ ...road, alerts: alertStore, now });
 
-  const careStore = new CareStore();
   const roomsStore = new RoomsStore();
   const rooms = new RoomsService({ transactions, rooms: roomsStore, changes, hooks, now });
+  const ground = careGround(rooms, now);
   const growing = growingServices({
     transactions,
     changes,
@@ -140,8 +142,7 @@ export function composeServices(foundation: Foundation): Services {
     plans,
     plansStore,
     hooks,
-    care: careStore,
-    openTasks: new OpenTasks(careStore),
+    openTasks: ground.openTasks,
     people,
     feed: relay,
     log,
@@ -165,7 +166,20 @@ export function composeServices(foundation: Foundation): Services {
     hooks,
     now,
   });
-  const care = new CareService({ transactions, care: careStore, rooms, people, feed: relay, now });
+  const { publicUrl } = foundation;
+  const tokens = new MailLinkTokens(foundation.secret);
+  const footers = new MailFooters(tokens);
+  const care = careServices({
+    ground,
+    growing,
+    transactions,
+    changes,
+    rooms,
+    people,
+    teller: new CareTeller({ tellings, mails: mailStore, footers, publicUrl, mailDomain, now }),
+    feed: relay,
+    now,
+  });
   const alerts = new AlertService({
     transactions,
     alerts: alertStore,
@@ -204,7 +218,7 @@ export function composeServices(foundation: Foundation): Services {
       sowingsOn: (tx, shelfIds) => growing.germination.sowingsOn(tx, shelfIds),
       adviceOn: (tx, shelfIds) => growing.advice.adviceOn(tx, shelfIds),
       openAlerts: (roomId) => alerts.open(roomId),
-      tasksOf: (roomId, from, to) => care.listTasks(roomId, { from, to }),
+      tasksOf: (roomId, from, to) => care.tasks.list(roomId, { from, to }),
     },
     now,
   );
@@ -229,7 +243,7 @@ export function composeServices(foundation: Foundation): Services {
   const reports = new ShelfReportService(transactions, seriesStore, series, lightStore, {
     plannedLamps: (...of) => plans.plannedLamps(...of),
     wantedRangesOf: (...of) => plans.wantedRangesOf(...of),
-    eventsOf: (...of) => care.eventsOf(...of),
+    eventsOf: (...of) => care.shelfEvents.of(...of),
     luxPerUmolOf: (tx, shelfId) => seriesStore.luxPerUmolOf(tx, shelfId),
   });
 
@@ -244,13 +258,11 @@ export function composeServices(foundation: Foundation): Services {
     now,
   );
 
-  const { publicUrl } = foundation;
-  const tokens = new MailLinkTokens(foundation.secret);
   const mailComposer = new MailComposer({
     alerts: alertStore,
     tellings,
     mails: mailStore,
-    tokens,
+    footers,
     publicUrl,
     seriesOf: (...of) => series.series(...of),
   });
@@ -258,7 +270,7 @@ export function composeServices(foundation: Foundation): Services {
     transactions,
     tellings,
     mails: mailStore,
-    composer: mailComposer,
+    footers,
     publicUrl,
     mailDomain,
     now,
@@ -266,7 +278,7 @@ export function composeServices(foundation: Foundation): Services {
     reportOf: (...of) => reports.report(...of),
     openAlertsOf: (roomId) => alerts.open(roomId),
     newestAlertsOf: (roomId) => alerts.newest(roomId),
-    tasksOf: (roomId, from, to) => care.listTasks(roomId, { from, to }),
+    tasksOf: (roomId, from, to) => care.tasks.list(roomId, { from, to }),
   });
 
   let demonstrationRoom: string | null = null;
@@ -286,7 +298,7 @@ export function composeServices(foundation: Foundation): Services {
       ...seriesRoutes(pages, series, reports),
       ...alertRoutes(alerts, answering, rangeTrials),
       ...loggerFileRoutes(loggerFiles.files, config.uploadMaxBytes),
-      ...careRoutes(care),
+      ...care.routes,
       ...growing.routes,
       ...scenariosRoutes(scenarios),
     ],
@@ -311,7 +323,8 @@ export function composeServices(foundation: Foundation): Services {
       alerts,
       now,
     }),
-    care,
+    planning: care.planning,
+    shelfEvents: care.shelfEvents,
     advice: growing.advice,
     loggerFiles: loggerFiles.runner,
     setDemonstrationRoom: (roomId) => {

@@ -9,8 +9,10 @@ import { AlertQuietEntity } from '../alerts/alert-quiet-entity';
 import { AlertWatchEntity } from '../alerts/alert-watch-entity';
 import { AuditEntryEntity } from '../audit/audit-entry-entity';
 import { RoutineEntity } from '../care/routine-entity';
+import { RoutinePersonEntity } from '../care/routine-person-entity';
 import { ShelfEventEntity } from '../care/shelf-event-entity';
 import { TaskEntity } from '../care/task-entity';
+import { TaskHolderEntity } from '../care/task-holder-entity';
 import { RoomCropEntity } from '../crops/room-crop-entity';
 import { VarietyEntity } from '../crops/variety-entity';
 import { DeviceEntity } from '../devices/device-entity';
@@ -44,6 +46,12 @@ import { RoomEntity } from '../rooms/room-entity';
 import { ShelfEntity } from '../rooms/shelf-entity';
 import { WantedLightEntity } from '../rooms/wanted-light-entity';
 import { WantedRangeEntity } from '../rooms/wanted-range-entity';
+import { AbsenceEntity } from '../rota/absence-entity';
+import { DutyDayEntity } from '../rota/duty-day-entity';
+import { DutyDayPersonEntity } from '../rota/duty-day-person-entity';
+import { DutyWeekdayEntity } from '../rota/duty-weekday-entity';
+import { DutyWeekdayPersonEntity } from '../rota/duty-weekday-person-entity';
+import { TaskSwapEntity } from '../rota/task-swap-entity';
 import { GerminationCountEntity } from '../seed/germination-count-entity';
 import { GerminationTestEntity } from '../seed/germination-test-entity';
 import { SeedLotEntity } from '../seed/seed-lot-entity';
@@ -54,6 +62,7 @@ import { migrations } from './migrations/all-migrations';
 
 /** Every table that TypeORM maps. */
 const entities = [
+  AbsenceEntity,
   AdviceTaskEntity,
   AlertAssignmentEntity,
   AlertDeedEntity,
@@ -63,6 +72,10 @@ const entities = [
   AuditEntryEntity,
   DailySummaryEntity,
   DeviceEntity,
+  DutyDayEntity,
+  DutyDayPersonEntity,
+  DutyWeekdayEntity,
+  DutyWeekdayPersonEntity,
   GerminationCountEntity,
   GerminationTestEntity,
   HeatMatEntity,
@@ -90,6 +103,7 @@ const entities = [
   RoomEscalationEntity,
   RoomFrostEntity,
   RoutineEntity,
+  RoutinePersonEntity,
   SeedLotEntity,
   SeedUseEntity,
   SensorEntity,
@@ -100,6 +114,8 @@ const entities = [
   ComputedHourlySummaryEntity,
   SowingChoiceEntity,
   TaskEntity,
+  TaskHolderEntity,
+  TaskSwapEntity,
   ToldAlertEntity,
   VarietyEntity,
   WantedLightEntity,

@@ -31,7 +31,7 @@ export class DemonstrationService {
   constructor(
     private readonly transactions: Transactions,
     private readonly store: DemonstrationStore,
-    private readonly planTasks: (tx: Tx, roomId: string, before: string) => Promise<void>,
+    private readonly planTasks: (tx: Tx, roomId: string) => Promise<void>,
     private readonly now: Clock,
   ) {}
 
@@ -217,15 +217,16 @@ export class DemonstrationService {
   ): Promise<void> {
     const today = dayBefore(now, 0, zone);
     for (const { shelf, startedDaysAgo, who, ...routine } of demonstrationRoutines) {
-      await this.store.addRoutine(tx, {
+      const routineId = await this.store.addRoutine(tx, {
         ...routine,
         roomId,
         shelfId: shelf === null ? null : idOf(shelves, shelf),
         startsOn: dayBefore(now, startedDaysAgo, zone),
-        personId: people.get(who) ?? null,
+        who: 'person',
       });
+      await this.store.addRoutinePerson(tx, routineId, people.get(who) ?? '');
     }
-    await this.planTasks(tx, roomId, dayBefore(now, -14, zone));
+    await this.planTasks(tx, roomId);
     await this.store.completeTasksBefore(tx, roomId, today);
   }
 }

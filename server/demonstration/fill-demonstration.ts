@@ -1,4 +1,4 @@
-import type { CareService } from '../care/care-service';
+import type { TaskPlanningService } from '../care/task-planning-service';
 import type { Clock } from '../clock';
 import type { Config } from '../config';
 import type { Transactions } from '../database/transactions';
@@ -11,14 +11,14 @@ import { DemonstrationStore } from './demonstration-store';
  * Fills the demonstration room once, where the settings ask for it.
  *
  * @param transactions - Of the migrated database.
- * @param care - Makes the tasks of its routines.
+ * @param planning - Makes the tasks of its routines.
  * @param config - Says whether, and where the simulator reads its room.
  * @param now - The present.
  * @returns The room's id; null without a demonstration.
  */
 export async function fillDemonstration(
   transactions: Transactions,
-  care: CareService,
+  planning: TaskPlanningService,
   config: Config,
   now: Clock,
 ): Promise<string | null> {
@@ -27,7 +27,7 @@ export async function fillDemonstration(
   const service = new DemonstrationService(
     transactions,
     new DemonstrationStore(),
-    (tx, roomId, before) => care.planTasks(tx, roomId, before),
+    async (tx, roomId) => void (await planning.planRoom(tx, roomId)),
     now,
   );
   let room: string | null = null;

@@ -90,6 +90,7 @@ export function sendProblem(res: Response, problem: RequestProblem): void {
     detail: problem.message,
     code: problem.code,
     ...(problem.errors.length > 0 ? { errors: [...problem.errors] } : {}),
+    ...(Object.keys(problem.facts).length > 0 ? { facts: { ...problem.facts } } : {}),
   };
   res.status(problem.status).set(problem.headers).type('application/problem+json').send(JSON.stringify(body));
 }

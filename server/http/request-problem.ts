@@ -5,6 +5,9 @@ export interface FieldProblem {
   readonly message: string;
 }
 
+/** Facts behind a problem, as data. */
+export type ProblemFacts = Readonly<Record<string, string | number | null>>;
+
 /** A request that can't be granted, with all that its RFC 9457 answer says. */
 export class RequestProblem extends Error {
   override readonly name = 'RequestProblem';
@@ -17,6 +20,8 @@ export class RequestProblem extends Error {
     message: string,
     readonly errors: readonly FieldProblem[] = [],
     readonly headers: Readonly<Record<string, string>> = {},
+    /** What a program needs to say it in its own way, such as who was first and when. */
+    readonly facts: ProblemFacts = {},
   ) {
     super(message);
   }
@@ -37,10 +42,11 @@ export function notFound(what: string): RequestProblem {
  *
  * @param code - Stable code.
  * @param message - What contradicts what.
+ * @param facts - Behind it, as data.
  * @returns A 409 problem.
  */
-export function conflict(code: string, message: string): RequestProblem {
-  return new RequestProblem(409, code, message);
+export function conflict(code: string, message: string, facts: ProblemFacts = {}): RequestProblem {
+  return new RequestProblem(409, code, message, [], {}, facts);
 }
 
 /**

@@ -125,6 +125,7 @@ export function alertOpening(kind: MailKind, count: number): string | null {
     case 'opened':
       return count === 1 ? null : 'These came together; one cause may be behind them, such as a power cut.';
     case 'letter':
+    case 'care':
       return null;
   }
 }

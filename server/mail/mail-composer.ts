@@ -13,8 +13,8 @@ import {
   type MailSetting,
 } from './alert-mail';
 import type { AlertFinder } from './alert-teller';
-import { htmlPage, plainText, type MailFooter, type MailPlan } from './mail-layout';
-import type { MailLinkTokens } from './mail-link-tokens';
+import type { MailFooters } from './mail-footers';
+import { htmlPage, plainText, type MailPlan } from './mail-layout';
 import type { DueMail, MailContent, MailStore } from './mail-store';
 import type { AlertOfRoom, TellingStore } from './telling-store';
 
@@ -23,7 +23,7 @@ export interface ComposerParts {
   readonly alerts: AlertFinder;
   readonly tellings: TellingStore;
   readonly mails: MailStore;
-  readonly tokens: MailLinkTokens;
+  readonly footers: MailFooters;
   /** Where links lead, without a trailing slash. */
   readonly publicUrl: () => string;
   /** A quantity of a shelf over a span [ms], as charts show it. */
@@ -85,31 +85,15 @@ export class MailComposer {
         ...sections.map(({ section }) => section),
         ...(others.length === 0 ? [] : [othersSection(others, setting)]),
       ],
-      footer: this.footer(setting, stops),
+      footer: this.parts.footers.footer(setting, stops),
     };
     return {
       subject: await this.subject(tx, mail, told, setting),
       textBody: plainText(plan),
       htmlBody: htmlPage(plan),
       pictures: sections.flatMap(({ picture }) => (picture === null ? [] : [picture])),
-      unsubscribeToken: this.token(setting, stops),
+      unsubscribeToken: this.parts.footers.token(setting, stops),
     };
-  }
-
-  /** The end of a mail: why it came, and how to get no more of its kind. */
-  footer(setting: MailSetting, stops: MailStop): MailFooter {
-    const { publicUrl, room } = setting;
-    return {
-      reason: `You get this as a member of ${room.name}.`,
-      choicesUrl: `${publicUrl}/account`,
-      stopText: stopTexts[stops],
-      stopUrl: `${publicUrl}/unsubscribe/${this.token(setting, stops)}`,
-    };
-  }
-
-  /** The token of the link that stops such mails. */
-  token({ recipient, room }: MailSetting, stops: MailStop): string {
-    return this.parts.tokens.write({ personId: recipient.personId, roomId: room.id, stops });
   }
 
   private async worthTelling(tx: Tx, mail: DueMail, alerts: readonly AlertOfRoom[]): Promise<AlertOfRoom[]> {
@@ -151,13 +135,6 @@ export class MailComposer {
     return first === null ? alertSubject(alerts, setting) : `Re: ${first}`;
   }
 }
-
-const stopTexts: Readonly<Record<MailStop, string>> = {
-  lookToday: 'Stop mails about alerts that can wait a day',
-  alerts: 'Stop mails about alerts',
-  cleared: 'Stop mails that something is over',
-  letter: 'Stop the morning letter',
-};
 
 /** One click on a mail that nags must not silence what is urgent, unless the mail is urgent itself. */
 function stopsOf(mail: DueMail, alerts: readonly AlertOfRoom[]): MailStop {

@@ -14,7 +14,7 @@ import { PersonEntity } from '../people/person-entity';
 import { RoomEntity } from '../rooms/room-entity';
 
 /** Why a mail is written. */
-export type MailKind = 'opened' | 'urgent' | 'escalated' | 'assigned' | 'cleared' | 'letter';
+export type MailKind = 'opened' | 'urgent' | 'escalated' | 'assigned' | 'cleared' | 'letter' | 'care';
 
 /** A picture shown inside a mail. */
 export interface MailPicture {
@@ -31,7 +31,10 @@ export interface MailPicture {
 @Entity('mail')
 @Unique('mail_message_id_key', ['messageId'])
 @Index('mail_due_idx', ['notBefore'], { where: 'sent_at IS NULL AND failed_at IS NULL' })
-@Check('mail_kind_known', "kind IN ('opened', 'urgent', 'escalated', 'assigned', 'cleared', 'letter')")
+@Check(
+  'mail_kind_known',
+  "kind IN ('opened', 'urgent', 'escalated', 'assigned', 'cleared', 'letter', 'care')",
+)
 export class MailEntity {
   @PrimaryGeneratedColumn('uuid', { primaryKeyConstraintName: 'mail_pkey' }) id!: string;
   @Column('uuid', { name: 'person_id' }) personId!: string;

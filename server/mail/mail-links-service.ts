@@ -36,11 +36,12 @@ export class MailLinksService {
   async follow(token: string): Promise<MailLink> {
     const { meaning, recipient, link } = await this.find(token);
     if (link.isStopped) return link;
-    const { lookToday, goNow, cleared, letterAt } = withoutMails(recipient.mails, meaning.stops);
+    const { lookToday, goNow, cleared, care, letterAt } = withoutMails(recipient.mails, meaning.stops);
     await this.people.changeMailChoice(meaning.personId, meaning.roomId, {
       lookToday,
       goNow,
       cleared,
+      care,
       letterAt,
     });
     return { ...link, isStopped: true };

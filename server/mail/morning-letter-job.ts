@@ -7,7 +7,7 @@ import { letterDue, type LetterMorning } from '@shared/mail/letter-time';
 import type { Clock } from '../clock';
 import type { Transactions, Tx } from '../database/transactions';
 import type { MailSetting } from './alert-mail';
-import type { MailComposer } from './mail-composer';
+import type { MailFooters } from './mail-footers';
 import { htmlPage, plainText, type MailPlan } from './mail-layout';
 import type { MailStore } from './mail-store';
 import { hasNews, letterSections, type MorningNews, type ShelfNight } from './morning-letter';
@@ -18,7 +18,7 @@ export interface LetterParts {
   readonly transactions: Transactions;
   readonly tellings: TellingStore;
   readonly mails: MailStore;
-  readonly composer: Pick<MailComposer, 'footer' | 'token'>;
+  readonly footers: MailFooters;
   readonly publicUrl: () => string;
   readonly mailDomain: string;
   readonly now: Clock;
@@ -66,7 +66,7 @@ export class MorningLetterJob {
     news: MorningNews,
     now: number,
   ): Promise<void> {
-    const { composer, mails, mailDomain } = this.parts;
+    const { footers, mails, mailDomain } = this.parts;
     const setting: MailSetting = { recipient, room, publicUrl: this.parts.publicUrl(), now };
     const isNews = hasNews(news, setting);
     if (!isNews && recipient.mails.letterOnlyWithNews) return;
@@ -75,7 +75,7 @@ export class MorningLetterJob {
       preview: isNews ? 'What needs you today, and how the night was.' : 'A quiet night; nothing needs you.',
       opening: `Good morning, ${recipient.name}.${isNews ? '' : ' The night was quiet, and nothing needs you today.'}`,
       sections: letterSections(news, setting),
-      footer: composer.footer(setting, 'letter'),
+      footer: footers.footer(setting, 'letter'),
     };
     await mails.addWhole(tx, {
       personId: recipient.personId,
@@ -88,7 +88,7 @@ export class MorningLetterJob {
       textBody: plainText(plan),
       htmlBody: htmlPage(plan),
       pictures: [],
-      unsubscribeToken: composer.token(setting, 'letter'),
+      unsubscribeToken: footers.token(setting, 'letter'),
     });
   }
 

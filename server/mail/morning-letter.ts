@@ -79,12 +79,16 @@ export function hasNews(news: MorningNews, setting: MailSetting): boolean {
 }
 
 function tasksOf(tasks: readonly Task[], { recipient }: MailSetting): Task[] {
-  return tasks.filter(({ personId }) => personId === null || personId === recipient.personId);
+  return tasks.filter(
+    ({ holders }) => holders.length === 0 || holders.some(({ personId }) => personId === recipient.personId),
+  );
 }
 
-function taskLine({ title, shelfLabel, dueOn, personId }: Task, today: string): string {
-  const where = shelfLabel === null ? '' : `, ${shelfLabel}`;
-  const whose = personId === null ? ' (anybody)' : '';
+function taskLine({ title, plantingLabel, rackName, shelfLabel, dueOn, cover }: Task, today: string): string {
+  const where = [plantingLabel, rackName, shelfLabel]
+    .map((part) => (part === null ? '' : `, ${part}`))
+    .join('');
+  const whose = cover === 'anybody' ? ' (anybody)' : cover === 'uncovered' ? ' (nobody has it)' : '';
   const day = formatShortDay(`${dueOn}T12:00:00Z`, 'UTC');
   const when = dueOn === today ? '' : dueOn < today ? `, due since ${day}` : ` on ${day}`;
   return `${title}${where}${when}${whose}`;

@@ -32,7 +32,7 @@ export interface RoomOfMail {
 export interface Telling {
   readonly recipient: Recipient;
   readonly roomId: string;
-  readonly kind: Exclude<MailKind, 'letter'>;
+  readonly kind: Exclude<MailKind, 'letter' | 'care'>;
   readonly alerts: readonly Pick<AlertOfRoom, 'id' | 'urgency'>[];
   readonly dueAt: number;
   readonly isHeldBack: boolean;

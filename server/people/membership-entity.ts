@@ -27,6 +27,7 @@ export class MembershipEntity {
   @Column('text', { name: 'mail_look_today', default: 'atOnce' }) mailLookToday!: Telling;
   @Column('text', { name: 'mail_go_now', default: 'atOnce' }) mailGoNow!: Telling;
   @Column('boolean', { name: 'mail_alert_cleared', default: false }) mailAlertCleared!: boolean;
+  @Column('boolean', { name: 'mail_care', default: true }) mailCare!: boolean;
   /** `HH:MM` on the room's clock; null with `quietTo` for no quiet hours. */
   @Column('text', { name: 'quiet_from', nullable: true }) quietFrom!: string | null;
   @Column('text', { name: 'quiet_to', nullable: true }) quietTo!: string | null;

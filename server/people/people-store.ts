@@ -15,7 +15,7 @@ export interface AccountChange {
 /** A membership's choice of mails as one value, for any query over `membership`. */
 export const mailChoiceColumns = `json_build_object(
     'lookToday', membership.mail_look_today, 'goNow', membership.mail_go_now,
-    'cleared', membership.mail_alert_cleared,
+    'cleared', membership.mail_alert_cleared, 'care', membership.mail_care,
     'quietHours', CASE WHEN membership.quiet_from IS NOT NULL
       THEN json_build_object('from', membership.quiet_from, 'to', membership.quiet_to) END,
     'letterAt', membership.letter_at, 'letterOnlyWithNews', membership.letter_only_with_news)`;
@@ -100,6 +100,7 @@ export class PeopleStore {
         mailLookToday: choice.lookToday,
         mailGoNow: choice.goNow,
         mailAlertCleared: choice.cleared,
+        mailCare: choice.care,
         quietFrom: choice.quietHours?.from ?? null,
         quietTo: choice.quietHours?.to ?? null,
         letterAt: choice.letterAt,

@@ -4,6 +4,7 @@ import { receiveUpload } from '../http/receive-upload';
 import { route, type Route, type RouteContext } from '../http/route';
 import type { PhotoSubject } from './photo-subject';
 import type { PhotosService } from './photos-service';
+import { wholeUpload } from './whole-upload';
 
 /**
  * Photos over HTTP.
@@ -19,7 +20,9 @@ export function photosRoutes(photos: PhotosService): Route[] {
   ) => {
     const { req, res, room } = context;
     await photos.requireSubject(room.id, subject);
-    const bytes = await receiveUpload(req, res, contract.PHOTO_MAX_BYTES, (_name, stream) => whole(stream));
+    const bytes = await receiveUpload(req, res, contract.PHOTO_MAX_BYTES, (_name, stream) =>
+      wholeUpload(stream),
+    );
     return photos.add(authorOf(context), subject, bytes, caption);
   };
   return [
@@ -39,10 +42,4 @@ export function photosRoutes(photos: PhotosService): Route[] {
       photos.remove({ ...authorOf(context), role: context.room.role }, context.params.photoId),
     ),
   ];
-}
-
-async function whole(stream: AsyncIterable<Buffer>): Promise<Buffer> {
-  const parts: Buffer[] = [];
-  for await (const part of stream) parts.push(part);
-  return Buffer.concat(parts);
 }

@@ -13,19 +13,27 @@ import { shrinkPhoto } from './shrink-photo';
 export interface PhotosParts {
   readonly transactions: Transactions;
   readonly photos: PhotosStore;
-  /** 404 unless the room has such a planting or lot. */
+  /** 404 unless the room has such a planting, lot or task. */
   readonly requireSubject: (tx: Tx, roomId: string, subject: PhotoSubject) => Promise<void>;
+  /** The planting that a task is about, null for none; 404 when the room has no such task. */
+  readonly plantingOfTask: (tx: Tx, roomId: string, taskId: string) => Promise<string | null>;
   readonly changes: RoomChanges;
   readonly now: Clock;
 }
 
-/** Photos of plantings and of seed packets. */
+/** Photos of plantings, of seed packets, and of what was done. */
 export class PhotosService {
   constructor(private readonly parts: PhotosParts) {}
 
   /** 404 unless the room has what a photo is to show; asked before its bytes are read. */
   requireSubject(roomId: string, subject: PhotoSubject): Promise<void> {
     return this.parts.requireSubject(this.parts.transactions.plain, roomId, subject);
+  }
+
+  /** A task, and the planting that shows its photos too; 404 when the room has no such task. */
+  async subjectOfTask(roomId: string, taskId: string): Promise<PhotoSubject> {
+    const { transactions, plantingOfTask } = this.parts;
+    return { taskId, plantingId: await plantingOfTask(transactions.plain, roomId, taskId) };
   }
 
   /**

@@ -27,7 +27,7 @@ export interface PlantingEventsParts {
 }
 
 /** What helpers note, and may take back themselves. */
-const observations: readonly StoredEvent['kind'][] = ['counted', 'harvested', 'noted'];
+const observations: readonly StoredEvent['kind'][] = ['counted', 'harvested', 'watered', 'noted'];
 
 /** Notes what happens to plantings, and takes it back. */
 export class PlantingEventsService {

@@ -13,6 +13,7 @@ export interface StoredEvent {
   readonly kind: PlantingEventEntity['kind'];
   readonly count: number | null;
   readonly grams: number | null;
+  readonly millilitres: number | null;
   readonly stage: PlantingStage | null;
   readonly container: string | null;
   readonly shelfId: string | null;
@@ -23,6 +24,7 @@ export interface StoredEvent {
   readonly note: string;
   readonly personId: string | null;
   readonly personName: string | null;
+  readonly taskId: string | null;
 }
 
 /** An event to note. */
@@ -42,10 +44,10 @@ export class PlantingEventsStore {
   /** The events of a planting in the order they were noted. */
   of(tx: Tx, plantingId: string): Promise<StoredEvent[]> {
     return tx.query(
-      `SELECT event.id, event.seq, event.at, event.kind, event.count, event.grams, event.stage, event.container,
+      `SELECT event.id, event.seq, event.at, event.kind, event.count, event.grams, event.millilitres, event.stage, event.container,
          event.shelf_id AS "shelfId", shelf.label AS "shelfLabel", event.loss_reason AS "lossReason",
          event.other_planting_id AS "otherPlantingId", event.is_last AS "isLast", event.note,
-         event.person_id AS "personId", person.name AS "personName"
+         event.person_id AS "personId", person.name AS "personName", event.task_id AS "taskId"
        FROM planting_event AS event
        LEFT JOIN shelf ON shelf.id = event.shelf_id LEFT JOIN person ON person.id = event.person_id
        WHERE event.planting_id = $1 ORDER BY event.seq`,
@@ -57,6 +59,12 @@ export class PlantingEventsStore {
   async add(tx: Tx, plantingId: string, event: NewEvent): Promise<string> {
     const last = await tx.maximum(PlantingEventEntity, 'seq', { plantingId });
     return (await tx.save(PlantingEventEntity, { ...event, plantingId, seq: (last ?? -1) + 1 })).id;
+  }
+
+  /** The plantings that a task wrote something at, each with what. */
+  async ofTask(tx: Tx, taskId: string): Promise<{ plantingId: string; eventId: string }[]> {
+    const events = await tx.find(PlantingEventEntity, { where: { taskId }, order: { plantingId: 'ASC' } });
+    return events.map(({ plantingId, id }) => ({ plantingId, eventId: id }));
   }
 
   /** Takes an event back. */

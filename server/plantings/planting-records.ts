@@ -65,6 +65,23 @@ export class PlantingRecords {
     return last;
   }
 
+  /** Takes an event of any time back; 409 where later ones rest on it. */
+  async remove(tx: Tx, plantingId: string, eventId: string, timeZone: string): Promise<void> {
+    const left = (await this.events.of(tx, plantingId)).filter(({ id }) => id !== eventId);
+    let state: PlantingState;
+    try {
+      state = plantingStateOf(left.map(happeningOf));
+    } catch (error) {
+      if (!(error instanceof PlantingRuleError)) throw error;
+      throw conflict(
+        'HAS_HISTORY',
+        'What happened to the planting since rests on this. Undo that there first.',
+      );
+    }
+    await this.events.remove(tx, eventId);
+    await this.save(tx, plantingId, state, timeZone);
+  }
+
   /** What a planting's events leave. */
   async state(tx: Tx, plantingId: string): Promise<PlantingState> {
     return plantingStateOf((await this.events.of(tx, plantingId)).map(happeningOf));

@@ -110,7 +110,13 @@ export class PlantingsService {
  * @param event - As stored.
  * @returns The view.
  */
-export function eventView({ seq: _, personId: _by, at, ...event }: StoredEvent): PlantingEventView {
+export function eventView({
+  seq: _,
+  personId: _by,
+  taskId: _task,
+  at,
+  ...event
+}: StoredEvent): PlantingEventView {
   return { ...event, at: at.toISOString() };
 }
 

@@ -30,7 +30,6 @@ export interface SowingParts {
   readonly seed: SeedService;
   readonly people: Pick<PeopleService, 'membershipOf'>;
   readonly tasks: OpenTasks;
-  readonly taskOf: (tx: Tx, roomId: string, taskId: string) => Promise<Task>;
   readonly changes: RoomChanges;
   readonly now: Clock;
 }
@@ -123,7 +122,7 @@ export class SowingService {
     cropId: string,
     due: { readonly on: string; readonly personId: string | null },
   ): Promise<Task> {
-    const { changes, sowing, tasks, taskOf, people } = this.parts;
+    const { changes, sowing, tasks, people } = this.parts;
     if (due.personId !== null && (await people.membershipOf(due.personId, by.roomId)) === null) {
       throw invalidField('body.personId', 'is no member of this room');
     }
@@ -142,7 +141,7 @@ export class SowingService {
               dueOn: due.on,
               personId: due.personId,
             })
-          : await taskOf(tx, by.roomId, choice.openTaskId);
+          : await tasks.task(tx, by.roomId, choice.openTaskId);
       await sowing.setTask(tx, by.roomId, cropId, result.id);
       return { result, action: 'sowing.task', subjectId: result.id, detail: { cropId, ...due } };
     });

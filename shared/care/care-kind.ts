@@ -5,6 +5,7 @@ export const careKinds = [
   'trim',
   'pick',
   'clean',
+  'washFlats',
   'inspect',
   'turn',
   'prickOut',

@@ -4,6 +4,8 @@ import * as advice from './advice';
 import * as alerts from './alerts';
 import * as board from './board';
 import * as care from './care';
+import * as careRota from './care-rota';
+import * as careRoutines from './care-routines';
 import * as crops from './crops';
 import * as devices from './devices';
 import * as loggerFileProfiles from './logger-file-profiles';
@@ -92,11 +94,33 @@ export const endpoints: readonly Endpoint[] = [
   alertAnswers.removeAlertDeed,
   alertAnswers.assignAlert,
   care.listTasks,
+  care.getCareDays,
   care.completeTask,
   care.reopenTask,
-  care.listRoutines,
-  care.addRoutine,
+  care.addTask,
+  care.removeTask,
+  care.moveTask,
+  care.assignTask,
+  care.takeOverTask,
+  care.addTaskPhoto,
   care.addShelfEvent,
+  careRoutines.listRoutines,
+  careRoutines.addRoutine,
+  careRoutines.changeRoutine,
+  careRoutines.endRoutine,
+  careRoutines.listReadyMadeRoutines,
+  careRoutines.adoptRoutines,
+  careRota.getRota,
+  careRota.setDutyWeek,
+  careRota.setDutyDay,
+  careRota.clearDutyDay,
+  careRota.addAbsence,
+  careRota.removeAbsence,
+  careRota.getFairShare,
+  careRota.listSwaps,
+  careRota.offerSwap,
+  careRota.takeSwap,
+  careRota.withdrawSwap,
   crops.listCrops,
   crops.getCrop,
   crops.copyCrop,

@@ -12,6 +12,7 @@ export const mailChoice = z.strictObject({
   lookToday: z.enum(tellings),
   goNow: z.enum(tellings),
   cleared: z.boolean(),
+  care: z.boolean(),
   quietHours: quietHours.nullable(),
   letterAt: clockTime.nullable(),
   letterOnlyWithNews: z.boolean(),

@@ -13,6 +13,8 @@ export const plantingEvent = z.object({
   /** Plants or seeds it is about: sown, up in all, pricked out, parted, planted out, lost, picked. */
   count: z.number().int().nullable(),
   grams: z.number().nullable(),
+  /** Water given [ml]. */
+  millilitres: z.number().nullable(),
   stage: z.enum(plantingStages).nullable(),
   container: z.string().nullable(),
   shelfId: id.nullable(),
@@ -49,6 +51,11 @@ export const plantingObservation = z.discriminatedUnion('kind', [
     ...noted,
     grams: z.number().positive().max(1_000_000).nullable().default(null),
     count: count.nullable().default(null),
+  }),
+  z.strictObject({
+    kind: z.literal('watered'),
+    ...noted,
+    millilitres: z.number().positive().max(1_000_000).nullable().default(null),
   }),
   z.strictObject({ kind: z.literal('noted'), at: noted.at, note: z.string().trim().min(1).max(1000) }),
 ]);
@@ -91,7 +98,7 @@ export const observePlanting = endpoint({
   method: 'post',
   path: '/rooms/:roomId/plantings/:plantingId/observations',
   access: 'helper',
-  summary: 'Note how many are up, a harvest or an observation; takes an Idempotency-Key',
+  summary: 'Note how many are up, a harvest, a watering or an observation; takes an Idempotency-Key',
   params: plantingParams,
   body: plantingObservation,
   reply: plantingNow,

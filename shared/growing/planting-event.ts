@@ -12,6 +12,7 @@ export const plantingEventKinds = [
   'plantedOut',
   'lost',
   'harvested',
+  'watered',
   'noted',
   'ended',
 ] as const;

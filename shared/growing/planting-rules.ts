@@ -60,6 +60,7 @@ const rules: Readonly<Record<PlantingEventKind, Rule>> = {
   plantedOut,
   lost,
   harvested,
+  watered: (state) => state,
   noted: (state) => state,
   ended: (state, { at }) => ended(state, at),
 };

@@ -12,6 +12,8 @@ export interface MailChoice {
   readonly goNow: Telling;
   /** Whether to hear that an alert is over, after a mail that it had opened. */
   readonly cleared: boolean;
+  /** Whether to hear of care: a task not done as its time ends, offers to hand one over. */
+  readonly care: boolean;
   /** Only urgent alerts pass; null for no quiet hours. */
   readonly quietHours: QuietHours | null;
   /** When the morning letter is sent, `HH:MM` on the room's clock; null for no letter. */
@@ -25,6 +27,7 @@ export const usualMailChoice: MailChoice = {
   lookToday: 'atOnce',
   goNow: 'atOnce',
   cleared: false,
+  care: true,
   quietHours: null,
   letterAt: null,
   letterOnlyWithNews: true,

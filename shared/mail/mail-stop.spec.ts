@@ -5,6 +5,7 @@ const everything: MailChoice = {
   lookToday: 'morningLetter',
   goNow: 'atOnce',
   cleared: true,
+  care: true,
   quietHours: { from: '22:00', to: '07:00' },
   letterAt: '06:30',
   letterOnlyWithNews: false,
@@ -15,6 +16,7 @@ describe('stopping a kind of mail', () => {
     ['lookToday', { ...everything, lookToday: 'never' }],
     ['alerts', { ...everything, lookToday: 'never', goNow: 'never' }],
     ['cleared', { ...everything, cleared: false }],
+    ['care', { ...everything, care: false }],
     ['letter', { ...everything, letterAt: null, lookToday: 'never' }],
   ] as const)('%s leaves all others as they were', (stop, expected) => {
     expect(withoutMails(everything, stop)).toEqual(expected);

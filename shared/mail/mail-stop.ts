@@ -1,7 +1,10 @@
 import type { MailChoice } from './mail-choice';
 
-/** What one click on a mail's own link stops: alerts that can wait a day, all alerts, mails that one is over, letters. */
-export const mailStops = ['lookToday', 'alerts', 'cleared', 'letter'] as const;
+/**
+ * What one click on a mail's own link stops: alerts that can wait a day, all alerts, mails that one is over, letters, care.
+ * New ones come last: links in mails that were sent count them.
+ */
+export const mailStops = ['lookToday', 'alerts', 'cleared', 'letter', 'care'] as const;
 /** One of {@link mailStops}. */
 export type MailStop = (typeof mailStops)[number];
 
@@ -21,6 +24,8 @@ export function withoutMails(choice: MailChoice, stop: MailStop): MailChoice {
       return { ...choice, lookToday: 'never', goNow: 'never' };
     case 'cleared':
       return { ...choice, cleared: false };
+    case 'care':
+      return { ...choice, care: false };
     case 'letter': {
       const { lookToday, goNow } = choice;
       return {
@@ -45,6 +50,7 @@ export function isStopped(choice: MailChoice, stop: MailStop): boolean {
     without.lookToday === choice.lookToday &&
     without.goNow === choice.goNow &&
     without.cleared === choice.cleared &&
+    without.care === choice.care &&
     without.letterAt === choice.letterAt
   );
 }

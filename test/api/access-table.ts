@@ -72,6 +72,14 @@ const keeper: Outcomes = {
 };
 
 const span = 'from=2026-04-01T00:00:00Z&to=2026-04-02T00:00:00Z';
+const days = 'from=2026-04-01&to=2026-04-08';
+const routine = {
+  kind: 'water',
+  title: 'Water',
+  place: { at: 'room' },
+  timing: { how: 'calendar', rule: 'FREQ=DAILY', startsOn: '2026-04-15' },
+  who: { how: 'onDuty' },
+};
 const noLimits = { low: null, high: null };
 
 /**
@@ -79,6 +87,9 @@ const noLimits = { low: null, high: null };
  * contract only if both are right.
  */
 export const accessTable: Readonly<Record<string, AccessRow>> = {
+  isAlive: { outcomes: anyone },
+  isReady: { outcomes: anyone },
+
   signIn: { outcomes: anyone },
   signOut: { outcomes: signedIn },
   getAccount: { outcomes: signedIn },
@@ -163,11 +174,36 @@ export const accessTable: Readonly<Record<string, AccessRow>> = {
   removeAlertDeed: { outcomes: helper },
   assignAlert: { outcomes: helper, body: { personId: null } },
 
-  listTasks: { outcomes: viewer, query: 'from=2026-04-01&to=2026-04-08' },
+  listTasks: { outcomes: viewer, query: days },
+  getCareDays: { outcomes: viewer },
   completeTask: { outcomes: helper },
   reopenTask: { outcomes: helper },
+  addTask: { outcomes: helper },
+  removeTask: { outcomes: helper },
+  moveTask: { outcomes: grower, body: { dueOn: '2026-04-20' } },
+  assignTask: { outcomes: grower, body: { personIds: [] } },
+  takeOverTask: { outcomes: helper },
+  addTaskPhoto: { outcomes: helper },
   listRoutines: { outcomes: viewer },
   addRoutine: { outcomes: grower },
+  changeRoutine: { outcomes: grower, body: routine },
+  endRoutine: { outcomes: grower },
+  listReadyMadeRoutines: { outcomes: viewer, query: 'cropId=leek' },
+  adoptRoutines: {
+    outcomes: grower,
+    body: { readyMadeIds: ['look-for-pests'], who: { how: 'onDuty' } },
+  },
+  getRota: { outcomes: viewer, query: days },
+  setDutyWeek: { outcomes: keeper, body: { week: [] } },
+  setDutyDay: { outcomes: keeper },
+  clearDutyDay: { outcomes: keeper },
+  addAbsence: { outcomes: helper, body: { from: '2026-04-20', to: '2026-04-21' } },
+  removeAbsence: { outcomes: helper },
+  getFairShare: { outcomes: viewer, query: days },
+  listSwaps: { outcomes: viewer },
+  offerSwap: { outcomes: helper },
+  takeSwap: { outcomes: helper },
+  withdrawSwap: { outcomes: helper },
   addShelfEvent: { outcomes: helper, body: { kind: 'observed', text: 'up' } },
 
   listCrops: { outcomes: viewer },

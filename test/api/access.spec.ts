@@ -4,7 +4,7 @@ import { endpoints } from '@shared/contracts/api';
 import type { Endpoint } from '@shared/contracts/endpoint';
 import type { Problem } from '@shared/contracts/problem';
 import { anAlert, anAlertDeed } from '../builders/alerts';
-import { aTask } from '../builders/care';
+import { anAbsence, aRoutine, aSwap, aTask } from '../builders/care';
 import { aRoomCrop, aVariety } from '../builders/crops';
 import { aDevice, aSensor } from '../builders/devices';
 import { aFileProfile, aLoggerFile } from '../builders/logger-files';
@@ -21,7 +21,7 @@ import { startTestApplication, type TestApplication } from './test-application';
 
 /** The parameters of a path that name something stored inside a room. */
 const storedParameters = (endpoint: Endpoint): string[] =>
-  parametersOf(endpoint).filter((name) => !['roomId', 'quantity', 'run', 'token'].includes(name));
+  parametersOf(endpoint).filter((name) => !['roomId', 'quantity', 'run', 'token', 'day'].includes(name));
 
 function parametersOf({ path }: Endpoint): string[] {
   return [...path.matchAll(/:(\w+)/g)].map(([, name]) => name ?? '');
@@ -78,6 +78,7 @@ describe('access', () => {
         ...Object.fromEntries(parametersOf(endpoint).map((parameter) => [parameter, randomUUID()])),
         roomId: asked.room.id,
         quantity: 'airTemperature',
+        day: '2026-04-20',
       });
       const outcomes: Partial<Record<CallerName, Outcome>> = {};
       for (const caller of callers) {
@@ -115,6 +116,7 @@ describe('access', () => {
       return {
         roomId,
         quantity: 'airTemperature',
+        day: '2026-04-20',
         shelfId: shelf.id,
         rackId: shelf.rackId,
         sensorId: sensor.id,
@@ -122,6 +124,9 @@ describe('access', () => {
         alertId: alert.id,
         deedId: (await anAlertDeed(tx, { alertId: alert.id })).id,
         taskId: (await aTask(tx, { roomId })).id,
+        routineId: (await aRoutine(tx, { roomId })).id,
+        absenceId: (await anAbsence(tx, { roomId })).id,
+        swapId: (await aSwap(tx, { taskId: (await aTask(tx, { roomId })).id })).id,
         fileId: (await aLoggerFile(tx, { roomId })).id,
         plantingId: planting.id,
         photoId: (await aPhoto(tx, { plantingId: planting.id })).id,

@@ -1,4 +1,5 @@
-import type { Routine, ShelfEvent, Task } from '@shared/contracts/care';
+import type { ShelfEvent, Task } from '@shared/contracts/care';
+import type { Routine } from '@shared/contracts/care-routines';
 import type { Problem } from '@shared/contracts/problem';
 import { LiveRelay } from '../../server/live/live-relay';
 import { RoutineEntity } from '../../server/care/routine-entity';
@@ -28,12 +29,14 @@ describe('care', () => {
     const tasks = await tx.find(TaskEntity, { where: { routineId }, order: { dueOn: 'ASC' } });
     return tasks.map(({ dueOn }) => dueOn);
   };
+  const byRule = (rule: string, startsOn = '2026-04-15') => ({ timing: { how: 'calendar', rule, startsOn } });
   const addRoutine = (body: object) =>
     staff.grower.post(`${staff.path}/routines`, {
       kind: 'water',
       title: 'Water the peppers',
-      rule: 'FREQ=DAILY;INTERVAL=4',
-      startsOn: '2026-04-15',
+      place: { at: 'room' },
+      who: { how: 'onDuty' },
+      ...byRule('FREQ=DAILY;INTERVAL=4'),
       ...body,
     });
 
@@ -41,7 +44,7 @@ describe('care', () => {
     it('are those due in the span and those late before it, of this room only', async () => {
       const roomId = staff.room.id;
       const shelf = await aShelf(tx, { roomId, label: 'A3' });
-      const late = await aTask(tx, { roomId, dueOn: '2026-04-01', personId: staff.people.helper.id });
+      const late = await aTask(tx, { roomId, dueOn: '2026-04-01', personIds: [staff.people.helper.id] });
       const due = await aTask(tx, { roomId, shelfId: shelf.id });
       await aTask(tx, { roomId, dueOn: '2026-04-14', doneAt: application.now });
       const done = await aTask(tx, { roomId, dueOn: '2026-04-16', doneAt: application.now });
@@ -62,7 +65,7 @@ describe('care', () => {
 
       const first = await staff.helper.put(path, { note: 'dry at the edges' }).expect(200);
       application.now = new Date('2026-04-15T12:00:00Z');
-      const second = await staff.grower.put(path, { note: 'me too' }).expect(200);
+      const second = await staff.helper.put(path, { note: 'once more' }).expect(200);
 
       expect(first.body).toMatchObject({
         doneAt: '2026-04-15T10:00:00.000Z',
@@ -105,13 +108,14 @@ describe('care', () => {
       const shelf = await aShelf(tx, { roomId: staff.room.id, label: 'B2' });
 
       const reply = await addRoutine({
-        shelfId: shelf.id,
-        personId: staff.people.helper.id,
+        place: { at: 'shelf', shelfId: shelf.id },
+        who: { how: 'person', personId: staff.people.helper.id },
         detail: 'from below',
       });
 
       expect(reply.status).toBe(201);
       const routine = reply.body as Routine;
+      expect(routine).toMatchObject({ placeLabel: 'B2', nextDueOn: '2026-04-15' });
       expect((await staff.viewer.get(`${staff.path}/routines`)).body).toEqual([routine]);
       expect(await dueDaysOf(routine.id)).toEqual(['2026-04-15', '2026-04-19', '2026-04-23', '2026-04-27']);
       const tasks = await staff.viewer.get(`${staff.path}/tasks?from=2026-04-15&to=2026-04-16`);
@@ -127,7 +131,7 @@ describe('care', () => {
     });
 
     it('that began in the past keeps its rhythm and makes no late tasks', async () => {
-      const reply = await addRoutine({ startsOn: '2026-04-02' }).expect(201);
+      const reply = await addRoutine(byRule('FREQ=DAILY;INTERVAL=4', '2026-04-02')).expect(201);
 
       expect(await dueDaysOf((reply.body as Routine).id)).toEqual(['2026-04-18', '2026-04-22', '2026-04-26']);
     });
@@ -136,15 +140,20 @@ describe('care', () => {
       staff = await aStaffedRoom(application, { timeZone: 'Pacific/Auckland' });
       application.now = new Date('2026-04-15T13:00:00Z'); // already the 16th in Auckland
 
-      const reply = await addRoutine({ rule: 'FREQ=DAILY', startsOn: '2026-04-01' }).expect(201);
+      const reply = await addRoutine(byRule('FREQ=DAILY', '2026-04-01')).expect(201);
 
       expect((await dueDaysOf((reply.body as Routine).id))[0]).toBe('2026-04-16');
     });
 
     it.each([
-      ['a rule that is none', { rule: 'FREQ=SOMETIMES' }, 'body.rule'],
-      ['a rule by the hour', { rule: 'FREQ=HOURLY' }, 'body.rule'],
-      ['a start long ago', { startsOn: '1990-01-01' }, 'body.startsOn'],
+      ['a rule that is none', byRule('FREQ=SOMETIMES'), 'body.timing.rule'],
+      ['a rule by the hour', byRule('FREQ=HOURLY'), 'body.timing.rule'],
+      ['a start long ago', byRule('FREQ=DAILY', '1990-01-01'), 'body.timing.startsOn'],
+      [
+        'drying of no planting',
+        { timing: { how: 'byDrying', fallbackDays: 3, startsOn: '2026-04-15' } },
+        'body.timing.how',
+      ],
     ])('with %s is refused', async (_, body, path) => {
       const refused = await addRoutine(body).expect(422);
 
@@ -153,8 +162,8 @@ describe('care', () => {
     });
 
     it('for somebody who is no member, or on a shelf of another room, is refused', async () => {
-      await addRoutine({ personId: (await aPerson(tx)).id }).expect(422);
-      await addRoutine({ shelfId: (await aShelf(tx)).id }).expect(404);
+      await addRoutine({ who: { how: 'person', personId: (await aPerson(tx)).id } }).expect(422);
+      await addRoutine({ place: { at: 'shelf', shelfId: (await aShelf(tx)).id } }).expect(404);
       expect(await tx.countBy(RoutineEntity, { roomId: staff.room.id })).toBe(0);
     });
   });
@@ -162,10 +171,10 @@ describe('care', () => {
   describe('planning ahead', () => {
     it('makes each task once, however often and by however many processes it is done', async () => {
       const routine = await aRoutine(tx, { roomId: staff.room.id, startsOn: '2026-04-14' });
-      const { care } = application.app.services;
+      const { planning } = application.app.services;
 
-      await Promise.all([care.planAhead(), care.planAhead()]);
-      await care.planAhead();
+      await Promise.all([planning.planAhead(), planning.planAhead()]);
+      await planning.planAhead();
 
       expect(await dueDaysOf(routine.id)).toEqual([
         '2026-04-14',
@@ -181,12 +190,12 @@ describe('care', () => {
 
     it('catches up after days without, and brings no deleted task back', async () => {
       const routine = await aRoutine(tx, { roomId: staff.room.id, startsOn: '2026-04-28' });
-      const { care } = application.app.services;
-      await care.planAhead();
+      const { planning } = application.app.services;
+      await planning.planAhead();
       await tx.delete(TaskEntity, { routineId: routine.id });
       application.now = new Date('2026-04-20T10:00:00Z');
 
-      await care.planAhead();
+      await planning.planAhead();
 
       expect(await dueDaysOf(routine.id)).toEqual(['2026-04-30', '2026-05-02']);
     });
@@ -197,7 +206,7 @@ describe('care', () => {
       await aRoutine(tx, { roomId, endedAt: application.now });
       await aRoutine(tx, { roomId, shelfId: retired.id });
 
-      await application.app.services.care.planAhead();
+      await application.app.services.planning.planAhead();
 
       expect(await tx.countBy(TaskEntity, { roomId })).toBe(0);
     });
@@ -205,7 +214,7 @@ describe('care', () => {
 
   describe('a note on a shelf', () => {
     const events = (shelfId: string, from: string, to: string): Promise<ShelfEvent[]> =>
-      application.app.services.care.eventsOf(shelfId, new Date(from), new Date(to));
+      application.app.services.shelfEvents.of(shelfId, new Date(from), new Date(to));
 
     it('is of now unless it says when, and is found in spans that hold its instant', async () => {
       const shelf = await aShelf(tx, { roomId: staff.room.id });

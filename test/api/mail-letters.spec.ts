@@ -68,7 +68,7 @@ describe('the morning letter', () => {
     const other = await aPerson(tx);
     await aMember(tx, { roomId, personId: other.id });
     const task = (title: string, dueOn: string, whose: string | null): Promise<unknown> =>
-      aTask(tx, { roomId, title, dueOn, personId: whose });
+      aTask(tx, { roomId, title, dueOn, personIds: whose === null ? [] : [whose] });
     await task('Water the trays', '2026-04-16', personId);
     await task('Wipe the lamps', '2026-04-14', null);
     await task('Count the peppers', '2026-04-18', personId);

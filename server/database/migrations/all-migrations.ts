@@ -21,6 +21,7 @@ import { CreateShelfAdvice1764553400000 } from './1764553400000-create-shelf-adv
 import { CreateSowingCalendar1764553500000 } from './1764553500000-create-sowing-calendar';
 import { TellAssignees1764553400000 } from './1764553400000-tell-assignees';
 import { CreateWantedLight1764554500000 } from './1764554500000-create-wanted-light';
+import { CreateCareRota1764554600000 } from './1764554600000-create-care-rota';
 
 /** Every migration in order; a merged one is never edited. */
 export const migrations = [
@@ -47,4 +48,5 @@ export const migrations = [
   CreateSowingCalendar1764553500000,
   TellAssignees1764553400000,
   CreateWantedLight1764554500000,
+  CreateCareRota1764554600000,
 ];

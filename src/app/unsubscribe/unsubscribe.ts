@@ -14,6 +14,7 @@ const kinds: Readonly<Record<MailStop, string>> = {
   alerts: 'mails about alerts, urgent ones too',
   cleared: 'mails that something is over',
   letter: 'the morning letter',
+  care: 'mails about care',
 };
 
 /** Where the link of a mail leads: asks, and stops that kind of mail without signing in. */

@@ -38,6 +38,7 @@ export function plantingEvent(changes: Partial<PlantingEventView> = {}): Plantin
     note: '',
     count: null,
     grams: null,
+    millilitres: null,
     stage: null,
     container: null,
     shelfId: null,

@@ -1,6 +1,6 @@
 import type { PlantingEventView } from '@shared/contracts/planting-events';
 import type { LossReason, PlantingEventKind } from '@shared/growing/planting-event';
-import { pieceWords, plantWords, stageNames, weightWords } from './planting-facts';
+import { pieceWords, plantWords, stageNames, volumeWords, weightWords } from './planting-facts';
 
 /** Why plants were lost, as a choice and in a sentence. */
 export const lossWords: Readonly<Record<LossReason, string>> = {
@@ -31,6 +31,7 @@ export const eventIcons: Readonly<Record<PlantingEventKind, string>> = {
   plantedOut: 'nature',
   lost: 'heart_broken',
   harvested: 'shopping_basket',
+  watered: 'water_drop',
   noted: 'edit_note',
   ended: 'check_circle',
 };
@@ -63,6 +64,8 @@ export function eventWords(event: PlantingEventView): string {
       return `${plants ?? 'Plants'} lost${event.lossReason === null ? '' : `: ${lossWords[event.lossReason].toLowerCase()}`}`;
     case 'harvested':
       return `Harvested ${harvestOf(event)}`;
+    case 'watered':
+      return event.millilitres === null ? 'Watered' : `Watered, ${volumeWords(event.millilitres)}`;
     case 'noted':
       return 'Note';
     case 'ended':

@@ -71,6 +71,11 @@ export function weightWords(grams: number): string {
   return grams < 1000 ? formatValue(grams, 'g', 0) : formatValue(grams / 1000, 'kg', 2);
 }
 
+/** "600 ml", "1.2 L". */
+export function volumeWords(millilitres: number): string {
+  return millilitres < 1000 ? formatValue(millilitres, 'ml', 0) : formatValue(millilitres / 1000, 'L', 1);
+}
+
 /** "1 piece", "30 pieces". */
 export function pieceWords(count: number): string {
   return count === 1 ? '1 piece' : `${formatNumber(count, 0)} pieces`;
