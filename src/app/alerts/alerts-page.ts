@@ -1,12 +1,12 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input } from '@angular/core';
 import { Router } from '@angular/router';
 import { AlertInbox } from '../core/alert-inbox';
+import { RoomMembers } from '../core/room-members';
 import { Session } from '../core/session';
 import type { HistoryFilter } from './history/alert-history';
 import { filterOf } from './history/history-filter';
 import { HistoryList } from './history/history-list';
 import { OpenAlerts } from './open-alerts';
-import { RoomMembers } from './room-members';
 
 /** The alerts of the room: those open now, or all of them with those that are over. */
 @Component({

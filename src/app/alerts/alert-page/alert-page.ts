@@ -11,6 +11,7 @@ import { failureText } from '../../core/failure-text';
 import { LiveConnection } from '../../core/live-connection';
 import { ReaderFormat } from '../../core/reader-format';
 import { RoomClock } from '../../core/room-clock';
+import { RoomMembers } from '../../core/room-members';
 import { Session } from '../../core/session';
 import { ErrorState } from '../../ui/states/error-state';
 import { LoadingLines } from '../../ui/states/loading-lines';
@@ -18,7 +19,6 @@ import { AlertCard } from '../alert-card/alert-card';
 import { isValueKind } from '../alert-values';
 import { EpisodeChart } from '../episode-chart/episode-chart';
 import { spanAround } from '../episode-chart/span-around';
-import { RoomMembers } from '../room-members';
 import { alertTimeLine } from './time-line';
 
 const mailsAgainMs = 60_000;

@@ -8,9 +8,9 @@ import { newIdempotencyKey } from '../../core/api-client';
 import { Notices } from '../../core/notices';
 import { ReaderFormat } from '../../core/reader-format';
 import { RoomClock } from '../../core/room-clock';
+import { RoomMembers } from '../../core/room-members';
 import { AlertDesk } from '../alert-desk';
 import { isQuiet } from '../alert-words';
-import { RoomMembers } from '../room-members';
 import { QuietPanel } from './quiet-panel';
 import { WordsPanel } from './words-panel';
 

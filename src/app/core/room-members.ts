@@ -1,9 +1,9 @@
 import { computed, inject, Injectable, signal } from '@angular/core';
 import { rxResource } from '@angular/core/rxjs-interop';
 import { listMembers, roleSuffices } from '@shared/contracts/people';
-import { ApiClient } from '../core/api-client';
-import { failureText } from '../core/failure-text';
-import { Session } from '../core/session';
+import { ApiClient } from './api-client';
+import { failureText } from './failure-text';
+import { Session } from './session';
 
 /** The room's members, fetched once somebody wants to choose one. */
 @Injectable({ providedIn: 'root' })
@@ -20,7 +20,7 @@ export class RoomMembers {
     stream: ({ params }) => this.api.call(listMembers, { params }),
   });
 
-  /** Who may look after an alert, the person themselves first; null until it is known. */
+  /** Who may do care and look after alerts, the person themselves first; null until it is known. */
   readonly caring = computed(() => {
     if (!this.resource.hasValue()) return null;
     const self = this.session.account()?.id;
