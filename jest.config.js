@@ -66,7 +66,7 @@ module.exports = {
     {
       ...node,
       displayName: 'e2e',
-      testMatch: ['<rootDir>/test/e2e/**/*.spec.ts'],
+      testMatch: ['<rootDir>/test/{e2e,production}/**/*.spec.ts'],
     },
   ],
 };

@@ -12,6 +12,7 @@ import { openApiDocument } from '@shared/contracts/openapi';
 import type { Clock } from './clock';
 import type { Config } from './config';
 import { Transactions } from './database/transactions';
+import { healthRoutes, type Stopping } from './health/health-routes';
 import { AccessControl } from './http/access';
 import { errorAnswer, isDatabaseAway } from './http/error-answer';
 import { apiBase, mountRoutes } from './http/mount-routes';
@@ -22,6 +23,7 @@ import { serveWebClient } from './http/web-client';
 import { LiveRelay } from './live/live-relay';
 import { LiveServer } from './live/live-server';
 import { OutboxWorker } from './mail/outbox-worker';
+import { Metrics } from './metrics/metrics';
 import { sessionMiddleware } from './people/session';
 import { sessionSecret } from './people/session-secret';
 import { configureSignIn } from './people/sign-in';
@@ -43,14 +45,18 @@ export interface App {
   readonly express: Express;
   readonly services: Services;
   readonly outbox: OutboxWorker | null;
+  readonly metrics: Metrics;
   /** The address that links in mails begin with; set once it is known where we listen. */
   setPublicUrl(url: string): void;
-  /** Cuts connections and finishes what is in hand. */
+  /** Takes nothing new, finishes the requests in hand, and cuts what is not done after ten seconds. */
   close(): Promise<void>;
 }
 
 /** JSON bodies: a full SenML pack of a device is the largest. */
 const JSON_LIMIT = '1mb';
+/** A request that takes longer to end is cut when the server stops. */
+const FINISH_MS = 10_000;
+const IDLE_EVERY_MS = 100;
 
 /**
  * Builds the Express application and the socket.io server from their parts.
@@ -108,10 +114,13 @@ export async function buildApp(parts: AppParts): Promise<App> {
     res.json(openApiDocument(apiBase));
   });
   app.use(apiBase, session, passportSession);
-  mountRoutes(app, services.routes, {
+  const metrics = new Metrics(transactions);
+  const stopping: Stopping = { isStopping: false };
+  mountRoutes(app, [...services.routes, ...healthRoutes(transactions, stopping)], {
     access: new AccessControl(services.accessLookup),
     repeatable: new RepeatableRequests(transactions),
     checkReplies: config.isTest,
+    onAnswered: (endpoint, status, seconds) => metrics.request(endpoint, status, seconds),
   });
   app.use(apiBase, (_req, _res, next) => next(notFound('address in the API')));
   if (parts.webFolder !== null) serveWebClient(app, join(parts.webFolder));
@@ -145,12 +154,19 @@ export async function buildApp(parts: AppParts): Promise<App> {
     express: app,
     services,
     outbox,
+    metrics,
     setPublicUrl: (url) => {
       publicUrl = config.publicUrl ?? url;
     },
     close: async () => {
+      stopping.isStopping = true;
+      const cut = setTimeout(() => http.closeAllConnections(), FINISH_MS);
+      // A connection that was busy when the server closed would otherwise be kept for a next request.
+      const idle = setInterval(() => http.closeIdleConnections(), IDLE_EVERY_MS);
       await services.boardPublisher.stop();
       await live.close();
+      clearTimeout(cut);
+      clearInterval(idle);
     },
   };
 }

@@ -27,6 +27,8 @@ const settings = z.object({
   LAMPMEADOW_DEVICES_FILE: z.string().min(1).optional(),
   SIMULATOR_CONTROL_URL: z.url().optional(),
   SIMULATOR_CONTROL_SECRET: z.string().min(1).optional(),
+  /** Figures for Prometheus, on loopback; nothing is served without it. */
+  METRICS_PORT: port.optional(),
   LOG_LEVEL: z.enum(['fatal', 'error', 'warn', 'info', 'debug', 'silent']).default('info'),
 });
 
@@ -49,6 +51,7 @@ export interface Config {
   readonly isDemonstration: boolean;
   readonly devicesFile: string | null;
   readonly simulatorControl: { readonly url: string; readonly secret: string } | null;
+  readonly metricsPort: number | null;
   readonly logLevel: string;
 }
 
@@ -88,6 +91,7 @@ export function readConfig(environment: Readonly<Record<string, string | undefin
     simulatorControl: hasControl
       ? { url: values.SIMULATOR_CONTROL_URL ?? '', secret: values.SIMULATOR_CONTROL_SECRET ?? '' }
       : null,
+    metricsPort: values.METRICS_PORT ?? null,
     logLevel: values.LOG_LEVEL,
   };
 }

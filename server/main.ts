@@ -11,6 +11,7 @@ import { migrate } from './database/migrate';
 import { Transactions } from './database/transactions';
 import { demonstrationNotes, fillDemonstration } from './demonstration/fill-demonstration';
 import { startJobs } from './jobs/start-jobs';
+import { startMetricsServer } from './metrics/metrics-server';
 import { startProcesses } from './processes';
 
 // Left alone, V8 lets garbage pile up to four times what is alive while a large file is brought in; half as much again
@@ -50,12 +51,18 @@ async function serve(config: Config): Promise<() => Promise<void>> {
   app.services.setDemonstrationRoom(room);
   const address = await listen(app, config);
   app.setPublicUrl(address);
+  // Several processes are told of by the first one, in processes.ts.
+  const metrics =
+    config.metricsPort === null || cluster.isWorker
+      ? null
+      : await startMetricsServer(config.metricsPort, () => app.metrics.text());
   const stopJobs = startJobs(app, new Transactions(dataSource), log);
   log.info({ address }, 'listening');
-  process.send?.({ ready: true, address, notes: notesFor(config, room !== null) });
+  process.send?.({ ready: true, address, metrics: metrics?.address, notes: notesFor(config, room !== null) });
   return async () => {
     await stopJobs();
     await app.close();
+    await metrics?.stop();
     await dataSource.destroy();
   };
 }

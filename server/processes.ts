@@ -1,5 +1,7 @@
 import cluster from 'node:cluster';
+import { AggregatorRegistry } from 'prom-client';
 import type { Config } from './config';
+import { startMetricsServer } from './metrics/metrics-server';
 
 /**
  * Serves from several processes that share one port. Nothing is kept in any of them that another would need: sessions,
@@ -15,6 +17,11 @@ export async function startProcesses(config: Config): Promise<void> {
     first.once('message', resolve);
     first.once('exit', (code) => reject(new Error(`A web process ended at once (${code}).`)));
   });
+  const all = new AggregatorRegistry();
+  const metrics =
+    config.metricsPort === null
+      ? null
+      : await startMetricsServer(config.metricsPort, () => all.clusterMetrics());
   process.send?.(ready);
   for (let count = 1; count < config.webProcesses; count += 1) cluster.fork();
   let isStopping = false;
@@ -24,6 +31,7 @@ export async function startProcesses(config: Config): Promise<void> {
   });
   const end = (): void => {
     isStopping = true;
+    void metrics?.stop();
     for (const worker of Object.values(cluster.workers ?? {})) worker?.process.kill('SIGTERM');
   };
   for (const signal of ['SIGTERM', 'SIGINT'] as const) process.on(signal, end);

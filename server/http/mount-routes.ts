@@ -12,6 +12,8 @@ export interface RouteSupport {
   readonly repeatable: RepeatableRequests;
   /** Check replies against their schemas too; for tests, where a drifted reply must fail. */
   readonly checkReplies: boolean;
+  /** Told of every request that was answered: the endpoint, the status, and how long it took [s]. */
+  readonly onAnswered: (endpoint: string, status: number, seconds: number) => void;
 }
 
 /** Where the API lives. */
@@ -28,8 +30,12 @@ export const apiBase = '/api/v1';
 export function mountRoutes(app: Express, routes: readonly Route[], support: RouteSupport): void {
   requireEach(routes);
   for (const route of routes) {
-    const { method, path } = route.endpoint;
+    const { method, path, name } = route.endpoint;
     app[method](`${apiBase}${path}`, (req: Request, res: Response, next: NextFunction) => {
+      const startedAt = performance.now();
+      res.once('finish', () => {
+        support.onAnswered(name, res.statusCode, (performance.now() - startedAt) / 1000);
+      });
       answer(route, support, req, res).catch(next);
     });
   }

@@ -5,7 +5,7 @@ const { runCommand } = require('./run-command');
 /**
  * What some tests need to run.
  *
- * @typedef {{ database: boolean, builds: boolean, browser: boolean }} TestNeeds
+ * @typedef {{ database: boolean, builds: boolean, browser: boolean, proxy: boolean }} TestNeeds
  */
 
 /**
@@ -27,7 +27,7 @@ async function selectedTests(args, signal) {
 
 /**
  * What test files need, which follows from where they lie: pure code and pages need nothing, faults the built server
- * beside a database, journeys a browser too.
+ * beside a database, journeys a browser too, and the application as it runs for real nginx as well.
  *
  * @param {string[]} paths - From the project's folder.
  * @returns {TestNeeds}
@@ -35,8 +35,9 @@ async function selectedTests(args, signal) {
 function needsOf(paths) {
   return {
     database: paths.some((path) => !/^(shared|src|test\/reference)\//.test(path)),
-    builds: paths.some((path) => /^test\/(e2e|faults)\//.test(path)),
-    browser: paths.some((path) => path.startsWith('test/e2e/')),
+    builds: paths.some((path) => /^test\/(e2e|faults|production)\//.test(path)),
+    browser: paths.some((path) => /^test\/(e2e|production)\//.test(path)),
+    proxy: paths.some((path) => path.startsWith('test/production/')),
   };
 }
 

@@ -2,6 +2,7 @@
 const { countsLine, runJest } = require('./jest-run');
 const { ensureBuilt, serverBuild, webBuild } = require('./builds');
 const { ensureChromium } = require('./chromium');
+const { ensureNginx } = require('./nginx');
 const { requireSupportedNode } = require('./node-version');
 const { ensurePackages } = require('./packages');
 const { Problem } = require('./problem');
@@ -22,6 +23,7 @@ void runScript(async (context) => {
   delete env['DATABASE_URL']; // what is lived with is out of the tests' reach
   if (needs.database) env['TEST_DATABASE_URL'] = (await testDatabase('test', context)).url;
   if (needs.browser) env['CHROMIUM_PATH'] = await ensureChromium({ log, signal });
+  if (needs.proxy) env['NGINX_PATH'] = await ensureNginx({ log, signal });
   if (needs.builds) await ensureBuilt([serverBuild, webBuild], { log, signal });
   const result = await runJest(args, env, signal);
   counts = result.counts;

@@ -10,6 +10,7 @@ import * as crops from './crops';
 import * as devices from './devices';
 import * as loggerFileProfiles from './logger-file-profiles';
 import * as germination from './germination';
+import * as health from './health';
 import * as loggerFiles from './logger-files';
 import * as mail from './mail';
 import * as people from './people';
@@ -25,6 +26,8 @@ import * as sowing from './sowing';
 
 /** Every route of `/api/v1`: the table that authorisation, OpenAPI and the tests walk. */
 export const endpoints: readonly Endpoint[] = [
+  health.isAlive,
+  health.isReady,
   people.signIn,
   people.signOut,
   people.getAccount,

@@ -41,14 +41,16 @@ describe('installed packages', () => {
 });
 
 describe('what tests need', () => {
-  const nothing = { database: false, builds: false, browser: false };
+  const nothing = { database: false, builds: false, browser: false, proxy: false };
+  const journey = { database: true, builds: true, browser: true, proxy: false };
 
   it.each([
     ['pure code', ['shared/climate/psychrometrics.spec.ts'], nothing],
     ['pages', ['src/app/ui/chart.spec.ts'], nothing],
     ['the server', ['shared/a.spec.ts', 'server/b.spec.ts'], { ...nothing, database: true }],
-    ['faults', ['test/faults/power-cut.spec.ts'], { database: true, builds: true, browser: false }],
-    ['journeys', ['test/e2e/sow.spec.ts'], { database: true, builds: true, browser: true }],
+    ['faults', ['test/faults/power-cut.spec.ts'], { ...journey, browser: false }],
+    ['journeys', ['test/e2e/sow.spec.ts'], journey],
+    ['what runs for real', ['test/production/behind-nginx.spec.ts'], { ...journey, proxy: true }],
     ['nothing', [], nothing],
   ])('follows from where they lie, for %s', (_what, paths, needs) => {
     expect(needsOf(paths)).toEqual(needs);

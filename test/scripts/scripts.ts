@@ -73,7 +73,7 @@ interface Scripts {
   };
   processes: { processesIn(program: string, folder: string): number[] };
   'test-selection': {
-    needsOf(paths: string[]): { database: boolean; builds: boolean; browser: boolean };
+    needsOf(paths: string[]): { database: boolean; builds: boolean; browser: boolean; proxy: boolean };
   };
 }
 

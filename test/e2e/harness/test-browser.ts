@@ -5,6 +5,8 @@ import { demonstrationPassword } from '../../../server/demonstration/demonstrati
 export interface View {
   readonly width: number;
   readonly colours: 'light' | 'dark';
+  /** Takes a certificate that nobody signed. */
+  readonly trustsAnyCertificate?: boolean;
 }
 
 const HEIGHT = 900;
@@ -44,6 +46,7 @@ export class TestBrowser {
       colorScheme: view.colours ?? 'light',
       reducedMotion: 'reduce',
       locale: 'en-IE',
+      ignoreHTTPSErrors: view.trustsAnyCertificate ?? false,
     });
     context.setDefaultTimeout(WAIT_MS);
     const page = await context.newPage();
