@@ -22,6 +22,11 @@ export const appRoutes: Routes = [
     loadComponent: () => import('./shelf/shelf-page').then((m) => m.ShelfPage),
   },
   {
+    path: 'care',
+    ...signedIn,
+    loadChildren: () => import('./care/care-routes').then((m) => m.careRoutes),
+  },
+  {
     path: 'alerts',
     title: 'Alerts',
     ...signedIn,

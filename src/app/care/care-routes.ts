@@ -1,0 +1,18 @@
+import type { Routes } from '@angular/router';
+import { CareFrame } from './frame/care-frame';
+
+/** The pages about care. One appears in the navigation among them as soon as its route stands here. */
+export const careRoutes: Routes = [
+  {
+    path: '',
+    component: CareFrame,
+    children: [
+      {
+        path: '',
+        pathMatch: 'full',
+        title: 'Today’s care',
+        loadComponent: () => import('./today/today-page').then((m) => m.TodayPage),
+      },
+    ],
+  },
+];
