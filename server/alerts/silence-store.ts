@@ -88,8 +88,11 @@ export class SilenceStore {
            ) AS before ON true
            GROUP BY member.search
          ), seen AS (
+           -- Sorted within, so that the index is asked for each sensor; joined, the whole table would be read.
            SELECT member.search, r.at FROM member
-           JOIN reading r ON r.sensor_id = member.sensor_id AND r.at >= member.from_at
+           CROSS JOIN LATERAL (
+             SELECT at FROM reading WHERE sensor_id = member.sensor_id AND at >= member.from_at ORDER BY at
+           ) AS r
            UNION SELECT search, at FROM begun WHERE at IS NOT NULL
          ), paired AS (
            SELECT search, lag(at) OVER (PARTITION BY search ORDER BY at) AS from_at, at AS to_at FROM seen
