@@ -1,7 +1,7 @@
 import { createHash, randomBytes } from 'node:crypto';
 import { readFileSync, readdirSync } from 'node:fs';
 import { join } from 'node:path';
-import { Client } from 'pg';
+import { Client, type DatabaseError } from 'pg';
 import type { DataSource } from 'typeorm';
 import { createDataSource } from '../../server/database/data-source';
 import { migrate } from '../../server/database/migrate';
@@ -9,6 +9,8 @@ import { Transactions } from '../../server/database/transactions';
 
 /** Any fixed number will do; every test process must use the same. */
 const TEMPLATE_LOCK = 7_431_906;
+/** PostgreSQL manual, appendix A. */
+const INSUFFICIENT_PRIVILEGE = '42501';
 const migrationFolder = join(__dirname, '../../server/database/migrations');
 const templatePrefix = 'lampmeadow_template_';
 
@@ -58,9 +60,19 @@ async function connected(name: string): Promise<TestDatabase> {
     transactions: new Transactions(dataSource),
     drop: async () => {
       await dataSource.destroy();
-      await withMaintenance((maintenance) => maintenance.query(`DROP DATABASE ${name} WITH (FORCE)`));
+      await withMaintenance((maintenance) => dropDatabase(maintenance, name));
     },
   };
+}
+
+async function dropDatabase(maintenance: Client, name: string): Promise<void> {
+  try {
+    await maintenance.query(`DROP DATABASE ${name} WITH (FORCE)`);
+  } catch (error) {
+    if ((error as DatabaseError).code !== INSUFFICIENT_PRIVILEGE) throw error;
+    // A vacuum of PostgreSQL's own can't be forced out by our role, but makes way by itself.
+    await maintenance.query(`DROP DATABASE ${name}`);
+  }
 }
 
 async function ensureTemplate(maintenance: Client, template: string): Promise<void> {
@@ -69,7 +81,7 @@ async function ensureTemplate(maintenance: Client, template: string): Promise<vo
     [templatePrefix],
   );
   if (rows.some(({ datname }) => datname === template)) return;
-  for (const { datname } of rows) await maintenance.query(`DROP DATABASE ${datname} WITH (FORCE)`);
+  for (const { datname } of rows) await dropDatabase(maintenance, datname);
   // Renamed only once it is whole, so that a run cut off half-way leaves no template behind.
   const unfinished = `${templatePrefix}unfinished`;
   await maintenance.query(`CREATE DATABASE ${unfinished} TEMPLATE template0`);
