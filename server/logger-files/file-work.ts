@@ -1,3 +1,4 @@
+import { setImmediate as othersTurn } from 'node:timers/promises';
 import type { LoggerFileResult } from '@shared/contracts/logger-file-result';
 import type { Tx } from '../database/transactions';
 import type { BulkBatch } from '../readings/bulk-columns';
@@ -34,6 +35,9 @@ export interface Passage {
   readonly onProgress: OnProgress;
 }
 
+/** Read at a time, in a few milliseconds; live readings wait that long at each of their steps. */
+const SLICE_BYTES = 4_096;
+
 /**
  * Hands a file's readings on in order of time. Most files are in order and stream straight through; another one is sorted
  * by the database first.
@@ -51,7 +55,10 @@ export async function passReadings(file: FileToRead, passage: Passage): Promise<
     const take = async (batch: BulkBatch): Promise<void> => (staged ?? opened?.intake)?.take(batch);
     let bytesDone = 0;
     for await (const piece of contentOf(passage.plain, file.id) as AsyncIterable<Buffer>) {
-      await take(readings.read(piece));
+      for (let from = 0; from < piece.length; from += SLICE_BYTES) {
+        await take(readings.read(piece.subarray(from, from + SLICE_BYTES)));
+        await othersTurn();
+      }
       bytesDone += piece.length;
       await passage.onProgress(bytesDone);
     }

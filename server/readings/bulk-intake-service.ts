@@ -42,7 +42,7 @@ export interface OpenBulkIntake {
 /** How much is gathered before it is worked on; what comes of it is the same. */
 export type BulkPace = Pick<BulkIntakeParts, 'columnRows'> & Pick<BulkWriterParts, 'stretchRows'>;
 
-const usualPace: BulkPace = { columnRows: 1_500, stretchRows: 250_000 };
+const usualPace: BulkPace = { columnRows: 500, stretchRows: 250_000 };
 
 /** A room's day, twice. */
 const TWO_DAYS_MS = 2 * 86_400_000;
