@@ -21,8 +21,11 @@ import {
 
 const RUNS = 5;
 const SHELVES = 10;
-/** A batch is due this often, whether or not those before it were acknowledged. */
-const EVERY_MS = 40;
+/**
+ * A batch is due this often, whether or not those before it were acknowledged. Faster than that, two cores that also carry
+ * the database and whoever measures fall behind with nothing else to do, and only the length of the line is measured.
+ */
+const EVERY_MS = 200;
 const IDLE_MS = 10_000;
 const ANSWER_WITHIN_MS = 60_000;
 
@@ -100,16 +103,20 @@ async function connected(dataSource: DataSource, roomId: string, address: string
 /** Sends batches for as long as some work takes; the time from due to acknowledged that 99 of 100 keep to [ms]. */
 async function p99While(live: LiveDevice, work: Promise<unknown>): Promise<number> {
   let isOver = false;
-  const over = work.finally(() => {
+  const over = Promise.allSettled([work]).finally(() => {
     isOver = true;
   });
-  const waits: Promise<number>[] = [];
+  const answers: Promise<PromiseSettledResult<number>[]>[] = [];
   for (let due = performance.now(); !isOver; due += EVERY_MS) {
     await sleep(Math.max(0, due - performance.now()));
-    waits.push(acknowledged(live, due));
+    answers.push(Promise.allSettled([acknowledged(live, due)]));
   }
-  const sorted = (await Promise.all(waits)).sort((a, b) => a - b);
-  await over;
+  const waits = (await Promise.all(answers)).flat();
+  const failed = [...(await over), ...waits].find(({ status }) => status === 'rejected');
+  if (failed?.status === 'rejected') throw failed.reason;
+  const sorted = waits
+    .flatMap((wait) => (wait.status === 'fulfilled' ? [wait.value] : []))
+    .sort((a, b) => a - b);
   return sorted[Math.ceil(sorted.length * 0.99) - 1] ?? NaN;
 }
 
@@ -124,6 +131,8 @@ async function acknowledged(live: LiveDevice, due: number): Promise<number> {
   const answer: unknown = await live.socket
     .timeout(ANSWER_WITHIN_MS)
     .emitWithAck('readings:batch', { readings });
-  if (readingsReceipt.parse(answer).stored !== readings.length) throw new Error(JSON.stringify(answer));
+  if (readingsReceipt.safeParse(answer).data?.stored !== readings.length) {
+    throw new Error(`A live batch was answered ${JSON.stringify(answer)}.`);
+  }
   return performance.now() - due;
 }
