@@ -124,6 +124,26 @@ export const cropFigures = z.strictObject({
 /** All that can be changed of a room's own crop. */
 export type CropFigures = z.infer<typeof cropFigures>;
 
+/** What is asked of figures that are saved. Those that are kept already are read as they are. */
+const savedFigures = cropFigures.superRefine(({ seed }, context) => {
+  const refuse = (message: string, ...path: (string | number)[]): void =>
+    context.addIssue({ code: 'custom', message, path: ['seed', ...path] });
+  for (const [index, { value }] of (seed?.temperatures ?? []).entries()) {
+    const { minC, optimumC, bestC, maxC } = value;
+    const at = ['temperatures', index, 'value'] as const;
+    if (minC !== null && minC > optimumC.low) refuse('must not be above the optimum', ...at, 'minC');
+    if (maxC !== null && maxC < optimumC.high) refuse('must not be below the optimum', ...at, 'maxC');
+    if (bestC !== null && (bestC < (minC ?? optimumC.low) || bestC > (maxC ?? optimumC.high)))
+      refuse('must lie between the least and the most', ...at, 'bestC');
+  }
+  for (const table of ['emergence', 'normalSeedlings'] as const) {
+    const rows = seed?.[table]?.value;
+    if (rows?.length === 0) refuse('must have a row', table, 'value');
+    if (new Set(rows?.map((row) => row.temperatureC)).size < (rows?.length ?? 0))
+      refuse('must have each temperature once', table, 'value');
+  }
+});
+
 /** A crop with all its figures and where it is from. */
 export const crop = cropFigures.extend({
   id: cropId,
@@ -202,7 +222,7 @@ export const changeCrop = endpoint({
   access: 'grower',
   summary: 'Change the figures of a room’s own crop; one of the library must be copied first',
   params: cropParams,
-  body: cropFigures,
+  body: savedFigures,
   reply: crop,
 });
 

@@ -88,6 +88,34 @@ describe('crops', () => {
     expect(fields(await staff.grower.post(`${staff.path}/crops`, body).expect(422))).toEqual(paths);
   });
 
+  it('with temperatures out of order, or a table with one twice, are refused with the field', async () => {
+    const copy = await copied('leek', 'Window leek');
+    const saved = (seed: object) =>
+      staff.grower.put(`${staff.path}/crops/${copy.id}`, {
+        ...figuresOf(copy),
+        seed: { ...copy.seed, ...seed },
+      });
+    const warmth = { minC: 2, optimumC: { low: 18, high: 24 }, bestC: 21, maxC: 35 };
+    const temperatures = (changes: object) => ({
+      temperatures: [{ value: { ...warmth, ...changes }, source: 'our log' }],
+    });
+    const path = 'body.seed.temperatures.0.value';
+
+    await saved(temperatures({})).expect(200);
+    for (const [changes, field] of [
+      [{ minC: 19 }, 'minC'],
+      [{ maxC: 23 }, 'maxC'],
+      [{ bestC: 36 }, 'bestC'],
+    ] as const)
+      expect(fields(await saved(temperatures(changes)).expect(422))).toEqual([`${path}.${field}`]);
+    const row = { temperatureC: 20, days: 6 };
+    for (const rows of [[], [row, { ...row, days: 7 }]])
+      expect(fields(await saved({ emergence: { value: rows, source: 'our log' } }).expect(422))).toEqual([
+        'body.seed.emergence.value',
+      ]);
+    expect((await read(copy.id)).seed?.emergence).toEqual(copy.seed?.emergence);
+  });
+
   it('with a range that runs backwards, or a figure without a source, are refused with the field', async () => {
     const copy = await copied('leek', 'Odd leek');
     const seed = copy.seed as NonNullable<Crop['seed']>;

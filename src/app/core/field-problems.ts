@@ -15,13 +15,18 @@ export function showFieldProblems(form: FormGroup, error: unknown): string | nul
   const problems = asApiFailure(error).problem?.errors ?? [];
   const homeless = problems.filter(({ path, message }) => {
     const control = form.get(path.replace(/^body\./, ''));
-    control?.setErrors({ [said]: sentence(message) });
-    control?.markAsTouched();
+    sayAt(control, sentence(message));
     return control === null;
   });
   if (problems.length > 0 && homeless.length === 0) return null;
   const [first] = homeless;
   return first === undefined ? failureText(error) : `${nameOf(first.path)} ${first.message}.`;
+}
+
+/** Says a sentence at a field. It stays until the field is changed. */
+export function sayAt(control: AbstractControl | null, words: string): void {
+  control?.setErrors({ [said]: words });
+  control?.markAsTouched();
 }
 
 /** What the server said of a field; null when it found nothing wrong with it. */

@@ -1,6 +1,7 @@
 import type { Crop } from '@shared/contracts/crops';
 import { formatNumber, formatValue, shownTemperature, type TemperatureUnit } from '@shared/format/numbers';
 import type { ClimateStage, GerminationTemperatures } from '@shared/growing/crops/crop';
+import type { Figure } from '@shared/growing/crops/figure';
 import type { ValueRange } from '@shared/series/time-weighted-statistics';
 import {
   dayLengthText,
@@ -11,6 +12,7 @@ import {
   temperatureText,
   weeksText,
 } from '../crop-words';
+import type { CropSlot } from '../figure/crop-slot';
 import {
   climateSlot,
   degreeDaysSlot,
@@ -21,13 +23,15 @@ import {
   type ClimateKey,
   type FigureSlot,
 } from '../figure/figure-slot';
+import { dayLengthSlot, usualPotSlot } from '../figure/plant-slots';
+import { leastGerminationSlot, lightSlot, temperaturesSlot, thermalTimeSlot } from '../figure/seed-slots';
 
 /** A figure in words with who says so. */
 export interface ShownFigure {
   readonly text: string;
   readonly source: string;
   /** How to change it; null for what stays as it was published. */
-  readonly slot: FigureSlot | null;
+  readonly slot: CropSlot | null;
 }
 
 /** Something known of a crop; without a figure it says so. */
@@ -37,7 +41,7 @@ export interface Fact {
   readonly meaning: string | null;
   readonly figures: readonly ShownFigure[];
   /** Where another figure could be added; null where none can. */
-  readonly addTo: FigureSlot | null;
+  readonly addTo: CropSlot | null;
 }
 
 /** Facts under a heading. */
@@ -82,33 +86,25 @@ export function seedFacts(crop: Crop, unit: TemperatureUnit): readonly Fact[] {
     {
       name: 'Warmth to germinate',
       meaning: 'Of the mix around the seed, not of the air.',
-      figures: seed.temperatures.map(({ value, source }) => ({
+      figures: seed.temperatures.map(({ value, source }, index) => ({
         text: germinationText(value, unit),
         source,
-        slot: null,
+        slot: temperaturesSlot(crop, index),
       })),
-      addTo: null,
+      addTo: temperaturesSlot(crop, seed.temperatures.length),
     },
     {
       name: 'Thermal time',
       meaning: 'Warmth above a base, summed over time, that seed takes to come up: the warmer, the sooner.',
-      figures: seed.thermalTimes.map(({ value, source }) => ({
+      figures: seed.thermalTimes.map(({ value, source }, index) => ({
         text: `${formatValue(value.sumCD, '°C·d', 0)} above ${temperatureText({ low: value.baseC, high: value.baseC }, unit)}`,
         source,
-        slot: null,
+        slot: thermalTimeSlot(crop, index),
       })),
-      addTo: null,
+      addTo: thermalTimeSlot(crop, seed.thermalTimes.length),
     },
     one('Sowing depth', depthSlot(crop), (range) => rangeText(range, 'mm')),
-    {
-      name: 'Light to germinate',
-      meaning: null,
-      figures:
-        seed.light === null
-          ? []
-          : [{ text: lightWords[seed.light.value], source: seed.light.source, slot: null }],
-      addTo: null,
-    },
+    single('Light to germinate', lightSlot(crop), seed.light, (light) => lightWords[light]),
     {
       name: 'Seed keeps',
       meaning: 'Cool, dark and dry. Old seed comes up later and less of it.',
@@ -119,21 +115,12 @@ export function seedFacts(crop: Crop, unit: TemperatureUnit): readonly Fact[] {
       })),
       addTo: lifeSlot(crop, seed.lifeYears.length),
     },
-    {
-      name: 'Least germination of seed for sale',
-      meaning: null,
-      figures:
-        seed.minimumGerminationPct === null
-          ? []
-          : [
-              {
-                text: formatValue(seed.minimumGerminationPct.value, '%', 0),
-                source: seed.minimumGerminationPct.source,
-                slot: null,
-              },
-            ],
-      addTo: null,
-    },
+    single(
+      'Least germination of seed for sale',
+      leastGerminationSlot(crop),
+      seed.minimumGerminationPct,
+      (percent) => formatValue(percent, '%', 0),
+    ),
   ];
 }
 
@@ -193,20 +180,10 @@ export function growthFacts(crop: Crop, unit: TemperatureUnit): readonly Fact[] 
       meaning: 'Degree days count warmth above the lower and below the upper end.',
     },
     {
-      name: 'Length of the day',
+      ...single('Length of the day', dayLengthSlot(crop), dayLength, dayLengthText),
       meaning: 'Some crops form bulbs, bolt or flower by the hours of light, lamps included.',
-      figures:
-        dayLength === null
-          ? []
-          : [{ text: dayLengthText(dayLength.value), source: dayLength.source, slot: null }],
-      addTo: null,
     },
-    {
-      name: 'Usual pot',
-      meaning: null,
-      figures: usualPot === null ? [] : [{ text: usualPot.value, source: usualPot.source, slot: null }],
-      addTo: null,
-    },
+    single('Usual pot', usualPotSlot(crop), usualPot, (pot) => pot),
   ];
 }
 
@@ -235,9 +212,18 @@ function slotOf(crop: Crop, stage: ClimateStage, { key, name, unit }: ClimateRow
   return climateSlot(crop, stage, key, `${name}, ${stageTitles[stage].toLowerCase()}`, unit);
 }
 
-/** A fact of one figure at most. */
+/** A fact of one range at most. */
 function one(name: string, slot: FigureSlot | null, text: (range: ValueRange) => string): Fact {
-  const figure = slot?.figure ?? null;
+  return single(name, slot, slot?.figure ?? null, text);
+}
+
+/** A fact of one figure that is no range. */
+function single<T>(
+  name: string,
+  slot: CropSlot | null,
+  figure: Figure<T> | null,
+  text: (value: T) => string,
+): Fact {
   return {
     name,
     meaning: null,

@@ -106,6 +106,48 @@ describe('the page of a crop', () => {
     expect(page().textContent?.replaceAll('\u2060', '')).toContain('20–25\u00a0mm');
   });
 
+  it('of the room has fields changed that are no range, each wrong one said at its field', async () => {
+    const own = libraryCrop('leek', { id: ownId, isOwn: true, copiedFrom: 'leek' });
+    await shown(own);
+    page().querySelector<HTMLButtonElement>('[aria-label^="Change Warmth to germinate"]')?.click();
+    const dialog = await document.getHarness(MatDialogHarness);
+    const least = await dialog.getHarness(MatInputHarness.with({ label: 'Not under' }));
+    await least.setValue('59');
+    await (await button('Save the figure')).click();
+    expect(await dialog.getText()).toContain('Must not be above where it is good from.');
+    await least.setValue('1');
+    await (await dialog.getHarness(MatInputHarness.with({ label: 'Who says so' }))).setValue('');
+    await (await button('Save the figure')).click();
+    const saving = server.expectOne(`${base}/crops/${ownId}`);
+    const body = saving.request.body as Crop;
+    expect(body.seed?.temperatures[0]).toMatchObject({ value: { minC: 1 }, source: 'our own experience' });
+    saving.flush({ ...own, ...body });
+    await fixture.whenStable();
+    expect(page().textContent).toContain('not under 1');
+  });
+
+  it('of the room has its table by warmth changed, row by row', async () => {
+    const own = libraryCrop('onion-long-day', { id: ownId, isOwn: true });
+    await shown(own);
+    await (await button(/^Change the table: days until up/)).click();
+    const dialog = await document.getHarness(MatDialogHarness);
+    await (await button(/Add a row/)).click();
+    const inputs = await dialog.getAllHarnesses(MatInputHarness);
+    await inputs.at(-3)?.setValue('20');
+    await inputs.at(-2)?.setValue('9');
+    await (await button('Save the figure')).click();
+    expect(await dialog.getText()).toContain('It stands above already.');
+    await inputs.at(-3)?.setValue('22');
+    await (await button('Save the figure')).click();
+    const saving = server.expectOne(`${base}/crops/${ownId}`);
+    const body = saving.request.body as Crop;
+    expect(body.seed?.emergence?.value).toContainEqual({ temperatureC: 22, days: 9 });
+    expect(body.seed?.emergence?.value).toHaveLength((own.seed?.emergence?.value.length ?? 0) + 1);
+    saving.flush({ ...own, ...body });
+    await fixture.whenStable();
+    expect(page().querySelector('table')?.textContent).toContain('22');
+  });
+
   it('offers a helper nothing to change', async () => {
     await shown(libraryCrop('leek', { id: ownId, isOwn: true, copiedFrom: 'leek' }), 'helper');
     expect(page().querySelector('.deeds')?.textContent.trim()).toBe('');

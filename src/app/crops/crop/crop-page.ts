@@ -1,5 +1,6 @@
+import type { ComponentType } from '@angular/cdk/portal';
 import { ChangeDetectionStrategy, Component, computed, effect, inject, input } from '@angular/core';
-import { MatButton } from '@angular/material/button';
+import { MatButton, MatIconButton } from '@angular/material/button';
 import { MatDialog } from '@angular/material/dialog';
 import { MatIcon } from '@angular/material/icon';
 import { Router, RouterLink } from '@angular/router';
@@ -17,13 +18,26 @@ import { Sourced } from '../../ui/sourced/sourced';
 import { ErrorState } from '../../ui/states/error-state';
 import { LoadingLines } from '../../ui/states/loading-lines';
 import { groupNames } from '../crop-words';
-import { FigureDialog, type FigureSubject } from '../figure/figure-dialog';
-import { figuresOf, type FigureSlot } from '../figure/figure-slot';
+import type { CropSlot } from '../figure/crop-slot';
+import { FieldsDialog } from '../figure/fields-dialog';
+import { FigureDialog } from '../figure/figure-dialog';
+import type { FigureSubject } from '../figure/figure-saving';
+import { figuresOf } from '../figure/figure-slot';
+import { eatenSlot, toxicitySlot } from '../figure/plant-slots';
+import { TableDialog } from '../figure/table-dialog';
+import { emergenceSlot, seedlingsSlot } from '../figure/table-slot';
 import { CropData } from './crop-data';
 import { climateGroups, emergenceTable, growthFacts, seedFacts, sowingFacts } from './crop-facts';
 import { FactList } from './fact-list';
 import { NameDialog, type NameSubject } from './name-dialog';
 import { VarietiesCard } from './varieties-card';
+
+/** How each kind of figure is changed. */
+const dialogs: Readonly<Record<CropSlot['kind'], ComponentType<unknown>>> = {
+  range: FigureDialog,
+  fields: FieldsDialog,
+  table: TableDialog,
+};
 
 /** One crop with every figure and who says so; a room's own can be changed. */
 @Component({
@@ -37,6 +51,7 @@ import { VarietiesCard } from './varieties-card';
     LoadingLines,
     MatButton,
     MatIcon,
+    MatIconButton,
     PlantDrawing,
     RouterLink,
     Sourced,
@@ -75,15 +90,24 @@ export class CropPage {
     ),
   ]);
 
+  /** Where the tables by warmth are changed. */
+  protected readonly tableSlots = this.facts((crop) =>
+    [emergenceSlot(crop), seedlingsSlot(crop)].filter((slot) => slot !== null),
+  );
+  protected readonly safetySlots = computed(() => {
+    const crop = this.data.crop();
+    return crop && { eaten: eatenSlot(crop), toxicity: toxicitySlot(crop) };
+  });
+
   constructor() {
     effect(() => this.data.cropId.set(this.cropId()));
   }
 
-  protected change(slot: FigureSlot): void {
+  protected change(slot: CropSlot): void {
     const [params, crop] = [this.data.params(), this.data.crop()];
     if (params === undefined || crop === null) return;
     this.dialog
-      .open<FigureDialog, FigureSubject, boolean>(FigureDialog, {
+      .open<unknown, FigureSubject, boolean>(dialogs[slot.kind], {
         data: { cropName: crop.name, slot, save: (figures) => this.data.save(params, figures) },
         maxWidth: '520px',
       })

@@ -3,7 +3,7 @@ import { MatButton, MatIconButton } from '@angular/material/button';
 import { MatIcon } from '@angular/material/icon';
 import { Explained } from '../../ui/explained/explained';
 import { Sourced } from '../../ui/sourced/sourced';
-import type { FigureSlot } from '../figure/figure-slot';
+import type { CropSlot } from '../figure/crop-slot';
 import type { Fact } from './crop-facts';
 
 /** Facts with their figures, each with its source; says honestly where no figure was found. */
@@ -18,5 +18,5 @@ export class FactList {
   readonly facts = input.required<readonly Fact[]>();
   readonly mayChange = input(false);
 
-  readonly chosen = output<FigureSlot>();
+  readonly chosen = output<CropSlot>();
 }

@@ -1,23 +1,16 @@
-import { ChangeDetectionStrategy, Component, inject, signal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, inject } from '@angular/core';
 import { FormControl, FormGroup, ReactiveFormsModule } from '@angular/forms';
-import { MatButton } from '@angular/material/button';
-import { MAT_DIALOG_DATA, MatDialogModule, MatDialogRef } from '@angular/material/dialog';
+import { MAT_DIALOG_DATA, MatDialogModule } from '@angular/material/dialog';
 import { MatFormFieldModule } from '@angular/material/form-field';
 import { MatInput } from '@angular/material/input';
-import type { Crop, CropFigures } from '@shared/contracts/crops';
-import { finalize, type Observable } from 'rxjs';
-import { failureText } from '../../core/failure-text';
 import { Session } from '../../core/session';
 import { ProblemText } from '../../ui/states/problem-text';
+import { FigureActions } from './figure-actions';
+import { FigureSaving, type FigureSubject } from './figure-saving';
 import type { FigureSlot } from './figure-slot';
-import { figureProblem, savedFigure, shownSlotUnit, typedFigure } from './typed-figure';
-
-/** Which figure is changed, and how the crop is saved. */
-export interface FigureSubject {
-  readonly cropName: string;
-  readonly slot: FigureSlot;
-  readonly save: (figures: CropFigures) => Observable<Crop>;
-}
+import { SourceField } from './source-field';
+import { shownUnit } from './typed-fields';
+import { figureProblem, savedFigure, typedFigure } from './typed-figure';
 
 const numberField = (): FormControl<number | null> => new FormControl<number | null>(null);
 
@@ -26,23 +19,30 @@ const numberField = (): FormControl<number | null> => new FormControl<number | n
   selector: 'app-figure-dialog',
   templateUrl: './figure-dialog.html',
   styleUrl: './figure-dialog.scss',
-  imports: [MatButton, MatDialogModule, MatFormFieldModule, MatInput, ProblemText, ReactiveFormsModule],
+  imports: [
+    FigureActions,
+    MatDialogModule,
+    MatFormFieldModule,
+    MatInput,
+    ProblemText,
+    ReactiveFormsModule,
+    SourceField,
+  ],
+  providers: [FigureSaving],
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class FigureDialog {
-  private readonly dialog = inject<MatDialogRef<FigureDialog, boolean>>(MatDialogRef);
+  protected readonly saving = inject(FigureSaving);
   private readonly reader = inject(Session).temperatureUnit();
-  protected readonly subject = inject<FigureSubject>(MAT_DIALOG_DATA);
+  protected readonly subject = inject<FigureSubject<FigureSlot>>(MAT_DIALOG_DATA);
   protected readonly slot = this.subject.slot;
-  protected readonly unit = shownSlotUnit(this.slot, this.reader);
+  protected readonly unit = shownUnit(this.slot.unit, this.reader);
 
   protected readonly fields = new FormGroup({
     low: numberField(),
     high: numberField(),
     source: new FormControl('', { nonNullable: true }),
   });
-  protected readonly isSaving = signal(false);
-  protected readonly problem = signal<string | null>(null);
 
   constructor() {
     this.fields.setValue(typedFigure(this.slot, this.reader));
@@ -51,22 +51,11 @@ export class FigureDialog {
   protected save(): void {
     const typed = this.fields.getRawValue();
     const problem = figureProblem(this.slot, typed, this.reader);
-    this.problem.set(problem);
-    if (problem === null) this.finish(this.slot.with(savedFigure(this.slot, typed, this.reader)));
+    this.saving.problem.set(problem);
+    if (problem === null) this.saving.finish(this.slot.with(savedFigure(this.slot, typed, this.reader)));
   }
 
   protected takeAway(): void {
-    this.finish(this.slot.with(null));
-  }
-
-  private finish(figures: CropFigures): void {
-    this.isSaving.set(true);
-    this.subject
-      .save(figures)
-      .pipe(finalize(() => this.isSaving.set(false)))
-      .subscribe({
-        next: () => this.dialog.close(true),
-        error: (error: unknown) => this.problem.set(failureText(error)),
-      });
+    this.saving.finish(this.slot.with(null));
   }
 }

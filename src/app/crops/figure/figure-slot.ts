@@ -5,6 +5,7 @@ import type { ValueRange } from '@shared/series/time-weighted-statistics';
 
 /** One figure of a crop that can be changed: what it is, and the crop's figures with another in its place. */
 export interface FigureSlot {
+  readonly kind: 'range';
   /** "Air by day, seedlings" */
   readonly title: string;
   /** Stored unit; °C is typed in the reader's. */
@@ -79,6 +80,7 @@ export function climateSlot(
   unit: string,
 ): FigureSlot {
   return {
+    kind: 'range',
     title,
     unit,
     ends: usualEnds,
@@ -111,7 +113,7 @@ export function lifeSlot(crop: Crop, index: number): FigureSlot | null {
     ...span('Years that seed keeps', 'years', [0, 50], seed.lifeYears[index] ?? null),
     with: (figure) => ({
       ...figuresOf(crop),
-      seed: { ...seed, lifeYears: replaced(seed.lifeYears, index, figure) },
+      seed: { ...seed, lifeYears: replaced(seed.lifeYears, index, closed(figure)) },
     }),
   };
 }
@@ -123,7 +125,7 @@ export function weeksSlot(crop: Crop, key: ListKey, index: number, title: string
     ...span(title, 'weeks', [least, 104], crop.sowing[key][index] ?? null),
     with: (figure) => ({
       ...figuresOf(crop),
-      sowing: { ...crop.sowing, [key]: replaced(crop.sowing[key], index, figure) },
+      sowing: { ...crop.sowing, [key]: replaced(crop.sowing[key], index, closed(figure)) },
     }),
   };
 }
@@ -149,6 +151,7 @@ export function plantingOutSlot(crop: Crop): FigureSlot {
 export function degreeDaysSlot(crop: Crop): FigureSlot {
   const { degreeDays } = crop;
   return {
+    kind: 'range',
     title: 'Limits of growth',
     unit: '°C',
     ends: ['Base', 'Upper limit'],
@@ -174,7 +177,7 @@ function span(
   within: readonly [number, number],
   figure: Figure<Span> | null,
 ): Omit<FigureSlot, 'with'> {
-  return { title, unit, ends: usualEnds, open: 'none', bounds: within, figure };
+  return { kind: 'range', title, unit, ends: usualEnds, open: 'none', bounds: within, figure };
 }
 
 /** A figure whose ends are both there: its dialog sees to that. */
@@ -184,11 +187,11 @@ function closed(figure: Figure<ValueRange> | null): Figure<Span> | null {
   return { value: { low: low ?? high ?? 0, high: high ?? low ?? 0 }, source: figure.source };
 }
 
-function replaced(
-  list: readonly Figure<Span>[],
+/** One source's figure in a list of several: replaced, added after the last, or taken away. */
+export function replaced<T>(
+  list: readonly Figure<T>[],
   index: number,
-  figure: Figure<ValueRange> | null,
-): Figure<Span>[] {
-  const now = closed(figure);
-  return [...list.slice(0, index), ...(now === null ? [] : [now]), ...list.slice(index + 1)];
+  figure: Figure<T> | null,
+): Figure<T>[] {
+  return [...list.slice(0, index), ...(figure === null ? [] : [figure]), ...list.slice(index + 1)];
 }

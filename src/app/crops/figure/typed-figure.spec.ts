@@ -1,6 +1,7 @@
 import { libraryCrop } from '../testing/library-crop';
 import { climateSlot, degreeDaysSlot, depthSlot, figuresOf, lifeSlot, weeksSlot } from './figure-slot';
-import { figureProblem, ownExperience, savedFigure, typedFigure } from './typed-figure';
+import { ownExperience } from './saved-source';
+import { figureProblem, savedFigure, typedFigure } from './typed-figure';
 
 const onion = libraryCrop('onion-long-day', { isOwn: true });
 const air = climateSlot(onion, 'seedling', 'airDayC', 'Air by day', '°C');

@@ -2,6 +2,8 @@ import { shownTemperature, typedTemperatureC, type TemperatureUnit } from '@shar
 import type { Figure } from '@shared/growing/crops/figure';
 import type { ValueRange } from '@shared/series/time-weighted-statistics';
 import type { FigureSlot } from './figure-slot';
+import { savedSource } from './saved-source';
+import { shownUnit } from './typed-fields';
 
 /** A figure as it is typed: numbers in the reader's unit, null where a field is empty. */
 export interface TypedFigure {
@@ -9,9 +11,6 @@ export interface TypedFigure {
   readonly high: number | null;
   readonly source: string;
 }
-
-/** What stands for a source that nobody named. */
-export const ownExperience = 'our own experience';
 
 /** The fields of a figure. */
 export function typedFigure({ figure, unit }: FigureSlot, reader: TemperatureUnit): TypedFigure {
@@ -40,7 +39,7 @@ export function figureProblem(slot: FigureSlot, typed: TypedFigure, reader: Temp
   const [from, to] = slot.bounds.map((bound) =>
     slot.unit === '°C' ? shownTemperature(bound, reader) : bound,
   );
-  return `Between ${from} and ${to} ${shownSlotUnit(slot, reader)}.`;
+  return `Between ${from} and ${to} ${shownUnit(slot.unit, reader)}.`;
 }
 
 /** The figure as it is saved. Only for fields without a {@link figureProblem}. */
@@ -49,13 +48,7 @@ export function savedFigure(
   typed: TypedFigure,
   reader: TemperatureUnit,
 ): Figure<ValueRange> {
-  const source = typed.source.trim();
-  return { value: storedEnds(slot, typed, reader), source: source === '' ? ownExperience : source };
-}
-
-/** The unit in which its ends are typed. */
-export function shownSlotUnit({ unit }: FigureSlot, reader: TemperatureUnit): string {
-  return unit === '°C' ? reader : unit;
+  return { value: storedEnds(slot, typed, reader), source: savedSource(typed.source) };
 }
 
 function storedEnds(slot: FigureSlot, typed: TypedFigure, reader: TemperatureUnit): ValueRange {
