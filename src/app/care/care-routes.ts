@@ -13,6 +13,21 @@ export const careRoutes: Routes = [
         title: 'Today’s care',
         loadComponent: () => import('./today/today-page').then((m) => m.TodayPage),
       },
+      {
+        path: 'routines',
+        title: 'Routines',
+        loadComponent: () => import('./routines/routines-page').then((m) => m.RoutinesPage),
+      },
+      {
+        path: 'routines/new',
+        title: 'Add a routine',
+        loadComponent: () => import('./routines/form/routine-form-page').then((m) => m.RoutineFormPage),
+      },
+      {
+        path: 'routines/:routineId/change',
+        title: 'Change a routine',
+        loadComponent: () => import('./routines/form/routine-form-page').then((m) => m.RoutineFormPage),
+      },
     ],
   },
 ];

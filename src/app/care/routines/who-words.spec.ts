@@ -1,3 +1,4 @@
+import type { RoutineWho } from '@shared/contracts/care-routines';
 import { whoWords } from './who-words';
 
 const names = new Map([
@@ -6,12 +7,15 @@ const names = new Map([
 ]);
 
 describe('who does a routine', () => {
-  it.each([
+  it.each<[RoutineWho, string]>([
     [{ how: 'onDuty' }, 'whoever is on duty'],
     [{ how: 'person', personId: 'p' }, 'always Pia Lindqvist'],
     [{ how: 'pair', personIds: ['p', 'r'] }, 'Pia Lindqvist and Ravi Sandhill together'],
-    [{ how: 'inTurn', personIds: ['r', 'p', 'x'] }, 'in turn: Ravi Sandhill, Pia Lindqvist and somebody who left'],
-  ] as const)('%j', (who, words) => {
+    [
+      { how: 'inTurn', personIds: ['r', 'p', 'x'] },
+      'in turn: Ravi Sandhill, Pia Lindqvist and somebody who left',
+    ],
+  ])('%j', (who, words) => {
     expect(whoWords(who, names)).toBe(words);
   });
 
