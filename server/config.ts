@@ -6,6 +6,11 @@ const onOff = z.enum(['on', 'off']).transform((word) => word === 'on');
 /** Every setting, an environment variable each; the README lists them with the same defaults. */
 const settings = z.object({
   DATABASE_URL: z.string().regex(/^postgres(ql)?:\/\//, { error: 'must be a postgresql:// address' }),
+  /** Owner of the tables, who alone migrates; by default the application does so itself. */
+  DATABASE_OWNER_URL: z
+    .string()
+    .regex(/^postgres(ql)?:\/\//, { error: 'must be a postgresql:// address' })
+    .optional(),
   HOST: z.string().min(1).default('127.0.0.1'),
   PORT: port.default(4280),
   /** Address that mails and links name; by default the one that is listened on. */
@@ -35,6 +40,7 @@ const settings = z.object({
 /** The settings of one process, checked. */
 export interface Config {
   readonly databaseUrl: string;
+  readonly databaseOwnerUrl: string | null;
   readonly host: string;
   readonly port: number;
   readonly publicUrl: string | null;
@@ -74,6 +80,7 @@ export function readConfig(environment: Readonly<Record<string, string | undefin
     values.SIMULATOR_CONTROL_URL !== undefined && values.SIMULATOR_CONTROL_SECRET !== undefined;
   return {
     databaseUrl: values.DATABASE_URL,
+    databaseOwnerUrl: values.DATABASE_OWNER_URL ?? null,
     host: values.HOST,
     port: values.PORT,
     publicUrl: values.PUBLIC_URL ?? null,

@@ -39,8 +39,9 @@ async function main(): Promise<void> {
 /** Connects, migrates, fills and listens; the answer stops it all. */
 async function serve(config: Config): Promise<() => Promise<void>> {
   const log = pino({ level: config.logLevel, serializers: { err: loggedError } });
+  if (config.databaseOwnerUrl !== null) await migrateAsOwner(config.databaseOwnerUrl, config.databaseUrl);
   const dataSource = await createDataSource(config.databaseUrl).initialize();
-  await migrate(dataSource);
+  if (config.databaseOwnerUrl === null) await migrate(dataSource);
   const app = await buildApp({ dataSource, config, log, now: systemClock, webFolder });
   const room = await fillDemonstration(
     new Transactions(dataSource),
@@ -65,6 +66,19 @@ async function serve(config: Config): Promise<() => Promise<void>> {
     await metrics?.stop();
     await dataSource.destroy();
   };
+}
+
+/** The owner's connections end before the application's begin: whoever takes the server over can't change tables. */
+async function migrateAsOwner(ownerUrl: string, applicationUrl: string): Promise<void> {
+  const owner = await createDataSource(ownerUrl, 2).initialize();
+  try {
+    const [ownerRole, role] = [ownerUrl, applicationUrl].map((url) =>
+      decodeURIComponent(new URL(url).username),
+    );
+    await migrate(owner, role === undefined || role === ownerRole ? null : role);
+  } finally {
+    await owner.destroy();
+  }
 }
 
 function notesFor(config: Config, hasDemonstration: boolean): string[] {

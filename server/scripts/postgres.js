@@ -3,7 +3,7 @@ const { join } = require('node:path');
 const { withClaim } = require('./exclusive-claim');
 const { accountFor, clustersFolder, postgresAccount } = require('./postgres-account');
 const { ensurePostgresBinaries } = require('./postgres-binaries');
-const { clusterVersion, databaseUrl, makeCluster } = require('./postgres-cluster');
+const { applicationUrl, clusterVersion, databaseUrl, makeCluster } = require('./postgres-cluster');
 const { registerUser } = require('./postgres-users');
 const { runningPostmaster, startPostmaster, stopPostmaster } = require('./postmaster');
 const project = require('./project');
@@ -20,7 +20,8 @@ const withoutSafety = { fsync: 'off', full_page_writes: 'off', synchronous_commi
  * A PostgreSQL server of the project's own, on loopback.
  *
  * @typedef {object} Postgres
- * @property {(database: string) => string} url - The address of a database, password included.
+ * @property {(database: string) => string} url - The address of a database for its owner, password included.
+ * @property {(database: string) => string} applicationUrl - The same for the application.
  * @property {number} port
  * @property {boolean} owned - Whether this call started it; otherwise it ran already and was joined.
  * @property {string} binaries - Folder of psql and the other programs.
@@ -70,6 +71,7 @@ async function startPostgres({ name, fsync = true, log = console.log, signal, pr
     const withdraw = registerUser(join(home, 'users'));
     return {
       url: (/** @type {string} */ database) => databaseUrl(home, port, database),
+      applicationUrl: (/** @type {string} */ database) => applicationUrl(home, port, database),
       port,
       owned: running === null,
       binaries,

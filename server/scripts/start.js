@@ -17,7 +17,7 @@ void runScript(async ({ signal, defer, log }) => {
   defer(own.release);
   await ensurePackages({ log, signal });
   await ensureBuilt([serverBuild, webBuild], { log, signal });
-  const env = { ...process.env, DATABASE_URL: await databaseUrl({ signal, defer, log }) };
+  const env = { ...process.env, ...(await databaseUrls({ signal, defer, log })) };
   const application = await startApplication({ folder: projectFolder, env, log, signal, defer });
   own.describe(application.address);
   log(`\nLampmeadow is at ${application.address}\n`);
@@ -46,12 +46,14 @@ function claimProject() {
  * The database that DATABASE_URL names, or else our own.
  *
  * @param {import('./run-script').ScriptContext} context
- * @returns {Promise<string>}
+ * @returns {Promise<NodeJS.ProcessEnv>} Settings for the server.
  */
-async function databaseUrl({ signal, defer, log }) {
-  const named = process.env['DATABASE_URL'] ?? '';
-  if (named !== '') return named;
+async function databaseUrls({ signal, defer, log }) {
+  if ((process.env['DATABASE_URL'] ?? '') !== '') return {};
   const postgres = await startPostgres({ name: 'main', log, signal });
   defer(postgres.stop);
-  return postgres.url('lampmeadow');
+  return {
+    DATABASE_URL: postgres.applicationUrl('lampmeadow'),
+    DATABASE_OWNER_URL: postgres.url('lampmeadow'),
+  };
 }

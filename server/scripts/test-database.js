@@ -5,7 +5,10 @@ const { startPostgres } = require('./postgres');
 /**
  * A database from which tests and benchmarks make databases of their own, and psql for it.
  *
- * @typedef {{ url: string, psql: string }} TestDatabase
+ * @typedef {object} TestDatabase
+ * @property {string} url - For the role that makes databases.
+ * @property {string} applicationUrl - For the role that the application works as; the same one where no other is named.
+ * @property {string} psql
  */
 
 /**
@@ -17,10 +20,14 @@ const { startPostgres } = require('./postgres');
  */
 async function testDatabase(name, { signal, defer, log }) {
   const named = process.env['TEST_DATABASE_URL'] ?? process.env['DATABASE_URL'] ?? '';
-  if (named !== '') return { url: named, psql: findOnPath('psql') ?? 'psql' };
+  if (named !== '') return { url: named, applicationUrl: named, psql: findOnPath('psql') ?? 'psql' };
   const postgres = await startPostgres({ name, fsync: name === 'bench', log, signal });
   defer(postgres.stop);
-  return { url: postgres.url('postgres'), psql: join(postgres.binaries, 'psql') };
+  return {
+    url: postgres.url('postgres'),
+    applicationUrl: postgres.applicationUrl('postgres'),
+    psql: join(postgres.binaries, 'psql'),
+  };
 }
 
 module.exports = { testDatabase };

@@ -21,7 +21,11 @@ void runScript(async (context) => {
   const needs = needsOf(await selectedTests(args, signal));
   const env = { ...process.env };
   delete env['DATABASE_URL']; // what is lived with is out of the tests' reach
-  if (needs.database) env['TEST_DATABASE_URL'] = (await testDatabase('test', context)).url;
+  if (needs.database) {
+    const { url, applicationUrl } = await testDatabase('test', context);
+    env['TEST_DATABASE_URL'] = url;
+    env['TEST_APPLICATION_DATABASE_URL'] ??= applicationUrl;
+  }
   if (needs.browser) env['CHROMIUM_PATH'] = await ensureChromium({ log, signal });
   if (needs.proxy) env['NGINX_PATH'] = await ensureNginx({ log, signal });
   if (needs.builds) await ensureBuilt([serverBuild, webBuild], { log, signal });

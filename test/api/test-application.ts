@@ -2,13 +2,17 @@ import type { Express } from 'express';
 import { pino } from 'pino';
 import { buildApp, type App } from '../../server/app';
 import { readConfig } from '../../server/config';
+import { createDataSource } from '../../server/database/data-source';
 import type { Tx } from '../../server/database/transactions';
 import { createTestDatabase, type TestDatabase } from '../database/test-database';
 
 // Passwords are slow to hash on purpose, and tests share the machine.
 jest.setTimeout(60_000);
 
-/** The application over a database of its own, with a clock that the test sets. */
+/**
+ * The application over a database of its own, with a clock that the test sets. It works as its own role, builders as the
+ * owner of the tables.
+ */
 export interface TestApplication {
   readonly express: Express;
   readonly app: App;
@@ -32,15 +36,16 @@ export async function startTestApplication(
 ): Promise<TestApplication> {
   const database = await createTestDatabase();
   const config = readConfig({
-    DATABASE_URL: database.url,
+    DATABASE_URL: database.applicationUrl,
     NODE_ENV: 'test',
     TRUST_PROXY_HOPS: '1',
     SESSION_SECRET: 'no secret at all, only for the tests',
     ...settings,
   });
+  const dataSource = await createDataSource(config.databaseUrl, 6).initialize();
   const application = { now: new Date('2026-04-15T10:00:00Z') };
   const app = await buildApp({
-    dataSource: database.dataSource,
+    dataSource,
     config,
     log: pino({ level: 'silent' }),
     now: () => application.now,
@@ -53,6 +58,7 @@ export async function startTestApplication(
     tx: database.dataSource.manager,
     stop: async () => {
       await app.close();
+      await dataSource.destroy();
       await database.drop();
     },
   });

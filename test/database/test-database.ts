@@ -16,7 +16,10 @@ const templatePrefix = 'lampmeadow_template_';
 
 /** A database of one spec file. */
 export interface TestDatabase {
+  /** For the role that owns the tables. */
   readonly url: string;
+  /** For the role that the application works as; the owner's where the tests were given no other. */
+  readonly applicationUrl: string;
   readonly dataSource: DataSource;
   readonly transactions: Transactions;
   /** Disconnects and removes the database. */
@@ -56,6 +59,7 @@ async function connected(name: string): Promise<TestDatabase> {
   const dataSource = await createDataSource(url, 6).initialize();
   return {
     url,
+    applicationUrl: urlOf(name, applicationMaintenanceUrl()),
     dataSource,
     transactions: new Transactions(dataSource),
     drop: async () => {
@@ -87,7 +91,7 @@ async function ensureTemplate(maintenance: Client, template: string): Promise<vo
   await maintenance.query(`CREATE DATABASE ${unfinished} TEMPLATE template0`);
   const dataSource = await createDataSource(urlOf(unfinished), 2).initialize();
   try {
-    await migrate(dataSource);
+    await migrate(dataSource, applicationRole());
   } finally {
     await dataSource.destroy();
   }
@@ -95,7 +99,7 @@ async function ensureTemplate(maintenance: Client, template: string): Promise<vo
 }
 
 function migrationHash(): string {
-  const hash = createHash('sha256');
+  const hash = createHash('sha256').update(applicationRole() ?? '');
   for (const file of readdirSync(migrationFolder).sort())
     hash.update(readFileSync(join(migrationFolder, file)));
   return hash.digest('hex').slice(0, 16);
@@ -126,8 +130,18 @@ function maintenanceUrl(): string {
   return url;
 }
 
-function urlOf(database: string): string {
-  const url = new URL(maintenanceUrl());
+function applicationMaintenanceUrl(): string {
+  return process.env['TEST_APPLICATION_DATABASE_URL'] ?? maintenanceUrl();
+}
+
+/** Null where the application works as the owner. */
+function applicationRole(): string | null {
+  const application = new URL(applicationMaintenanceUrl()).username;
+  return application === new URL(maintenanceUrl()).username ? null : application;
+}
+
+function urlOf(database: string, maintenance = maintenanceUrl()): string {
+  const url = new URL(maintenance);
   url.pathname = `/${database}`;
   return url.toString();
 }

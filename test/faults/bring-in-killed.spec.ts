@@ -68,7 +68,8 @@ describe('a server killed while it brings a file in', () => {
     const child = fork(join(builtFolder, 'server/main.js'), {
       env: {
         ...process.env,
-        DATABASE_URL: database.url,
+        DATABASE_URL: database.applicationUrl,
+        DATABASE_OWNER_URL: database.url,
         PORT: '0',
         LAMPMEADOW_DEMO: 'off',
         LOG_LEVEL: 'fatal',

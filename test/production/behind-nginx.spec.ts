@@ -31,7 +31,8 @@ describe('the application behind nginx, as the README sets it up', () => {
     address = `https://127.0.0.1:${httpsPort}`;
     server = await startBuiltProgram('server', folder, {
       NODE_ENV: 'production',
-      DATABASE_URL: database.url,
+      DATABASE_URL: database.applicationUrl,
+      DATABASE_OWNER_URL: database.url,
       PORT: '0',
       PUBLIC_URL: address,
       TRUST_PROXY_HOPS: '1',
@@ -123,7 +124,8 @@ describe('the application behind nginx, as the README sets it up', () => {
   it('finishes the request in hand when it is told to stop', async () => {
     const other = await startBuiltProgram('server', join(folder, 'stopping'), {
       NODE_ENV: 'production',
-      DATABASE_URL: database.url,
+      DATABASE_URL: database.applicationUrl,
+      DATABASE_OWNER_URL: database.url,
       PORT: '0',
     });
     const body = JSON.stringify({ email: 'pia@example.org', password: 'lamps on at six' });

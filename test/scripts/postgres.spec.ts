@@ -64,6 +64,18 @@ describe('the local PostgreSQL', () => {
     expect(roles).toEqual([{ rolsuper: false }]);
   });
 
+  it('gives the application a role that owns nothing', async () => {
+    const postgres = await start();
+    const url = postgres.applicationUrl('lampmeadow');
+    expect(statSync(join(home, 'application-password')).mode & 0o777).toBe(0o600);
+    expect(await query(postgres, 'SELECT current_user AS role', url)).toEqual([
+      { role: 'lampmeadow_application' },
+    ]);
+    for (const sql of ['CREATE DATABASE theirs', 'CREATE ROLE theirs', 'CREATE TABLE theirs (id integer)']) {
+      await expect(query(postgres, sql, url)).rejects.toMatchObject({ code: '42501' });
+    }
+  });
+
   it('lets its owner ask for a checkpoint, as benchmarks do', async () => {
     const postgres = await start();
     await expect(query(postgres, 'CHECKPOINT')).resolves.toEqual([]);

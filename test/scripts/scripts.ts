@@ -1,6 +1,7 @@
 /** A running PostgreSQL server as server/scripts/postgres.js hands it out. */
 export interface Postgres {
   url(database: string): string;
+  applicationUrl(database: string): string;
   port: number;
   owned: boolean;
   stop(): Promise<void>;

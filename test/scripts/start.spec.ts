@@ -23,7 +23,7 @@ describe('npm start', () => {
   afterAll(() => project.remove());
 
   function npmStart(env: NodeJS.ProcessEnv = {}): { npm: ChildProcess; said: () => string } {
-    const unset = { DATABASE_URL: '', SMTP_URL: '', PORT: '', LAMPMEADOW_DEMO: '' };
+    const unset = { DATABASE_URL: '', DATABASE_OWNER_URL: '', SMTP_URL: '', PORT: '', LAMPMEADOW_DEMO: '' };
     const npm = spawn('npm', ['start'], { cwd: project.folder, env: { ...process.env, ...unset, ...env } });
     running.push(npm);
     let output = '';
@@ -45,7 +45,9 @@ describe('npm start', () => {
     expect(first.said()).toMatch(
       /Building the server[^]*Building the pages[^]*Starting the server[^]*Lampmeadow is at http:/,
     );
-    expect(first.said()).toContain('/lampmeadow\n'); // the server was given our database
+    // The server was given our database, for the application and for its owner.
+    expect(first.said()).toMatch(/postgres:\/\/lampmeadow_application:\w+@127\.0\.0\.1:\d+\/lampmeadow\n/);
+    expect(first.said()).toMatch(/postgres:\/\/lampmeadow:\w+@127\.0\.0\.1:\d+\/lampmeadow\n/);
 
     const second = npmStart();
     const [code] = (await once(second.npm, 'close')) as [number];

@@ -62,7 +62,7 @@ export class TemporaryProject {
       'simulator/mailbox',
       `{ ready: true, smtpPort: env.MAILBOX_SMTP_PORT, address: ${page} }`,
     );
-    const notes = '[env.SMTP_URL, env.MAILBOX_URL, env.DATABASE_URL]';
+    const notes = '[env.SMTP_URL, env.MAILBOX_URL, env.DATABASE_URL, env.DATABASE_OWNER_URL]';
     this.writeProgram(
       folder,
       'server',

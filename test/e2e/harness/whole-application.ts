@@ -44,7 +44,8 @@ export async function startWholeApplication(): Promise<WholeApplication> {
     const mailbox = await startMailbox({ smtpPort: 0, httpPort: 0 });
     undo.push(() => mailbox.stop());
     const server = await startBuiltProgram('server', folder, {
-      DATABASE_URL: database.url,
+      DATABASE_URL: database.applicationUrl,
+      DATABASE_OWNER_URL: database.url,
       PORT: '0',
       SMTP_URL: `smtp://127.0.0.1:${mailbox.smtpPort}`,
       LAMPMEADOW_DEVICES_FILE: devicesFile,
