@@ -1,11 +1,22 @@
 import type { RoomChanges } from './audit/room-changes';
+import { CalendarService } from './calendar/calendar-service';
+import { CalendarStore } from './calendar/calendar-store';
+import { calendarRoutes } from './calendar/calendar-routes';
 import { CarePlaces } from './care/care-places';
+import { careRecordRoutes } from './care/care-record-routes';
+import { CareRecordService } from './care/care-record-service';
+import { CareRecordStore } from './care/care-record-store';
+import { CareReminderJob } from './care/care-reminder-job';
+import { CareReminderStore } from './care/care-reminder-store';
 import { careRoutes } from './care/care-routes';
+import { DryingService } from './care/drying-service';
+import { DryingStore } from './care/drying-store';
 import { OpenTasks } from './care/open-tasks';
 import { RoutinesService } from './care/routines-service';
 import { RoutinesStore } from './care/routines-store';
 import { ShelfEventsService } from './care/shelf-events-service';
 import { ShelfEventsStore } from './care/shelf-events-store';
+import { ShelfThirst } from './care/shelf-thirst';
 import { TaskClosingService } from './care/task-closing-service';
 import { TaskEffects } from './care/task-effects';
 import { TaskPlanningService } from './care/task-planning-service';
@@ -28,6 +39,7 @@ import { RotaStore } from './rota/rota-store';
 import { ShareStore } from './rota/share-store';
 import { SwapsService } from './rota/swaps-service';
 import { SwapsStore } from './rota/swaps-store';
+import { SeriesStore } from './series/series-store';
 
 /** What sharing care out stands on, before anything grows. */
 export interface CareGround {
@@ -56,6 +68,10 @@ export interface CareFoundation {
   readonly people: PeopleService;
   readonly teller: CareTeller;
   readonly feed: LiveFeed;
+  /** Where links lead, without a trailing slash. */
+  readonly publicUrl: () => string;
+  /** Right side of identifiers that leave the house. */
+  readonly mailDomain: string;
   readonly now: Clock;
 }
 
@@ -65,6 +81,7 @@ export interface CareServices {
   readonly tasks: TasksService;
   readonly planning: TaskPlanningService;
   readonly shelfEvents: ShelfEventsService;
+  readonly reminderJob: CareReminderJob;
 }
 
 /**
@@ -81,6 +98,13 @@ export function careServices(foundation: CareFoundation): CareServices {
   const places = new CarePlaces(rooms, people, plantingsStore);
   const routinesStore = new RoutinesStore();
   const planned = new TaskPlanningStore();
+  const drying = new DryingService({
+    transactions,
+    drying: new DryingStore(),
+    thirst: new ShelfThirst(new SeriesStore()),
+    plantings,
+    now,
+  });
   const planning = new TaskPlanningService({
     transactions,
     planning: planned,
@@ -88,7 +112,7 @@ export function careServices(foundation: CareFoundation): CareServices {
     rota,
     assignment,
     rooms,
-    dryingDue: () => Promise.resolve('unknown' as const),
+    dryingDue: (...of) => drying.due(...of),
     now,
   });
   const tasks = new TasksService({
@@ -130,9 +154,23 @@ export function careServices(foundation: CareFoundation): CareServices {
     places,
     changes,
   });
+  const record = new CareRecordService(transactions, new CareRecordStore(tasksStore), now);
+  const calendars = new CalendarService({
+    transactions,
+    calendars: new CalendarStore(),
+    publicUrl: foundation.publicUrl,
+    domain: foundation.mailDomain,
+    now,
+  });
   const swaps = new SwapsService({ ...shared, places, teller });
   return {
-    routes: [...careRoutes({ tasks, closing, routines, shelfEvents, photos }), ...rotaRoutes(rotas, swaps)],
+    routes: [
+      ...careRoutes({ tasks, closing, routines, shelfEvents, photos }),
+      ...careRecordRoutes(record, drying),
+      ...rotaRoutes(rotas, swaps),
+      ...calendarRoutes(calendars),
+    ],
+    reminderJob: new CareReminderJob(transactions, new CareReminderStore(tasksStore), teller, rooms, now),
     tasks,
     planning,
     shelfEvents,

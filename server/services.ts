@@ -18,6 +18,7 @@ import { BoardService } from './board/board-service';
 import { BoardStore } from './board/board-store';
 import { ShelfNowService } from './board/shelf-now-service';
 import { careGround, careServices } from './care-services';
+import type { CareReminderJob } from './care/care-reminder-job';
 import type { ShelfEventsService } from './care/shelf-events-service';
 import type { TaskPlanningService } from './care/task-planning-service';
 import type { Clock } from './clock';
@@ -99,6 +100,7 @@ export interface Services {
   readonly secondLookJob: SecondLookJob;
   readonly planning: TaskPlanningService;
   readonly shelfEvents: ShelfEventsService;
+  readonly careReminderJob: CareReminderJob;
   readonly advice: AdviceService;
   readonly loggerFiles: LoggerFileRunner;
   /** Tells the scenarios which room is the demonstration. */
@@ -178,6 +180,8 @@ export function composeServices(foundation: Foundation): Services {
     people,
     teller: new CareTeller({ tellings, mails: mailStore, footers, publicUrl, mailDomain, now }),
     feed: relay,
+    publicUrl,
+    mailDomain,
     now,
   });
   const alerts = new AlertService({
@@ -325,6 +329,7 @@ export function composeServices(foundation: Foundation): Services {
     }),
     planning: care.planning,
     shelfEvents: care.shelfEvents,
+    careReminderJob: care.reminderJob,
     advice: growing.advice,
     loggerFiles: loggerFiles.runner,
     setDemonstrationRoom: (roomId) => {

@@ -55,6 +55,10 @@ export class TaskEntity {
   @Column('integer', { name: 'took_minutes', nullable: true }) tookMinutes!: number | null;
   /** Of a missed task: the later one that was done in its stead. */
   @Column('uuid', { name: 'made_up_by', nullable: true }) madeUpBy!: string | null;
+  /** When its holders were reminded that its time ends. */
+  @Column('timestamptz', { name: 'reminded_at', nullable: true }) remindedAt!: Date | null;
+  /** When keepers were told that it is late. */
+  @Column('timestamptz', { name: 'told_late_at', nullable: true }) toldLateAt!: Date | null;
   @CreateDateColumn({ type: 'timestamptz', name: 'created_at' }) createdAt!: Date;
 
   @ManyToOne(() => RoomEntity, { onDelete: 'CASCADE', nullable: false })

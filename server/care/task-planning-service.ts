@@ -1,4 +1,4 @@
-import { calendarDays, dayAfterDoing, type DayLimits } from '@shared/care/routine-days';
+import { calendarDays, dayAfterDoing, dayOfDryness, type DayLimits } from '@shared/care/routine-days';
 import { dutyOn, type DutyRota } from '@shared/care/rota';
 import { dayAfter } from '@shared/growing/calendar-day';
 import { dayBounds } from '@shared/series/room-days';
@@ -18,7 +18,7 @@ export interface TaskPlanningParts {
   readonly rota: Pick<RotaStore, 'rota'>;
   readonly assignment: HolderAssignment;
   readonly rooms: Pick<RoomsService, 'roomOf' | 'all'>;
-  /** When the drying of a planting asks for water; null while it does not, or does not tell. */
+  /** Whether the drying of a planting asks for water. */
   readonly dryingDue: (
     tx: Tx,
     planting: { readonly roomId: string; readonly plantingId: string },
@@ -123,8 +123,7 @@ export class TaskPlanningService {
     const standing = await this.parts.dryingDue(tx, { roomId, plantingId });
     if (standing === 'unknown' || day === null) return day;
     if (standing === 'notYet') return null;
-    // Dry today, whatever the fallback says; on a day that was planned before, tomorrow.
-    return dayAfterDoing({ everyDays: 0, startsOn: today }, last, limitsOf(routine, rota), today);
+    return dayOfDryness(today, last, limitsOf(routine, rota));
   }
 
   private async roomDay(tx: Tx, roomId: string): Promise<RoomDay> {

@@ -8,6 +8,7 @@ import { AlertEntity } from '../alerts/alert-entity';
 import { AlertQuietEntity } from '../alerts/alert-quiet-entity';
 import { AlertWatchEntity } from '../alerts/alert-watch-entity';
 import { AuditEntryEntity } from '../audit/audit-entry-entity';
+import { CalendarFeedEntity } from '../calendar/calendar-feed-entity';
 import { RoutineEntity } from '../care/routine-entity';
 import { RoutinePersonEntity } from '../care/routine-person-entity';
 import { ShelfEventEntity } from '../care/shelf-event-entity';
@@ -70,6 +71,7 @@ const entities = [
   AlertQuietEntity,
   AlertWatchEntity,
   AuditEntryEntity,
+  CalendarFeedEntity,
   DailySummaryEntity,
   DeviceEntity,
   DutyDayEntity,

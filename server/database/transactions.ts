@@ -1,5 +1,7 @@
 import type { DataSource, EntityManager } from 'typeorm';
 
+import { presentBeforeCommit } from './commit-scope';
+
 /** A connection inside a transaction, or outside one where only reading is done; stores take it, services pass it on. */
 export type Tx = EntityManager;
 
@@ -30,6 +32,11 @@ export class Transactions {
    * @returns What the work returned, after the commit.
    */
   run<T>(work: (tx: Tx) => Promise<T>): Promise<T> {
-    return this.dataSource.transaction(work);
+    const beforeCommit = presentBeforeCommit();
+    return this.dataSource.transaction(async (tx) => {
+      const result = await work(tx);
+      await beforeCommit?.(tx);
+      return result;
+    });
   }
 }

@@ -18,7 +18,8 @@ const AHEAD_MS = 62 * 24 * HOUR_MS;
  * @returns Stops them all, after the work in hand.
  */
 export function startJobs(app: App, transactions: Transactions, log: Logger): () => Promise<void> {
-  const { secondLookJob, escalationJob, morningLetterJob, advice, planning, loggerFiles } = app.services;
+  const { secondLookJob, escalationJob, morningLetterJob, careReminderJob } = app.services;
+  const { advice, planning, loggerFiles } = app.services;
   const alone = (name: string, everyMs: number, work: () => Promise<void>): RepeatingJob =>
     new RepeatingJob(name, everyMs, async () => void (await whenAlone(transactions, name, work)), log);
   const jobs = [
@@ -27,7 +28,8 @@ export function startJobs(app: App, transactions: Transactions, log: Logger): ()
     alone('escalation', MINUTE_MS / 2, () => escalationJob.run()),
     alone('morning letters', MINUTE_MS, () => morningLetterJob.run()),
     alone('advice', 10 * MINUTE_MS, () => advice.refreshAll()),
-    alone('tasks', HOUR_MS, () => planning.planAhead()),
+    alone('tasks', HOUR_MS / 2, () => planning.planAhead()),
+    alone('care reminders', 5 * MINUTE_MS, () => careReminderJob.run()),
     alone('partitions', 6 * HOUR_MS, async () => {
       const now = Date.now();
       await transactions.plain.query('SELECT ensure_reading_partitions($1, $2)', [

@@ -5,6 +5,7 @@ import { formatShortDay } from '@shared/format/room-time';
 import { pastQuietHours } from '@shared/mail/mail-choice';
 import type { Clock } from '../clock';
 import type { Tx } from '../database/transactions';
+import type { CareReminderTeller } from '../care/care-reminder-job';
 import type { SwapTeller } from '../rota/swaps-service';
 import type { MailSetting } from './alert-mail';
 import type { MailFooters } from './mail-footers';
@@ -31,7 +32,7 @@ export interface CareMail {
 }
 
 /** Writes mails about care into the outbox, to those who want them; quiet hours hold them back. */
-export class CareTeller implements SwapTeller {
+export class CareTeller implements SwapTeller, CareReminderTeller {
   constructor(private readonly parts: CareTellerParts) {}
 
   async tellOffered(tx: Tx, roomId: string, { task, ...offer }: SwapOffer): Promise<void> {
@@ -90,6 +91,38 @@ export class CareTeller implements SwapTeller {
     );
   }
 
+  async tellEnding(tx: Tx, roomId: string, tasks: readonly Task[]): Promise<void> {
+    const heldBy = ({ personId }: Recipient): readonly Task[] =>
+      tasks.filter(({ holders }) => holders.some((holder) => holder.personId === personId));
+    const isFor = (recipient: Recipient): boolean => heldBy(recipient).length > 0;
+    await this.tell(tx, roomId, isFor, (recipient) => {
+      const own = heldBy(recipient);
+      return {
+        subject:
+          own.length === 1 ? `Today still: ${own[0]?.title ?? ''}` : `Today still: ${own.length} care tasks`,
+        opening: 'This is yours and in time until tonight. If you can’t do it, hand it over.',
+        sections: [
+          listSection('Not done yet', own, { text: 'Tick it, or hand it over', url: this.careUrl() }),
+        ],
+      };
+    });
+  }
+
+  async tellLate(tx: Tx, roomId: string, tasks: readonly Task[]): Promise<void> {
+    await this.tell(
+      tx,
+      roomId,
+      ({ role }) => role === 'keeper',
+      () => ({
+        subject: tasks.length === 1 ? `Late: ${tasks[0]?.title ?? ''}` : `Late: ${tasks.length} care tasks`,
+        opening: 'The time for this is over and nobody has done it.',
+        sections: [
+          listSection('Not done in time', tasks, { text: 'See the care rota', url: this.careUrl() }),
+        ],
+      }),
+    );
+  }
+
   /**
    * Writes a mail to each member that it is for and who wants mails about care.
    *
@@ -143,13 +176,36 @@ export class CareTeller implements SwapTeller {
   }
 }
 
+function listSection(
+  heading: string,
+  tasks: readonly Task[],
+  link: { readonly text: string; readonly url: string },
+): MailSection {
+  return {
+    heading,
+    lines: [],
+    items: tasks.map((task) => {
+      const who = task.personName ?? (task.cover === 'anybody' ? 'anybody' : 'nobody has it');
+      return [task.title, ...placeOf(task), `due ${dayOf(task)}`, who].join(' · ');
+    }),
+    links: [link],
+  };
+}
+
+function placeOf({ plantingLabel, rackName, shelfLabel }: Task): string[] {
+  return [plantingLabel, rackName, shelfLabel].filter((part) => part !== null);
+}
+
+/** A day of the calendar has no time zone, so it is written as UTC counts it. */
+function dayOf({ dueOn }: Task): string {
+  return formatShortDay(`${dueOn}T12:00:00Z`, 'UTC');
+}
+
 function section(task: Task, note: string, links: MailSection['links']): MailSection {
-  const place = [task.plantingLabel, task.rackName, task.shelfLabel].filter((part) => part !== null);
-  const day = formatShortDay(`${task.dueOn}T12:00:00Z`, 'UTC');
   return {
     heading: task.title,
     lines: [
-      [`Due ${day}`, ...place].join(' · '),
+      [`Due ${dayOf(task)}`, ...placeOf(task)].join(' · '),
       ...(task.detail === '' ? [] : [task.detail]),
       ...(note === '' ? [] : [`“${note}”`]),
     ],

@@ -62,6 +62,23 @@ export function dayAfterDoing(
   return firstDayInSeason(later(wanted, dayAfter(last.plannedFor, 1)), season, isClosed);
 }
 
+/**
+ * The day on which a planting that is dry is to be watered: today, unless today's turn was planned and closed already.
+ *
+ * @param today - The day on which it was found dry.
+ * @param last - The turn before; null for the first.
+ * @param limits - Season and closed days.
+ * @returns The day; null where season and closed days leave none within two years.
+ */
+export function dayOfDryness(
+  today: string,
+  last: Pick<ClosedTurn, 'plannedFor'> | null,
+  { season, isClosed }: DayLimits,
+): string | null {
+  const from = last === null ? today : later(today, dayAfter(last.plannedFor, 1));
+  return firstDayInSeason(from, season, isClosed);
+}
+
 function later(one: string, other: string): string {
   return one > other ? one : other;
 }

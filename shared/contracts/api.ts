@@ -4,6 +4,8 @@ import * as advice from './advice';
 import * as alerts from './alerts';
 import * as board from './board';
 import * as care from './care';
+import * as careFeed from './care-feed';
+import * as careRecord from './care-record';
 import * as careRota from './care-rota';
 import * as careRoutines from './care-routines';
 import * as crops from './crops';
@@ -124,6 +126,15 @@ export const endpoints: readonly Endpoint[] = [
   careRota.offerSwap,
   careRota.takeSwap,
   careRota.withdrawSwap,
+  careRecord.listCareRecord,
+  careRecord.downloadCareRecord,
+  careRecord.getCareYields,
+  careRecord.getCareCompliance,
+  careRecord.getPlantingDrying,
+  careFeed.getCalendarFeed,
+  careFeed.renewCalendarFeed,
+  careFeed.removeCalendarFeed,
+  careFeed.readCalendarFeed,
   crops.listCrops,
   crops.getCrop,
   crops.copyCrop,

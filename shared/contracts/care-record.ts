@@ -36,7 +36,7 @@ export const downloadCareRecord = endpoint({
   name: 'downloadCareRecord',
   method: 'get',
   path: '/rooms/:roomId/care/record.csv',
-  access: 'viewer',
+  access: 'grower',
   summary: 'Closed tasks as CSV (RFC 4180), oldest first',
   params: roomParams,
   query: z.object(recordFilter),

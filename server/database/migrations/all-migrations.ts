@@ -22,6 +22,7 @@ import { CreateSowingCalendar1764553500000 } from './1764553500000-create-sowing
 import { TellAssignees1764553400000 } from './1764553400000-tell-assignees';
 import { CreateWantedLight1764554500000 } from './1764554500000-create-wanted-light';
 import { CreateCareRota1764554600000 } from './1764554600000-create-care-rota';
+import { TellCareOutside1764554700000 } from './1764554700000-tell-care-outside';
 
 /** Every migration in order; a merged one is never edited. */
 export const migrations = [
@@ -49,4 +50,5 @@ export const migrations = [
   TellAssignees1764553400000,
   CreateWantedLight1764554500000,
   CreateCareRota1764554600000,
+  TellCareOutside1764554700000,
 ];
