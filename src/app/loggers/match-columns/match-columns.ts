@@ -69,7 +69,7 @@ export class MatchColumns {
   protected readonly proposals = computed(() => proposedGoals(this.file().series));
   protected readonly proposalWords = computed(() => {
     const count = this.proposals().length;
-    return count === 1 ? 'For one series a sensor is proposed.' : `For ${count} series sensors are proposed.`;
+    return count === 1 ? 'A sensor is proposed for one series.' : `Sensors are proposed for ${count} series.`;
   });
 
   /** Whether the person has said how the dates are written, where that is in doubt. */
