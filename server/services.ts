@@ -10,6 +10,8 @@ import { AlertStore } from './alerts/alert-store';
 import { RangeTrialService } from './alerts/range-trial-service';
 import type { SecondLookJob } from './alerts/second-look-job';
 import { secondLookJob } from './alerts/second-look-parts';
+import { AuditLogService } from './audit/audit-log-service';
+import { auditRoutes } from './audit/audit-routes';
 import { AuditStore } from './audit/audit-store';
 import { RoomChanges } from './audit/room-changes';
 import { BoardPublisher } from './board/board-publisher';
@@ -295,6 +297,7 @@ export function composeServices(foundation: Foundation): Services {
         new MailLinksService(transactions, tellings, people, tokens),
         new EscalationService(transactions, tellings, changes),
       ),
+      ...auditRoutes(new AuditLogService(transactions, audit)),
       ...roomsRoutes(rooms, rules),
       ...devicesRoutes(devices),
       ...deviceIntakeRoutes(deviceIntake),

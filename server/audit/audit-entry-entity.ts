@@ -1,6 +1,6 @@
 import { Column, Entity, Index, PrimaryGeneratedColumn } from 'typeorm';
 
-/** Who changed what and when. Kept when the person or the room goes, hence without foreign keys. */
+/** Who changed what, when and from where. Kept when the person or the room goes, hence without foreign keys. */
 @Entity('audit_entry')
 @Index('audit_entry_room_at_idx', ['roomId', 'at'])
 export class AuditEntryEntity {
@@ -11,5 +11,7 @@ export class AuditEntryEntity {
   /** Verb and object, such as `shelf.create`. */
   @Column('text') action!: string;
   @Column('uuid', { name: 'subject_id', nullable: true }) subjectId!: string | null;
+  /** Network address of the request that made the change; null where none did. */
+  @Column('text', { nullable: true }) origin!: string | null;
   @Column('jsonb') detail!: unknown;
 }

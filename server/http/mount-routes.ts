@@ -3,6 +3,7 @@ import { endpoints } from '@shared/contracts/api';
 import type { AccessControl, Granted } from './access';
 import { refuseCrossSite } from './cross-site';
 import { parseRequest } from './parse-request';
+import { withOrigin } from './request-origin';
 import type { RepeatableRequests } from './repeatable-requests';
 import type { Route, RouteContext } from './route';
 
@@ -36,7 +37,7 @@ export function mountRoutes(app: Express, routes: readonly Route[], support: Rou
       res.once('finish', () => {
         support.onAnswered(name, res.statusCode, (performance.now() - startedAt) / 1000);
       });
-      answer(route, support, req, res).catch(next);
+      withOrigin(req.ip ?? null, () => answer(route, support, req, res)).catch(next);
     });
   }
 }

@@ -2,6 +2,7 @@ import type { Endpoint } from './endpoint';
 import * as alertAnswers from './alert-answers';
 import * as advice from './advice';
 import * as alerts from './alerts';
+import * as audit from './audit';
 import * as board from './board';
 import * as care from './care';
 import * as careFeed from './care-feed';
@@ -37,6 +38,7 @@ export const endpoints: readonly Endpoint[] = [
   people.changePassword,
   people.changeMailChoice,
   people.listMembers,
+  audit.listAuditEntries,
   mail.getMailLink,
   mail.followMailLink,
   mail.getEscalation,

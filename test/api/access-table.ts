@@ -97,6 +97,7 @@ export const accessTable: Readonly<Record<string, AccessRow>> = {
   changePassword: { outcomes: signedIn },
   changeMailChoice: { outcomes: viewer },
   listMembers: { outcomes: viewer },
+  listAuditEntries: { outcomes: keeper },
 
   getMailLink: { outcomes: anyone },
   followMailLink: { outcomes: anyone },

@@ -23,6 +23,7 @@ import { TellAssignees1764553400000 } from './1764553400000-tell-assignees';
 import { CreateWantedLight1764554500000 } from './1764554500000-create-wanted-light';
 import { CreateCareRota1764554600000 } from './1764554600000-create-care-rota';
 import { TellCareOutside1764554700000 } from './1764554700000-tell-care-outside';
+import { NoteWhereChangesComeFrom1764556000000 } from './1764556000000-note-where-changes-come-from';
 
 /** Every migration in order; a merged one is never edited. */
 export const migrations = [
@@ -51,4 +52,5 @@ export const migrations = [
   CreateWantedLight1764554500000,
   CreateCareRota1764554600000,
   TellCareOutside1764554700000,
+  NoteWhereChangesComeFrom1764556000000,
 ];
