@@ -40,10 +40,12 @@ export class AlertStore {
     wanted: readonly { sensor: SensorOnRoad; quantity: Quantity; kind: AlertKind }[],
   ): Promise<Watch[]> {
     const sensorIds = [...new Set(wanted.map(({ sensor }) => sensor.id))];
+    const kinds = [...new Set(wanted.map(({ kind }) => kind))];
     const read = async (): Promise<WatchRow[]> =>
       tx.query(
-        'SELECT id, sensor_id, quantity, kind, state FROM alert_watch WHERE sensor_id = ANY($1) FOR UPDATE',
-        [sensorIds],
+        `SELECT id, sensor_id, quantity, kind, state FROM alert_watch
+         WHERE sensor_id = ANY($1) AND kind = ANY($2) FOR NO KEY UPDATE`,
+        [sensorIds, kinds],
       );
     let rows = await read();
     const held = new Set(rows.map(keyOf));
