@@ -26,4 +26,11 @@ export class RoomCrops {
     const error = this.resource.error();
     return error === undefined ? null : failureText(error);
   });
+
+  /** Varieties of a crop that this room grows and that hold what is typed so far; reads signals. */
+  varietiesOf(cropId: string | null, typed: string): readonly string[] {
+    const known = this.all()?.find(({ id }) => id === cropId)?.varieties ?? [];
+    const words = typed.trim().toLowerCase();
+    return known.filter((name) => name.toLowerCase().includes(words));
+  }
 }

@@ -1,11 +1,12 @@
-import { ChangeDetectionStrategy, Component, inject, signal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, inject } from '@angular/core';
 import { FormControl, FormGroup, ReactiveFormsModule, Validators } from '@angular/forms';
 import { MatButton } from '@angular/material/button';
 import { MAT_DIALOG_DATA, MatDialogModule, MatDialogRef } from '@angular/material/dialog';
 import { MatFormFieldModule } from '@angular/material/form-field';
 import { MatInput } from '@angular/material/input';
-import { finalize, type Observable } from 'rxjs';
-import { serverWords, showFieldProblems } from '../../core/field-problems';
+import { type Observable } from 'rxjs';
+import { serverWords } from '../../core/field-problems';
+import { FormSaving } from '../../core/form-saving';
 import { ProblemText } from '../../ui/states/problem-text';
 
 /** What gets a name, and how it is kept under it. */
@@ -31,16 +32,17 @@ export interface NameSubject<Kept> {
           <input matInput maxlength="80" formControlName="name" />
           <mat-error>{{ said(form.controls.name) ?? 'It needs a name.' }}</mat-error>
         </mat-form-field>
-        <app-problem-text [message]="problem()" />
+        <app-problem-text [message]="saving.problem()" />
       </mat-dialog-content>
       <mat-dialog-actions align="end">
         <button matButton type="button" mat-dialog-close>Leave it</button>
-        <button matButton="filled" type="submit" [disabled]="isSaving()">{{ subject.deed }}</button>
+        <button matButton="filled" type="submit" [disabled]="saving.isSaving()">{{ subject.deed }}</button>
       </mat-dialog-actions>
     </form>
   `,
   styleUrl: '../figure/figure-dialog.scss',
   imports: [MatButton, MatDialogModule, MatFormFieldModule, MatInput, ProblemText, ReactiveFormsModule],
+  providers: [FormSaving],
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class NameDialog {
@@ -54,20 +56,13 @@ export class NameDialog {
     }),
   });
   protected readonly said = serverWords;
-  protected readonly isSaving = signal(false);
-  protected readonly problem = signal<string | null>(null);
+  protected readonly saving = inject(FormSaving);
 
   protected save(): void {
     this.form.markAllAsTouched();
-    if (this.form.invalid || this.isSaving()) return;
-    this.isSaving.set(true);
-    this.problem.set(null);
-    this.subject
-      .save(this.form.controls.name.value.trim())
-      .pipe(finalize(() => this.isSaving.set(false)))
-      .subscribe({
-        next: (kept) => this.dialog.close(kept),
-        error: (error: unknown) => this.problem.set(showFieldProblems(this.form, error)),
-      });
+    if (this.form.invalid || this.saving.isSaving()) return;
+    this.saving.send(this.form, this.subject.save(this.form.controls.name.value.trim()), (kept) =>
+      this.dialog.close(kept),
+    );
   }
 }

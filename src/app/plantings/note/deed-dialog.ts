@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, inject } from '@angular/core';
 import { rxResource } from '@angular/core/rxjs-interop';
 import { ReactiveFormsModule } from '@angular/forms';
 import { MatAutocompleteModule } from '@angular/material/autocomplete';
@@ -9,9 +9,9 @@ import { MatInput } from '@angular/material/input';
 import { MatSelectModule } from '@angular/material/select';
 import { listPlantings, type PlantingDetail } from '@shared/contracts/plantings';
 import { lossReasons, settableStages } from '@shared/growing/planting-event';
-import { finalize } from 'rxjs';
 import { ApiClient, newIdempotencyKey } from '../../core/api-client';
-import { serverWords, showFieldProblems } from '../../core/field-problems';
+import { serverWords } from '../../core/field-problems';
+import { FormSaving } from '../../core/form-saving';
 import { RoomClock } from '../../core/room-clock';
 import { fieldTime } from '../../core/room-instant';
 import { RoomShelves } from '../../core/room-shelves';
@@ -56,7 +56,7 @@ const containers = ['Cell flat', '7 cm pot', '9 cm pot', '13 cm pot', '4 L pot',
     ReactiveFormsModule,
     WhenField,
   ],
-  providers: [RoomShelves],
+  providers: [FormSaving, RoomShelves],
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class DeedDialog {
@@ -75,11 +75,10 @@ export class DeedDialog {
   protected readonly hazard = hazards[this.kind] ?? null;
   protected readonly form = deedForm(this.kind, this.planting);
   protected readonly said = serverWords;
+  protected readonly saving = inject(FormSaving);
   protected readonly containers = containers;
   protected readonly stages = settableStages.map((stage) => ({ stage, word: stageNames[stage] }));
   protected readonly reasons = lossReasons.map((reason) => ({ reason, word: lossWords[reason] }));
-  protected readonly isSaving = signal(false);
-  protected readonly problem = signal<string | null>(null);
 
   private readonly otherResource = rxResource({
     params: () => {
@@ -114,24 +113,22 @@ export class DeedDialog {
   }
 
   protected save(): void {
-    if (this.isSaving()) return;
+    if (this.saving.isSaving()) return;
     if (this.form.invalid) {
       this.form.markAllAsTouched();
-      this.problem.set(this.form.hasError('nothing') ? 'Give a weight, a number of pieces, or both.' : null);
+      this.saving.problem.set(
+        this.form.hasError('nothing') ? 'Give a weight, a number of pieces, or both.' : null,
+      );
       return;
     }
-    this.isSaving.set(true);
-    this.problem.set(null);
-    this.subject.data
-      .take(
+    this.saving.send(
+      this.form,
+      this.subject.data.take(
         deedOf(this.kind, this.form, this.session.timeZone()),
         `${plantingTitle(this.planting)}: ${this.look.word.toLowerCase()}, written down`,
         this.idempotencyKey,
-      )
-      .pipe(finalize(() => this.isSaving.set(false)))
-      .subscribe({
-        next: () => this.dialog.close(),
-        error: (error: unknown) => this.problem.set(showFieldProblems(this.form, error)),
-      });
+      ),
+      () => this.dialog.close(),
+    );
   }
 }

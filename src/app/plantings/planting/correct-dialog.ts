@@ -1,13 +1,13 @@
-import { ChangeDetectionStrategy, Component, inject, signal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, inject } from '@angular/core';
 import { FormControl, FormGroup, ReactiveFormsModule, Validators } from '@angular/forms';
 import { MatButton } from '@angular/material/button';
 import { MAT_DIALOG_DATA, MatDialogModule, MatDialogRef } from '@angular/material/dialog';
 import { MatFormFieldModule } from '@angular/material/form-field';
 import { MatInput } from '@angular/material/input';
 import { changePlanting, type PlantingDetail } from '@shared/contracts/plantings';
-import { finalize } from 'rxjs';
 import { ApiClient } from '../../core/api-client';
-import { serverWords, showFieldProblems } from '../../core/field-problems';
+import { serverWords } from '../../core/field-problems';
+import { FormSaving } from '../../core/form-saving';
 import { Session } from '../../core/session';
 import { ProblemText } from '../../ui/states/problem-text';
 
@@ -36,18 +36,19 @@ import { ProblemText } from '../../ui/states/problem-text';
           <input matInput maxlength="120" formControlName="source" />
           <mat-error>{{ said(form.controls.source) }}</mat-error>
         </mat-form-field>
-        <app-problem-text [message]="problem()" />
+        <app-problem-text [message]="saving.problem()" />
       </mat-dialog-content>
       <mat-dialog-actions align="end">
         <button matButton type="button" mat-dialog-close>Leave it</button>
-        <button matButton="filled" type="submit" [disabled]="isSaving()">
-          {{ isSaving() ? 'Saving…' : 'Correct it' }}
+        <button matButton="filled" type="submit" [disabled]="saving.isSaving()">
+          {{ saving.isSaving() ? 'Saving…' : 'Correct it' }}
         </button>
       </mat-dialog-actions>
     </form>
   `,
   styleUrl: '../note/deed-dialog.scss',
   imports: [MatButton, MatDialogModule, MatFormFieldModule, MatInput, ProblemText, ReactiveFormsModule],
+  providers: [FormSaving],
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class CorrectDialog {
@@ -57,8 +58,7 @@ export class CorrectDialog {
   protected readonly planting = inject<PlantingDetail>(MAT_DIALOG_DATA);
 
   protected readonly said = serverWords;
-  protected readonly isSaving = signal(false);
-  protected readonly problem = signal<string | null>(null);
+  protected readonly saving = inject(FormSaving);
   protected readonly form = new FormGroup({
     variety: new FormControl(this.planting.variety ?? '', { nonNullable: true }),
     depthMm: new FormControl<number | null>(this.planting.depthMm, {
@@ -69,17 +69,13 @@ export class CorrectDialog {
 
   protected save(): void {
     const roomId = this.session.roomId();
-    if (roomId === null || this.form.invalid || this.isSaving()) return;
+    if (roomId === null || this.form.invalid || this.saving.isSaving()) return;
     const { variety, depthMm, source } = this.form.getRawValue();
     const body = { variety: variety.trim() === '' ? null : variety.trim(), depthMm, source: source.trim() };
-    this.isSaving.set(true);
-    this.problem.set(null);
-    this.api
-      .call(changePlanting, { params: { roomId, plantingId: this.planting.id }, body })
-      .pipe(finalize(() => this.isSaving.set(false)))
-      .subscribe({
-        next: (planting) => this.dialog.close(planting),
-        error: (error: unknown) => this.problem.set(showFieldProblems(this.form, error)),
-      });
+    this.saving.send(
+      this.form,
+      this.api.call(changePlanting, { params: { roomId, plantingId: this.planting.id }, body }),
+      (planting) => this.dialog.close(planting),
+    );
   }
 }

@@ -132,7 +132,7 @@ describe('adding a planting', () => {
     expect(request.request.headers.has('Idempotency-Key')).toBe(true);
     request.flush(plantingDetail());
     await harness.fixture.whenStable();
-    expect(TestBed.inject(Router).url).toBe(`/plantings/${plantingDetail().id}`);
+    expect(TestBed.inject(Router).url).toBe(`/plantings/${plantingDetail().id}?care=usual`);
   });
 
   it('says at the field that more is sown than is left, and keeps what was typed', async () => {

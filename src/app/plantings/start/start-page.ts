@@ -5,7 +5,6 @@ import {
   effect,
   inject,
   input,
-  signal,
   untracked,
 } from '@angular/core';
 import { rxResource, takeUntilDestroyed, toSignal } from '@angular/core/rxjs-interop';
@@ -20,9 +19,9 @@ import { getCrop } from '@shared/contracts/crops';
 import { startPlanting } from '@shared/contracts/plantings';
 import { listSeedLots, type SeedLot } from '@shared/contracts/seed';
 import { formatNumber } from '@shared/format/numbers';
-import { finalize } from 'rxjs';
 import { ApiClient, newIdempotencyKey } from '../../core/api-client';
-import { serverWords, showFieldProblems } from '../../core/field-problems';
+import { serverWords } from '../../core/field-problems';
+import { FormSaving } from '../../core/form-saving';
 import { Notices } from '../../core/notices';
 import { RoomClock } from '../../core/room-clock';
 import { RoomCrops } from '../../core/room-crops';
@@ -62,7 +61,7 @@ const usualContainers = ['Flat', 'Cell flat', '7 cm pot', '9 cm pot', '13 cm pot
     RouterLink,
     WhenField,
   ],
-  providers: [RoomCrops, RoomShelves],
+  providers: [FormSaving, RoomCrops, RoomShelves],
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class StartPage {
@@ -83,8 +82,7 @@ export class StartPage {
 
   protected readonly form = startForm();
   protected readonly said = serverWords;
-  protected readonly isSaving = signal(false);
-  protected readonly problem = signal<string | null>(null);
+  protected readonly saving = inject(FormSaving);
   protected readonly kinds = [
     { how: 'sown', word: 'Sow seed' },
     { how: 'broughtIn', word: 'Bring plants in' },
@@ -134,11 +132,7 @@ export class StartPage {
     const crop = this.chosenCrop();
     return crop === null ? null : depthAdvice(crop.seed);
   });
-  protected readonly varieties = computed(() => {
-    const typed = this.typedVariety().trim().toLowerCase();
-    const known = this.crops.all()?.find(({ id }) => id === this.cropId())?.varieties ?? [];
-    return known.filter((name) => name.toLowerCase().includes(typed));
-  });
+  protected readonly varieties = computed(() => this.crops.varietiesOf(this.cropId(), this.typedVariety()));
   protected readonly containers = computed(() => {
     const usual = this.chosenCrop()?.usualPot?.value;
     return usual === undefined ? usualContainers : [usual, ...usualContainers];
@@ -188,24 +182,23 @@ export class StartPage {
 
   protected save(): void {
     const [roomId, body] = [this.session.roomId(), startedPlanting(this.form, this.session.timeZone())];
-    if (this.isSaving() || roomId === null) return;
+    if (this.saving.isSaving() || roomId === null) return;
     if (this.form.invalid || body === null) {
       this.form.markAllAsTouched();
-      this.problem.set('Some fields need another look; they say what.');
+      this.saving.problem.set('Some fields need another look; they say what.');
       return;
     }
-    this.isSaving.set(true);
-    this.problem.set(null);
-    this.api
-      .call(startPlanting, { params: { roomId }, body, idempotencyKey: this.idempotencyKey })
-      .pipe(finalize(() => this.isSaving.set(false)))
-      .subscribe({
-        next: (planting) => {
-          this.notices.say(`${plantingTitle(planting)} written down`);
-          void this.router.navigate(['/plantings', planting.id], { replaceUrl: true });
-        },
-        error: (error: unknown) => this.problem.set(showFieldProblems(this.form, error)),
-      });
+    this.saving.send(
+      this.form,
+      this.api.call(startPlanting, { params: { roomId }, body, idempotencyKey: this.idempotencyKey }),
+      (planting) => {
+        this.notices.say(`${plantingTitle(planting)} written down`);
+        void this.router.navigate(['/plantings', planting.id], {
+          queryParams: { care: 'usual' },
+          replaceUrl: true,
+        });
+      },
+    );
   }
 
   /** What somebody typed stays; only an untouched field follows the crop. */

@@ -5,7 +5,6 @@ import {
   effect,
   inject,
   input,
-  signal,
   untracked,
 } from '@angular/core';
 import { toSignal } from '@angular/core/rxjs-interop';
@@ -17,10 +16,11 @@ import { MatInput } from '@angular/material/input';
 import { MatSelectModule } from '@angular/material/select';
 import { Router, RouterLink } from '@angular/router';
 import { addSeedLot, changeSeedLot, type SeedLot } from '@shared/contracts/seed';
-import { finalize, type Observable } from 'rxjs';
+import type { Observable } from 'rxjs';
 import { ApiClient } from '../../core/api-client';
 import { readStored, store } from '../../core/device-storage';
-import { serverWords, showFieldProblems } from '../../core/field-problems';
+import { serverWords } from '../../core/field-problems';
+import { FormSaving } from '../../core/form-saving';
 import { Notices } from '../../core/notices';
 import { ReaderFormat } from '../../core/reader-format';
 import { RoomCrops } from '../../core/room-crops';
@@ -55,7 +55,7 @@ const currencyKey = 'lampmeadow.currency';
     ReactiveFormsModule,
     RouterLink,
   ],
-  providers: [LotData, RoomCrops],
+  providers: [FormSaving, LotData, RoomCrops],
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class LotFormPage {
@@ -74,8 +74,7 @@ export class LotFormPage {
   private readonly cropId = toSignal(this.form.controls.cropId.valueChanges, { initialValue: null });
   private readonly variety = toSignal(this.form.controls.variety.valueChanges, { initialValue: '' });
   protected readonly said = serverWords;
-  protected readonly isSaving = signal(false);
-  protected readonly problem = signal<string | null>(null);
+  protected readonly saving = inject(FormSaving);
 
   protected readonly isNew = computed(() => this.lotId() === undefined);
   protected readonly title = computed(() => {
@@ -86,11 +85,7 @@ export class LotFormPage {
     () => this.crops.all() !== null && (this.isNew() || this.data.lot() !== null),
   );
   protected readonly failure = computed(() => this.crops.failure() ?? this.data.failure());
-  protected readonly varieties = computed(() => {
-    const typed = this.variety().trim().toLowerCase();
-    const known = this.crops.all()?.find(({ id }) => id === this.cropId())?.varieties ?? [];
-    return known.filter((name) => name.toLowerCase().includes(typed));
-  });
+  protected readonly varieties = computed(() => this.crops.varietiesOf(this.cropId(), this.variety()));
 
   constructor() {
     this.form.controls.currency.setValue(readStored(currencyKey) ?? '');
@@ -107,19 +102,14 @@ export class LotFormPage {
   }
 
   protected save(): void {
-    if (this.form.invalid || this.isSaving()) {
+    if (this.form.invalid || this.saving.isSaving()) {
       this.form.markAllAsTouched();
-      this.problem.set(this.form.invalid ? 'Some fields need another look; they say what.' : null);
+      this.saving.problem.set(this.form.invalid ? 'Some fields need another look; they say what.' : null);
       return;
     }
     const call = this.call();
     if (call === null) return;
-    this.problem.set(null);
-    this.isSaving.set(true);
-    call.pipe(finalize(() => this.isSaving.set(false))).subscribe({
-      next: (lot) => this.leave(lot),
-      error: (error: unknown) => this.problem.set(showFieldProblems(this.form, error)),
-    });
+    this.saving.send(this.form, call, (lot) => this.leave(lot));
   }
 
   private call(): Observable<SeedLot> | null {

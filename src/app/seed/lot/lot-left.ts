@@ -5,9 +5,9 @@ import { MatFormFieldModule } from '@angular/material/form-field';
 import { MatInput } from '@angular/material/input';
 import { RouterLink } from '@angular/router';
 import { recountSeedLot, type SeedLotDetail } from '@shared/contracts/seed';
-import { finalize } from 'rxjs';
 import { ApiClient } from '../../core/api-client';
-import { serverWords, showFieldProblems } from '../../core/field-problems';
+import { serverWords } from '../../core/field-problems';
+import { FormSaving } from '../../core/form-saving';
 import { Notices } from '../../core/notices';
 import { ReaderFormat } from '../../core/reader-format';
 import { ProblemText } from '../../ui/states/problem-text';
@@ -28,6 +28,7 @@ const useWords: Readonly<Record<SeedUse['reason'], string>> = {
   templateUrl: './lot-left.html',
   styleUrl: './lot-card.scss',
   imports: [MatButton, MatFormFieldModule, MatInput, ProblemText, ReactiveFormsModule, RouterLink],
+  providers: [FormSaving],
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class LotLeft {
@@ -53,9 +54,8 @@ export class LotLeft {
   });
 
   protected readonly said = serverWords;
+  protected readonly saving = inject(FormSaving);
   protected readonly isCounting = signal(false);
-  protected readonly isSaving = signal(false);
-  protected readonly problem = signal<string | null>(null);
   protected readonly form = new FormGroup({
     left: new FormControl<number | null>(null, {
       validators: [Validators.required, Validators.min(0), Validators.max(1_000_000)],
@@ -65,26 +65,22 @@ export class LotLeft {
 
   protected begin(): void {
     this.form.reset({ left: this.data.lot()?.left ?? null, note: '' });
-    this.problem.set(null);
+    this.saving.problem.set(null);
     this.isCounting.set(true);
   }
 
   protected save(): void {
     const params = this.data.params();
     const { left, note } = this.form.getRawValue();
-    if (params === undefined || left === null || this.form.invalid || this.isSaving()) return;
-    this.isSaving.set(true);
-    this.problem.set(null);
-    this.data
-      .showing(this.api.call(recountSeedLot, { params, body: { left, note: note.trim() } }))
-      .pipe(finalize(() => this.isSaving.set(false)))
-      .subscribe({
-        next: () => {
-          this.isCounting.set(false);
-          this.notices.say(`${this.left()} written down`);
-        },
-        error: (error: unknown) => this.problem.set(showFieldProblems(this.form, error)),
-      });
+    if (params === undefined || left === null || this.form.invalid || this.saving.isSaving()) return;
+    this.saving.send(
+      this.form,
+      this.data.showing(this.api.call(recountSeedLot, { params, body: { left, note: note.trim() } })),
+      () => {
+        this.isCounting.set(false);
+        this.notices.say(`${this.left()} written down`);
+      },
+    );
   }
 
   private amount(amount: number): string {

@@ -10,9 +10,10 @@ import {
   type GerminationTest,
 } from '@shared/contracts/seed';
 import { formatValue } from '@shared/format/numbers';
-import { filter, finalize, switchMap } from 'rxjs';
+import { filter, switchMap } from 'rxjs';
 import { ApiClient } from '../../core/api-client';
-import { serverWords, showFieldProblems } from '../../core/field-problems';
+import { serverWords } from '../../core/field-problems';
+import { FormSaving } from '../../core/form-saving';
 import { Notices } from '../../core/notices';
 import { ReaderFormat } from '../../core/reader-format';
 import { Session } from '../../core/session';
@@ -32,6 +33,7 @@ const dayField = (): FormControl<string> =>
   templateUrl: './lot-tests.html',
   styleUrl: './lot-tests.scss',
   imports: [Explained, MatButton, MatFormFieldModule, MatInput, ProblemText, ReactiveFormsModule],
+  providers: [FormSaving],
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class LotTests {
@@ -55,11 +57,10 @@ export class LotTests {
   );
 
   protected readonly said = serverWords;
+  protected readonly saving = inject(FormSaving);
   protected readonly isBeginning = signal(false);
   /** The test that is being counted; null while none is. */
   protected readonly countingId = signal<string | null>(null);
-  protected readonly isSaving = signal(false);
-  protected readonly problem = signal<string | null>(null);
   protected readonly beginForm = new FormGroup({
     startedOn: dayField(),
     seeds: new FormControl<number | null>(20, {
@@ -76,14 +77,14 @@ export class LotTests {
 
   protected openBegin(): void {
     this.beginForm.reset({ startedOn: this.today(), seeds: 20, note: '' });
-    this.problem.set(null);
+    this.saving.problem.set(null);
     this.countingId.set(null);
     this.isBeginning.set(true);
   }
 
   protected openCount(test: GerminationTest): void {
     this.countForm.reset({ on: this.today(), up: test.counts.at(-1)?.up ?? null });
-    this.problem.set(null);
+    this.saving.problem.set(null);
     this.isBeginning.set(false);
     this.countingId.set(test.id);
   }
@@ -91,7 +92,7 @@ export class LotTests {
   protected begin(): void {
     const params = this.data.params();
     const { startedOn, seeds, note } = this.beginForm.getRawValue();
-    if (params === undefined || seeds === null || this.beginForm.invalid || this.isSaving()) return;
+    if (params === undefined || seeds === null || this.beginForm.invalid || this.saving.isSaving()) return;
     this.save(
       this.api.call(addGerminationTest, { params, body: { startedOn, seeds, note: note.trim() } }),
       this.beginForm,
@@ -102,7 +103,7 @@ export class LotTests {
   protected count(testId: string): void {
     const params = this.data.params();
     const { on, up } = this.countForm.getRawValue();
-    if (params === undefined || up === null || this.countForm.invalid || this.isSaving()) return;
+    if (params === undefined || up === null || this.countForm.invalid || this.saving.isSaving()) return;
     this.save(
       this.api.call(countGerminationTest, { params: { ...params, testId }, body: { on, up } }),
       this.countForm,
@@ -133,19 +134,11 @@ export class LotTests {
   }
 
   private save(call: Parameters<LotData['showing']>[0], form: FormGroup, done: string): void {
-    this.isSaving.set(true);
-    this.problem.set(null);
-    this.data
-      .showing(call)
-      .pipe(finalize(() => this.isSaving.set(false)))
-      .subscribe({
-        next: () => {
-          this.isBeginning.set(false);
-          this.countingId.set(null);
-          this.notices.say(done);
-        },
-        error: (error: unknown) => this.problem.set(showFieldProblems(form, error)),
-      });
+    this.saving.send(form, this.data.showing(call), () => {
+      this.isBeginning.set(false);
+      this.countingId.set(null);
+      this.notices.say(done);
+    });
   }
 }
 

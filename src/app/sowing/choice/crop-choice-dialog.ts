@@ -6,8 +6,9 @@ import { MAT_DIALOG_DATA, MatDialogModule, MatDialogRef } from '@angular/materia
 import { MatFormFieldModule } from '@angular/material/form-field';
 import { MatInput } from '@angular/material/input';
 import type { SowingCalendar } from '@shared/contracts/sowing';
-import { finalize, type Observable } from 'rxjs';
-import { serverWords, showFieldProblems } from '../../core/field-problems';
+import { type Observable } from 'rxjs';
+import { serverWords } from '../../core/field-problems';
+import { FormSaving } from '../../core/form-saving';
 import { RoomCrops } from '../../core/room-crops';
 import { CropPicker } from '../../ui/crop-picker/crop-picker';
 import { LoadingLines } from '../../ui/states/loading-lines';
@@ -43,7 +44,7 @@ const usualEveryDays = 14;
     ProblemText,
     ReactiveFormsModule,
   ],
-  providers: [RoomCrops],
+  providers: [FormSaving, RoomCrops],
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class CropChoiceDialog {
@@ -62,8 +63,7 @@ export class CropChoiceDialog {
   /** Whether sowings follow each other. */
   protected readonly isStaggered = signal(this.subject.plan !== null && this.subject.plan.everyDays !== null);
   protected readonly said = serverWords;
-  protected readonly isSaving = signal(false);
-  protected readonly problem = signal<string | null>(null);
+  protected readonly saving = inject(FormSaving);
 
   /** Crops that are sown and don't stand on the calendar yet; those with published sowing times first. */
   protected readonly offered = computed(() => {
@@ -82,15 +82,9 @@ export class CropChoiceDialog {
     this.form.markAllAsTouched();
     const { cropId, everyDays } = this.form.getRawValue();
     const isWrong = this.isStaggered() && (everyDays === null || this.form.controls.everyDays.invalid);
-    if (cropId === null || isWrong || this.isSaving()) return;
-    this.isSaving.set(true);
-    this.problem.set(null);
-    this.subject
-      .save(cropId, this.isStaggered() ? everyDays : null)
-      .pipe(finalize(() => this.isSaving.set(false)))
-      .subscribe({
-        next: () => this.dialog.close(true),
-        error: (error: unknown) => this.problem.set(showFieldProblems(this.form, error)),
-      });
+    if (cropId === null || isWrong || this.saving.isSaving()) return;
+    this.saving.send(this.form, this.subject.save(cropId, this.isStaggered() ? everyDays : null), () =>
+      this.dialog.close(true),
+    );
   }
 }

@@ -1,12 +1,13 @@
-import { ChangeDetectionStrategy, Component, inject, signal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, inject } from '@angular/core';
 import { FormControl, FormGroup, ReactiveFormsModule, Validators } from '@angular/forms';
 import { MatButton } from '@angular/material/button';
 import { MAT_DIALOG_DATA, MatDialogModule, MatDialogRef } from '@angular/material/dialog';
 import { MatFormFieldModule } from '@angular/material/form-field';
 import { MatInput } from '@angular/material/input';
 import type { Room } from '@shared/contracts/rooms';
-import { finalize, type Observable } from 'rxjs';
-import { serverWords, showFieldProblems } from '../../core/field-problems';
+import { type Observable } from 'rxjs';
+import { serverWords } from '../../core/field-problems';
+import { FormSaving } from '../../core/form-saving';
 import { ProblemText } from '../../ui/states/problem-text';
 
 /** Where the room is, and how another place is kept. */
@@ -40,16 +41,17 @@ export interface PlaceSubject {
           <mat-hint>East is above zero, west is below. It may be left out.</mat-hint>
           <mat-error>{{ said(form.controls.longitudeDeg) ?? 'From -180 to 180.' }}</mat-error>
         </mat-form-field>
-        <app-problem-text [message]="problem()" />
+        <app-problem-text [message]="saving.problem()" />
       </mat-dialog-content>
       <mat-dialog-actions align="end">
         <button matButton type="button" [mat-dialog-close]="false">Leave it</button>
-        <button matButton="filled" type="submit" [disabled]="isSaving()">Save the place</button>
+        <button matButton="filled" type="submit" [disabled]="saving.isSaving()">Save the place</button>
       </mat-dialog-actions>
     </form>
   `,
   styleUrl: '../sowing-dialog.scss',
   imports: [MatButton, MatDialogModule, MatFormFieldModule, MatInput, ProblemText, ReactiveFormsModule],
+  providers: [FormSaving],
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class PlaceDialog {
@@ -65,21 +67,14 @@ export class PlaceDialog {
     }),
   });
   protected readonly said = serverWords;
-  protected readonly isSaving = signal(false);
-  protected readonly problem = signal<string | null>(null);
+  protected readonly saving = inject(FormSaving);
 
   protected save(): void {
     this.form.markAllAsTouched();
     const { latitudeDeg, longitudeDeg } = this.form.getRawValue();
-    if (this.form.invalid || latitudeDeg === null || this.isSaving()) return;
-    this.isSaving.set(true);
-    this.problem.set(null);
-    this.subject
-      .save({ latitudeDeg, longitudeDeg })
-      .pipe(finalize(() => this.isSaving.set(false)))
-      .subscribe({
-        next: () => this.dialog.close(true),
-        error: (error: unknown) => this.problem.set(showFieldProblems(this.form, error)),
-      });
+    if (this.form.invalid || latitudeDeg === null || this.saving.isSaving()) return;
+    this.saving.send(this.form, this.subject.save({ latitudeDeg, longitudeDeg }), () =>
+      this.dialog.close(true),
+    );
   }
 }
