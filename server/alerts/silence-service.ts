@@ -64,16 +64,9 @@ export class SilenceService {
     if (devices.length === 0) return [];
     const watches = await this.watches(tx, devices);
     const ownGaps = await this.ownGaps(tx, devices);
-    const deviceGaps = await this.silences.gaps(
-      tx,
-      devices.map((device) => ({
-        sensorIds: device.sensors.map(({ id }) => id),
-        from: Math.min(device.from, ...doubtfulFrom(device, ownGaps, watches)),
-        longerThanMs: deviceLimitMs(device),
-      })),
-    );
-    const subjects = devices.flatMap((device, index) =>
-      subjectsOf(device, deviceGaps[index] ?? nothing, ownGaps, watches, now),
+    const deviceGaps = await this.deviceGaps(tx, devices, ownGaps, watches);
+    const subjects = devices.flatMap((device) =>
+      subjectsOf(device, deviceGaps.get(device) ?? nothing, ownGaps, watches, now),
     );
     const folded = subjects.map((subject) => foldedOf(subject, now));
     await this.silences.removeAllBut(
@@ -98,6 +91,29 @@ export class SilenceService {
       })),
     );
     return new Map(searched.map(({ sensor }, index) => [sensor.id, gaps[index] ?? nothing]));
+  }
+
+  /** Only devices that may have gaps are searched: nearly always none. */
+  private async deviceGaps(
+    tx: Tx,
+    devices: readonly HeardDevice[],
+    ownGaps: ReadonlyMap<string, FoundGaps>,
+    watches: ReadonlyMap<string, Watch>,
+  ): Promise<Map<HeardDevice, FoundGaps>> {
+    const unbroken = devices.filter((device) => isUnbroken(device, ownGaps, watches));
+    const searched = devices.filter((device) => !unbroken.includes(device));
+    const found = await this.silences.gaps(
+      tx,
+      searched.map((device) => ({
+        sensorIds: device.sensors.map(({ id }) => id),
+        from: Math.min(device.from, ...doubtfulFrom(device, ownGaps, watches)),
+        longerThanMs: deviceLimitMs(device),
+      })),
+    );
+    return new Map([
+      ...searched.map((device, index) => [device, found[index] ?? nothing] as const),
+      ...unbroken.map((device) => [device, { since: lastBefore(device, ownGaps), gaps: [] }] as const),
+    ]);
   }
 
   private async watches(tx: Tx, devices: readonly HeardDevice[]): Promise<Map<string, Watch>> {
@@ -153,6 +169,30 @@ function doubtfulFrom(
     const isLong = latestAt - last > silentAfterMs(sensor.expectedIntervalS);
     return isLong && !isKnownSilent(sensor, watches) ? [first, last] : [first];
   });
+}
+
+/**
+ * Whether a device has no gap because none of its sensors has one: whichever sensor ended it was silent as long. That holds
+ * where one length of silence counts for all of them, and all have readings before.
+ */
+function isUnbroken(
+  device: HeardDevice,
+  ownGaps: ReadonlyMap<string, FoundGaps>,
+  watches: ReadonlyMap<string, Watch>,
+): boolean {
+  const limitMs = deviceLimitMs(device);
+  return (
+    doubtfulFrom(device, ownGaps, watches).every((from) => from === Infinity) &&
+    device.sensors.every(
+      ({ id, expectedIntervalS }) =>
+        silentAfterMs(expectedIntervalS) === limitMs && typeof ownGaps.get(id)?.since === 'number',
+    )
+  );
+}
+
+/** The last reading of any of a device's sensors before the search began [ms]. */
+function lastBefore({ sensors }: HeardDevice, ownGaps: ReadonlyMap<string, FoundGaps>): number {
+  return Math.max(...sensors.map(({ id }) => ownGaps.get(id)?.since ?? -Infinity));
 }
 
 /** Once a sensor's silence is its own, it stays so until it ends. */
