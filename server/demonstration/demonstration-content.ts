@@ -1,7 +1,6 @@
 import type { Limits } from '@shared/contracts/rooms';
 import type { Role } from '@shared/contracts/people';
 import type { Quantity } from '@shared/climate/quantity';
-import type { CareKind } from '@shared/care/care-kind';
 import type { ShelfEventKind } from '@shared/care/shelf-event';
 import { STORY_DAYS_BEFORE } from '@shared/demonstration/kestrel-lane';
 
@@ -114,63 +113,6 @@ function range(
     sinceDaysAgo: sinceSowing[shelf] ?? LONG_AGO_DAYS,
   };
 }
-
-/** A routine of the demonstration, with its person by e-mail. */
-export const demonstrationRoutines: readonly {
-  readonly shelf: string | null;
-  readonly kind: CareKind;
-  readonly title: string;
-  readonly detail: string;
-  readonly rule: string;
-  readonly startedDaysAgo: number;
-  readonly who: string;
-}[] = [
-  {
-    shelf: 'A3',
-    kind: 'water',
-    title: 'Water from below',
-    detail: 'About 1.2 L into the flat, until the top darkens; tip out what is left.',
-    rule: 'FREQ=DAILY;INTERVAL=2',
-    startedDaysAgo: 10,
-    who: 'maren@example.org',
-  },
-  {
-    shelf: 'A1',
-    kind: 'trim',
-    title: 'Trim and pick dwarf tomatoes',
-    detail: 'Take side shoots and yellow leaves; weigh what is picked.',
-    rule: 'FREQ=DAILY;INTERVAL=4',
-    startedDaysAgo: 96,
-    who: 'tomas@example.org',
-  },
-  {
-    shelf: 'B1',
-    kind: 'feed',
-    title: 'Feed strawberries',
-    detail: 'Half-strength feed, 2 L for the flat.',
-    rule: 'FREQ=WEEKLY',
-    startedDaysAgo: 92,
-    who: 'jana@example.org',
-  },
-  {
-    shelf: 'B2',
-    kind: 'inspect',
-    title: 'Look under the citrus leaves',
-    detail: 'Scale and mites sit along the ribs.',
-    rule: 'FREQ=WEEKLY',
-    startedDaysAgo: 84,
-    who: 'pia@example.org',
-  },
-  {
-    shelf: null,
-    kind: 'clean',
-    title: 'Wash flats and look for leaks',
-    detail: 'Both racks, from the top down.',
-    rule: 'FREQ=WEEKLY;INTERVAL=2',
-    startedDaysAgo: 98,
-    who: 'ravi@example.org',
-  },
-];
 
 /** Something that was done, for the charts' marks. */
 export const demonstrationEvents: readonly {

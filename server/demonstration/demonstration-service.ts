@@ -16,8 +16,8 @@ import {
   demonstrationLight,
   demonstrationRanges,
   LONG_AGO_DAYS,
-  demonstrationRoutines,
 } from './demonstration-content';
+import { DemonstrationCare } from './demonstration-care';
 import { DemonstrationGrowing } from './demonstration-growing';
 import type { DemonstrationStore } from './demonstration-store';
 
@@ -73,7 +73,8 @@ export class DemonstrationService {
     const zone = plan.timeZone;
     await new DemonstrationGrowing().fill(tx, { roomId, zone, now, shelves, personId });
     await this.addMarks(tx, zone, now, shelves);
-    await this.addCare(tx, roomId, plan.timeZone, now, shelves, people);
+    const care = new DemonstrationCare();
+    await care.fill(tx, { roomId, zone, now, shelves, people }, this.planTasks);
     return simulatedRoom.parse({ ...plan, roomId, devices });
   }
 
@@ -205,29 +206,6 @@ export class DemonstrationService {
         text,
       });
     }
-  }
-
-  private async addCare(
-    tx: Tx,
-    roomId: string,
-    zone: string,
-    now: number,
-    shelves: ReadonlyMap<string, string>,
-    people: ReadonlyMap<string, string>,
-  ): Promise<void> {
-    const today = dayBefore(now, 0, zone);
-    for (const { shelf, startedDaysAgo, who, ...routine } of demonstrationRoutines) {
-      const routineId = await this.store.addRoutine(tx, {
-        ...routine,
-        roomId,
-        shelfId: shelf === null ? null : idOf(shelves, shelf),
-        startsOn: dayBefore(now, startedDaysAgo, zone),
-        who: 'person',
-      });
-      await this.store.addRoutinePerson(tx, routineId, people.get(who) ?? '');
-    }
-    await this.planTasks(tx, roomId);
-    await this.store.completeTasksBefore(tx, roomId, today);
   }
 }
 

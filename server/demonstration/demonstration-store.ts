@@ -1,6 +1,4 @@
 import type { DeepPartial, EntityTarget, ObjectLiteral } from 'typeorm';
-import { RoutineEntity } from '../care/routine-entity';
-import { RoutinePersonEntity } from '../care/routine-person-entity';
 import { ShelfEventEntity } from '../care/shelf-event-entity';
 import type { Tx } from '../database/transactions';
 import { DeviceEntity } from '../devices/device-entity';
@@ -43,12 +41,6 @@ export class DemonstrationStore {
   addHeatMat = adder(HeatMatEntity);
   /** Adds a device. */
   addDevice = adder(DeviceEntity);
-  /** Adds a routine. */
-  addRoutine = adder(RoutineEntity);
-  /** Says whom a routine falls to. */
-  async addRoutinePerson(tx: Tx, routineId: string, personId: string): Promise<void> {
-    await tx.insert(RoutinePersonEntity, { routineId, personId, position: 0 });
-  }
   /** Adds a mark for the charts. */
   addShelfEvent = adder(ShelfEventEntity);
 
@@ -84,19 +76,6 @@ export class DemonstrationStore {
   /** Adds what a shelf wants of a day's light. */
   async addWantedLight(tx: Tx, light: DeepPartial<WantedLightEntity>): Promise<void> {
     await tx.save(WantedLightEntity, light);
-  }
-
-  /** Ticks what was due before a day, so that the past looks lived in; the last feeding was forgotten. */
-  async completeTasksBefore(tx: Tx, roomId: string, day: string): Promise<void> {
-    await tx.query(
-      `UPDATE task SET outcome = 'done', done_at = due_on + time '09:00',
-         done_by = (SELECT person_id FROM task_holder WHERE task_id = task.id LIMIT 1)
-       WHERE room_id = $1 AND due_on < $2
-         AND (kind <> 'feed' OR due_on < (
-           SELECT max(due_on) FROM task late WHERE late.room_id = $1 AND late.kind = 'feed' AND late.due_on < $2
-         ))`,
-      [roomId, day],
-    );
   }
 }
 

@@ -2,6 +2,9 @@ import { mkdtemp, rm } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import type { Task } from '@shared/contracts/care';
+import type { CareCompliance } from '@shared/contracts/care-record';
+import type { CareShare, Rota, SwapOffer } from '@shared/contracts/care-rota';
+import type { Routine } from '@shared/contracts/care-routines';
 import type { Planting } from '@shared/contracts/plantings';
 import type { SeedLot } from '@shared/contracts/seed';
 import { demonstrationPassword, demonstrationPeople } from '../../server/demonstration/demonstration-content';
@@ -33,7 +36,7 @@ describe('the demonstration', () => {
     const service = new DemonstrationService(
       application.database.transactions,
       new DemonstrationStore(),
-      async () => undefined,
+      async (tx, roomId) => void (await application.app.services.planning.planRoom(tx, roomId)),
       () => application.now,
     );
     const roomId = await service.fill(join(folder, 'devices.json'));
@@ -77,6 +80,42 @@ describe('the demonstration', () => {
 
     const tasks = (await caller.get(`${path}/tasks?from=2026-12-01&to=2026-12-02`).expect(200))
       .body as Task[];
-    expect(tasks.map(({ title }) => title)).toEqual(['Switch A3 lamps on: Leek is up']);
+    const asked = tasks.filter(({ routineId }) => routineId === null);
+    expect(asked.map(({ title }) => title)).toEqual(['Switch A3 lamps on: Leek is up']);
+  });
+
+  it('shares care out among its people: routines of every kind, a rota, a swap, and a lived-in past', async () => {
+    const { caller, path } = await filled('2026-12-01T12:00:00Z');
+    const read = async <T>(what: string): Promise<T> =>
+      (await caller.get(`${path}${what}`).expect(200)).body as T;
+
+    const routines = await read<Routine[]>('/routines');
+    expect(new Set(routines.map(({ timing }) => timing.how))).toEqual(
+      new Set(['calendar', 'afterDoing', 'byDrying']),
+    );
+    expect(new Set(routines.map(({ who }) => who.how))).toEqual(
+      new Set(['person', 'inTurn', 'pair', 'onDuty']),
+    );
+    expect(new Set(routines.map(({ place }) => place.at))).toEqual(
+      new Set(['room', 'rack', 'shelf', 'planting']),
+    );
+    expect(await read<SwapOffer[]>('/swaps')).toMatchObject([{ toPersonId: null, task: { cover: 'held' } }]);
+
+    const rota = await read<Rota>('/rota?from=2026-12-01&to=2026-12-15');
+    expect(rota.isKept).toBe(true);
+    expect(rota.absences).toHaveLength(2);
+    expect(rota.days.filter(({ isClosed }) => isClosed).map(({ day }) => day)).toEqual(['2026-12-10']);
+
+    const { due, share } = await read<CareCompliance>('/care/compliance?from=2026-08-23&to=2026-12-01');
+    expect(due).toBeGreaterThan(150);
+    expect(share).toBeGreaterThan(0.85);
+    expect(share).toBeLessThan(0.95);
+
+    const { shares } = await read<{ shares: CareShare[] }>('/rota/share?from=2026-11-01&to=2026-12-15');
+    expect(shares.filter(({ doneTasks, openTasks }) => doneTasks > 0 && openTasks > 0)).toHaveLength(6);
+    const late = (await read<Task[]>('/tasks?from=2026-12-01&to=2026-12-02')).filter(
+      ({ inTimeUntil }) => inTimeUntil < '2026-12-01',
+    );
+    expect(late.map(({ title }) => title)).toEqual(['Feed strawberries']);
   });
 });
