@@ -18,7 +18,7 @@ export interface ShelfPart {
   readonly outflow: ShelfOutflow;
 }
 
-// A room of about 33 m³ with one radiator and one extractor. Chosen, no source.
+// A room of about 33 m³ with one radiator, one extractor and one window. Chosen, no source.
 const AIR_HEAT_J_K = 260_000;
 const WALLS_HEAT_J_K = 7_000_000;
 const AIR_TO_WALLS_WK = 110;
@@ -32,6 +32,10 @@ const RADIATOR_LAG_S = 900;
 const EXTRACTOR_FULL_GS = 55;
 const EXTRACTOR_BAND_C = 2;
 const EXTRACTOR_ABOVE_HEATING_C = 1;
+// Someone opens the window wider as the room gets warmer than the extractor keeps it while the house is heated.
+const WINDOW_FROM_C = 20.2;
+const WINDOW_BAND_C = 1;
+const WINDOW_FULL_GS = 200;
 const DEHUMIDIFIER_FROM_PCT = 60;
 const DEHUMIDIFIER_BAND_PCT = 14;
 const DEHUMIDIFIER_FULL_GS = 0.09;
@@ -70,7 +74,8 @@ export function stepRoomAir(
   const extractedGS = isCoolerOutside
     ? EXTRACTOR_FULL_GS * share((room.airC - setpointC - EXTRACTOR_ABOVE_HEATING_C) / EXTRACTOR_BAND_C)
     : 0;
-  const freshGS = LEAKAGE_GS + extractedGS + draughtGS;
+  const airedGS = isCoolerOutside ? WINDOW_FULL_GS * share((room.airC - WINDOW_FROM_C) / WINDOW_BAND_C) : 0;
+  const freshGS = LEAKAGE_GS + extractedGS + airedGS + draughtGS;
   const humidityPct = relativeHumidityPct(room.airC, room.humidityRatioKgKg);
   const driedGS = DEHUMIDIFIER_FULL_GS * share((humidityPct - DEHUMIDIFIER_FROM_PCT) / DEHUMIDIFIER_BAND_PCT);
 

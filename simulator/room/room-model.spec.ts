@@ -138,6 +138,18 @@ describe('the room model', () => {
     expect(Math.abs(calm.climateOf('B2').airC - dark.climateOf('B2').airC)).toBeLessThan(0.5);
   });
 
+  it('is aired on a warm day, and stays near the air outside', () => {
+    const from = Date.parse('2026-07-20T00:00:00Z');
+    const model = modelFrom(from);
+    const warm: number[] = [];
+    for (let at = from; at < from + 14 * DAY; at += 10 * MINUTE) {
+      model.advanceTo(at);
+      if (model.outdoor.temperatureC > 19) warm.push(model.roomAir.airC - model.outdoor.temperatureC);
+    }
+    expect(warm.length).toBeGreaterThan(20);
+    expect(Math.max(...warm)).toBeLessThan(2);
+  });
+
   it('asked for a shelf that is not there refuses', () => {
     expect(() => modelFrom(NOW).climateOf('C9')).toThrow(RangeError);
   });
