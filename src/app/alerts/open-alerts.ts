@@ -3,6 +3,7 @@ import { MatButton } from '@angular/material/button';
 import type { Alert } from '@shared/contracts/alerts';
 import { AlertFeed } from '../core/alert-feed';
 import { AlertInbox } from '../core/alert-inbox';
+import { isQuiet } from '../core/alert-words';
 import { failureText } from '../core/failure-text';
 import { RoomClock } from '../core/room-clock';
 import type { ChartMark } from '../ui/chart/chart-data';
@@ -10,7 +11,6 @@ import { EmptyState } from '../ui/states/empty-state';
 import { ErrorState } from '../ui/states/error-state';
 import { LoadingLines } from '../ui/states/loading-lines';
 import { AlertCard } from './alert-card/alert-card';
-import { isQuiet } from './alert-words';
 import { EpisodeChart } from './episode-chart/episode-chart';
 
 /** What is wrong in the room now, with what was measured: what is urgent first, what is quiet last. */

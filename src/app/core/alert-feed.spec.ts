@@ -5,6 +5,7 @@ import { provideRouter } from '@angular/router';
 import { AlertFeed } from './alert-feed';
 import { AlertInbox } from './alert-inbox';
 import { liveSocket } from './live-socket';
+import { RoomClock } from './room-clock';
 import { Session } from './session';
 import { account } from './testing/account-builder';
 import { alert, inventedId } from './testing/board-builder';
@@ -48,6 +49,16 @@ describe('the inbox of open alerts', () => {
     answer([alert(), alert({ id: inventedId(901), acknowledgedAt: '2026-12-01T14:10:00Z' })]);
     expect(inbox.open()).toHaveLength(2);
     expect(inbox.unseenCount()).toBe(1);
+  });
+
+  it('does not count those that are quiet, until that is over', () => {
+    const clock = TestBed.inject(RoomClock);
+    clock.setBy('2026-12-01T14:20:00Z');
+    const quiet = { until: '2026-12-01T17:00:00Z', setAt: '2026-12-01T14:10:00Z', setByName: null };
+    answer([alert(), alert({ id: inventedId(901), quiet })]);
+    expect(inbox.unseenCount()).toBe(1);
+    clock.setBy('2026-12-01T17:00:01Z');
+    expect(inbox.unseenCount()).toBe(2);
   });
 
   it('takes a new alert first, a changed one in its place, and drops one that cleared', () => {

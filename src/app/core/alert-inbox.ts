@@ -1,5 +1,7 @@
-import { computed, Injectable, signal } from '@angular/core';
+import { computed, inject, Injectable, signal } from '@angular/core';
 import type { Alert } from '@shared/contracts/alerts';
+import { isQuiet } from './alert-words';
+import { RoomClock } from './room-clock';
 
 /**
  * The open alerts of the room, for the badge in the navigation and whoever lists them. It only holds them; the feed
@@ -7,13 +9,17 @@ import type { Alert } from '@shared/contracts/alerts';
  */
 @Injectable({ providedIn: 'root' })
 export class AlertInbox {
+  private readonly clock = inject(RoomClock);
   private readonly held = signal<readonly Alert[] | null>(null);
 
   /** Open alerts, the newest first; null until they have been fetched. */
   readonly open = this.held.asReadonly();
-  /** How many of them nobody has seen yet. */
+  /** How many of them need a look: nobody has acknowledged them or let them be quiet for now. */
   readonly unseenCount = computed(
-    () => (this.held() ?? []).filter(({ acknowledgedAt }) => acknowledgedAt === null).length,
+    () =>
+      (this.held() ?? []).filter(
+        (alert) => alert.acknowledgedAt === null && !isQuiet(alert, this.clock.calmNow()),
+      ).length,
   );
 
   /** Holds what was fetched; null forgets another room's. */

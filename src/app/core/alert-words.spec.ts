@@ -1,5 +1,5 @@
-import { alert } from '../core/testing/board-builder';
 import { isQuiet, lastingWords, quietWords, seenWords } from './alert-words';
+import { alert } from './testing/board-builder';
 
 const now = Date.parse('2026-12-01T16:55:00Z');
 const when = (at: string): string => at.slice(11, 16);

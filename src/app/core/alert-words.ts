@@ -32,7 +32,17 @@ export function isQuiet({ quiet, clearedAt }: Alert, now: number): boolean {
 }
 
 /** Until when an alert is quiet and who said so. Only for one that {@link isQuiet}. */
-export function quietWords({ quiet }: Alert, when: When): string {
+export function quietUntilWords({ quiet }: Alert, when: When): string {
   if (quiet === null) return '';
-  return `Quiet until ${when(quiet.until)}, set by ${quiet.setByName ?? 'somebody who has left'}. Nobody is written to about it until then.`;
+  return `Quiet until ${when(quiet.until)}, set by ${quiet.setByName ?? 'somebody who has left'}`;
+}
+
+/** The same with what follows from it. */
+export function quietWords(alert: Alert, when: When): string {
+  return `${quietUntilWords(alert, when)}. Nobody is written to about it until then.`;
+}
+
+/** Who is to look after an alert. */
+export function assigneeWords({ name }: NonNullable<Alert['assignee']>): string {
+  return `${name} looks after it`;
 }

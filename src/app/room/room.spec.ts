@@ -114,7 +114,7 @@ describe('the room screen', () => {
       .expectOne(`${base}/alerts/${alert().id}/acknowledgement`)
       .flush(alert({ acknowledgedAt: '2026-12-01T14:20:00Z', acknowledgedByName: 'Maren Oxley' }));
     await fixture.whenStable();
-    expect(text('.seen')).toContain('Seen by Maren Oxley');
+    expect(text('.standing')).toContain('Seen by Maren Oxley');
   });
 
   it('ticks a task and takes the tick back', async () => {

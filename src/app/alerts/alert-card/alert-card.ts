@@ -6,7 +6,7 @@ import { ReaderFormat } from '../../core/reader-format';
 import { RoomClock } from '../../core/room-clock';
 import { Session } from '../../core/session';
 import { alertLook } from '../../ui/note-line/alert-look';
-import { lastingWords } from '../alert-words';
+import { lastingWords } from '../../core/alert-words';
 import { AlertActions } from '../answers/alert-actions';
 import { AlertStanding } from '../answers/alert-standing';
 

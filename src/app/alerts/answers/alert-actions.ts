@@ -4,13 +4,13 @@ import { MatIcon } from '@angular/material/icon';
 import { MatMenuModule } from '@angular/material/menu';
 import type { Alert } from '@shared/contracts/alerts';
 import { finalize, type Observable } from 'rxjs';
+import { isQuiet } from '../../core/alert-words';
 import { newIdempotencyKey } from '../../core/api-client';
 import { Notices } from '../../core/notices';
 import { ReaderFormat } from '../../core/reader-format';
 import { RoomClock } from '../../core/room-clock';
 import { RoomMembers } from '../../core/room-members';
 import { AlertDesk } from '../alert-desk';
-import { isQuiet } from '../alert-words';
 import { QuietPanel } from './quiet-panel';
 import { WordsPanel } from './words-panel';
 

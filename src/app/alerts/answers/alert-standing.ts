@@ -8,7 +8,7 @@ import { ReaderFormat } from '../../core/reader-format';
 import { RoomClock } from '../../core/room-clock';
 import { Session } from '../../core/session';
 import { AlertDesk } from '../alert-desk';
-import { isQuiet, quietWords, seenWords } from '../alert-words';
+import { assigneeWords, isQuiet, quietWords, seenWords } from '../../core/alert-words';
 
 /** What people have done about an alert so far, each with the way to take it back for who may. */
 @Component({
@@ -34,6 +34,10 @@ export class AlertStanding {
   protected readonly quiet = computed(() =>
     isQuiet(this.alert(), this.clock.calmNow()) ? quietWords(this.alert(), this.when) : null,
   );
+  protected readonly assignee = computed(() => {
+    const { assignee } = this.alert();
+    return assignee === null ? null : assigneeWords(assignee);
+  });
   protected readonly deeds = computed(() =>
     this.alert().deeds.map((deed) => ({
       deed,

@@ -47,8 +47,24 @@ describe('what needs a look', () => {
   it('says who has seen it', async () => {
     const seen = { acknowledgedAt: '2026-12-01T14:10:00Z', acknowledgedByName: 'Tomasz Keel' };
     await shown([alert(seen)]);
-    expect(texts('.seen')[0]).toContain('Seen by Tomasz Keel, 14:10');
+    expect(texts('.standing')[0]).toContain('Seen by Tomasz Keel, 14:10');
     expect(page().querySelector('button')).toBeNull();
+  });
+
+  it('says until when it is quiet and who looks after it, and lists what is quiet last', async () => {
+    const quiet = { until: '2026-12-01T17:00:00Z', setAt: '2026-12-01T14:10:00Z', setByName: 'Jo Ashdown' };
+    const assignee = { personId: inventedId(902), name: 'Tomasz Keel' };
+    await shown([
+      alert({ quiet, assignee }),
+      alert({ id: inventedId(901), shelfLabel: 'B2', quiet: { ...quiet, until: '2026-12-01T14:19:59Z' } }),
+    ]);
+    expect(texts('li a').map((title) => title.slice(0, 2))).toEqual(['B2', 'A1']);
+    expect(texts('li:first-child .standing')).toEqual([]);
+    const standing = texts('li:last-child .standing');
+    expect(standing).toHaveLength(2);
+    expect(standing[0]).toContain('Quiet until 17:00, set by Jo Ashdown');
+    expect(standing[1]).toContain('Tomasz Keel looks after it');
+    expect(page().querySelectorAll('button')).toHaveLength(2);
   });
 
   it('offers nothing to somebody who may only look', async () => {

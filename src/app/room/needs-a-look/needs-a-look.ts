@@ -2,15 +2,25 @@ import { ChangeDetectionStrategy, Component, computed, inject, input, output } f
 import { MatButton } from '@angular/material/button';
 import { MatIcon } from '@angular/material/icon';
 import { RouterLink } from '@angular/router';
-import { isSilenceKind } from '../../core/describe-alert';
 import type { Alert } from '@shared/contracts/alerts';
 import { formatDuration } from '@shared/format/room-time';
+import { assigneeWords, isQuiet, quietUntilWords, seenWords } from '../../core/alert-words';
+import { isSilenceKind } from '../../core/describe-alert';
 import { ReaderFormat } from '../../core/reader-format';
 import { RoomClock } from '../../core/room-clock';
 import { alertLook } from '../../ui/note-line/alert-look';
 import type { ShelfNeed } from '../board/shelf-needs';
 
-/** What is wrong in the room now, the newest first, with a way to say "I have seen it"; then what shelves need. */
+/** What people have done about an alert so far. */
+interface Standing {
+  readonly icon: string;
+  readonly text: string;
+}
+
+/**
+ * What is wrong in the room now, the newest first and what is quiet last, with a way to say "I have seen it"; then what
+ * shelves need.
+ */
 @Component({
   selector: 'app-needs-a-look',
   templateUrl: './needs-a-look.html',
@@ -33,13 +43,15 @@ export class NeedsALook {
   private readonly clock = inject(RoomClock);
 
   protected readonly items = computed(() =>
-    this.alerts().map((alert) => ({
-      alert,
-      ...alertLook(alert.kind),
-      title: this.format.describe(alert).title,
-      detail: this.detail(alert),
-      seen: this.seen(alert),
-    })),
+    [...this.alerts()]
+      .sort((one, other) => Number(this.isQuiet(one)) - Number(this.isQuiet(other)))
+      .map((alert) => ({
+        alert,
+        ...alertLook(alert.kind),
+        title: this.format.describe(alert).title,
+        detail: this.detail(alert),
+        standing: this.standing(alert),
+      })),
   );
 
   /** "26 min · peak 29.1 °C · mail sent 14:06" */
@@ -50,8 +62,17 @@ export class NeedsALook {
     return parts.join(' · ');
   }
 
-  private seen({ acknowledgedAt, acknowledgedByName }: Alert): string | null {
-    if (acknowledgedAt === null) return null;
-    return `Seen by ${acknowledgedByName ?? 'a former member'}, ${this.format.when(acknowledgedAt)}`;
+  private isQuiet(alert: Alert): boolean {
+    return isQuiet(alert, this.clock.calmNow());
+  }
+
+  private standing(alert: Alert): Standing[] {
+    const when = (at: string): string => this.format.when(at);
+    const seen = seenWords(alert, when);
+    return [
+      ...(seen === null ? [] : [{ icon: 'done', text: seen }]),
+      ...(this.isQuiet(alert) ? [{ icon: 'notifications_paused', text: quietUntilWords(alert, when) }] : []),
+      ...(alert.assignee === null ? [] : [{ icon: 'person', text: assigneeWords(alert.assignee) }]),
+    ];
   }
 }
