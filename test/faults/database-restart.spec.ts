@@ -19,11 +19,12 @@ jest.setTimeout(180_000);
 const { startPostgres } = script('postgres');
 
 const EVERY_MS = 20;
-const HOUR_MS = 3_600_000;
+const EACH_MS = 10_000;
+const LEAD_MS = 24 * 3_600_000;
 
-/** Reading number n of the test: a second and a hundredth of a degree after the one before. */
+/** Reading number n of the test: ten seconds and a hundredth of a degree after the one before, from zero on. */
 function numbered(sensor: string, n: number, firstAt: number): SentReading {
-  return { sensor, at: new Date(firstAt + n * 1000).toISOString(), value: n / 100 };
+  return { sensor, at: new Date(firstAt + n * EACH_MS).toISOString(), value: n / 100 };
 }
 
 describe('a database that goes away under the running server and comes back', () => {
@@ -103,72 +104,93 @@ describe('a database that goes away under the running server and comes back', ()
     return socket;
   }
 
-  async function storedValues(sensor: string): Promise<number[]> {
+  async function rowsOf<Row extends object>(sql: string, sensor: string): Promise<Row[]> {
     const client = new Client(postgres.url('lampmeadow'));
     await client.connect();
     try {
-      const { rows } = await client.query<{ value: number }>(
-        `SELECT value FROM reading JOIN sensor ON sensor.id = reading.sensor_id
-         WHERE sensor.key = $1 ORDER BY at`,
-        [sensor],
-      );
-      return rows.map(({ value }) => value);
+      return (await client.query<Row>(sql, [sensor])).rows;
     } finally {
       await client.end();
     }
   }
 
+  async function storedValues(sensor: string): Promise<number[]> {
+    const rows = await rowsOf<{ value: number }>(
+      `SELECT value FROM reading JOIN sensor ON sensor.id = reading.sensor_id
+       WHERE sensor.key = $1 ORDER BY at`,
+      sensor,
+    );
+    return rows.map(({ value }) => value);
+  }
+
+  /** What the cold of the readings comes to, and when that began: after which reading. */
+  async function alertsOf(sensor: string, firstAt: number): Promise<(readonly [string, number])[]> {
+    const rows = await rowsOf<{ kind: string; began_at: Date }>(
+      `SELECT kind, began_at FROM alert JOIN sensor ON sensor.id = alert.sensor_id
+       WHERE sensor.key = $1 AND kind IN ('belowRange', 'dangerLow') ORDER BY kind`,
+      sensor,
+    );
+    return rows.map((row) => [row.kind, (row.began_at.getTime() - firstAt) / EACH_MS] as const);
+  }
+
   it.each([
     ['stopped', 'a1-air', () => postgres.stop()],
     ['killed', 'a2-air', kill],
-  ])('%s, is said to be away; no reading is lost or doubled, no session ends', async (_how, sensor, end) => {
-    const firstAt = Date.now() - HOUR_MS;
-    const device = new DeviceLink({
-      url: address,
-      token: token(),
-      name: 'Test device',
-      log: () => {},
-      acknowledgeWithinMs: 5_000,
-      retryAfterMs: 200,
-    });
-    let measured = 0;
-    const measuring = setInterval(() => device.send([numbered(sensor, measured++, firstAt)]), EVERY_MS);
-    const live = await watchRoom();
-    let told = 0;
-    live.on('shelf:measured', () => (told += 1));
-    try {
-      await eventually(() => expect(told).toBeGreaterThan(0));
+  ])(
+    '%s, is said to be away; no reading or alert is lost or doubled, no session ends',
+    async (_how, sensor, end) => {
+      const firstAt = Date.now() - LEAD_MS;
+      const device = new DeviceLink({
+        url: address,
+        token: token(),
+        name: 'Test device',
+        log: () => {},
+        acknowledgeWithinMs: 5_000,
+        retryAfterMs: 200,
+      });
+      let measured = 0;
+      const measuring = setInterval(() => device.send([numbered(sensor, measured++, firstAt)]), EVERY_MS);
+      const live = await watchRoom();
+      let told = 0;
+      live.on('shelf:measured', () => (told += 1));
+      try {
+        await eventually(() => expect(told).toBeGreaterThan(0));
 
-      await end();
-      for (const ask of [fetchBoard, postReading]) {
-        const answer = await eventually(async () => {
-          const tried = await ask();
-          expect(tried.status).toBe(503);
-          return tried;
-        });
-        expect(answer.headers.get('Content-Type')).toContain('application/problem+json');
-        expect(answer.headers.get('Retry-After')).not.toBeNull();
-        expect(problem.parse(await answer.json())).toMatchObject({ code: 'DATABASE_AWAY' });
+        await end();
+        for (const ask of [fetchBoard, postReading]) {
+          const answer = await eventually(async () => {
+            const tried = await ask();
+            expect(tried.status).toBe(503);
+            return tried;
+          });
+          expect(answer.headers.get('Content-Type')).toContain('application/problem+json');
+          expect(answer.headers.get('Retry-After')).not.toBeNull();
+          expect(problem.parse(await answer.json())).toMatchObject({ code: 'DATABASE_AWAY' });
+        }
+        const measuredBefore = measured;
+        await eventually(() => expect(device.tally.waiting).toBeGreaterThan(50));
+        const toldBefore = told;
+        const port = postgres.port;
+        postgres = await startDatabase();
+        expect(postgres.port).toBe(port);
+
+        await eventually(async () => expect((await fetchBoard()).status).toBe(200));
+        await eventually(() => expect(told).toBeGreaterThan(toldBefore));
+        expect(measured).toBeGreaterThan(measuredBefore);
+        clearInterval(measuring);
+        await eventually(() => expect(device.tally.waiting).toBe(0));
+      } finally {
+        clearInterval(measuring);
+        live.disconnect();
+        device.stop();
       }
-      const measuredBefore = measured;
-      await eventually(() => expect(device.tally.waiting).toBeGreaterThan(50));
-      const toldBefore = told;
-      const port = postgres.port;
-      postgres = await startDatabase();
-      expect(postgres.port).toBe(port);
 
-      await eventually(async () => expect((await fetchBoard()).status).toBe(200));
-      await eventually(() => expect(told).toBeGreaterThan(toldBefore));
-      expect(measured).toBeGreaterThan(measuredBefore);
-      clearInterval(measuring);
-      await eventually(() => expect(device.tally.waiting).toBe(0));
-    } finally {
-      clearInterval(measuring);
-      live.disconnect();
-      device.stop();
-    }
-
-    expect(device.tally).toMatchObject({ refused: 0, dropped: 0 });
-    expect(await storedValues(sensor)).toEqual(Array.from({ length: measured }, (_, n) => n / 100));
-  });
+      expect(device.tally).toMatchObject({ refused: 0, dropped: 0 });
+      expect(await storedValues(sensor)).toEqual(Array.from({ length: measured }, (_, n) => n / 100));
+      expect(await alertsOf(sensor, firstAt)).toEqual([
+        ['belowRange', 0],
+        ['dangerLow', 0],
+      ]);
+    },
+  );
 });

@@ -1,14 +1,11 @@
-import { spawn, type ChildProcess } from 'node:child_process';
 import { once } from 'node:events';
-import { join } from 'node:path';
 import type { Account } from '@shared/contracts/people';
 import { MailEntity } from '../../server/mail/mail-entity';
 import { startMailbox } from '../../simulator/mailbox/start-mailbox';
 import { Caller } from '../api/caller';
 import { aMailedRoom, startMailHarness, type MailHarness } from '../api/mail-harness';
-
-/** Any number; held by the test to keep a worker from marking what it has sent. */
-const MARKING_LOCK = 88_214;
+import { HeldWrites } from './held-writes';
+import { startProcess } from './start-process';
 
 describe('the outbox', () => {
   let harness: MailHarness;
@@ -30,25 +27,25 @@ describe('the outbox', () => {
   }
 
   it('whose worker is killed after the mail server took a mail sends that mail once more, the same', async () => {
-    const { database, tx, mailbox } = { ...harness.application, mailbox: harness.mailbox };
+    const { application, mailbox } = harness;
     const { shelfId, email } = await aMailedRoom(harness);
     await harness.open({ shelfId });
-    await tx.query(`
-      CREATE FUNCTION wait_before_marking() RETURNS trigger LANGUAGE plpgsql AS $$
-      BEGIN PERFORM pg_advisory_xact_lock_shared(${MARKING_LOCK}); RETURN NEW; END $$`);
-    await tx.query(`
-      CREATE TRIGGER wait_before_marking BEFORE UPDATE ON mail FOR EACH ROW
-      WHEN (OLD.sent_at IS NULL AND NEW.sent_at IS NOT NULL) EXECUTE FUNCTION wait_before_marking()`);
-    const holder = database.dataSource.createQueryRunner();
-    await holder.query('SELECT pg_advisory_lock($1)', [MARKING_LOCK]);
-
-    const worker = startWorker(database.url, mailbox.smtpPort);
+    const marking = await HeldWrites.on(
+      application,
+      'mail',
+      'BEFORE UPDATE',
+      'OLD.sent_at IS NULL AND NEW.sent_at IS NOT NULL',
+    );
+    const worker = startProcess(
+      'outbox-process',
+      { database: application.database, now: new Date(application.now.getTime() + 60_000) },
+      { SMTP_URL: `smtp://127.0.0.1:${mailbox.smtpPort}` },
+    );
     const ended = once(worker, 'exit');
     await until(async () => (await harness.mailsTo(email)).length === 1);
     worker.kill('SIGKILL');
     expect(await ended).toEqual([null, 'SIGKILL']);
-    await holder.query('SELECT pg_advisory_unlock($1)', [MARKING_LOCK]);
-    await holder.release();
+    await marking.release();
 
     // The database notices the dead worker in its own time, and lets go of the mail.
     await until(async () => {
@@ -59,26 +56,8 @@ describe('the outbox', () => {
     const [first, second, ...more] = await harness.mailsTo(email);
     expect(second?.messageId).toBe(first?.messageId);
     expect(more).toEqual([]);
-    expect(await tx.countBy(MailEntity, { toAddress: email })).toBe(1);
+    expect(await application.tx.countBy(MailEntity, { toAddress: email })).toBe(1);
   });
-
-  function startWorker(databaseUrl: string, smtpPort: number): ChildProcess {
-    return spawn(
-      process.execPath,
-      [join(__dirname, 'run-typescript.js'), join(__dirname, 'outbox-process.ts')],
-      {
-        env: {
-          ...process.env,
-          DATABASE_URL: databaseUrl,
-          NODE_ENV: 'test',
-          PUBLIC_URL: 'http://127.0.0.1:4280',
-          SMTP_URL: `smtp://127.0.0.1:${smtpPort}`,
-          TEST_NOW: new Date(harness.application.now.getTime() + 60_000).toISOString(),
-        },
-        stdio: ['ignore', 'inherit', 'inherit', 'ipc'],
-      },
-    );
-  }
 
   it('keeps every mail through a night without a mail server, and sends them in order afterwards', async () => {
     await harness.mailbox.stop();
