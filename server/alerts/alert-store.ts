@@ -163,15 +163,17 @@ export class AlertStore {
   }
 
   /**
-   * Ends the open alerts of a sensor, and those that rest on other sensors beside it where it was and is now; has their
-   * watches begin anew, its own on the shelf where it is now.
+   * Ends the open alerts of a sensor that is elsewhere from an instant on, and those that rest on other sensors beside it
+   * where it was until then and is now; has their watches begin anew, its own on the shelf where it is now.
    */
-  async restartWatches(tx: Tx, sensorId: string, at: Date): Promise<void> {
+  async restartWatches(tx: Tx, sensorId: string, from: Date, at: Date): Promise<void> {
     await restartThose(
       tx,
-      `(sensor_id = $3 OR kind = ANY($4) AND shelf_id IN (SELECT shelf_id FROM placement WHERE sensor_id = $3))`,
+      `(sensor_id = $3 OR kind = ANY($4) AND shelf_id IN (
+        SELECT shelf_id FROM placement WHERE sensor_id = $3 AND coalesce(to_at, 'infinity') >= $5
+      ))`,
       at,
-      [sensorId, joinedKinds],
+      [sensorId, joinedKinds, from],
     );
     await tx.query(
       `UPDATE alert_watch SET shelf_id = placement.shelf_id FROM placement

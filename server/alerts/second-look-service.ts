@@ -76,11 +76,11 @@ export class SecondLookService {
   async lookAt(tx: Tx, sensors: readonly SensorOnRoad[]): Promise<FoldedWatch[]> {
     const shelfIds = [...new Set(sensors.flatMap(({ shelfId }) => shelfId ?? []))];
     if (shelfIds.length === 0) return [];
-    const leafOffsets = await this.looks.leafOffsets(tx, shelfIds);
+    const shelves = await this.looks.shelves(tx, shelfIds);
     const looks = shelfIds.flatMap((id) =>
       secondLooksOf({
         sensors: sensors.filter(({ shelfId }) => shelfId === id),
-        leafOffsetC: leafOffsets.get(id) ?? 0,
+        ...(shelves.get(id) ?? { leafOffsetC: 0, leftAt: 0 }),
       }),
     );
     const begun = await this.begin(tx, looks.filter(hasNews));
@@ -132,7 +132,7 @@ export class SecondLookService {
     to: number,
   ): Promise<Work> {
     const newsFrom = newsFromOf(look) ?? to;
-    const judgesFrom = look.holder.placedAt ?? 0;
+    const { judgesFrom } = look;
     const { lastAt } = watch.state;
     const common = { look, rule, watch, to, changes: [] };
     if (lastAt !== null && newsFrom > lastAt) {

@@ -23,6 +23,14 @@ export interface UnjudgedSensor {
   readonly isLong: boolean;
 }
 
+/** A shelf, as far as looks at its sensors need it. */
+export interface LookedAtShelf {
+  /** How much warmer than the air its leaves are [°C]. */
+  readonly leafOffsetC: number;
+  /** When a sensor was last taken away from it [ms]; 0 for never. */
+  readonly leftAt: number;
+}
+
 /** Where sensors are that somebody else holds. */
 export interface HeldPlaces {
   readonly shelfIds: ReadonlySet<string | null>;
@@ -124,13 +132,16 @@ export class SecondLookStore {
     await tx.query('UPDATE sensor_state SET unjudged_from = NULL WHERE sensor_id = ANY($1)', [sensorIds]);
   }
 
-  /** How much warmer than the air leaves on shelves are [°C]. */
-  async leafOffsets(tx: Tx, shelfIds: readonly string[]): Promise<Map<string, number>> {
-    const rows: { id: string; leaf_offset_c: number }[] = await tx.query(
-      'SELECT id, leaf_offset_c FROM shelf WHERE id = ANY($1)',
+  /** What is to be known of shelves beside the sensors that are on them. */
+  async shelves(tx: Tx, shelfIds: readonly string[]): Promise<Map<string, LookedAtShelf>> {
+    const rows: { id: string; leaf_offset_c: number; left_at: Date | null }[] = await tx.query(
+      `SELECT id, leaf_offset_c, (SELECT max(to_at) FROM placement WHERE shelf_id = shelf.id) AS left_at
+       FROM shelf WHERE id = ANY($1)`,
       [shelfIds],
     );
-    return new Map(rows.map((row) => [row.id, row.leaf_offset_c]));
+    return new Map(
+      rows.map((row) => [row.id, { leafOffsetC: row.leaf_offset_c, leftAt: row.left_at?.getTime() ?? 0 }]),
+    );
   }
 
   /**

@@ -31,7 +31,7 @@ export interface LookContext {
 }
 
 /** A series that is made from readings of one sensor or more, with the rules that watch it. */
-export interface SecondLook {
+interface WatchedSeries {
   /** The sensor that the alerts are about. */
   readonly holder: SensorOnRoad;
   readonly quantity: Quantity;
@@ -47,11 +47,19 @@ export interface SecondLook {
   readonly derive: (context: LookContext) => ObservationColumns;
 }
 
+/** The same, with from where on it is judged. */
+export interface SecondLook extends WatchedSeries {
+  /** What was found before stands [ms]: the sensors of then are not those of now. */
+  readonly judgesFrom: number;
+}
+
 /** What is known of the shelf. */
 export interface LookedShelf {
   /** Sensors on it, by id. */
   readonly sensors: readonly SensorOnRoad[];
   readonly leafOffsetC: number;
+  /** When a sensor was last taken away from it [ms]; 0 for never. */
+  readonly leftAt: number;
 }
 
 const MINUTE_MS = 60_000;
@@ -69,11 +77,11 @@ const FAILURE_WINDOW_MS = 30 * MINUTE_MS;
  * @param shelf - The shelf.
  * @returns A look for each series that its sensors allow.
  */
-export function secondLooksOf({ sensors, leafOffsetC }: LookedShelf): SecondLook[] {
+export function secondLooksOf({ sensors, leafOffsetC, leftAt }: LookedShelf): SecondLook[] {
   const of = (quantity: MeasuredQuantity): SensorOnRoad[] =>
     sensors.filter((sensor) => sensor.quantity === quantity);
   const [air, rootZone, humidity] = [of('airTemperature'), of('rootZoneTemperature'), of('relativeHumidity')];
-  return [
+  const series = [
     ...sensors.map(failureLook),
     ...air.map(rateLook),
     ...(air.length > 1 ? [disagreementLook(air)] : []),
@@ -81,9 +89,15 @@ export function secondLooksOf({ sensors, leafOffsetC }: LookedShelf): SecondLook
     ...(air.length > 0 ? humidity.map((hygrometer) => wetLook(hygrometer, air)) : []),
     ...(air.length > 0 ? humidity.map((hygrometer) => dewLook(hygrometer, air, rootZone, leafOffsetC)) : []),
   ];
+  return series.map((one) => ({ ...one, judgesFrom: judgesFromOf(one, leftAt) }));
 }
 
-function failureLook(sensor: SensorOnRoad): SecondLook {
+function judgesFromOf({ holder, groups }: WatchedSeries, leftAt: number): number {
+  const isAlone = groups.flat().length === 1;
+  return Math.max(holder.placedAt ?? 0, isAlone ? 0 : leftAt);
+}
+
+function failureLook(sensor: SensorOnRoad): WatchedSeries {
   const windowMs = Math.max(FAILURE_WINDOW_MS, FAILURE_READINGS * sensor.expectedIntervalS * 1_000);
   return {
     holder: sensor,
@@ -101,7 +115,7 @@ function failureLook(sensor: SensorOnRoad): SecondLook {
   };
 }
 
-function rateLook(sensor: SensorOnRoad): SecondLook {
+function rateLook(sensor: SensorOnRoad): WatchedSeries {
   return {
     holder: sensor,
     quantity: sensor.quantity,
@@ -116,7 +130,7 @@ function rateLook(sensor: SensorOnRoad): SecondLook {
 }
 
 /** Held by the first of the sensors. */
-function disagreementLook(sensors: readonly SensorOnRoad[]): SecondLook {
+function disagreementLook(sensors: readonly SensorOnRoad[]): WatchedSeries {
   const [holder] = sensors as [SensorOnRoad];
   const withinMs = speaksForMs(sensors);
   return {
@@ -131,7 +145,7 @@ function disagreementLook(sensors: readonly SensorOnRoad[]): SecondLook {
   };
 }
 
-function warmthLook(rootZone: SensorOnRoad, air: readonly SensorOnRoad[]): SecondLook {
+function warmthLook(rootZone: SensorOnRoad, air: readonly SensorOnRoad[]): WatchedSeries {
   const withinMs = speaksForMs([rootZone, ...air]);
   return {
     holder: rootZone,
@@ -146,7 +160,7 @@ function warmthLook(rootZone: SensorOnRoad, air: readonly SensorOnRoad[]): Secon
   };
 }
 
-function wetLook(humidity: SensorOnRoad, air: readonly SensorOnRoad[]): SecondLook {
+function wetLook(humidity: SensorOnRoad, air: readonly SensorOnRoad[]): WatchedSeries {
   const withinMs = Math.max(botrytisWindow.maxGapMs, speaksForMs([humidity, ...air]));
   const wet = { ...botrytisWindow, maxGapMs: withinMs };
   return {
@@ -167,7 +181,7 @@ function dewLook(
   air: readonly SensorOnRoad[],
   rootZone: readonly SensorOnRoad[],
   leafOffsetC: number,
-): SecondLook {
+): WatchedSeries {
   const withinMs = speaksForMs([humidity, ...air, ...rootZone]);
   return {
     holder: humidity,

@@ -54,7 +54,7 @@ export class HistoryUpkeepService {
 
   /** Ends the sensor's alerts where it was, and pairs readings anew from then on. */
   async onPlacementsChanged(tx: Tx, sensorId: string, from: Date): Promise<void> {
-    await this.parts.alerts.restartWatches(tx, sensorId, this.parts.now());
+    await this.parts.alerts.restartWatches(tx, sensorId, from, this.parts.now());
     const [own] = await this.parts.readings.lockSensors(tx, [sensorId]);
     if (own === undefined) return;
     const concerned =
