@@ -28,7 +28,11 @@ export function wantedText({ quantity, when, range }: Wanted, unit: TemperatureU
  * @param ranges - What is set on the shelf.
  */
 export function standingText({ quantity, isSet }: Wanted, ranges: readonly WantedRange[]): string {
-  if (isSet) return 'Alerts go by it.';
+  if (isSet) {
+    return quantity === 'dailyLightIntegral'
+      ? 'An alert opens when three days in a row fall short of it.'
+      : 'Alerts go by it.';
+  }
   const isByHand = ranges.some((range) => range.quantity === quantity && range.source === 'shelf');
   return isByHand
     ? 'A person set another range for this shelf; alerts go by that.'

@@ -12,8 +12,9 @@ import { CautionLine } from '../../ui/caution-line/caution-line';
 import { ShelfData } from '../shelf-data';
 import { chartedQuantities, quantityTitle } from '../quantity-title';
 import { LampHoursDialog, type LampHoursSubject } from './lamp-hours-dialog';
+import { WantedLightDialog, type WantedLightSubject } from './wanted-light-dialog';
 import { WantedRangeDialog, type WantedRangeSubject } from './wanted-range-dialog';
-import { lampWords, matWords, quantityIcons, rangeWords } from './wants-words';
+import { lampWords, lightWords, matWords, quantityIcons, rangeWords } from './wants-words';
 
 /** What the shelf should be: lamp hours, wanted ranges and the heat mat; growers may change them. */
 @Component({
@@ -48,6 +49,12 @@ export class ShelfWants {
       ...rangeWords(range, this.session.temperatureUnit()),
     })),
   );
+  /** Null where nothing sees light and nothing wants any. */
+  protected readonly light = computed(() => {
+    const { quantities = [], wantedLight = null } = this.data.detail() ?? {};
+    const isSeen = quantities.includes('ppfd') || quantities.includes('illuminance');
+    return wantedLight === null && !isSeen ? null : lightWords(wantedLight);
+  });
   private readonly withoutRange = computed<Quantity[]>(() => {
     const { quantities = [], wantedRanges = [] } = this.data.detail() ?? {};
     const set = new Set(wantedRanges.map(({ quantity }) => quantity));
@@ -67,6 +74,12 @@ export class ShelfWants {
     if (params === undefined) return;
     const quantities = range === null ? this.withoutRange() : [range.quantity];
     this.open(WantedRangeDialog, { params, range, quantities } satisfies WantedRangeSubject);
+  }
+
+  protected changeLight(): void {
+    const [params, detail] = [this.data.params(), this.data.detail()];
+    if (params === undefined || detail === null) return;
+    this.open(WantedLightDialog, { params, light: detail.wantedLight } satisfies WantedLightSubject);
   }
 
   protected switchMat(isOn: boolean): void {

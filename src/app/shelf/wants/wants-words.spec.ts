@@ -1,6 +1,6 @@
 import type { WantedRange } from '@shared/contracts/rooms';
 import { planting } from '../../core/testing/board-builder';
-import { lampWords, matWords, rangeWords } from './wants-words';
+import { lampWords, lightWords, matWords, rangeWords } from './wants-words';
 
 const lamp = { id: '', kind: 'whiteLed', watts: 46, luxPerUmol: 70, fittedOn: '2026-03-02' } as const;
 const hours = (switchesOn: string | null, switchesOff: string | null) => ({ switchesOn, switchesOff });
@@ -14,6 +14,22 @@ describe('planned lamp hours', () => {
     [[], hours('06:00', '22:00'), 'No lamp fitted', ''],
   ])('of %j over %j are told', (lamps, lampHours, text, reason) => {
     expect(lampWords({ lamps: lamps as never, lampHours })).toEqual({ text, reason });
+  });
+});
+
+describe('the light of a day', () => {
+  const light = { leastMolM2D: 10, source: 'plantings', reason: 'Leek seedlings', since: '' } as const;
+  it.each([
+    [light, 'Light a day at least 10.0 mol/m²', 'From what grows here · Leek seedlings'],
+    [
+      { ...light, source: 'shelf', reason: '' } as const,
+      'Light a day at least 10.0 mol/m²',
+      'Set for this shelf',
+    ],
+    [{ ...light, leastMolM2D: 0 }, 'Any light a day will do', 'From what grows here · Leek seedlings'],
+    [null, 'Light a day is free', ''],
+  ])('of %j is told', (wanted, text, reason) => {
+    expect(lightWords(wanted)).toEqual({ text: text.replace(' mol', '\u00a0mol'), reason });
   });
 });
 

@@ -1,8 +1,8 @@
 import { hoursADay } from '@shared/climate/daily-lamp-hours';
 import type { Quantity } from '@shared/climate/quantity';
 import type { PlantingSummary } from '@shared/contracts/board';
-import type { RangeSource, Shelf, WantedRange } from '@shared/contracts/rooms';
-import { formatNumber, type TemperatureUnit } from '@shared/format/numbers';
+import type { RangeSource, Shelf, WantedLight, WantedRange } from '@shared/contracts/rooms';
+import { formatNumber, formatValue, type TemperatureUnit } from '@shared/format/numbers';
 import { formatQuantityRange } from '@shared/format/quantities';
 import { quantityTitle } from '../quantity-title';
 
@@ -45,6 +45,16 @@ export function rangeWords(range: WantedRange, temperatureUnit: TemperatureUnit)
   if (off === null) return { text: `${title} ${on} with lamps on`, reason };
   if (on === null) return { text: `${title} ${off} with lamps off`, reason };
   return { text: `${title} ${on} with lamps on, ${off} with lamps off`, reason };
+}
+
+/** The least light of a day in words, with where it comes from. */
+export function lightWords(light: WantedLight | null): WantLine {
+  if (light === null) return { text: 'Light a day is free', reason: '' };
+  const { leastMolM2D, source, reason } = light;
+  const origin = [sourceWords[source], reason].filter((words) => words !== '').join(' · ');
+  return leastMolM2D === 0
+    ? { text: 'Any light a day will do', reason: origin }
+    : { text: `Light a day at least ${formatValue(leastMolM2D, 'mol/m²', 1)}`, reason: origin };
 }
 
 /** The heat mat in words; null where none is fitted. */
