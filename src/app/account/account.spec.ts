@@ -43,6 +43,7 @@ describe('the account page', () => {
     server
       .expectOne(`/api/v1/rooms/${membership().roomId}/escalation`)
       .flush({ goNowMinutes: 60, lookTodayMinutes: 240 });
+    server.expectOne('/api/v1/account/calendar-feed').flush({ madeAt: null });
     await fixture.whenStable();
     loader = TestbedHarnessEnvironment.loader(fixture);
     page = fixture.nativeElement as HTMLElement;

@@ -3,6 +3,7 @@ import { MatButton } from '@angular/material/button';
 import { MatIcon } from '@angular/material/icon';
 import { Notices } from '../core/notices';
 import { Session } from '../core/session';
+import { AccountCalendar } from './account-calendar/account-calendar';
 import { AccountMails } from './account-mails/account-mails';
 import { AccountName } from './account-name/account-name';
 import { AccountPassword } from './account-password/account-password';
@@ -20,6 +21,7 @@ import { AccountView } from './account-view/account-view';
       <app-account-name [name]="account.name" />
       <app-account-view [account]="account" />
       <app-account-mails [memberships]="account.memberships" [refused]="account.mailRefused" />
+      <app-account-calendar />
       <app-account-password [email]="account.email" />
       <button matButton="outlined" class="leave" type="button" (click)="signOut()">
         <mat-icon aria-hidden="true">logout</mat-icon>Sign out
@@ -27,7 +29,7 @@ import { AccountView } from './account-view/account-view';
     }
   `,
   styleUrl: './account.scss',
-  imports: [AccountMails, AccountName, AccountPassword, AccountView, MatButton, MatIcon],
+  imports: [AccountCalendar, AccountMails, AccountName, AccountPassword, AccountView, MatButton, MatIcon],
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class AccountPage {

@@ -98,6 +98,9 @@ describe('the page of a planting', () => {
         request.flush({ at: '2026-12-01T14:20:00Z', degreeDays: null, light: null, transplant: null }),
       );
     server
+      .match(({ url }) => url === `${room}/routines` || url === `${room}/ready-made-routines`)
+      .forEach((request) => request.flush([]));
+    server
       .match(({ url }) => url.includes('/series/'))
       .forEach((request) => request.flush({ quantity: 'airTemperature', lines: [], wanted: [] }));
     await harness.fixture.whenStable();

@@ -19,6 +19,7 @@ import { plantLook } from '../../ui/plants/crop-look';
 import { PlantDrawing } from '../../ui/plants/plant-drawing';
 import { ErrorState } from '../../ui/states/error-state';
 import { LoadingLines } from '../../ui/states/loading-lines';
+import { CareCard } from '../care/care-card';
 import { GerminationCard } from '../germination/germination-card';
 import { QuickCount } from '../germination/quick-count';
 import { deedLooks, deedsOf, type DeedKind } from '../note/deed';
@@ -35,6 +36,7 @@ import { PlantingData } from './planting-data';
   templateUrl: './planting-page.html',
   styleUrl: './planting-page.scss',
   imports: [
+    CareCard,
     ErrorState,
     GerminationCard,
     LoadingLines,
@@ -53,6 +55,8 @@ import { PlantingData } from './planting-data';
 export class PlantingPage {
   /** From the path. */
   readonly plantingId = input.required<string>();
+  /** From the address: "usual" offers the care that the crop usually gets. */
+  readonly care = input<string>();
 
   private readonly api = inject(ApiClient);
   private readonly asking = inject(Asking);
