@@ -113,6 +113,7 @@ export function careServices(foundation: CareFoundation): CareServices {
     assignment,
     rooms,
     dryingDue: (...of) => drying.due(...of),
+    feed,
     now,
   });
   const tasks = new TasksService({

@@ -9,6 +9,19 @@ export interface NewShelfEvent extends Pick<ShelfEvent, 'shelfId' | 'kind' | 'te
   readonly personId: string;
 }
 
+/** Done tasks of a shelf, or of what stands on it, as marks: what was given or picked with them is said after the title. */
+const doneTasks = `
+  SELECT task.id, shelf.id AS "shelfId", task.done_at AS at,
+    CASE task.kind WHEN 'water' THEN 'watered' WHEN 'feed' THEN 'fed' WHEN 'trim' THEN 'trimmed' WHEN 'pick' THEN 'picked'
+      WHEN 'countGermination' THEN 'counted' ELSE 'observed' END AS kind,
+    concat_ws(', ', task.title, task.millilitres || ' ml', task.grams || ' g', nullif(task.note, '')) AS text,
+    person.name AS "personName"
+  FROM task
+  LEFT JOIN planting ON planting.id = task.planting_id
+  JOIN shelf ON shelf.id = coalesce(task.shelf_id, planting.shelf_id)
+  LEFT JOIN person ON person.id = task.done_by
+  WHERE task.outcome = 'done'`;
+
 type EventRow = Omit<ShelfEvent, 'at'> & { readonly at: Date };
 
 const events = `
@@ -31,10 +44,12 @@ export class ShelfEventsStore {
     return asEvent(row);
   }
 
-  /** What was done or seen on a shelf from an instant up to another, in order. */
+  /** What was noted or done on a shelf from an instant up to another, in order. */
   async of(tx: Tx, shelfId: string, from: Date, to: Date): Promise<ShelfEvent[]> {
     const rows: EventRow[] = await tx.query(
-      `${events} WHERE event.shelf_id = $1 AND event.at >= $2 AND event.at < $3 ORDER BY event.at, event.id`,
+      `${events} WHERE event.shelf_id = $1 AND event.at >= $2 AND event.at < $3
+       UNION ALL ${doneTasks} AND shelf.id = $1 AND task.done_at >= $2 AND task.done_at < $3
+       ORDER BY at, id`,
       [shelfId, from, to],
     );
     return rows.map(asEvent);

@@ -73,7 +73,7 @@ export class TaskEntity {
   @ManyToOne(() => RackEntity, { onDelete: 'SET NULL' })
   @JoinColumn({ name: 'rack_id', foreignKeyConstraintName: 'task_rack_fk' })
   rack?: Relation<RackEntity>;
-  @ManyToOne(() => PlantingEntity, { onDelete: 'SET NULL' })
+  @ManyToOne(() => PlantingEntity, { onDelete: 'CASCADE' })
   @JoinColumn({ name: 'planting_id', foreignKeyConstraintName: 'task_planting_fk' })
   planting?: Relation<PlantingEntity>;
   @ManyToOne(() => PersonEntity, { onDelete: 'SET NULL' })

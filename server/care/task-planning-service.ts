@@ -1,9 +1,11 @@
 import { calendarDays, dayAfterDoing, dayOfDryness, type DayLimits } from '@shared/care/routine-days';
 import { dutyOn, type DutyRota } from '@shared/care/rota';
+import { firstDayInSeason } from '@shared/care/season';
 import { dayAfter } from '@shared/growing/calendar-day';
 import { dayBounds } from '@shared/series/room-days';
 import type { Clock } from '../clock';
 import type { Transactions, Tx } from '../database/transactions';
+import type { LiveFeed } from '../live/live-feed';
 import type { RoomsService } from '../rooms/rooms-service';
 import type { HolderAssignment } from '../rota/holder-assignment';
 import type { RotaStore } from '../rota/rota-store';
@@ -23,6 +25,7 @@ export interface TaskPlanningParts {
     tx: Tx,
     planting: { readonly roomId: string; readonly plantingId: string },
   ) => Promise<'due' | 'notYet' | 'unknown'>;
+  readonly feed: LiveFeed;
   readonly now: Clock;
 }
 
@@ -42,9 +45,10 @@ export class TaskPlanningService {
 
   /** Makes the tasks of the days ahead in every room; what exists already stays. To be called at least hourly. */
   async planAhead(): Promise<void> {
-    const { transactions, rooms } = this.parts;
+    const { transactions, rooms, feed } = this.parts;
     for (const { id } of await rooms.all(transactions.plain)) {
-      await transactions.run((tx) => this.planRoom(tx, id));
+      const changed = await transactions.run((tx) => this.planRoom(tx, id));
+      if (changed.length > 0) feed.publish(id, 'room:changed', { roomId: id });
     }
   }
 
@@ -92,7 +96,10 @@ export class TaskPlanningService {
     await this.planRoom(tx, roomId);
   }
 
-  /** Lets calendar care that heeds closed days follow days that were closed or opened, then shares everything out. */
+  /**
+   * Lets care that heeds closed days follow days that were closed or opened, then shares everything out. By the calendar it
+   * is left out on them and comes back; other care waits for the next open day.
+   */
   async followRota(tx: Tx, roomId: string): Promise<string[]> {
     const { planning, assignment } = this.parts;
     const { today } = await this.roomDay(tx, roomId);
@@ -102,6 +109,10 @@ export class TaskPlanningService {
       const days = this.daysOf(routine, rota, today, routine.plannedTo);
       await planning.removeOthers(tx, routine.id, today, days);
       await planning.addTasks(tx, routine.id, days);
+    }
+    for (const { id, dueOn, season } of await planning.turnsHeedingClosedDays(tx, roomId, today)) {
+      const day = firstDayInSeason(dueOn, season, (one) => dutyOn(rota, one).isClosed);
+      if (day !== null && day !== dueOn) await planning.putOff(tx, id, day);
     }
     return assignment.share(tx, roomId);
   }

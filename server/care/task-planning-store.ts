@@ -2,6 +2,7 @@ import type { Season } from '@shared/care/season';
 import type { ClosedTurn } from '@shared/care/routine-days';
 import type { Tx } from '../database/transactions';
 import { RoutineEntity } from './routine-entity';
+import { TaskEntity } from './task-entity';
 
 interface Planned {
   readonly id: string;
@@ -113,7 +114,28 @@ export class TaskPlanningStore {
     );
   }
 
-  /** Takes away the turn that closing a task had opened; false when it is closed itself or there is none. */
+  /** Open turns of routines that heed closed days and count from their last doing, due on a day or after. */
+  turnsHeedingClosedDays(
+    tx: Tx,
+    roomId: string,
+    from: string,
+  ): Promise<{ id: string; dueOn: string; season: Season | null }[]> {
+    return tx.query(
+      `SELECT task.id, task.due_on::text AS "dueOn", ${seasonColumn}
+       FROM task JOIN routine ON routine.id = task.routine_id
+       WHERE task.room_id = $1 AND task.done_at IS NULL AND task.due_on >= $2
+         AND routine.timing <> 'calendar' AND routine.skips_closed_days
+       ORDER BY task.id FOR UPDATE OF task`,
+      [roomId, from],
+    );
+  }
+
+  /** Puts a task off to another day. */
+  async putOff(tx: Tx, taskId: string, day: string): Promise<void> {
+    await tx.update(TaskEntity, { id: taskId }, { dueOn: day });
+  }
+
+  /** Takes away the turn that closing a task had opened, unless it is closed itself; returns its id. */
   async removeNextTurn(tx: Tx, routineId: string, after: string): Promise<string[]> {
     const [rows]: [{ id: string }[], number] = await tx.query(
       `DELETE FROM task USING routine

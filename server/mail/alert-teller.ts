@@ -35,12 +35,12 @@ export class MailAlertTeller implements AlertTeller {
   }
 
   /**
-   * Who a room's alerts go to, as things are. Care is not shared out yet, so that is every member; who wants which mail
-   * is for each to choose.
+   * Who a room's alerts go to: every member, on duty or not, for what goes wrong at night goes wrong between duties; who
+   * wants which mail is for each to choose.
    *
    * @param tx - Any.
    * @param roomId - The room.
-   * @param _at - When the alert is told [ms], for the rota.
+   * @param _at - When the alert is told [ms].
    */
   onDuty(tx: Tx, roomId: string, _at: number): Promise<Recipient[]> {
     return this.parts.tellings.recipients(tx, roomId);

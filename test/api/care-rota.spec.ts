@@ -126,6 +126,16 @@ describe('the rota', () => {
     expect(await days()).toEqual(['2026-04-18', '2026-04-19', '2026-04-20']);
   });
 
+  it('puts care that counts from its last doing off to the next open day', async () => {
+    await usualWeek();
+    await planned({ timing: 'afterDoing', rule: null, everyDays: 3, skipsClosedDays: true });
+    const closed = { isClosed: true, note: 'stocktaking' };
+    await staff.keeper.put(`${staff.path}/rota/days/2026-04-15`, closed).expect(200);
+    expect((await tasks()).map(({ dueOn, movedFrom }) => [dueOn, movedFrom])).toEqual([
+      ['2026-04-16', '2026-04-15'],
+    ]);
+  });
+
   it('says of others when they are away only as a keeper', async () => {
     const body = { personId: other.id, from: '2026-04-17', to: '2026-04-18' };
     expect(problemOf(await staff.grower.post(`${staff.path}/absences`, body).expect(403)).code).toBe(

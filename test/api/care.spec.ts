@@ -234,6 +234,16 @@ describe('care', () => {
       expect(await events(shelf.id, '2026-04-15T10:00:00Z', '2026-04-16T00:00:00Z')).toEqual([now.body]);
     });
 
+    it('stands beside the care that was done there', async () => {
+      const shelf = await aShelf(tx, { roomId: staff.room.id });
+      const task = await aTask(tx, { roomId: staff.room.id, shelfId: shelf.id, title: 'Water from below' });
+      const path = `${staff.path}/tasks/${task.id}/completion`;
+      await staff.helper.put(path, { millilitres: 800, note: 'very dry' }).expect(200);
+      expect(await events(shelf.id, '2026-04-15T00:00:00Z', '2026-04-16T00:00:00Z')).toMatchObject([
+        { kind: 'watered', text: 'Water from below, 800 ml, very dry', personName: staff.people.helper.name },
+      ]);
+    });
+
     it('of a time to come, or on a shelf of another room, is refused', async () => {
       const shelf = await aShelf(tx, { roomId: staff.room.id });
       const foreign = await aShelf(tx);

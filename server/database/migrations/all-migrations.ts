@@ -24,6 +24,7 @@ import { CreateWantedLight1764554500000 } from './1764554500000-create-wanted-li
 import { CreateCareRota1764554600000 } from './1764554600000-create-care-rota';
 import { TellCareOutside1764554700000 } from './1764554700000-tell-care-outside';
 import { NoteWhereChangesComeFrom1764556000000 } from './1764556000000-note-where-changes-come-from';
+import { RemoveTasksWithPlanting1764556100000 } from './1764556100000-remove-tasks-with-planting';
 
 /** Every migration in order; a merged one is never edited. */
 export const migrations = [
@@ -53,4 +54,5 @@ export const migrations = [
   CreateCareRota1764554600000,
   TellCareOutside1764554700000,
   NoteWhereChangesComeFrom1764556000000,
+  RemoveTasksWithPlanting1764556100000,
 ];
