@@ -5,8 +5,8 @@ import { formatNumber } from '../format/numbers';
 export const SHORT_DAYS_IN_A_ROW = 3;
 /** Share of a day that must be measured for its light to count. */
 export const LEAST_COVERAGE = 0.8;
-/** Output under which a lamp counts as worn; common practice, no source. */
-const WORN_OUTPUT = 0.85;
+/** Output from which on a lamp may be the cause, as tubes come to after their first months; common practice, no source. */
+const WORN_OUTPUT = 0.9;
 
 /** Light of one finished day over a planting. */
 export interface PlantingLightDay {
@@ -85,8 +85,8 @@ function shortDays(days: readonly PlantingLightDay[], plannedHours: number | nul
 }
 
 function wornLamp(output: number | null): string | null {
-  return output !== null && output < WORN_OUTPUT
-    ? `The lamp may be worn out: by its hours it gives ${formatNumber(100 * output, 0)} % of its first light.`
+  return output !== null && output <= WORN_OUTPUT
+    ? `The lamp may be worn: by its hours it gives ${formatNumber(100 * output, 0)} % of its first light.`
     : null;
 }
 

@@ -46,7 +46,7 @@ describe('the care that advice asks for', () => {
       meanMolM2D: 7,
       missingMolM2D: 3,
       causes: [
-        'The lamp may be worn out: by its hours it gives 80 % of its first light.',
+        'The lamp may be worn: by its hours it gives 80 % of its first light.',
         'It may hang too high.',
       ],
     };
@@ -64,7 +64,7 @@ describe('the care that advice asks for', () => {
           kind: 'inspect',
           title: 'Look at the lamp of A3: Leek and Sweet pepper get too little light',
           detail:
-            '7.0 mol/m² a day for three days, 10.0 wanted. The lamp may be worn out: by its hours it gives 80 % of its first light. It may hang too high.',
+            '7.0 mol/m² a day for three days, 10.0 wanted. The lamp may be worn: by its hours it gives 80 % of its first light. It may hang too high.',
         },
       ]);
     });
