@@ -48,12 +48,12 @@ export function kestrelLane(now: number) {
     shelves: [
       {
         ...place('A1', 0, 'inner'),
-        lamp: led(now, 84, 235, 274),
+        lamp: led(now, 84, 370, 274),
         arrangements: [{ ...standing, from: ever, lampPlan: hours('06:00', '22:00'), leafAreaM2: 1.3 }],
       },
       {
         ...place('A2', 1, 'inner'),
-        lamp: led(now, 70, 190, 274),
+        lamp: led(now, 70, 250, 274),
         arrangements: [{ ...standing, from: ever, lampPlan: hours('07:00', '21:00'), leafAreaM2: 1.1 }],
       },
       {
@@ -81,12 +81,12 @@ export function kestrelLane(now: number) {
       },
       {
         ...place('B1', 0, 'cool'),
-        lamp: led(now, 60, 200, 190),
+        lamp: led(now, 60, 370, 190),
         arrangements: [{ ...standing, from: ever, lampPlan: hours('06:00', '22:00'), leafAreaM2: 0.9 }],
       },
       {
         ...place('B2', 1, 'inner'),
-        lamp: led(now, 66, 230, 320),
+        lamp: led(now, 66, 295, 320),
         arrangements: [{ ...standing, from: ever, lampPlan: hours('08:00', '20:00'), leafAreaM2: 0.7 }],
       },
       {
