@@ -1,5 +1,5 @@
 import type { Routes } from '@angular/router';
-import { signedInGuard, signedOutGuard } from './core/signed-in-guard';
+import { knownPersonGuard, signedInGuard, signedOutGuard } from './core/signed-in-guard';
 
 const signedIn = { canActivate: [signedInGuard] };
 
@@ -23,7 +23,7 @@ export const appRoutes: Routes = [
   },
   {
     path: 'care',
-    ...signedIn,
+    canActivate: [knownPersonGuard],
     loadChildren: () => import('./care/care-routes').then((m) => m.careRoutes),
   },
   {

@@ -21,3 +21,12 @@ export function store(key: string, value: string): void {
     // Storage can be forbidden or full; what is remembered is a convenience only.
   }
 }
+
+/** Forgets something on this device. */
+export function forget(key: string): void {
+  try {
+    localStorage.removeItem(key);
+  } catch {
+    // Storage can be forbidden; then there is nothing to forget.
+  }
+}

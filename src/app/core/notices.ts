@@ -4,6 +4,7 @@ import { type Observable } from 'rxjs';
 import { failureText } from './failure-text';
 
 const shownMs = 6_000;
+const undoableMs = 10_000;
 
 /** Short words at the foot of the page about what was just done. Read out politely. */
 @Injectable({ providedIn: 'root' })
@@ -21,7 +22,7 @@ export class Notices {
    * @returns Emits once if the person wants it undone.
    */
   sayUndoable(text: string): Observable<void> {
-    return this.bar.open(text, 'Undo', { duration: shownMs }).onAction();
+    return this.bar.open(text, 'Undo', { duration: undoableMs }).onAction();
   }
 
   /** Says why something failed; stays until it is read. */

@@ -2,6 +2,7 @@ import { computed, inject, Injectable, signal } from '@angular/core';
 import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
 import { Router } from '@angular/router';
 import {
+  account as accountSchema,
   changeAccount,
   getAccount,
   roleSuffices,
@@ -15,9 +16,10 @@ import { catchError, defer, of, share, tap, throwError, type Observable } from '
 import type * as z from 'zod';
 import { ApiClient } from './api-client';
 import { asApiFailure } from './api-failure';
-import { readStored, store } from './device-storage';
+import { forget, readStored, store } from './device-storage';
 
 const roomKey = 'lampmeadow.room';
+const accountKey = 'lampmeadow.account';
 
 /** Who is signed in, in which room they are, and what they may there. One for the whole application. */
 @Injectable({ providedIn: 'root' })
@@ -70,6 +72,17 @@ export class Session {
     return defer(() => (this.isKnown ? of(this.held()) : this.loading));
   }
 
+  /**
+   * Goes on as the person whom this device knew last, for pages that work without the server. The server is asked again
+   * at the next chance; until then nothing can be written.
+   *
+   * @returns The person; null when nobody was signed in here.
+   */
+  resume(): Account | null {
+    if (!this.isKnown && this.held() === null) this.held.set(keptAccount());
+    return this.held();
+  }
+
   /** Signs in. Fails with an `ApiFailure`: `signedOut` for a wrong e-mail or password, `tooMany`, `offline`, ... */
   signIn(email: string, password: string): Observable<Account> {
     return this.api.call(signIn, { body: { email, password } }).pipe(tap((account) => this.hold(account)));
@@ -120,6 +133,8 @@ export class Session {
   private hold(account: Account | null): void {
     this.isKnown = true;
     this.held.set(account);
+    if (account === null) forget(accountKey);
+    else store(accountKey, JSON.stringify({ ...account, csrfToken: '' }));
     this.api.useCsrfToken(account?.csrfToken ?? null);
   }
 
@@ -128,5 +143,14 @@ export class Session {
     if (this.held() === null) return;
     this.hold(null);
     void this.router.navigate(['/sign-in'], { queryParams: { to: this.router.url, ended: true } });
+  }
+}
+
+function keptAccount(): Account | null {
+  try {
+    return accountSchema.safeParse(JSON.parse(readStored(accountKey) ?? 'null')).data ?? null;
+  } catch {
+    // Somebody else wrote there; then nobody is known.
+    return null;
   }
 }

@@ -1,6 +1,12 @@
 import { inject } from '@angular/core';
-import { RedirectCommand, Router, type CanActivateFn } from '@angular/router';
-import { catchError, map, of } from 'rxjs';
+import {
+  RedirectCommand,
+  Router,
+  type ActivatedRouteSnapshot,
+  type CanActivateFn,
+  type GuardResult,
+} from '@angular/router';
+import { catchError, map, of, type Observable } from 'rxjs';
 import { returnPath } from './return-path';
 import { Session } from './session';
 
@@ -9,6 +15,22 @@ import { Session } from './session';
  * server can't be asked, a page that says so stands at the same address.
  */
 export const signedInGuard: CanActivateFn = (route, { url }) => {
+  const router = inject(Router);
+  return signedIn(route, url, () => unreachable(router, url));
+};
+
+/** The same for pages that work without the server: meanwhile the person whom this device knows may pass. */
+export const knownPersonGuard: CanActivateFn = (route, { url }) => {
+  const session = inject(Session);
+  const router = inject(Router);
+  return signedIn(route, url, () => session.resume() !== null || unreachable(router, url));
+};
+
+function signedIn(
+  route: ActivatedRouteSnapshot,
+  url: string,
+  withoutAnswer: () => GuardResult,
+): Observable<GuardResult> {
   const session = inject(Session);
   const router = inject(Router);
   return session.load().pipe(
@@ -18,12 +40,14 @@ export const signedInGuard: CanActivateFn = (route, { url }) => {
       if (roomId !== null) session.chooseRoom(roomId);
       return true;
     }),
-    catchError(() => {
-      const unreachable = router.createUrlTree(['/unreachable'], { queryParams: { to: url } });
-      return of(new RedirectCommand(unreachable, { skipLocationChange: true }));
-    }),
+    catchError(() => of(withoutAnswer())),
   );
-};
+}
+
+function unreachable(router: Router, url: string): RedirectCommand {
+  const page = router.createUrlTree(['/unreachable'], { queryParams: { to: url } });
+  return new RedirectCommand(page, { skipLocationChange: true });
+}
 
 /** Keeps the sign-in page for people who still have to sign in. */
 export const signedOutGuard: CanActivateFn = (route) => {

@@ -1,11 +1,13 @@
 import { ChangeDetectionStrategy, Component, computed, inject, Injector, signal } from '@angular/core';
 import type { Alert } from '@shared/contracts/alerts';
+import type { Task } from '@shared/contracts/care';
 import { catchError, finalize, from, switchMap, throwError, type Observable } from 'rxjs';
 import { ApiFailure } from '../core/api-failure';
+import { CareDesk } from '../core/care/care-desk';
+import { CareQueue } from '../core/care/care-queue';
 import { failureText } from '../core/failure-text';
 import { Notices } from '../core/notices';
 import type { PlanQuestion } from '../core/plan-change';
-import { PlanChanges } from '../core/plan-changes';
 import { ReaderFormat } from '../core/reader-format';
 import { Session } from '../core/session';
 import { NoteLine } from '../ui/note-line/note-line';
@@ -17,7 +19,7 @@ import { RoomHeading } from './room-heading/room-heading';
 import { RoomSkeleton } from './room-skeleton/room-skeleton';
 import { ScenarioPanel } from './scenario-panel/scenario-panel';
 import { ShelfBay } from './shelf-bay/shelf-bay';
-import { TodaysCare, type Tick } from './todays-care/todays-care';
+import { TodaysCare } from './todays-care/todays-care';
 
 /** The room as it stands: its racks, what needs a look, and today's care. */
 @Component({
@@ -44,7 +46,8 @@ export class Room {
   private readonly notices = inject(Notices);
   private readonly format = inject(ReaderFormat);
   private readonly injector = inject(Injector);
-  private readonly plans = inject(PlanChanges);
+  private readonly queue = inject(CareQueue);
+  private readonly desk = inject(CareDesk);
 
   protected readonly board = this.room.board;
   protected readonly alertsByShelf = this.room.alertsByShelf;
@@ -55,7 +58,10 @@ export class Room {
   protected readonly isKeeper = computed(() => this.session.may('keeper'));
   /** The same list every time, so that a quiet shelf is not drawn anew. */
   protected readonly none: readonly never[] = [];
-  /** Alerts and tasks that are being changed. */
+  /** Today's care with what waits to be sent. */
+  protected readonly tasks = computed(() => this.queue.shown(this.board()?.tasks ?? []));
+  protected readonly isHeldUp = this.queue.isHeldUp;
+  /** Alerts that are being changed. */
   protected readonly busyIds = signal<ReadonlySet<string>>(new Set());
 
   protected readonly problem = computed(() => {
@@ -90,16 +96,10 @@ export class Room {
     });
   }
 
-  protected tick({ task, isDone }: Tick): void {
-    this.carryOut(task.id, this.room.tick(task, isDone)).subscribe({
-      next: (changed) => {
-        if (!isDone) return;
-        this.plans
-          .sayTicked(task, (question) => this.ask(question))
-          .subscribe(() => this.tick({ task: changed, isDone: false }));
-      },
-      error: (error: unknown) => this.notices.sayFailure(error),
-    });
+  protected tick(task: Task): void {
+    if (task.outcome === null)
+      void this.desk.close(task, { outcome: 'done' }, (question) => this.ask(question));
+    else void this.desk.takeBack(task);
   }
 
   protected noteObservation(): void {

@@ -111,7 +111,7 @@ describe('the board of the room', () => {
     expect(room.news()).toEqual(cleared);
   });
 
-  it('acknowledges an alert and ticks a task', () => {
+  it('acknowledges an alert', () => {
     server.expectOne(path).flush(board());
     room.acknowledge(alert()).subscribe();
     const acknowledgement = server.expectOne(
@@ -120,17 +120,5 @@ describe('the board of the room', () => {
     expect(acknowledgement.request.method).toBe('POST');
     acknowledgement.flush(alert({ acknowledgedByName: 'Maren Oxley' }));
     expect(room.board()?.openAlerts[0]?.acknowledgedByName).toBe('Maren Oxley');
-
-    const completion = `/api/v1/rooms/${membership().roomId}/tasks/${task().id}/completion`;
-    room.tick(task(), true).subscribe();
-    const tick = server.expectOne(completion);
-    expect(tick.request.method).toBe('PUT');
-    tick.flush(task({ doneAt: '2026-12-01T14:21:00Z' }));
-    expect(room.board()?.tasks[0]?.doneAt).not.toBeNull();
-    room.tick(task(), false).subscribe();
-    const untick = server.expectOne(completion);
-    expect(untick.request.method).toBe('DELETE');
-    untick.flush(task());
-    expect(room.board()?.tasks[0]?.doneAt).toBeNull();
   });
 });

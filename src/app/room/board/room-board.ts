@@ -3,9 +3,9 @@ import { takeUntilDestroyed, toObservable } from '@angular/core/rxjs-interop';
 import { acknowledgeAlert } from '@shared/contracts/alert-answers';
 import type { Alert } from '@shared/contracts/alerts';
 import { getBoard, type Board } from '@shared/contracts/board';
-import { completeTask, reopenTask, type Task } from '@shared/contracts/care';
 import { catchError, EMPTY, filter, merge, Subject, switchMap, tap, type Observable } from 'rxjs';
 import { ApiClient } from '../../core/api-client';
+import { CareQueue } from '../../core/care/care-queue';
 import { LiveConnection } from '../../core/live-connection';
 import { RoomClock } from '../../core/room-clock';
 import { Session } from '../../core/session';
@@ -17,6 +17,7 @@ import { shelfNeeds, type ShelfNeed } from './shelf-needs';
 export class RoomBoard {
   private readonly api = inject(ApiClient);
   private readonly live = inject(LiveConnection);
+  private readonly queue = inject(CareQueue);
   private readonly session = inject(Session);
   private readonly clock = inject(RoomClock);
   private readonly held = signal<Board | null>(null);
@@ -76,15 +77,6 @@ export class RoomBoard {
       .pipe(tap((seen) => this.apply(alertChanged(seen))));
   }
 
-  /** Ticks a task, or takes the tick back. */
-  tick(task: Task, isDone: boolean): Observable<Task> {
-    const params = { ...this.room(), taskId: task.id };
-    const changed = isDone
-      ? this.api.call(completeTask, { params, body: {} })
-      : this.api.call(reopenTask, { params });
-    return changed.pipe(tap((now) => this.apply(taskChanged(now))));
-  }
-
   private room(): { roomId: string } {
     return { roomId: this.session.roomId() ?? '' };
   }
@@ -111,7 +103,9 @@ export class RoomBoard {
     merge(
       this.live.on('shelf:measured').pipe(tap((now) => this.apply(shelfMeasured(now)))),
       this.live.on('shelf:advised').pipe(tap((advice) => this.apply(shelfAdvised(advice)))),
-      this.live.on('task:changed').pipe(tap((task) => this.apply(taskChanged(task)))),
+      merge(this.live.on('task:changed'), this.queue.taken).pipe(
+        tap((task) => this.apply(taskChanged(task))),
+      ),
       this.live.on('alert:changed').pipe(tap((alert) => this.takeAlert(alert))),
     )
       .pipe(takeUntilDestroyed(inject(DestroyRef)))

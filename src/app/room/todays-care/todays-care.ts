@@ -1,88 +1,65 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input, output } from '@angular/core';
-import {
-  MAT_CHECKBOX_DEFAULT_OPTIONS,
-  MatCheckbox,
-  type MatCheckboxDefaultOptions,
-} from '@angular/material/checkbox';
 import { MatIcon } from '@angular/material/icon';
+import { RouterLink } from '@angular/router';
 import type { Task } from '@shared/contracts/care';
-import { formatShortDay } from '@shared/format/room-time';
+import { lateness } from '../../core/care/lateness';
+import { dayWords, outcomeWord, taskTitle } from '../../core/care/task-words';
+import type { ShownTask } from '../../core/care/with-waiting';
 import { ReaderFormat } from '../../core/reader-format';
-import { lateness } from './lateness';
+import { Tick } from '../../ui/tick/tick';
 
-/** A task and whether it shall be done. */
-export interface Tick {
-  readonly task: Task;
-  readonly isDone: boolean;
-}
-
-/** What is to be done today and what is late, to be ticked. */
+/** What is to be done today and what is late, to be ticked; all else about it is on care's own page. */
 @Component({
   selector: 'app-todays-care',
   templateUrl: './todays-care.html',
   styleUrl: './todays-care.scss',
-  imports: [MatCheckbox, MatIcon],
-  // A box shows what the server has stored, so it never ticks itself.
-  providers: [
-    {
-      provide: MAT_CHECKBOX_DEFAULT_OPTIONS,
-      useValue: { clickAction: 'noop' } satisfies MatCheckboxDefaultOptions,
-    },
-  ],
+  imports: [MatIcon, RouterLink, Tick],
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class TodaysCare {
-  readonly tasks = input.required<readonly Task[]>();
+  readonly tasks = input.required<readonly ShownTask[]>();
   /** The room's day, `YYYY-MM-DD`. */
   readonly today = input.required<string>();
   /** Whether the person may tick. */
   readonly mayTick = input(false);
-  /** Tasks whose tick is under way. */
-  readonly busyIds = input<ReadonlySet<string>>(new Set());
+  /** What waits does so for a signal. */
+  readonly isHeldUp = input(false);
 
-  readonly ticked = output<Tick>();
+  readonly ticked = output<Task>();
 
   private readonly format = inject(ReaderFormat);
 
   protected readonly items = computed(() =>
     this.tasks()
-      .filter(({ dueOn }) => dueOn <= this.today())
-      .map((task) => ({
+      .filter(({ task }) => task.dueOn <= this.today())
+      .map(({ task, isWaiting }) => ({
         task,
-        isDone: task.doneAt !== null,
-        title: titleOf(task),
-        late: task.doneAt === null ? lateness(task.dueOn, this.today()) : null,
-        detail: task.doneAt === null ? task.detail : this.done(task, task.doneAt),
+        isDone: task.outcome !== null,
+        title: taskTitle(task),
+        late: task.outcome === null ? lateness(task.inTimeUntil, this.today()) : null,
+        detail: task.doneAt === null ? task.detail : this.closed(task, task.doneAt),
+        waits: isWaiting && this.isHeldUp(),
         initials: initialsOf(task.personName),
       })),
   );
 
   protected readonly comingUp = computed(() =>
     this.tasks()
-      .filter(({ dueOn }) => dueOn > this.today())
-      .map((task) => ({ id: task.id, title: titleOf(task), when: whenDue(task) })),
+      .filter(({ task }) => task.dueOn > this.today())
+      .map(({ task }) => ({ id: task.id, title: taskTitle(task), when: whenDue(task) })),
   );
 
-  protected tick(task: Task): void {
-    if (!this.mayTick() || this.busyIds().has(task.id)) return;
-    this.ticked.emit({ task, isDone: task.doneAt === null });
-  }
-
-  /** "09:05 by Maren Oxley" */
-  private done({ doneByName }: Task, doneAt: string): string {
+  /** "09:05 by Maren Oxley", "Not needed, 09:05 by Maren Oxley" */
+  private closed({ doneByName, outcome }: Task, doneAt: string): string {
     const when = this.format.when(doneAt);
-    return doneByName === null ? when : `${when} by ${doneByName}`;
+    const said = doneByName === null ? when : `${when} by ${doneByName}`;
+    return outcome === null || outcome === 'done' ? said : `${outcomeWord(outcome)}, ${said}`;
   }
 }
 
-/** "Feed strawberries · B1", the label never alone on a line. */
-function titleOf({ title, shelfLabel }: Task): string {
-  return shelfLabel === null ? title : `${title} ·\u00a0${shelfLabel}`;
-}
-
-/** "Thu 3 Dec · Maren Oxley". A day of the calendar has no time zone, so it is written as UTC counts it. */
+/** "Thu 3 Dec · Maren Oxley" */
 function whenDue({ dueOn, personName }: Task): string {
-  const day = formatShortDay(`${dueOn}T00:00:00Z`, 'UTC');
+  const day = dayWords(dueOn);
   return personName === null ? day : `${day} · ${personName}`;
 }
 
