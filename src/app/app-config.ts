@@ -1,5 +1,11 @@
 import { provideHttpClient } from '@angular/common/http';
-import { ErrorHandler, inject, provideAppInitializer, type ApplicationConfig } from '@angular/core';
+import {
+  ErrorHandler,
+  inject,
+  isDevMode,
+  provideAppInitializer,
+  type ApplicationConfig,
+} from '@angular/core';
 import { MatIconRegistry } from '@angular/material/icon';
 import {
   provideRouter,
@@ -7,6 +13,7 @@ import {
   withComponentInputBinding,
   withInMemoryScrolling,
 } from '@angular/router';
+import { provideServiceWorker } from '@angular/service-worker';
 import { appRoutes } from './app-routes';
 import { UnexpectedErrors } from './core/unexpected-errors';
 import { PageTitle } from './page-title';
@@ -23,6 +30,11 @@ export const appConfig: ApplicationConfig = {
     provideHttpClient(),
     provideAppInitializer(() => {
       inject(MatIconRegistry).setDefaultFontSetClass('icon');
+    }),
+    // Its first visit must not compete with the page for a weak signal.
+    provideServiceWorker('ngsw-worker.js', {
+      enabled: !isDevMode(),
+      registrationStrategy: 'registerWhenStable:30000',
     }),
     { provide: ErrorHandler, useClass: UnexpectedErrors },
     { provide: TitleStrategy, useExisting: PageTitle },

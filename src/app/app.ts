@@ -2,6 +2,7 @@ import { ChangeDetectionStrategy, Component, computed, effect, inject, Injector 
 import { RouterOutlet } from '@angular/router';
 import { appRoutes } from './app-routes';
 import { AlertInbox } from './core/alert-inbox';
+import { AppUpdate } from './core/app-update';
 import { LiveState } from './core/live-state';
 import { Session } from './core/session';
 import { destinationsWithin } from './destinations';
@@ -21,8 +22,10 @@ import type { RoomChoice } from './ui/frame/destination';
       [otherRooms]="otherRooms()"
       [connection]="connection()"
       [badges]="badges()"
+      [hasNewVersion]="update.isReady()"
       (roomChosen)="chooseRoom($event)"
       (signOutChosen)="signOut()"
+      (reloadChosen)="update.reload()"
     >
       <router-outlet />
     </app-frame>
@@ -36,6 +39,7 @@ export class App {
   private readonly injector = inject(Injector);
   private readonly inbox = inject(AlertInbox);
 
+  protected readonly update = inject(AppUpdate);
   protected readonly destinations = destinationsWithin(appRoutes);
   protected readonly personName = computed(() => this.session.account()?.name ?? null);
   protected readonly roomName = computed(() => this.session.room()?.roomName ?? null);
@@ -57,8 +61,10 @@ export class App {
     const whenSignedIn = effect(() => {
       if (this.session.account() === null) return;
       whenSignedIn.destroy();
-      // Loaded late: it brings socket.io along, which the first page needs for nothing else.
+      // Loaded late: they bring socket.io along, which the first page needs for nothing else.
       void import('./core/alert-feed').then(({ AlertFeed }) => this.injector.get(AlertFeed));
+      // Kept on the phone from the first page on, for who walks out of the signal before they open it.
+      void import('./core/care/care-today').then(({ CareToday }) => this.injector.get(CareToday));
     });
   }
 

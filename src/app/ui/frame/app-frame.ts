@@ -48,7 +48,11 @@ export class AppFrame {
   /** Where a person's own settings are; null leaves them out. */
   readonly accountLink = input<string | null>(null);
 
+  /** A newer version of the application waits for a reload. */
+  readonly hasNewVersion = input(false);
+
   readonly signOutChosen = output();
+  readonly reloadChosen = output();
   readonly roomChosen = output<RoomChoice>();
 
   private readonly page = viewChild.required<ElementRef<HTMLElement>>('page');
