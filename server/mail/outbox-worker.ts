@@ -21,6 +21,8 @@ export interface OutboxParts {
 }
 
 const EVERY_MS = 2_000;
+/** To knock costs nothing, and an urgent mail should not wait for long once the mail server is back. */
+const LONGEST_OUTAGE_WAIT_MS = 300_000;
 const BATCH = 20;
 
 type Outcome = 'none' | 'sent' | 'withdrawn' | 'delayed' | 'refused' | 'outage';
@@ -78,7 +80,7 @@ export class OutboxWorker {
           .catch((error: unknown) => log.warn({ err: error }, 'outbox not reached'))
           .finally(() => this.schedule());
       },
-      this.outages === 0 ? everyMs : retryAfterMs(this.outages - 1),
+      this.outages === 0 ? everyMs : Math.min(LONGEST_OUTAGE_WAIT_MS, retryAfterMs(this.outages - 1)),
     );
   }
 
