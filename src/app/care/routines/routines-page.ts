@@ -7,6 +7,7 @@ import { MatMenuModule } from '@angular/material/menu';
 import { Router, RouterLink } from '@angular/router';
 import { sayTiming } from '@shared/care/timing-words';
 import { endRoutine, type Routine } from '@shared/contracts/care-routines';
+import { dayAfter } from '@shared/growing/calendar-day';
 import { filter, switchMap } from 'rxjs';
 import { ApiClient } from '../../core/api-client';
 import { Notices } from '../../core/notices';
@@ -112,7 +113,7 @@ export class RoutinesPage {
   }
 
   private line(routine: Routine) {
-    const { kind, timing, season, who, nextDueOn, minutes, amount } = routine;
+    const { kind, timing, season, who, nextDueOn, windowDays, minutes, amount } = routine;
     const when = sayTiming(timing, season);
     const today = this.format.today();
     return {
@@ -121,8 +122,13 @@ export class RoutinesPage {
       when: when.charAt(0).toUpperCase() + when.slice(1),
       how: [amount, `about ${minutes} min`].filter((part) => part !== '').join(' · '),
       who: whoWords(who, this.names()),
-      next: nextDueOn === null ? 'not planned yet' : dayWords(nextDueOn, today),
-      isLate: nextDueOn !== null && nextDueOn < today,
+      next: nextWords(nextDueOn, today),
+      isLate: nextDueOn !== null && dayAfter(nextDueOn, windowDays) < today,
     };
   }
+}
+
+function nextWords(nextDueOn: string | null, today: string): string {
+  if (nextDueOn === null) return 'Not planned yet';
+  return `${nextDueOn < today ? 'Was due' : 'Next'} ${dayWords(nextDueOn, today)}`;
 }

@@ -23,9 +23,10 @@ import { monthNames, sayTiming } from '@shared/care/timing-words';
 import { getRota } from '@shared/contracts/care-rota';
 import { addRoutine, changeRoutine, type Routine } from '@shared/contracts/care-routines';
 import { dayAfter } from '@shared/growing/calendar-day';
-import { finalize, map, type Observable } from 'rxjs';
+import { map, type Observable } from 'rxjs';
 import { ApiClient, newIdempotencyKey } from '../../../core/api-client';
-import { serverWords, showFieldProblems } from '../../../core/field-problems';
+import { serverWords } from '../../../core/field-problems';
+import { FormSaving } from '../../../core/form-saving';
 import { Notices } from '../../../core/notices';
 import { ReaderFormat } from '../../../core/reader-format';
 import { RoomShelves } from '../../../core/room-shelves';
@@ -64,7 +65,7 @@ const previewedDays = 5;
     TimingPart,
     WhoPart,
   ],
-  providers: [RoomRoutines, RoomShelves, WhereChoices],
+  providers: [FormSaving, RoomRoutines, RoomShelves, WhereChoices],
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class RoutineFormPage {
@@ -91,9 +92,8 @@ export class RoutineFormPage {
   protected readonly said = serverWords;
   protected readonly kinds = careKinds.map((kind) => ({ kind, word: careKindLooks[kind].word }));
   protected readonly months = monthNames.map((name, index) => ({ month: index + 1, name }));
-  protected readonly isSaving = signal(false);
+  protected readonly saving = inject(FormSaving);
   protected readonly wasTried = signal(false);
-  protected readonly problem = signal<string | null>(null);
 
   protected readonly isNew = computed(() => this.routineId() === undefined);
   protected readonly changed = computed<Routine | null>(
@@ -178,22 +178,17 @@ export class RoutineFormPage {
   }
 
   protected save(): void {
-    if (this.isSaving()) return;
+    if (this.saving.isSaving()) return;
     this.wasTried.set(true);
     const call = this.call();
     if (call === null) {
       this.form.markAllAsTouched();
-      this.problem.set('Some fields need another look; they say what.');
+      this.saving.problem.set('Some fields need another look; they say what.');
       return;
     }
-    this.problem.set(null);
-    this.isSaving.set(true);
-    call.pipe(finalize(() => this.isSaving.set(false))).subscribe({
-      next: ({ title }) => {
-        this.notices.say(this.isNew() ? `“${title}” added` : `“${title}” changed`);
-        void this.router.navigate(['/care/routines'], { replaceUrl: true });
-      },
-      error: (error: unknown) => this.problem.set(showFieldProblems(this.form, error)),
+    this.saving.send(this.form, call, ({ title }) => {
+      this.notices.say(this.isNew() ? `“${title}” added` : `“${title}” changed`);
+      void this.router.navigate(['/care/routines'], { replaceUrl: true });
     });
   }
 
