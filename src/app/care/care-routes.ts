@@ -14,6 +14,11 @@ export const careRoutes: Routes = [
         loadComponent: () => import('./today/today-page').then((m) => m.TodayPage),
       },
       {
+        path: 'rota',
+        title: 'Rota',
+        loadComponent: () => import('./rota/rota-page').then((m) => m.RotaPage),
+      },
+      {
         path: 'routines',
         title: 'Routines',
         loadComponent: () => import('./routines/routines-page').then((m) => m.RoutinesPage),
@@ -27,6 +32,11 @@ export const careRoutes: Routes = [
         path: 'routines/:routineId/change',
         title: 'Change a routine',
         loadComponent: () => import('./routines/form/routine-form-page').then((m) => m.RoutineFormPage),
+      },
+      {
+        path: 'record',
+        title: 'Record of care',
+        loadComponent: () => import('./record/record-page').then((m) => m.RecordPage),
       },
     ],
   },
