@@ -126,6 +126,7 @@ export function careServices(foundation: CareFoundation): CareServices {
   });
   const closing = new TaskClosingService({
     ...shared,
+    assignment,
     planning,
     planned,
     effects: new TaskEffects(plantingsStore, plantingEvents, plantingRecords),

@@ -66,6 +66,7 @@ export class RoutinesService {
   change(by: RoomAuthor, timeZone: string, routineId: string, draft: RoutineDraft): Promise<Routine> {
     const { changes, routines, planning } = this.parts;
     return changes.make(by, async (tx) => {
+      await planning.hold(tx, by.roomId);
       await routines.lock(tx, by.roomId, routineId);
       await this.check(tx, by.roomId, timeZone, draft);
       await routines.change(tx, routineId, draft, this.today(timeZone));
@@ -77,8 +78,9 @@ export class RoutinesService {
 
   /** Ends a routine; its open tasks go. */
   end(by: RoomAuthor, routineId: string): Promise<void> {
-    const { changes, routines, now } = this.parts;
+    const { changes, routines, planning, now } = this.parts;
     return changes.make(by, async (tx) => {
+      await planning.hold(tx, by.roomId);
       const { kind, title } = await routines.routine(tx, by.roomId, routineId);
       await routines.end(tx, routineId, now());
       return { result: undefined, action: 'routine.end', subjectId: routineId, detail: { kind, title } };

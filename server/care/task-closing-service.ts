@@ -5,6 +5,7 @@ import type { Clock } from '../clock';
 import type { Transactions, Tx } from '../database/transactions';
 import { conflict, invalidField, RequestProblem } from '../http/request-problem';
 import type { LiveFeed } from '../live/live-feed';
+import type { HolderAssignment } from '../rota/holder-assignment';
 import type { SwapsStore } from '../rota/swaps-store';
 import type { TaskEffects } from './task-effects';
 import type { TaskPlanningService } from './task-planning-service';
@@ -16,6 +17,7 @@ export interface TaskClosingParts {
   readonly transactions: Transactions;
   readonly tasks: TasksStore;
   readonly swaps: Pick<SwapsStore, 'settle'>;
+  readonly assignment: Pick<HolderAssignment, 'hold'>;
   readonly planning: TaskPlanningService;
   readonly planned: Pick<TaskPlanningStore, 'removeNextTurn'>;
   readonly effects: TaskEffects;
@@ -128,8 +130,9 @@ export class TaskClosingService {
     change: (tx: Tx) => Promise<readonly string[]>,
     taskId: string,
   ): Promise<Task> {
-    const { transactions, tasks, feed } = this.parts;
+    const { transactions, tasks, assignment, feed } = this.parts;
     const { task, touched } = await transactions.run(async (tx) => {
+      await assignment.hold(tx, roomId);
       const ids = await change(tx);
       return { touched: await tasks.some(tx, roomId, ids), task: await tasks.task(tx, roomId, taskId) };
     });

@@ -43,6 +43,11 @@ interface RoomDay {
 export class TaskPlanningService {
   constructor(private readonly parts: TaskPlanningParts) {}
 
+  /** Lets one transaction at a time change a room's care; to be taken before any of its routines or tasks is held. */
+  hold(tx: Tx, roomId: string): Promise<void> {
+    return this.parts.assignment.hold(tx, roomId);
+  }
+
   /** Makes the tasks of the days ahead in every room; what exists already stays. To be called at least hourly. */
   async planAhead(): Promise<void> {
     const { transactions, rooms, feed } = this.parts;
@@ -61,6 +66,7 @@ export class TaskPlanningService {
    */
   async planRoom(tx: Tx, roomId: string): Promise<string[]> {
     const { planning, routines, assignment, now } = this.parts;
+    await assignment.hold(tx, roomId);
     const room = await this.roomDay(tx, roomId);
     await routines.endOfPlantings(tx, roomId, now());
     const before = dayAfter(room.today, PLANNED_AHEAD_DAYS);
@@ -84,7 +90,8 @@ export class TaskPlanningService {
    * @param routineId - Which.
    */
   async replan(tx: Tx, roomId: string, routineId: string): Promise<void> {
-    const { planning } = this.parts;
+    const { planning, assignment } = this.parts;
+    await assignment.hold(tx, roomId);
     const { today } = await this.roomDay(tx, roomId);
     const rota = await this.parts.rota.rota(tx, roomId, today);
     const before = dayAfter(today, PLANNED_AHEAD_DAYS);
@@ -102,6 +109,7 @@ export class TaskPlanningService {
    */
   async followRota(tx: Tx, roomId: string): Promise<string[]> {
     const { planning, assignment } = this.parts;
+    await assignment.hold(tx, roomId);
     const { today } = await this.roomDay(tx, roomId);
     const rota = await this.parts.rota.rota(tx, roomId, today);
     for (const routine of await planning.heedingClosedDays(tx, roomId)) {

@@ -195,8 +195,11 @@ export class TasksService {
   }
 
   private async changed(roomId: string, change: (tx: Tx) => Promise<string>): Promise<Task> {
-    const { transactions, tasks, feed } = this.parts;
-    const task = await transactions.run(async (tx) => tasks.task(tx, roomId, await change(tx)));
+    const { transactions, tasks, assignment, feed } = this.parts;
+    const task = await transactions.run(async (tx) => {
+      await assignment.hold(tx, roomId);
+      return tasks.task(tx, roomId, await change(tx));
+    });
     feed.publish(roomId, 'task:changed', task);
     return task;
   }

@@ -21,6 +21,14 @@ export class HolderAssignment {
   ) {}
 
   /**
+   * Lets one transaction at a time change a room's care. Taken before any of its tasks is held, for sharing out may touch
+   * all of them, and two that wait for each other's tasks would wait for ever.
+   */
+  hold(tx: Tx, roomId: string): Promise<void> {
+    return this.rota.holdRoom(tx, roomId);
+  }
+
+  /**
    * Gives every open task to those who do it now; who held one and is there keeps it.
    *
    * @param tx - Of the change.
@@ -28,7 +36,7 @@ export class HolderAssignment {
    * @returns Ids of the tasks whose holders changed.
    */
   async share(tx: Tx, roomId: string): Promise<string[]> {
-    await this.rota.holdRoom(tx, roomId);
+    await this.hold(tx, roomId);
     const room = await this.rooms.roomOf(tx, roomId);
     if (room === null) return [];
     const now = this.now().getTime();
