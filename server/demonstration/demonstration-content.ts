@@ -69,7 +69,7 @@ export const demonstrationRanges: readonly DemonstrationRange[] = [
   range('B4', 'airTemperature', [5, 25, 5, 25], 'nothing grows here; frost and heat only'),
 ];
 
-/** Least light of a day [mol m⁻²]: a little less than what these lamps give, with which the keeper is content. */
+/** Least light of a day [mol m⁻²]: less than what these lamps give, so that their wear alone opens no alert. */
 export const demonstrationLight: readonly {
   readonly shelf: string;
   readonly leastMolM2D: number;
