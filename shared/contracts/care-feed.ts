@@ -23,7 +23,8 @@ export const renewCalendarFeed = endpoint({
   path: '/account/calendar-feed',
   access: 'signedIn',
   summary: 'Make the feed, or give it a new secret link: the old one ends; the link is shown this once',
-  reply: z.object({ madeAt: instant, url: z.url() }),
+  /** Absolute, below the public address. */
+  reply: z.object({ madeAt: instant, url: z.string() }),
   status: 201,
 });
 
