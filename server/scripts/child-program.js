@@ -15,6 +15,7 @@ const shownCharacters = 4000;
  * @property {any} ready - The message with which it said that it is ready.
  * @property {Promise<never>} failed - Rejects with a {@link Problem} when it ends without being stopped.
  * @property {() => Promise<void>} stop
+ * @property {() => Promise<void>} kill - Ends it at once, as a power cut would.
  */
 
 /**
@@ -48,6 +49,11 @@ async function startProgram({ title, script, args = [], env, logFile, signal }) 
     await ended;
     clearTimeout(timer);
   };
+  const kill = async () => {
+    isStopping = true;
+    child.kill('SIGKILL');
+    await ended;
+  };
   /** @type {string | null} */
   let problem = null;
   const isReady = new Promise((resolve) => {
@@ -67,7 +73,7 @@ async function startProgram({ title, script, args = [], env, logFile, signal }) 
   const ready = await Promise.race([isReady, failed, untilAborted(signal)]);
   if (signal.aborted) await stop();
   signal.throwIfAborted();
-  return { ready, failed, stop };
+  return { ready, failed, stop, kill };
 }
 
 /**

@@ -20,6 +20,8 @@ export interface ChildProgram {
   ready: Readonly<Record<string, unknown>>;
   failed: Promise<never>;
   stop(): Promise<void>;
+  /** Ends it at once, as a power cut would. */
+  kill(): Promise<void>;
 }
 
 /** What the scripts export, as far as specs use it. They are plain JavaScript, so their types are given here. */

@@ -7,6 +7,8 @@ export interface View {
   readonly colours: 'light' | 'dark';
   /** Takes a certificate that nobody signed. */
   readonly trustsAnyCertificate?: boolean;
+  /** Keeps the application for when the network is gone; otherwise every page comes from the server itself. */
+  readonly keepsApplication?: boolean;
 }
 
 const HEIGHT = 900;
@@ -46,9 +48,20 @@ export class TestBrowser {
       colorScheme: view.colours ?? 'light',
       reducedMotion: 'reduce',
       locale: 'en-IE',
+      serviceWorkers: view.keepsApplication === true ? 'allow' : 'block',
       ignoreHTTPSErrors: view.trustsAnyCertificate ?? false,
     });
     context.setDefaultTimeout(WAIT_MS);
+    return this.openPage(context);
+  }
+
+  /** Closes a page and opens another in the same browser, which keeps cookies and all that it knew. */
+  async reopen(page: Page): Promise<Page> {
+    await page.close();
+    return this.openPage(page.context());
+  }
+
+  private async openPage(context: BrowserContext): Promise<Page> {
     const page = await context.newPage();
     page.on('pageerror', (error) => this.complaints.push(error.message));
     page.on('console', (message) => {

@@ -4,6 +4,7 @@ import { join } from 'node:path';
 import { simulatedRoom, type SimulatedRoom } from '@shared/contracts/simulation';
 import { startMailbox } from '../../../simulator/mailbox/start-mailbox';
 import { createTestDatabase, type TestDatabase } from '../../database/test-database';
+import type { ChildProgram } from '../../scripts/scripts';
 import { startBuiltProgram } from './built-program';
 
 // Programs start and pages are drawn; the machine may be busy with other tests.
@@ -27,6 +28,8 @@ export interface WholeApplication {
   startSimulator(settings?: Readonly<Record<string, string>>, args?: string[]): Promise<void>;
   /** Sends readings of one device, by the names of its sensors, as taken at an instant; now unless said otherwise. */
   measure(values: Readonly<Record<string, number>>, at?: Date): Promise<void>;
+  /** Ends the server as a power cut would, lets something happen meanwhile, and starts it at the same address again. */
+  withoutServer(meanwhile: () => Promise<void>): Promise<void>;
   stop(): Promise<void>;
 }
 
@@ -43,13 +46,15 @@ export async function startWholeApplication(): Promise<WholeApplication> {
     undo.push(() => database.drop());
     const mailbox = await startMailbox({ smtpPort: 0, httpPort: 0 });
     undo.push(() => mailbox.stop());
-    const server = await startBuiltProgram('server', folder, {
-      DATABASE_URL: database.applicationUrl,
-      DATABASE_OWNER_URL: database.url,
-      PORT: '0',
-      SMTP_URL: `smtp://127.0.0.1:${mailbox.smtpPort}`,
-      LAMPMEADOW_DEVICES_FILE: devicesFile,
-    });
+    const startServer = (port: string): Promise<ChildProgram> =>
+      startBuiltProgram('server', folder, {
+        DATABASE_URL: database.applicationUrl,
+        DATABASE_OWNER_URL: database.url,
+        PORT: port,
+        SMTP_URL: `smtp://127.0.0.1:${mailbox.smtpPort}`,
+        LAMPMEADOW_DEVICES_FILE: devicesFile,
+      });
+    let server = await startServer('0');
     undo.push(() => server.stop());
     const address = String(server.ready['address']);
     const room = simulatedRoom.parse(JSON.parse(await readFile(devicesFile, 'utf8')));
@@ -72,6 +77,11 @@ export async function startWholeApplication(): Promise<WholeApplication> {
           args,
         );
         undo.push(() => simulator.stop());
+      },
+      withoutServer: async (meanwhile) => {
+        await server.kill();
+        await meanwhile();
+        server = await startServer(new URL(address).port);
       },
       measure: (values, at = new Date()) => sendReadings(address, room, values, at),
       stop,
