@@ -17,7 +17,6 @@ import { RotaData } from '../rota-data';
         class="chip"
         type="button"
         [class.short]="isShort()"
-        [attr.aria-label]="words()"
         [matMenuTriggerFor]="menu"
         [matMenuTriggerData]="{ task: task() }"
       >
@@ -31,12 +30,12 @@ import { RotaData } from '../rota-data';
     <ng-template #inside>
       <mat-icon aria-hidden="true">{{ icon() }}</mat-icon>
       <span>
-        <b>{{ task().title }}</b>
+        <b>{{ task().title }}</b>&ngsp;
         @if (place() !== null) {
-          <small>{{ place() }}</small>
+          <small>{{ place() }}</small>&ngsp;
         }
         @for (note of notes(); track note.text) {
-          <small [class.trouble]="note.isTrouble">{{ note.text }}</small>
+          <small [class.trouble]="note.isTrouble">{{ note.text }}</small>&ngsp;
         }
       </span>
     </ng-template>
@@ -82,10 +81,4 @@ export class TaskChip {
       { text: task.swap === null ? null : 'On offer', isTrouble: false },
     ].flatMap(({ text, isTrouble }) => (text === null ? [] : [{ text, isTrouble }]));
   });
-  /** The whole of it for a screen reader, which would run its lines together. */
-  protected readonly words = computed(() =>
-    [this.task().title, this.place(), ...this.notes().map(({ text }) => text)]
-      .filter((part) => part !== null)
-      .join(', '),
-  );
 }
