@@ -34,6 +34,7 @@ import { progressRoutes } from './progress/progress-routes';
 import { ProgressService } from './progress/progress-service';
 import { ShelfLight } from './progress/shelf-light';
 import type { RoomHooks } from './rooms/room-hooks';
+import type { RoomRangesService } from './rooms/room-ranges-service';
 import type { RoomsService } from './rooms/rooms-service';
 import type { ShelfPlansService } from './rooms/shelf-plans-service';
 import type { ShelfPlansStore } from './rooms/shelf-plans-store';
@@ -56,6 +57,7 @@ export interface GrowingFoundation {
   readonly transactions: Transactions;
   readonly changes: RoomChanges;
   readonly rooms: RoomsService;
+  readonly roomRanges: RoomRangesService;
   readonly plans: ShelfPlansService;
   readonly plansStore: ShelfPlansStore;
   readonly hooks: RoomHooks;
@@ -174,6 +176,7 @@ export function growingServices(foundation: GrowingFoundation): GrowingServices 
     crops,
     ranges: {
       of: (tx, shelfIds) => plans.wantedRangesOf(tx, shelfIds),
+      ofRoom: (tx, roomId) => foundation.roomRanges.of(tx, roomId),
       set: (...of) => foundation.plansStore.setWantedRange(...of),
       clear: (...of) => foundation.plansStore.clearWantedRange(...of),
     },

@@ -62,6 +62,7 @@ import { GerminationStore } from './plantings/germination-store';
 import { HistoryUpkeepService } from './readings/history-upkeep-service';
 import { intakeParts } from './readings/intake-parts';
 import { roomsRoutes } from './rooms/rooms-routes';
+import { RoomRangesService } from './rooms/room-ranges-service';
 import { RoomsService } from './rooms/rooms-service';
 import { RoomsStore } from './rooms/rooms-store';
 import { ShelfPlansService } from './rooms/shelf-plans-service';
@@ -139,10 +140,12 @@ export function composeServices(foundation: Foundation): Services {
   const roomsStore = new RoomsStore();
   const rooms = new RoomsService({ transactions, rooms: roomsStore, changes, hooks, now });
   const ground = careGround(rooms, now);
+  const roomRanges = new RoomRangesService(transactions, changes);
   const growing = growingServices({
     transactions,
     changes,
     rooms,
+    roomRanges,
     plans,
     plansStore,
     hooks,
@@ -298,7 +301,7 @@ export function composeServices(foundation: Foundation): Services {
         new EscalationService(transactions, tellings, changes),
       ),
       ...auditRoutes(new AuditLogService(transactions, audit)),
-      ...roomsRoutes(rooms, rules),
+      ...roomsRoutes(rooms, rules, roomRanges),
       ...devicesRoutes(devices),
       ...deviceIntakeRoutes(deviceIntake),
       ...boardRoutes(boards),

@@ -1,6 +1,7 @@
 import { hoursADay } from '@shared/climate/daily-lamp-hours';
 import type { ShelfAdviceView } from '@shared/contracts/advice';
 import type { Task } from '@shared/contracts/care';
+import type { RoomRange } from '@shared/contracts/room-ranges';
 import type { Room, Shelf, WantedLight, WantedRange } from '@shared/contracts/rooms';
 import type { AdvisedShelf } from '@shared/growing/advice/advice';
 import { adviceSubjects, adviceTasks, type AdviceTask } from '@shared/growing/advice/advice-tasks';
@@ -20,7 +21,7 @@ import type { LightShortages } from '../progress/light-shortages';
 import type { RoomHooks } from '../rooms/room-hooks';
 import type { RoomsService } from '../rooms/rooms-service';
 import type { AdviceContent, AdviceStore, ShelfMeans } from './advice-store';
-import { plantingLight, plantingRanges, type PlantingRange } from './planting-ranges';
+import { plantingLight, plantingRanges, rangesFor, type UnsetRange } from './planting-ranges';
 
 /** What {@link AdviceService} works with. */
 export interface AdviceParts {
@@ -32,6 +33,8 @@ export interface AdviceParts {
   /** Reads and writes wanted ranges. */
   readonly ranges: {
     of(tx: Tx, shelfIds: readonly string[]): Promise<Map<string, WantedRange[]>>;
+    /** Those that hold where nobody and nothing says otherwise. */
+    ofRoom(tx: Tx, roomId: string): Promise<RoomRange[]>;
     set(tx: Tx, shelfId: string, range: WantedRange): Promise<void>;
     clear(tx: Tx, shelfId: string, quantity: WantedRange['quantity']): Promise<boolean>;
   };
@@ -64,7 +67,7 @@ const UNHEATED_SPAN_MS = 72 * 3_600_000;
 
 /**
  * Keeps advice on shelves: what stands there and how far it is says what lamps, mat and air should be. It sets the wanted
- * ranges that nobody set, and asks for care once.
+ * ranges that nobody set for the shelf, those of the room where plantings want none, and asks for care once.
  */
 export class AdviceService {
   constructor(private readonly parts: AdviceParts) {}
@@ -114,6 +117,7 @@ export class AdviceService {
     if (room === null) return changed;
     const shelves = (await rooms.racksOf(roomId)).flatMap((rack) => rack.shelves);
     const advised = await this.advisedShelves(tx, room, shelves);
+    const roomRanges = await this.parts.ranges.ofRoom(tx, roomId);
     const today = dayBounds(now().getTime(), room.timeZone).date;
     for (const [index, shelf] of shelves.entries()) {
       const seen = advised[index];
@@ -122,7 +126,8 @@ export class AdviceService {
         seen,
         advised.filter((other) => other !== seen),
       );
-      const set = await this.setRanges(tx, shelf.id, plantingRanges(found.wanted), changed);
+      const wanted = rangesFor(plantingRanges(found.wanted), roomRanges);
+      const set = await this.setRanges(tx, shelf.id, wanted, changed);
       if (await this.setLight(tx, shelf.id, plantingLight(found.wanted), changed)) {
         set.add('dailyLightIntegral');
       }
@@ -171,27 +176,31 @@ export class AdviceService {
     return advised;
   }
 
-  /** Sets what plantings want where no person set a range, and clears what they want no more; tells what is set so. */
+  /**
+   * Sets what plantings or the room want where no person set a range, and clears what they want no more; tells what
+   * is set as plantings want it.
+   */
   private async setRanges(
     tx: Tx,
     shelfId: string,
-    wanted: readonly PlantingRange[],
+    wanted: readonly UnsetRange[],
     changed: Changed,
   ): Promise<Set<string>> {
     const { ranges, hooks, now } = this.parts;
     const held = (await ranges.of(tx, [shelfId])).get(shelfId) ?? [];
-    const set = new Set<string>();
+    const [stays, set] = [new Set<string>(), new Set<string>()];
     for (const range of wanted) {
       const before = held.find(({ quantity }) => quantity === range.quantity);
       if (before?.source === 'shelf') continue;
-      set.add(range.quantity);
+      stays.add(range.quantity);
+      if (range.source === 'plantings') set.add(range.quantity);
       if (isSame(before ?? null, range)) continue;
       await ranges.set(tx, shelfId, { ...range, since: now().toISOString() });
       await hooks.onRangeChanged(tx, shelfId, range.quantity);
       changed.hasRoomChanged = true;
     }
     for (const { quantity, source } of held) {
-      if (source !== 'plantings' || set.has(quantity)) continue;
+      if (source === 'shelf' || stays.has(quantity)) continue;
       await ranges.clear(tx, shelfId, quantity);
       await hooks.onRangeChanged(tx, shelfId, quantity);
       changed.hasRoomChanged = true;

@@ -1,10 +1,11 @@
 import { patienceDefaults, usualUrgency } from '@shared/alerts/alert-defaults';
 import { quantities, type Quantity } from '@shared/climate/quantity';
+import type { RoomRange } from '@shared/contracts/room-ranges';
 import type { Limits, WantedLight, WantedRange } from '@shared/contracts/rooms';
 import type { WantedAdvice } from '@shared/growing/advice/advice';
 
-/** A range that plantings want, before it is set. */
-export type PlantingRange = Omit<WantedRange, 'since'>;
+/** A range that plantings or the room want, before it is set. */
+export type UnsetRange = Omit<WantedRange, 'since'>;
 
 const noLimits: Limits = { low: null, high: null };
 const MINUTE_MS = 60_000;
@@ -22,7 +23,7 @@ const decimals: Partial<Record<Quantity, number>> = {
  * @param wanted - What everything on a shelf is content with.
  * @returns One range a quantity that has a series; daily sums have none. Ends that meet make no range.
  */
-export function plantingRanges(wanted: readonly WantedAdvice[]): PlantingRange[] {
+export function plantingRanges(wanted: readonly WantedAdvice[]): UnsetRange[] {
   return quantities.flatMap((quantity) => {
     const own = wanted.filter((one) => one.quantity === quantity);
     if (own.length === 0) return [];
@@ -49,6 +50,19 @@ export function plantingRanges(wanted: readonly WantedAdvice[]): PlantingRange[]
       },
     ];
   });
+}
+
+/**
+ * The ranges of a shelf for which no person set any: what its plantings want, and the room's where they want nothing.
+ *
+ * @param ofPlantings - Of {@link plantingRanges}.
+ * @param ofRoom - Those of the room.
+ * @returns One range a quantity.
+ */
+export function rangesFor(ofPlantings: readonly UnsetRange[], ofRoom: readonly RoomRange[]): UnsetRange[] {
+  const settled = new Set(ofPlantings.map(({ quantity }) => quantity));
+  const left = ofRoom.filter(({ quantity }) => !settled.has(quantity));
+  return [...ofPlantings, ...left.map((range): UnsetRange => ({ ...range, source: 'room' }))];
 }
 
 /**

@@ -46,6 +46,7 @@ import { RackEntity } from '../rooms/rack-entity';
 import { RoomEntity } from '../rooms/room-entity';
 import { ShelfEntity } from '../rooms/shelf-entity';
 import { WantedLightEntity } from '../rooms/wanted-light-entity';
+import { RoomRangeEntity } from '../rooms/room-range-entity';
 import { WantedRangeEntity } from '../rooms/wanted-range-entity';
 import { AbsenceEntity } from '../rota/absence-entity';
 import { DutyDayEntity } from '../rota/duty-day-entity';
@@ -122,6 +123,7 @@ const entities = [
   VarietyEntity,
   WantedLightEntity,
   WantedRangeEntity,
+  RoomRangeEntity,
 ];
 
 /**

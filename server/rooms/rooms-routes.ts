@@ -1,6 +1,8 @@
+import * as rangesContract from '@shared/contracts/room-ranges';
 import * as contract from '@shared/contracts/rooms';
 import { authorOf } from '../audit/room-author';
 import { route, type Route } from '../http/route';
+import type { RoomRangesService } from './room-ranges-service';
 import type { RoomsService } from './rooms-service';
 import type { ShelfRulesService } from './shelf-rules-service';
 
@@ -9,9 +11,14 @@ import type { ShelfRulesService } from './shelf-rules-service';
  *
  * @param rooms - Room, racks, shelves, lamps and heat mats.
  * @param rules - Lamp hours, wanted ranges and wanted light.
+ * @param ranges - Ranges for the whole room.
  * @returns The routes.
  */
-export function roomsRoutes(rooms: RoomsService, rules: ShelfRulesService): Route[] {
+export function roomsRoutes(
+  rooms: RoomsService,
+  rules: ShelfRulesService,
+  ranges: RoomRangesService,
+): Route[] {
   return [
     route(contract.getRoom, ({ room }) => rooms.room(room.id)),
     route(contract.changeRoom, (context) => rooms.changeRoom(authorOf(context), context.body)),
@@ -42,6 +49,13 @@ export function roomsRoutes(rooms: RoomsService, rules: ShelfRulesService): Rout
       const { shelfId, quantity } = context.params;
       return rules.clearWantedRange(authorOf(context), shelfId, quantity);
     }),
+    route(rangesContract.listRoomRanges, ({ room }) => ranges.list(room.id)),
+    route(rangesContract.setRoomRange, (context) =>
+      ranges.set(authorOf(context), { ...context.body, quantity: context.params.quantity }),
+    ),
+    route(rangesContract.clearRoomRange, (context) =>
+      ranges.clear(authorOf(context), context.params.quantity),
+    ),
     route(contract.setWantedLight, (context) =>
       rules.setWantedLight(authorOf(context), context.params.shelfId, context.body),
     ),

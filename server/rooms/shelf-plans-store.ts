@@ -4,6 +4,7 @@ import type { LampHours, WantedLight, WantedRange } from '@shared/contracts/room
 import { In } from 'typeorm';
 import type { Tx } from '../database/transactions';
 import { LampPlanEntity } from './lamp-plan-entity';
+import { columnsOf, rangeOf } from './range-columns';
 import { WantedLightEntity } from './wanted-light-entity';
 import { WantedRangeEntity } from './wanted-range-entity';
 
@@ -39,39 +40,19 @@ export class ShelfPlansStore {
       order: { shelfId: 'ASC', quantity: 'ASC' },
     });
     return ranges.map((range) => ({
+      ...rangeOf(range),
       shelfId: range.shelfId,
-      quantity: range.quantity,
-      lampsOn: { low: range.lampsOnLow, high: range.lampsOnHigh },
-      lampsOff: { low: range.lampsOffLow, high: range.lampsOffHigh },
-      holdMinutes: range.holdMinutes,
-      clearingMargin: range.clearingMargin,
-      urgency: { by: range.urgentBy, afterMinutes: range.urgentAfterMinutes },
       source: range.source,
-      reason: range.reason,
       since: range.since.toISOString(),
     }));
   }
 
   /** Sets what a shelf wants of one quantity. */
   async setWantedRange(tx: Tx, shelfId: string, wanted: WantedRange): Promise<void> {
-    const { quantity, lampsOn, lampsOff, holdMinutes, clearingMargin, urgency, source, reason } = wanted;
+    const { quantity, source, since } = wanted;
     await tx.upsert(
       WantedRangeEntity,
-      {
-        shelfId,
-        quantity,
-        lampsOnLow: lampsOn.low,
-        lampsOnHigh: lampsOn.high,
-        lampsOffLow: lampsOff.low,
-        lampsOffHigh: lampsOff.high,
-        holdMinutes,
-        clearingMargin,
-        urgentBy: urgency.by,
-        urgentAfterMinutes: urgency.afterMinutes,
-        source,
-        reason,
-        since: new Date(wanted.since),
-      },
+      { shelfId, quantity, ...columnsOf(wanted), source, since: new Date(since) },
       ['shelfId', 'quantity'],
     );
   }

@@ -21,6 +21,7 @@ import * as photos from './photos';
 import * as plantingEvents from './planting-events';
 import * as plantingProgress from './planting-progress';
 import * as plantings from './plantings';
+import * as roomRanges from './room-ranges';
 import * as rooms from './rooms';
 import * as scenarios from './scenarios';
 import * as seed from './seed';
@@ -57,6 +58,9 @@ export const endpoints: readonly Endpoint[] = [
   rooms.setWantedRange,
   rooms.tryWantedRange,
   rooms.clearWantedRange,
+  roomRanges.listRoomRanges,
+  roomRanges.setRoomRange,
+  roomRanges.clearRoomRange,
   rooms.setWantedLight,
   rooms.clearWantedLight,
   devices.postReadings,

@@ -276,7 +276,8 @@ export const listWantedRanges = endpoint({
   reply: z.array(wantedRange),
 });
 
-const rangeRule = z.strictObject({
+/** A range as a person sets it. */
+export const rangeRule = z.strictObject({
   lampsOn: limits,
   lampsOff: limits,
   holdMinutes: z.number().min(0).max(1440),

@@ -124,6 +124,12 @@ export const accessTable: Readonly<Record<string, AccessRow>> = {
     body: { lampsOn: noLimits, lampsOff: noLimits, holdMinutes: 15, clearingMargin: 0.5 },
   },
   clearWantedRange: { outcomes: grower },
+  listRoomRanges: { outcomes: viewer },
+  setRoomRange: {
+    outcomes: grower,
+    body: { lampsOn: noLimits, lampsOff: noLimits, holdMinutes: 15, clearingMargin: 0.5 },
+  },
+  clearRoomRange: { outcomes: grower },
   setWantedLight: { outcomes: grower, body: { leastMolM2D: 8 } },
   clearWantedLight: { outcomes: grower },
 

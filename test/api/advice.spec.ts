@@ -288,4 +288,40 @@ describe('advice on a shelf', () => {
 
     await room.staff.viewer.get(`${room.staff.path}/shelves/${foreign.id}/advice`).expect(404);
   });
+
+  it('lets a range of the room hold where neither a person nor plantings say otherwise', async () => {
+    const roomPath = `${room.staff.path}/wanted-ranges`;
+    const rule = {
+      lampsOn: { low: null, high: 28 },
+      lampsOff: { low: 5, high: null },
+      holdMinutes: 30,
+      clearingMargin: 1,
+    };
+    await room.staff.grower
+      .put(`${roomPath}/airTemperature`, { ...rule, reason: 'frost and heat' })
+      .expect(200);
+    expect(await rangeOf('airTemperature')).toMatchObject({
+      ...rule,
+      source: 'room',
+      reason: 'frost and heat',
+      since: '2026-04-15T10:00:00.000Z',
+    });
+
+    const leek = await room.sown();
+    await room.counted(leek.id, 1).expect(201);
+    expect(await rangeOf('airTemperature')).toMatchObject({ source: 'plantings' });
+
+    await room.staff.grower.put(rangePath(), { ...rule, holdMinutes: 45 }).expect(200);
+    expect(await rangeOf('airTemperature')).toMatchObject({ source: 'shelf', holdMinutes: 45 });
+
+    const empty = await aShelf(application.tx, { roomId: room.staff.room.id });
+    await application.app.services.advice.refreshAll();
+    const onEmpty = await room.read<WantedRange[]>(`/shelves/${empty.id}/wanted-ranges`);
+    expect(onEmpty).toMatchObject([{ quantity: 'airTemperature', source: 'room' }]);
+
+    await room.staff.grower.delete(`${roomPath}/airTemperature`).expect(204);
+    expect(await room.read(`/shelves/${empty.id}/wanted-ranges`)).toEqual([]);
+    await room.staff.grower.delete(`${roomPath}/airTemperature`).expect(404);
+    expect(await rangeOf('airTemperature')).toMatchObject({ source: 'shelf' });
+  });
 });

@@ -25,6 +25,7 @@ import { CreateCareRota1764554600000 } from './1764554600000-create-care-rota';
 import { TellCareOutside1764554700000 } from './1764554700000-tell-care-outside';
 import { NoteWhereChangesComeFrom1764556000000 } from './1764556000000-note-where-changes-come-from';
 import { RemoveTasksWithPlanting1764556100000 } from './1764556100000-remove-tasks-with-planting';
+import { CreateRoomRange1764556200000 } from './1764556200000-create-room-range';
 
 /** Every migration in order; a merged one is never edited. */
 export const migrations = [
@@ -55,4 +56,5 @@ export const migrations = [
   TellCareOutside1764554700000,
   NoteWhereChangesComeFrom1764556000000,
   RemoveTasksWithPlanting1764556100000,
+  CreateRoomRange1764556200000,
 ];

@@ -4,6 +4,7 @@ import { TestBed, type ComponentFixture } from '@angular/core/testing';
 import { MatButtonHarness } from '@angular/material/button/testing';
 import { MAT_DIALOG_DATA, MatDialogRef } from '@angular/material/dialog';
 import { MatInputHarness } from '@angular/material/input/testing';
+import { MatRadioButtonHarness } from '@angular/material/radio/testing';
 import { MatFormFieldHarness } from '@angular/material/form-field/testing';
 import type { RangeTrial, WantedRange } from '@shared/contracts/rooms';
 import { membership } from '../../core/testing/account-builder';
@@ -123,6 +124,18 @@ describe('setting a wanted range', () => {
     const request = server.expectOne({ method: 'PUT', url: `${address}/wanted-ranges/airTemperature` });
     expect(request.request.body).toMatchObject({ urgency: { by: 4, afterMinutes: null } });
     request.flush({ ...range, source: 'shelf' });
+    expect(closed).toEqual([true]);
+  });
+
+  it('can be for the whole room', async () => {
+    await shown();
+    (await asked()).flush(trial);
+    const loader = TestbedHarnessEnvironment.loader(fixture);
+    await (await loader.getHarness(MatRadioButtonHarness.with({ label: 'In the whole room' }))).check();
+    await (await loader.getHarness(MatButtonHarness.with({ text: 'Save the range' }))).click();
+    server
+      .expectOne({ method: 'PUT', url: `/api/v1/rooms/${params.roomId}/wanted-ranges/airTemperature` })
+      .flush(range);
     expect(closed).toEqual([true]);
   });
 

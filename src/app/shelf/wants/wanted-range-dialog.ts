@@ -5,8 +5,10 @@ import { MatButton } from '@angular/material/button';
 import { MAT_DIALOG_DATA, MatDialogModule, MatDialogRef } from '@angular/material/dialog';
 import { MatFormFieldModule } from '@angular/material/form-field';
 import { MatInput } from '@angular/material/input';
+import { MatRadioModule } from '@angular/material/radio';
 import { MatSelectModule } from '@angular/material/select';
 import type { Quantity } from '@shared/climate/quantity';
+import { clearRoomRange, setRoomRange } from '@shared/contracts/room-ranges';
 import {
   clearWantedRange,
   setWantedRange,
@@ -36,7 +38,7 @@ export interface WantedRangeSubject {
 const origins: Readonly<Record<RangeSource, string>> = {
   shelf: 'This one was set for this shelf.',
   plantings: 'This one comes from what grows here; one that you save takes its place.',
-  room: 'This one holds everywhere in this room; one that you save takes its place on this shelf.',
+  room: 'This one is the room’s: it holds on every shelf with no range of its own or of its plants.',
 };
 
 const numberField = (): FormControl<number | null> => new FormControl<number | null>(null);
@@ -51,6 +53,7 @@ const numberField = (): FormControl<number | null> => new FormControl<number | n
     MatDialogModule,
     MatFormFieldModule,
     MatInput,
+    MatRadioModule,
     MatSelectModule,
     ProblemText,
     RangePreview,
@@ -95,6 +98,10 @@ export class WantedRangeDialog {
     urgentAfterHours: numberField(),
     reason: new FormControl('', { nonNullable: true }),
   });
+  /** Whether it is to hold in the whole room rather than on this shelf alone. */
+  protected readonly roomField = new FormControl(this.subject.range?.source === 'room', {
+    nonNullable: true,
+  });
   private readonly typed = toSignal(this.fields.valueChanges.pipe(map(() => this.fields.getRawValue())), {
     initialValue: this.fields.getRawValue(),
   });
@@ -120,11 +127,21 @@ export class WantedRangeDialog {
     this.problem.set(problem);
     if (problem !== null) return;
     const body = savedRange(this.quantity(), typed, this.unit);
-    this.finish(this.api.call(setWantedRange, { params: this.target(), body }));
+    const { roomId } = this.subject.params;
+    this.finish(
+      this.roomField.value
+        ? this.api.call(setRoomRange, { params: { roomId, quantity: this.quantity() }, body })
+        : this.api.call(setWantedRange, { params: this.target(), body }),
+    );
   }
 
   protected remove(): void {
-    this.finish(this.api.call(clearWantedRange, { params: this.target() }));
+    const { roomId } = this.subject.params;
+    this.finish(
+      this.subject.range?.source === 'room'
+        ? this.api.call(clearRoomRange, { params: { roomId, quantity: this.quantity() } })
+        : this.api.call(clearWantedRange, { params: this.target() }),
+    );
   }
 
   private target() {
