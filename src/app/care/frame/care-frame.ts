@@ -9,7 +9,7 @@ import { carePlacesWithin } from '../care-places';
     <nav aria-label="Care">
       @for (place of places; track place.path) {
         <a
-          [routerLink]="['/care', place.path]"
+          [routerLink]="place.path === '' ? '/care' : '/care/' + place.path"
           routerLinkActive="current"
           ariaCurrentWhenActive="page"
           [routerLinkActiveOptions]="{ exact: place.path === '' }"
