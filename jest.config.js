@@ -31,6 +31,7 @@ const node = {
 module.exports = {
   testTimeout: 120_000, // Real databases and browsers; no test asserts a time.
   workerIdleMemoryLimit: '1GB',
+  maxWorkers: '100%', // One fewer by default, which is one alone on two cores.
   projects: [
     {
       ...node,
