@@ -91,6 +91,11 @@ describe('every screen', () => {
     await page.getByRole('img', { name: /^Air/ }).first().waitFor();
     await inspect('shelf');
 
+    await page.goto(`${address}/care`);
+    await page.getByRole('heading', { level: 1, name: 'Today’s care' }).waitFor();
+    await page.locator('app-task-row').getByRole('button', { expanded: false }).first().click();
+    await page.getByRole('button', { name: 'Done', exact: true }).waitFor();
+    await inspect('care');
     await page.goto(`${address}/alerts`);
     await page
       .getByRole('button', { name: /^Acknowledge/ })
