@@ -132,6 +132,19 @@ describe('every screen', () => {
       .click();
     await inspect('crop');
 
+    await page.goto(`${address}/care/rota`);
+    await page.getByRole('heading', { name: 'How it is shared' }).waitFor();
+    await inspect('care-rota');
+    await page.goto(`${address}/care/routines`);
+    await page.getByRole('listitem').first().waitFor();
+    await inspect('care-routines');
+    await page.goto(`${address}/care/routines/new`);
+    await page.getByRole('heading', { name: 'When', exact: true }).waitFor();
+    await inspect('care-routine');
+    await page.goto(`${address}/care/record`);
+    await page.getByText(/were done, or found not needed, in time/).waitFor();
+    await inspect('care-record');
+
     await page.goto(`${address}/account`);
     await page.getByRole('heading', { level: 1, name: 'Your account' }).waitFor();
     await inspect('account');
