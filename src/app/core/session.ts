@@ -83,6 +83,11 @@ export class Session {
     return this.held();
   }
 
+  /** Whether this device knows somebody who could go on without the server. */
+  get isSomebodyKnown(): boolean {
+    return this.held() !== null || keptAccount() !== null;
+  }
+
   /** Signs in. Fails with an `ApiFailure`: `signedOut` for a wrong e-mail or password, `tooMany`, `offline`, ... */
   signIn(email: string, password: string): Observable<Account> {
     return this.api.call(signIn, { body: { email, password } }).pipe(tap((account) => this.hold(account)));

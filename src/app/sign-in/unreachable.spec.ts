@@ -31,4 +31,19 @@ describe('the page in place of one that cannot be shown', () => {
     await fixture.whenStable();
     expect(TestBed.inject(Router).url).toBe('/alerts');
   });
+
+  it.each([
+    ['nobody', null, false],
+    ['somebody', JSON.stringify(account()), true],
+    ['what nobody can read', '{', false],
+  ])('on a device that knows %s leads to care accordingly', async (_who, kept, leads) => {
+    localStorage.clear();
+    if (kept !== null) localStorage.setItem('lampmeadow.account', kept);
+    TestBed.configureTestingModule({ providers: [provideHttpClient(), provideRouter([])] });
+    const fixture = TestBed.createComponent(Unreachable);
+    await fixture.whenStable();
+    const page = fixture.nativeElement as HTMLElement;
+    expect(page.querySelector('a[href="/care"]') !== null).toBe(leads);
+    localStorage.clear();
+  });
 });

@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, inject, input, signal } from '@angular/core';
-import { Router } from '@angular/router';
+import { Router, RouterLink } from '@angular/router';
 import { finalize } from 'rxjs';
 import { failureText } from '../core/failure-text';
 import { returnPath } from '../core/return-path';
@@ -12,9 +12,28 @@ import { ErrorState } from '../ui/states/error-state';
   template: `
     <h1 class="read-out-only" tabindex="-1">No answer from the server</h1>
     <app-error-state title="No answer from the server" [message]="message()" (retried)="tryAgain()" />
+    @if (hasCare) {
+      <p><a routerLink="/care">Today’s care is on this device</a>: what you tick goes out by itself later.</p>
+    }
   `,
-  styles: ':host { display: block; max-width: 560px; margin: 12dvh auto 0; }',
-  imports: [ErrorState],
+  styles: `
+    :host {
+      display: block;
+      max-width: 560px;
+      margin: 12dvh auto 0;
+    }
+
+    p {
+      text-align: center;
+    }
+
+    a {
+      color: var(--leek);
+      font-weight: 600;
+      line-height: var(--target);
+    }
+  `,
+  imports: [ErrorState, RouterLink],
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class Unreachable {
@@ -24,6 +43,7 @@ export class Unreachable {
   private readonly session = inject(Session);
   private readonly router = inject(Router);
   private isAsking = false;
+  protected readonly hasCare = this.session.isSomebodyKnown;
   protected readonly message = signal(
     'Your plants are measured all the same: devices keep their readings until the server is back. ' +
       'Check the network here, then try again.',
