@@ -40,7 +40,7 @@ export function startJobs(app: App, transactions: Transactions, log: Logger): ()
     alone('sweep', HOUR_MS, async () => {
       await transactions.plain.query('DELETE FROM rate_limit WHERE resets_at < now()');
       await transactions.plain.query(
-        "DELETE FROM repeatable_request WHERE created_at < now() - interval '2 days'",
+        "DELETE FROM repeatable_request WHERE created_at < now() - interval '8 days'",
       );
     }),
   ];
