@@ -85,7 +85,7 @@ describe('a sowing from its packet to the harvest', () => {
   it('wants lamps with the first seedling, counted on a phone, while its neighbours wait', async () => {
     const { application, page } = journey;
     await page.goto(application.address);
-    await care(page).getByText('Today’s care').waitFor();
+    await care(page).getByRole('heading', { name: 'Today’s care' }).waitFor();
     expect(await care(page).getByText('Switch A4 lamps on').count()).toBe(0);
 
     await openPlanting(leek);
