@@ -1,3 +1,4 @@
+import { eventually } from './harness/eventually';
 import { prepareJourney } from './harness/journey';
 import { signIn } from './harness/test-browser';
 
@@ -41,6 +42,14 @@ describe('a logger’s file of 100,000 lines', () => {
       await runner.rollbackTransaction();
       await runner.release();
     };
+  }
+
+  /** How many statements wait for the lock on the sums. */
+  async function waitingForSums(): Promise<number> {
+    const rows: unknown[] = await journey.application.database.dataSource.query(
+      `SELECT 1 FROM pg_locks WHERE relation = 'hourly_summary'::regclass AND NOT granted`,
+    );
+    return rows.length;
   }
 
   async function stored(): Promise<Record<string, number>> {
@@ -87,6 +96,7 @@ describe('a logger’s file of 100,000 lines', () => {
     await progress(partly).waitFor();
     await page.reload();
     await progress(partly).waitFor();
+    await eventually(async () => expect(await waitingForSums()).toBeGreaterThan(0));
     await button('Stop').click();
     await progress('Stopping. Nothing is stored.').waitFor();
     await freeSums();

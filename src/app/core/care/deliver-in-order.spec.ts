@@ -59,12 +59,13 @@ describe('deeds that wait', () => {
           const server = new PlayedServer();
           const ahead = [...given];
           const late = [...deeds];
-          let failuresInRow = 0;
+          const failures = new Map<string, number>();
           const send = async (deed: KeptDeed): Promise<Delivery> => {
             let fate = ahead.shift() ?? 'arrives';
-            // A server that fails for ever is another test.
-            failuresInRow = fate === 'server fails' ? failuresInRow + 1 : 0;
-            if (failuresInRow >= mostFailures - 1) fate = 'arrives';
+            // A server that fails at one deed for ever is another test.
+            const failed = (failures.get(deed.key) ?? 0) + 1;
+            if (fate === 'server fails' && failed >= mostFailures) fate = 'arrives';
+            else if (fate === 'server fails') failures.set(deed.key, failed);
             if (fate === 'phone dies') throw new Error(fate);
             if (fate === 'lost') return { is: 'unanswered', retryAfterS: null };
             if (fate === 'server fails') return { is: 'failed', trouble };
