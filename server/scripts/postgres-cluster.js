@@ -85,6 +85,8 @@ function statements(password, applicationPassword, database) {
   return [
     `CREATE ROLE ${owner} LOGIN CREATEDB PASSWORD '${password}'`,
     `CREATE ROLE ${application} LOGIN PASSWORD '${applicationPassword}'`,
+    // Whoever owns the tables may see and end what the application does in them.
+    `GRANT ${application} TO ${owner}`,
     `CREATE DATABASE ${database} OWNER ${owner}`,
     // From version 15 on a role may be let write everything to disk, as a benchmark does before each of its runs.
     `DO $$ BEGIN IF to_regrole('pg_checkpoint') IS NOT NULL THEN GRANT pg_checkpoint TO ${owner}; END IF; END $$`,
