@@ -24,7 +24,7 @@ import { LiveRelay } from './live/live-relay';
 import { LiveServer } from './live/live-server';
 import { OutboxWorker } from './mail/outbox-worker';
 import { Metrics } from './metrics/metrics';
-import { sessionMiddleware } from './people/session';
+import { openSessions } from './people/session';
 import { sessionSecret } from './people/session-secret';
 import { configureSignIn } from './people/sign-in';
 import { composeServices, type Services } from './services';
@@ -83,7 +83,7 @@ export async function buildApp(parts: AppParts): Promise<App> {
     secret,
   });
   configureSignIn(passport, services.peopleStore, transactions);
-  const session = sessionMiddleware({
+  const sessions = openSessions({
     pool,
     secret,
     isHttps: config.isHttps,
@@ -113,7 +113,7 @@ export async function buildApp(parts: AppParts): Promise<App> {
   app.get(`${apiBase}/openapi.json`, (_req, res) => {
     res.json(openApiDocument(apiBase));
   });
-  app.use(apiBase, session, passportSession);
+  app.use(apiBase, sessions.middleware, passportSession);
   const metrics = new Metrics(transactions);
   const stopping: Stopping = { isStopping: false };
   mountRoutes(app, [...services.routes, ...healthRoutes(transactions, stopping)], {
@@ -130,7 +130,7 @@ export async function buildApp(parts: AppParts): Promise<App> {
   const live = new LiveServer({
     http,
     pool,
-    session,
+    session: sessions.middleware,
     passportSession: [passportSession],
     access: services.accessLookup,
     intake: services.deviceIntake,
@@ -165,6 +165,7 @@ export async function buildApp(parts: AppParts): Promise<App> {
       const idle = setInterval(() => http.closeIdleConnections(), IDLE_EVERY_MS);
       await services.boardPublisher.stop();
       await live.close();
+      await sessions.close();
       clearTimeout(cut);
       clearInterval(idle);
     },

@@ -41,24 +41,34 @@ export function cookieOptions(isHttps: boolean): CookieOptions {
  * Sessions in PostgreSQL, made at sign-in and ending fourteen days after their last use.
  *
  * @param settings - Connections, secret and whether pages come over HTTPS.
- * @returns Middleware for Express and for the socket's handshake.
+ * @returns Middleware for Express and for the socket's handshake, and an end to the sweeping up of old sessions.
  */
-export function sessionMiddleware({ pool, secret, isHttps }: SessionSettings): RequestHandler {
+export function openSessions({ pool, secret, isHttps }: SessionSettings): {
+  readonly middleware: RequestHandler;
+  close(): Promise<void>;
+} {
   const Store = connectPgSimple(session);
+  const store = new Store({
+    pool,
+    tableName: 'http_session',
+    createTableIfMissing: false,
+    disableTouch: true,
+  });
   const open = session({
     name: sessionCookie,
     secret,
     resave: false,
     saveUninitialized: false,
     cookie: { ...cookieOptions(isHttps), maxAge: SESSION_MS },
-    store: new Store({ pool, tableName: 'http_session', createTableIfMissing: false, disableTouch: true }),
+    store,
   });
-  return (req: Request, res: Response, next: NextFunction) => {
+  const middleware = (req: Request, res: Response, next: NextFunction): void => {
     open(req, res, (error?: unknown) => {
       if (error === undefined) prolong(req.session, Date.now());
       next(error);
     });
   };
+  return { middleware, close: async () => void (await store.close()) };
 }
 
 /** A changed session is saved and its cookie sent again, both with a new end. Sessions of nobody are not begun. */
