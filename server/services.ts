@@ -225,7 +225,7 @@ export function composeServices(foundation: Foundation): Services {
       roomOf: (tx, roomId) => rooms.roomOf(tx, roomId),
       plantingsOn: (tx, shelfIds) => plantings.plantingsOn(tx, shelfIds),
       sowingsOn: (tx, shelfIds) => growing.germination.sowingsOn(tx, shelfIds),
-      adviceOn: (tx, shelfIds) => growing.advice.adviceOn(tx, shelfIds),
+      adviceFor: (tx, shelfIds) => growing.advice.adviceFor(tx, shelfIds),
       openAlerts: (roomId) => alerts.open(roomId),
       tasksOf: (roomId, from, to) => care.tasks.list(roomId, { from, to }),
     },

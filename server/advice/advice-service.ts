@@ -73,7 +73,7 @@ export class AdviceService {
   constructor(private readonly parts: AdviceParts) {}
 
   /** Advice on shelves as it was worked out last, by shelf. */
-  adviceOn(tx: Tx, shelfIds: readonly string[]): Promise<Map<string, ShelfAdviceView>> {
+  adviceFor(tx: Tx, shelfIds: readonly string[]): Promise<Map<string, ShelfAdviceView>> {
     return this.parts.advice.of(tx, shelfIds);
   }
 
@@ -82,10 +82,10 @@ export class AdviceService {
     const { rooms, transactions } = this.parts;
     const shelves = (await rooms.racksOf(roomId)).flatMap((rack) => rack.shelves);
     if (!shelves.some(({ id }) => id === shelfId)) throw notFound('shelf');
-    const held = (await this.adviceOn(transactions.plain, [shelfId])).get(shelfId);
+    const held = (await this.adviceFor(transactions.plain, [shelfId])).get(shelfId);
     if (held !== undefined) return held;
     await this.refresh(roomId);
-    const found = (await this.adviceOn(transactions.plain, [shelfId])).get(shelfId);
+    const found = (await this.adviceFor(transactions.plain, [shelfId])).get(shelfId);
     if (found === undefined) throw notFound('shelf'); // Retired in between.
     return found;
   }

@@ -240,13 +240,13 @@ function spansOf(due: readonly Work[], window: Stretch): ReadingSpan[] {
 }
 
 function within({ times, values, qualities }: ObservationColumns, { from, to }: Stretch): ObservationColumns {
-  const [first, end] = [placeOf(times, from), placeOf(times, to)];
+  const [first, end] = [indexFrom(times, from), indexFrom(times, to)];
   const cut = <T>(column: ArrayLike<T>): T[] => Array.prototype.slice.call(column, first, end);
   return { times: cut(times), values: cut(values), qualities: cut(qualities) };
 }
 
 /** How many of some instants in order come before another one. */
-function placeOf(times: ArrayLike<number>, at: number): number {
+function indexFrom(times: ArrayLike<number>, at: number): number {
   let [low, high] = [0, times.length];
   while (low < high) {
     const middle = (low + high) >>> 1;

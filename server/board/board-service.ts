@@ -15,7 +15,7 @@ export interface BoardSources {
   roomOf(tx: Tx, roomId: string): Promise<{ name: string; timeZone: string } | null>;
   plantingsOn(tx: Tx, shelfIds: readonly string[]): Promise<Map<string, PlantingSummary[]>>;
   sowingsOn(tx: Tx, shelfIds: readonly string[]): Promise<Map<string, SowingNow[]>>;
-  adviceOn(tx: Tx, shelfIds: readonly string[]): Promise<Map<string, ShelfAdviceView>>;
+  adviceFor(tx: Tx, shelfIds: readonly string[]): Promise<Map<string, ShelfAdviceView>>;
   openAlerts(roomId: string): Promise<Alert[]>;
   /** Tasks due from a day up to another, exclusive, with everything late before it. */
   tasksOf(roomId: string, from: string, to: string): Promise<Task[]>;
@@ -59,7 +59,7 @@ export class BoardService {
       this.shelfNow.of(tx, shelves, day, now),
       this.sources.plantingsOn(tx, shelfIds),
       this.sources.sowingsOn(tx, shelfIds),
-      this.sources.adviceOn(tx, shelfIds),
+      this.sources.adviceFor(tx, shelfIds),
       this.sources.openAlerts(roomId),
       this.sources.tasksOf(roomId, day.date, dayBounds(now + AHEAD_MS, room.timeZone).date),
     ]);

@@ -2,7 +2,7 @@
 const { countsLine, runJest } = require('./jest-run');
 const { ensureBuilt, serverBuild, webBuild } = require('./builds');
 const { ensureChromium } = require('./chromium');
-const { ensureNginx } = require('./nginx');
+const { ensureProgram, nginx, systemdAnalyze } = require('./debian-program');
 const { requireSupportedNode } = require('./node-version');
 const { ensurePackages } = require('./packages');
 const { Problem } = require('./problem');
@@ -27,7 +27,10 @@ void runScript(async (context) => {
     env['TEST_APPLICATION_DATABASE_URL'] ??= applicationUrl;
   }
   if (needs.browser) env['CHROMIUM_PATH'] = await ensureChromium({ log, signal });
-  if (needs.proxy) env['NGINX_PATH'] = await ensureNginx({ log, signal });
+  if (needs.proxy) {
+    env['NGINX_PATH'] = await ensureProgram(nginx, { log, signal });
+    env['SYSTEMD_ANALYZE_PATH'] = await ensureProgram(systemdAnalyze, { log, signal });
+  }
   if (needs.builds) await ensureBuilt([serverBuild, webBuild], { log, signal });
   const result = await runJest(args, env, signal);
   counts = result.counts;
